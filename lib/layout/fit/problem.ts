@@ -1,0 +1,19 @@
+/** What is wrong with a layout, as values. The screen puts them into words; the closed union makes sure it puts all of them. */
+import type { PieceId, StockId } from "../piece";
+import type { KeepClearKind } from "../stock/board";
+import type { Um } from "../units/um";
+
+export type Problem =
+  | { readonly kind: "not-placed"; readonly pieces: readonly PieceId[] }
+  | { readonly kind: "unknown-stock"; readonly pieces: readonly PieceId[]; readonly stockId: StockId }
+  /** Reaches over the usable outline by this much at the worst corner. */
+  | { readonly kind: "outside"; readonly piece: PieceId; readonly by: Um }
+  /** Reaches into a keep-clear area; `by` is how far, `atX` where along the board, `slide` the least slide along the board of
+   *  the piece's whole group that clears it (negative: left), null when none does. */
+  | { readonly kind: "keep-clear"; readonly piece: PieceId; readonly areaId: string; readonly area: KeepClearKind; readonly by: Um; readonly atX: Um; readonly slide: Um | null }
+  /** Overlap, or closer than the loss between them. */
+  | { readonly kind: "too-close"; readonly pieces: readonly [PieceId, PieceId]; readonly missing: Um }
+  /** The pieces on this board cannot be parted by straight cuts from edge to edge. */
+  | { readonly kind: "blocked"; readonly stockId: StockId; readonly pieces: readonly PieceId[] }
+  /** Runs with the grain the wrong way: the placement's turns do not fit the grain of the face. */
+  | { readonly kind: "grain"; readonly pieces: readonly PieceId[] };

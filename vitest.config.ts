@@ -1,0 +1,17 @@
+import { fileURLToPath } from "node:url";
+import { defineConfig } from "vitest/config";
+
+const root = fileURLToPath(new URL(".", import.meta.url));
+
+export default defineConfig({
+  resolve: {
+    alias: [
+      { find: /^@\//, replacement: root },
+      { find: "server-only", replacement: `${root}tests/support/server-only.ts` },
+    ],
+  },
+  test: {
+    include: ["tests/**/*.test.ts"],
+    testTimeout: 20_000,
+  },
+});
