@@ -7,6 +7,8 @@ import type { PieceId } from "../piece";
 import type { Um } from "../units/um";
 
 export type CutKind = "rip" | "crosscut";
+/** "true" is no cut of the saw: one rough edge of the board is jointed straight, so that cuts can be measured from it. */
+export type StepKind = "true" | CutKind;
 /** Of a rectangle as it lies in the stock frame: left is x = 0, top is y = 0. */
 export type Edge = "left" | "right" | "top" | "bottom";
 /** Rough: as the board came. Sawn: made by an earlier cut of this program. Trued: straightened by jointing before the first cut. */
@@ -44,25 +46,31 @@ export type Caution =
   | "too-short-for-planer";
 
 export interface CutStep {
-  /** "1", "2", … in the order of work; unique in the program. */
+  /** 1, 2, … in the order of work; unique in the program. */
   readonly number: number;
-  readonly kind: CutKind;
+  readonly kind: StepKind;
   /** The rectangle in hand before the cut. */
   readonly part: Part;
-  /** Measured from this edge of the part in hand, which exists and is straight at that moment. */
+  /** Measured from this edge of the part in hand, which exists and is straight at that moment. Of a "true": the edge trued. */
   readonly fromEdge: Edge;
+  /** "rough" only of a "true". */
   readonly fromEdgeState: EdgeState;
-  /** Distance to dial in, from `fromEdge` to the near side of the blade. */
+  /** Distance to dial in or mark, from `fromEdge` to the side of the blade named in `bladeSide`. Of a "true": what is taken off. */
   readonly setting: Um;
-  /** The kerf as a rectangle of wood turned to dust. */
+  /** "near": to the side of the blade next to `fromEdge`, the part between is wanted. "far": to the side away from it, what lies
+   *  between is cut away and the part beyond starts exactly at the setting. It is always the side that leaves a piece's edge. */
+  readonly bladeSide: "near" | "far";
+  /** The wood turned to dust: the kerf, narrower than the blade where the blade runs over the part's edge; of a "true" the shavings. */
   readonly kerf: StockRect;
-  /** What comes off: one or two parts (a trim yields one and waste narrower than the blade none). */
+  /** What comes off, the part next to `fromEdge` first: one or two parts (waste narrower than the blade yields nothing). */
   readonly yields: readonly Part[];
   /** True when this cut only takes a sliver or a rough edge away. */
   readonly trim: boolean;
-  /** Steps with equal settings from the same kind of edge share one number, in order of first use: one setting of the machine. */
+  /** Steps of one kind with equal settings to the same side of the blade share one number, in order of first use: one setting of
+   *  the machine. 0 of a "true", which needs none. */
   readonly settingNumber: number;
-  /** How many turns of the stock lead from the step before to this one. */
+  /** How the part in hand lies against the cut that made it: a quarter turn from rip to crosscut, end for end from edge to edge. */
+  readonly turn: "none" | "quarter" | "end-for-end";
   readonly cautions: readonly Caution[];
 }
 
@@ -85,11 +93,24 @@ export interface Conservation {
 
 export interface CutProgram {
   readonly steps: readonly CutStep[];
+  /** Width of the blade at each kind of cut, µm. */
+  readonly kerf: Readonly<Record<CutKind, Um>>;
   readonly cleanUps: readonly CleanUp[];
+  /** The pieces at their finished rectangles, after clean-up; `id` is that of the part they come from. */
+  readonly pieces: readonly Part[];
   readonly offcuts: readonly Part[];
   readonly waste: readonly Part[];
   readonly conservation: Conservation;
+  /** Different settings of the saw. */
   readonly settings: number;
+  readonly search: SearchReport;
+}
+
+/** How the tree was chosen. `proven`: every tree of the candidate cuts was weighed and none is better. Otherwise the steps ran
+ *  out, or a set of equally good plans was cut short: the program is exact and safe to follow, but perhaps not the shortest. */
+export interface SearchReport {
+  readonly steps: number;
+  readonly proven: boolean;
 }
 
 export type CutProgramOutcome =
