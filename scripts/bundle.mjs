@@ -1,0 +1,42 @@
+// Bundles the TypeScript programs that run outside Next.js into .data/build: those the commands start, and the worker threads.
+// npm packages stay outside the bundles and are found in node_modules.
+import fs from "node:fs";
+import path from "node:path";
+import { build } from "esbuild";
+import { inData, inProject, root } from "./ground/project.mjs";
+
+const programs = ["migrate", "seed", "worker"].map((name) => `scripts/${name}.ts`);
+
+/** Every file of lib/server named …-worker.ts runs in a worker thread under its own name: pixel-worker.ts becomes pixel-worker.mjs. */
+const threads = fs
+  .readdirSync(inProject("lib", "server"), { recursive: true, encoding: "utf8" })
+  .filter((file) => file.endsWith("-worker.ts"))
+  .map((file) => path.join("lib", "server", file))
+  .sort();
+
+const { outputFiles } = await build({
+  absWorkingDir: root,
+  entryPoints: Object.fromEntries([...programs, ...threads].map((file) => [path.basename(file, ".ts"), file])),
+  outdir: inData("build"),
+  outExtension: { ".js": ".mjs" },
+  bundle: true,
+  platform: "node",
+  format: "esm",
+  target: "node20",
+  packages: "external",
+  // "server-only" is a guard for Next.js' bundler; in plain Node.js it throws by design.
+  alias: { "@": root, "server-only": inProject("node_modules", "server-only", "empty.js") },
+  conditions: ["react-server"],
+  sourcemap: "linked",
+  write: false,
+  logLevel: "warning",
+});
+
+fs.mkdirSync(inData("build"), { recursive: true });
+for (const { path: file, contents } of outputFiles) {
+  // A server that is running may be about to load this very file: replace it whole, and only when it has changed.
+  if (fs.existsSync(file) && fs.readFileSync(file).equals(contents)) continue;
+  const draft = `${file}.${process.pid}`;
+  fs.writeFileSync(draft, contents);
+  fs.renameSync(draft, file);
+}

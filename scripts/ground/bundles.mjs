@@ -1,0 +1,32 @@
+// The programs outside the web server (migrating, seeding, long tasks, pixel work), bundled by scripts/bundle.mjs into .data/build.
+import { run } from "./processes.mjs";
+import { inData, inProject } from "./project.mjs";
+import { Refusal } from "./say.mjs";
+
+export async function buildBundles() {
+  // A process of its own: esbuild is there only once the packages are installed, and this file is loaded before.
+  const code = await run(process.execPath, [inProject("scripts", "bundle.mjs")], { cwd: inProject() });
+  if (code !== 0)
+    throw new Refusal("The programs under scripts/ could not be bundled (the reason stands above).", "Mend the source it names.");
+}
+
+/**
+ * Brings the database's tables up to date.
+ * @param {NodeJS.ProcessEnv} env with DATABASE_URL
+ */
+export async function migrate(env) {
+  if ((await runBundle("migrate", env)) === 0) return;
+  throw new Refusal(
+    "The database could not be brought up to date (the reason stands above).",
+    "See that DATABASE_URL names a MariaDB 10.6 or newer that this machine reaches, and a user who may create tables.",
+  );
+}
+
+/**
+ * Runs a bundled program to its end and returns its exit code.
+ * @param {string} name
+ * @param {NodeJS.ProcessEnv} env
+ */
+export function runBundle(name, env) {
+  return run(process.execPath, ["--enable-source-maps", inData("build", `${name}.mjs`)], { cwd: inProject(), env });
+}

@@ -1,0 +1,39 @@
+// Puts together the environment the product runs in: what the shell says first, then the file .env, then what the ground provides.
+// Meanings and checks live in lib/server/env.ts; here nothing is judged.
+import fs from "node:fs";
+import util from "node:util";
+import { newSecret } from "./database-access.mjs";
+import { inData, inProject } from "./project.mjs";
+
+/**
+ * The shell's environment over the one in .env, as Next.js itself reads it.
+ * @returns {NodeJS.ProcessEnv}
+ */
+export function givenSettings() {
+  const file = inProject(".env");
+  const written = fs.existsSync(file) ? util.parseEnv(fs.readFileSync(file, "utf8")) : {};
+  return mergeSettings(written, process.env);
+}
+
+/**
+ * Later ones win, except that an empty value counts as not set, as an untouched line of .env.example is.
+ * @param {...NodeJS.ProcessEnv} layers
+ * @returns {NodeJS.ProcessEnv}
+ */
+export function mergeSettings(...layers) {
+  /** @type {NodeJS.ProcessEnv} */
+  const merged = Object.create(null);
+  for (const layer of layers) {
+    for (const [name, value] of Object.entries(layer)) {
+      if (value !== undefined && (value !== "" || merged[name] === undefined)) merged[name] = value;
+    }
+  }
+  return merged;
+}
+
+/** The session secret of this copy of the project, made once. */
+export function keptSecret() {
+  const file = inData("secret");
+  if (!fs.existsSync(file)) fs.writeFileSync(file, newSecret(), { mode: 0o600 });
+  return fs.readFileSync(file, "utf8");
+}
