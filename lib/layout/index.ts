@@ -1,5 +1,7 @@
 /** The one door of the layout core: everything other rooms may use, and nothing else. */
 export type { Problem } from "./fit/problem";
+export { boundsOf, polygonToStock, rectToStock, toStock } from "./frame/apply-isometry";
+export { composed, inverted, quarterTurn, turnedVector } from "./frame/combine-isometries";
 export type { Isometry } from "./frame/isometry";
 export { identity } from "./frame/isometry";
 export type { FacePoint, FaceRect, Frame, Point, Rect, StockPoint, StockRect } from "./frame/point";
@@ -15,6 +17,12 @@ export type {
   QuarterTurns,
   Spacing,
 } from "./pattern/face-layout";
+export { type CutChoices, freshLayout, gridFace, rowFace, SET_ID, stackFace } from "./pattern/fresh-layout";
+export { faceSize } from "./pattern/grids";
+export { type FacePiece, facePieces, layOut, unplacedPieces } from "./pattern/lay-out";
+export { type CutDirection, cutBetween, jumpAcrossGap, lossOf, sliverOf, spacingOf } from "./pattern/loss";
+export { labelAt, pieceCount, pieceIdAt, pieceIdsOf, readingIndexOf } from "./pattern/piece-ids";
+export { groupOf } from "./pattern/slots";
 export type { Piece, PieceId, StockId } from "./piece";
 export type {
   Caution,
@@ -31,6 +39,10 @@ export type {
   ShopLimits,
 } from "./program/program";
 export type { Seam, UmRange } from "./seam/seam";
+export { seams } from "./seam/seams";
 export type { BoardFace, KeepClear, KeepClearKind, KeepClearShape } from "./stock/board";
+export type { InchDenominator, LengthStyle } from "./units/length-style";
+export { type BareUnit, LONGEST_UM, type ParsedLength, parseLength } from "./units/parse-length";
+export { type PrintedLength, printedLength, printLength } from "./units/print-length";
 export type { Um } from "./units/um";
 export { mmFromUm, um, umFromMm } from "./units/um";
