@@ -5,6 +5,8 @@ export { composed, inverted, quarterTurn, turnedVector } from "./frame/combine-i
 export type { Isometry } from "./frame/isometry";
 export { identity } from "./frame/isometry";
 export type { FacePoint, FaceRect, Frame, Point, Rect, StockPoint, StockRect } from "./frame/point";
+export { changeAnchor } from "./pattern/change-anchor";
+export { changeCuts, changeFace, type FaceChange } from "./pattern/change-face";
 export type {
   AnchorX,
   AnchorY,
@@ -18,11 +20,25 @@ export type {
   Spacing,
 } from "./pattern/face-layout";
 export { type CutChoices, freshLayout, gridFace, rowFace, SET_ID, stackFace } from "./pattern/fresh-layout";
+export {
+  type Graduated,
+  type Graduation,
+  MOST_FRONTS,
+  type Opening,
+  type SizeStep,
+  sizesFromOpening,
+  WHOLE_MICROMETRES,
+} from "./pattern/graduate";
 export { faceSize } from "./pattern/grids";
 export { type FacePiece, facePieces, layOut, unplacedPieces } from "./pattern/lay-out";
+export { groupById, type LayoutChange, type LayoutRefusal, type PieceSize } from "./pattern/layout-change";
+export { type LayoutFault, layoutFaults } from "./pattern/layout-faults";
+export { letLoose, regroup } from "./pattern/let-loose";
 export { type CutDirection, cutBetween, jumpAcrossGap, lossOf, sliverOf, spacingOf } from "./pattern/loss";
 export { labelAt, pieceCount, pieceIdAt, pieceIdsOf, readingIndexOf } from "./pattern/piece-ids";
+export { groupBounds, liftGroup, moveGroup, placeGroup, turnGroup, turnsAlongGrain } from "./pattern/place-group";
 export { groupOf } from "./pattern/slots";
+export { swapPieces } from "./pattern/swap-pieces";
 export type { Piece, PieceId, StockId } from "./piece";
 export type {
   Caution,
@@ -38,6 +54,7 @@ export type {
   PartKind,
   ShopLimits,
 } from "./program/program";
+export { type Drift, drifts } from "./seam/drift";
 export type { Seam, UmRange } from "./seam/seam";
 export { seams } from "./seam/seams";
 export type { BoardFace, KeepClear, KeepClearKind, KeepClearShape } from "./stock/board";

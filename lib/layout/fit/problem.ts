@@ -10,7 +10,15 @@ export type Problem =
   | { readonly kind: "outside"; readonly piece: PieceId; readonly by: Um }
   /** Reaches into a keep-clear area; `by` is how far, `atX` where along the board, `slide` the least slide along the board of
    *  the piece's whole group that clears it (negative: left), null when none does. */
-  | { readonly kind: "keep-clear"; readonly piece: PieceId; readonly areaId: string; readonly area: KeepClearKind; readonly by: Um; readonly atX: Um; readonly slide: Um | null }
+  | {
+      readonly kind: "keep-clear";
+      readonly piece: PieceId;
+      readonly areaId: string;
+      readonly area: KeepClearKind;
+      readonly by: Um;
+      readonly atX: Um;
+      readonly slide: Um | null;
+    }
   /** Overlap, or closer than the loss between them. */
   | { readonly kind: "too-close"; readonly pieces: readonly [PieceId, PieceId]; readonly missing: Um }
   /** The pieces on this board cannot be parted by straight cuts from edge to edge. */

@@ -7,7 +7,13 @@ export type KeepClearKind = "knot" | "check" | "sapwood" | "stain" | "other";
 
 /** An area no show piece may touch. */
 export type KeepClearShape =
-  | { readonly shape: "ellipse"; readonly centre: StockPoint; readonly radiusX: Um; readonly radiusY: Um; readonly turnDeg: number }
+  | {
+      readonly shape: "ellipse";
+      readonly centre: StockPoint;
+      readonly radiusX: Um;
+      readonly radiusY: Um;
+      readonly turnDeg: number;
+    }
   | { readonly shape: "polygon"; readonly points: readonly StockPoint[] };
 
 export interface KeepClear {

@@ -1,0 +1,80 @@
+/**
+ * Changes sizes, gaps, counts, loss or spacing of a layout. The anchor of every group stays where it is in the wood; the rest moves
+ * away from it or towards it.
+ */
+import type { PieceId } from "../piece";
+import type { AnchorX, AnchorY, FaceLayout, GridFace } from "./face-layout";
+import type { CutChoices } from "./fresh-layout";
+import { faceGrid, placeOf, rectAt } from "./grids";
+import { pieceIdsOf } from "./piece-ids";
+import { groupWith, slotOf } from "./slots";
+
+export interface FaceChange {
+  readonly layout: FaceLayout;
+  /** Pieces that are cut from their own place again, because they no longer have the size of the one they changed places with. */
+  readonly swapsUndone: readonly PieceId[];
+}
+
+/** Other losses or another spacing; sizes and gaps stay. */
+export function changeCuts(layout: FaceLayout, cuts: Partial<CutChoices>): FaceLayout {
+  const { crosscut, rip, spacing } = { ...layout, ...cuts };
+  return { ...layout, crosscut, rip, spacing };
+}
+
+/**
+ * Another grid of fronts. Pieces that exist before and after stay in their groups; new ones join the set; what an anchor or a swap
+ * refers to and is no longer there is given up.
+ */
+export function changeFace(layout: FaceLayout, face: GridFace): FaceChange {
+  const ids = pieceIdsOf(face);
+  const present = new Set(ids);
+  const held = new Set(layout.groups.flatMap((group) => group.pieceIds));
+  const added = ids.filter((id) => !held.has(id));
+  const swapsUndone = undoneSwaps(layout, face, present);
+  const resized = {
+    ...layout,
+    face,
+    anchorX: stillThere(layout.anchorX, present),
+    anchorY: stillThere(layout.anchorY, present),
+  };
+  const groups = layout.groups.map((group, index) => {
+    const slots = new Map<PieceId, PieceId>();
+    for (const id of group.pieceIds) if (present.has(id)) slots.set(id, swapsUndone.has(id) ? id : slotOf(group, id));
+    if (index === 0) for (const id of added) slots.set(id, id);
+    return groupWith(resized, group, slots);
+  });
+  return {
+    layout: { ...resized, groups: groups.filter((group, index) => index === 0 || group.pieceIds.length > 0) },
+    swapsUndone: ids.filter((id) => swapsUndone.has(id)),
+  };
+}
+
+/**
+ * Slots are a permutation of the pieces. A cycle of it stays whole while all its pieces are there and of one size; otherwise all of
+ * it is undone, so that the slots remain a permutation.
+ */
+function undoneSwaps(layout: FaceLayout, face: GridFace, present: ReadonlySet<PieceId>): Set<PieceId> {
+  const next = new Map(layout.groups.flatMap((group) => group.pieceIds.map((id) => [id, slotOf(group, id)] as const)));
+  const grid = faceGrid(face);
+  const sizeOf = (id: PieceId) => {
+    if (!present.has(id)) return "gone";
+    const { width, height } = rectAt(grid, placeOf(face, id));
+    return `${width}×${height}`;
+  };
+  const undone = new Set<PieceId>();
+  for (const start of next.keys()) {
+    const cycle = cycleFrom(next, start);
+    if (cycle.length > 1 && new Set(cycle.map(sizeOf)).size > 1) for (const id of cycle) undone.add(id);
+  }
+  return undone;
+}
+
+function cycleFrom(next: ReadonlyMap<PieceId, PieceId>, start: PieceId): PieceId[] {
+  const cycle = [start];
+  for (let id = next.get(start); id !== undefined && id !== start && cycle.length <= next.size; id = next.get(id)) cycle.push(id);
+  return cycle;
+}
+
+function stillThere<Anchor extends AnchorX | AnchorY>(anchor: Anchor, present: ReadonlySet<PieceId>): Anchor | "centre" {
+  return typeof anchor === "object" && !present.has(anchor.piece) ? "centre" : anchor;
+}
