@@ -39,6 +39,17 @@ export { labelAt, pieceCount, pieceIdAt, pieceIdsOf, readingIndexOf } from "./pa
 export { groupBounds, liftGroup, moveGroup, placeGroup, turnGroup, turnsAlongGrain } from "./pattern/place-group";
 export { groupOf } from "./pattern/slots";
 export { swapPieces } from "./pattern/swap-pieces";
+export type { LensOutcome } from "./picture/fit-lens";
+export { fitMarking, type MarkingFit, type MarkResidual } from "./picture/fit-marking";
+export type { MmPoint, PhotoPoint } from "./picture/homography";
+export type { PhotoSize } from "./picture/lens";
+export type { BoardEdge, EdgePoint, ExtraPoint, FourCorners, Marking, MarkingReference } from "./picture/marking";
+export type { CornerIndex, MarkedRectangle, MarksRefusal } from "./picture/marks-check";
+export type { OutputScale } from "./picture/output-scale";
+export { type PaperName, type PaperSize, paperSizes } from "./picture/paper-sizes";
+export { measureMm, type PhotoGeometry, photoFromStockMm, stockMmFromPhoto, warpMapAt } from "./picture/photo-geometry";
+export { type LevelSize, pyramidLevels } from "./picture/pyramid";
+export { type Pixels, type WarpMap, warpInBands } from "./picture/warp";
 export type { Piece, PieceId, StockId } from "./piece";
 export type {
   Caution,

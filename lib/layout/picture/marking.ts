@@ -1,38 +1,36 @@
-/**
- * What a person marks on a photograph so that it can be brought to scale. Photo points are in pixels of the upright, full-size
- * photograph, origin at the outer corner of its first pixel (pixel centres lie at +0.5), y down.
- */
-import type { StockPoint } from "../frame/point";
+/** What a person marks on a photograph to bring a board to scale. Plain data, shared by screens, storage and the core. */
 import type { Um } from "../units/um";
+import type { PhotoPoint } from "./homography";
 
-export interface PhotoPoint {
-  readonly x: number;
-  readonly y: number;
-}
-
-/** Corners in the order (0,0), (L,0), (L,W), (0,W) of the rectangle marked, L along the grain. */
+/**
+ * Four corners of a rectangle in the order (0,0), (length,0), (length,width), (0,width) of its own frame: clockwise as seen,
+ * beginning at the left end of the edge that is as long as `length`. Pixels of the upright, full-size photo.
+ */
 export type FourCorners = readonly [PhotoPoint, PhotoPoint, PhotoPoint, PhotoPoint];
 
-/** Where the true size comes from: the board itself, or a sheet of known size lying on it. */
-export type ScaleReference =
+/** The rectangle whose true size gives the scale: the board itself, or a sheet of paper or card lying on it. */
+export type MarkingReference =
   | { readonly kind: "board"; readonly length: Um; readonly width: Um }
   | { readonly kind: "sheet"; readonly length: Um; readonly width: Um; readonly corners: FourCorners };
 
-/** A further point whose place in the reference rectangle's own frame is known, µm from its first corner. */
+/** A further point whose place in the reference rectangle's frame is known. */
 export interface ExtraPoint {
   readonly photo: PhotoPoint;
-  readonly at: StockPoint;
+  readonly at: { readonly x: Um; readonly y: Um };
 }
 
-/** A point somewhere along a straight edge of the board, for taking out the bending of the lens. */
+/** Of the board as it lies in the stock frame: top is y = 0, left is x = 0. */
+export type BoardEdge = "top" | "right" | "bottom" | "left";
+
+/** A point somewhere on a straight edge of the board; takes out the lens' bending. */
 export interface EdgePoint {
   readonly photo: PhotoPoint;
-  readonly edge: "top" | "right" | "bottom" | "left";
+  readonly edge: BoardEdge;
 }
 
 export interface Marking {
-  readonly reference: ScaleReference;
-  /** The board's own corners, whichever reference gives the scale. */
+  readonly reference: MarkingReference;
+  /** The board's own corners. With a board as reference they are the corners of true size; else its extent is measured by them. */
   readonly corners: FourCorners;
   readonly extraPoints: readonly ExtraPoint[];
   readonly edgePoints: readonly EdgePoint[];
