@@ -1,5 +1,5 @@
 // The programs outside the web server (migrating, seeding, long tasks, pixel work), bundled by scripts/bundle.mjs into .data/build.
-import { run } from "./processes.mjs";
+import { launch, run } from "./processes.mjs";
 import { inData, inProject } from "./project.mjs";
 import { Refusal } from "./say.mjs";
 
@@ -28,5 +28,28 @@ export async function migrate(env) {
  * @param {NodeJS.ProcessEnv} env
  */
 export function runBundle(name, env) {
-  return run(process.execPath, ["--enable-source-maps", inData("build", `${name}.mjs`)], { cwd: inProject(), env });
+  return run(process.execPath, bundleArgs(name), { cwd: inProject(), env });
+}
+
+/**
+ * Runs a bundled program and returns what it wrote; its complaints go to the terminal.
+ * @param {string} name
+ * @param {NodeJS.ProcessEnv} env
+ */
+export async function readBundle(name, env) {
+  const { child, exited } = launch(process.execPath, bundleArgs(name), {
+    cwd: inProject(),
+    env,
+    stdio: ["ignore", "pipe", "inherit"],
+  });
+  let text = "";
+  child.stdout?.setEncoding("utf8").on("data", (part) => {
+    text += part;
+  });
+  return { code: await exited, text };
+}
+
+/** @param {string} name */
+function bundleArgs(name) {
+  return ["--enable-source-maps", inData("build", `${name}.mjs`)];
 }

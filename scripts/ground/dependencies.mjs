@@ -61,8 +61,9 @@ export async function ensureDependencies() {
   await withLock("dependencies", "installing the npm packages", async () => {
     if (isInstalled()) return;
     say("Installing the npm packages (a minute or two the first time).");
-    // NODE_ENV=production would leave out what the build and the tests need.
-    const code = await run("npm", ["ci", "--include=dev", "--include=optional"], { cwd: inProject() });
+    // The npm that started this command, if one did. NODE_ENV=production would leave out what the build and the tests need.
+    const [program, ...args] = process.env.npm_execpath ? [process.execPath, process.env.npm_execpath] : ["npm"];
+    const code = await run(program, [...args, "ci", "--include=dev", "--include=optional"], { cwd: inProject() });
     if (code !== 0 || !isInstalled()) {
       throw new Refusal(
         "The npm packages could not be installed (npm's own message stands above).",
