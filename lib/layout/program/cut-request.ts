@@ -1,0 +1,42 @@
+/** What the cut program is asked for: pieces placed by hand on one board face, what the saw takes, and the board's edges. */
+import type { StockRect } from "../frame/point";
+import type { PieceId } from "../piece";
+import type { BoardFace } from "../stock/board";
+import type { Um } from "../units/um";
+import type { CutKind, Edge, EdgeState, ShopLimits } from "./program";
+
+/** A piece as it lies in the wood: finished rectangle, and what is cleaned off each edge after sawing (0: left from the saw). */
+export interface PlacedPiece {
+  readonly pieceId: PieceId;
+  /** What is written on the wood. */
+  readonly label: string;
+  /** Finished size, stock frame. */
+  readonly rect: StockRect;
+  /** µm per edge, in the stock frame. The sawn blank is `rect` grown by these. */
+  readonly cleanUp: Readonly<Record<Edge, Um>>;
+}
+
+/** The board's own edges before any work: straight and fit to measure from ("trued"), or as they came ("rough"). */
+export type BoardEdges = Readonly<Record<Edge, Exclude<EdgeState, "sawn">>>;
+
+export interface CutRequest {
+  readonly board: Pick<BoardFace, "length" | "width">;
+  readonly pieces: readonly PlacedPiece[];
+  readonly kerf: Readonly<Record<CutKind, Um>>;
+  readonly boardEdges: BoardEdges;
+  /** What truing takes off a rough edge; 0 where the board was marked along the line that truing reaches. */
+  readonly truingTakes: { readonly longEdge: Um; readonly end: Um };
+  readonly limits: ShopLimits;
+  /** Plans the search may weigh before it settles for the best it has. About 300 000 a second on a small machine. */
+  readonly budget: number;
+}
+
+/** A budget for which a screen can wait. */
+export const defaultCutBudget = 400_000;
+
+/** Board edges from the two questions a shop answers: are the long edges true, are the ends? */
+export function boardEdges(longEdgesTrued: boolean, endsTrued: boolean): BoardEdges {
+  const long = longEdgesTrued ? "trued" : "rough";
+  const end = endsTrued ? "trued" : "rough";
+  return { left: end, right: end, top: long, bottom: long };
+}

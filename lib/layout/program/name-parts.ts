@@ -1,0 +1,67 @@
+/**
+ * What each rectangle that comes off a cut is called. Pieces carry their own labels, strips letters, offcuts C1, C2, …; waste has
+ * none. A strip keeps its letter while pieces are taken off it.
+ */
+import type { PieceId } from "../piece";
+import { groupsAlong, type KerfByAxis } from "./candidate-cuts";
+import { isOffcut } from "./cut-plan";
+import type { Part, PartKind, ShopLimits } from "./program";
+import { everyEdge, type Region, sizeOf, stockRectOf } from "./region";
+
+interface Name {
+  readonly kind: PartKind;
+  readonly label: string | null;
+  readonly pieceId: PieceId | null;
+}
+
+export interface PartNamer {
+  /** The parts a cut of `parent` leaves, in the order given; `step` is its number. */
+  readonly nameAll: (parent: Part, regions: readonly Region[], step: number) => readonly Part[];
+}
+
+export function partNamer(kerf: KerfByAxis, limits: ShopLimits): PartNamer {
+  let strips = 0;
+  let offcuts = 0;
+  const strip = (): Name => ({ kind: "strip", label: stripLabel(strips++), pieceId: null });
+
+  function unsawn(parent: Part, region: Region, siblings: readonly Region[]): Name {
+    const alone = siblings.every((other) => other === region || isOut(other));
+    const keeps = alone && (parent.kind !== "board" || groupsAlong(region, "y", kerf.y).length > 1);
+    if (keeps) return { kind: parent.kind, label: parent.label, pieceId: parent.pieceId };
+    const [blank, second] = region.blanks;
+    // One piece parted from the others, still to be trimmed: it is marked as that piece at once.
+    if (!alone && blank && !second) return { kind: "blank", label: blank.piece.label, pieceId: blank.piece.pieceId };
+    return strip();
+  }
+
+  function name(parent: Part, region: Region, siblings: readonly Region[]): Name {
+    const [blank] = region.blanks;
+    if (!blank) {
+      const kept = isOffcut(region, limits);
+      return kept ? { kind: "offcut", label: `C${++offcuts}`, pieceId: null } : { kind: "waste", label: null, pieceId: null };
+    }
+    if (!isOut(region)) return unsawn(parent, region, siblings);
+    const asSawn = everyEdge.every((edge) => blank.piece.cleanUp[edge] === 0);
+    return { kind: asSawn ? "piece" : "blank", label: blank.piece.label, pieceId: blank.piece.pieceId };
+  }
+
+  return {
+    nameAll: (parent, regions, step) =>
+      regions.map((region, i) => ({ id: `${step}.${i + 1}`, ...name(parent, region, regions), rect: stockRectOf(region) })),
+  };
+}
+
+/** Nothing in it is still to be sawn out: empty, or a blank at its size. */
+function isOut(region: Region): boolean {
+  const [blank, second] = region.blanks;
+  if (!blank) return true;
+  return !second && sizeOf(blank.x) === sizeOf(region.x) && sizeOf(blank.y) === sizeOf(region.y);
+}
+
+/** No I and no O, which are read as figures, and no C, which marks offcuts. After Z come AA, AB, … */
+const stripLetters = "ABDEFGHJKLMNPQRSTUVWXYZ";
+
+function stripLabel(index: number): string {
+  const letter = stripLetters[index % stripLetters.length] ?? "";
+  return index < stripLetters.length ? letter : stripLabel(Math.floor(index / stripLetters.length) - 1) + letter;
+}
