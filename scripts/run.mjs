@@ -25,6 +25,8 @@ try {
   const load = commands[name];
   if (!load) throw new Refusal(`"${name}" is not a command.`, `Use one of: ${Object.keys(commands).join(", ")}.`);
   process.env.NEXT_TELEMETRY_DISABLED = "1";
+  // Colours are for eyes, not for logs.
+  if (!process.stdout.isTTY) process.env.NO_COLOR ??= "1";
   const { command, onInterrupt } = await load();
   endOnSignals({ onInterrupt });
   await end(await command(args));

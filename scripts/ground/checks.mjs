@@ -23,7 +23,12 @@ export async function checkTypes() {
 
 export async function checkLint() {
   say("\nFormat and lint");
-  return [countOfCheck((await runTool(toolScript("@biomejs/biome", "biome"), ["ci", "."])) === 0)];
+  return [
+    countOfCheck(
+      (await runTool(toolScript("@biomejs/biome", "biome"), ["ci", ...(process.stdout.isTTY ? [] : ["--colors=off"]), "."])) ===
+        0,
+    ),
+  ];
 }
 
 /**
