@@ -20,6 +20,7 @@ const config: NextConfig = {
     "sharp",
   ],
   experimental: {
+    authInterrupts: true,
     // A photograph may have 40 MB. With a proxy in front of the routes Next.js cuts a body off at 10 MB otherwise, without an error.
     proxyClientMaxBodySize: "45mb",
   },

@@ -1,0 +1,9 @@
+import { WrongTurn } from "@/components/shell/wrong-turn";
+
+export default function NotFound() {
+  return (
+    <WrongTurn title="There is nothing here">
+      The address is wrong, the thing was removed, or it belongs to another shop.
+    </WrongTurn>
+  );
+}

@@ -1,0 +1,13 @@
+/** All tables, for the client and for the migration generator. */
+export * from "./board";
+export * from "./history";
+export * from "./job";
+export * from "./layout";
+export * from "./order";
+export * from "./photo";
+export * from "./rate-limit";
+export * from "./session";
+export * from "./shop";
+export * from "./straightening";
+export * from "./task";
+export * from "./user";

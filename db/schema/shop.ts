@@ -1,0 +1,44 @@
+import { char, index, int, mysqlTable, smallint, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
+import { idColumn, umColumn, utcColumn } from "../columns";
+import type { ShopId } from "../shop-id";
+
+/** A shop: one account space with its settings. Counters are taken with the row locked. */
+export const shop = mysqlTable("shop", {
+  id: idColumn("id").$type<ShopId>().primaryKey(),
+  name: varchar("name", { length: 120 }).notNull(),
+  units: varchar("units", { length: 8, enum: ["mm", "inch"] }).notNull(),
+  /** Inches print to the nearest 1/32 or 1/64. */
+  inchFraction: smallint("inch_fraction").notNull(),
+  timeZone: varchar("time_zone", { length: 64 }).notNull(),
+  paper: varchar("paper", { length: 8, enum: ["a4", "letter"] }).notNull(),
+  currency: char("currency", { length: 3 }).notNull(),
+  shortestCrosscut: umColumn("shortest_crosscut_um").notNull(),
+  narrowestRip: umColumn("narrowest_rip_um").notNull(),
+  shortestMachined: umColumn("shortest_machined_um").notNull(),
+  offcutLength: umColumn("offcut_length_um").notNull(),
+  offcutWidth: umColumn("offcut_width_um").notNull(),
+  nextBoardNumber: int("next_board_number").notNull(),
+  nextJobNumber: int("next_job_number").notNull(),
+  nextOrderNumber: int("next_order_number").notNull(),
+  revision: int("revision").notNull(),
+  createdAt: utcColumn("created_at").notNull(),
+});
+
+/** A saw of the shop with what it takes from the wood. */
+export const saw = mysqlTable(
+  "saw",
+  {
+    id: idColumn("id").primaryKey(),
+    shopId: idColumn("shop_id")
+      .$type<ShopId>()
+      .notNull()
+      .references(() => shop.id),
+    name: varchar("name", { length: 80 }).notNull(),
+    kind: varchar("kind", { length: 8, enum: ["table", "track", "band", "hand"] }).notNull(),
+    kerf: umColumn("kerf_um").notNull(),
+    /** Taken off each sawn edge afterwards; 0 for an edge left from the saw. */
+    cleanUp: umColumn("clean_up_um").notNull(),
+  },
+  // Saws of a shop by name: the settings page and every saw picker.
+  (table) => [uniqueIndex("saw_shop_name").on(table.shopId, table.name), index("saw_shop").on(table.shopId)],
+);

@@ -1,0 +1,30 @@
+/** Every endpoint there is, for the OpenAPI document. A test holds this list against the route files. */
+import * as board from "./board";
+import type { Endpoint } from "./endpoint";
+import * as history from "./history";
+import * as job from "./job";
+import * as layout from "./layout";
+import * as order from "./order";
+import * as photo from "./photo";
+import * as service from "./service";
+import * as session from "./session";
+import * as shop from "./shop";
+import * as straightening from "./straightening";
+import * as task from "./task";
+
+const isEndpoint = (value: unknown): value is Endpoint =>
+  typeof value === "object" && value !== null && "method" in value && "path" in value && "access" in value;
+
+export const endpoints: readonly Endpoint[] = [
+  service,
+  session,
+  shop,
+  board,
+  photo,
+  straightening,
+  task,
+  job,
+  layout,
+  order,
+  history,
+].flatMap((noun) => Object.values(noun).filter(isEndpoint));

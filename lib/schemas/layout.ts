@@ -1,0 +1,160 @@
+/** The layout document on the wire: the core's FaceLayout, checked. */
+import { z } from "zod";
+import type { FaceLayout } from "@/lib/layout";
+import { defineEndpoint } from "./endpoint";
+import { idSchema } from "./ids";
+import { allowanceUmSchema, pointSchema, sizeUmSchema } from "./length";
+import { straighteningSchema } from "./straightening";
+
+const pieceIdSchema = z.string().regex(/^p[1-9]\d{0,3}$/);
+
+export const gridFaceSchema = z
+  .object({
+    columns: z.array(sizeUmSchema).min(1).max(40),
+    rows: z.array(sizeUmSchema).min(1).max(40),
+    columnGaps: z.array(allowanceUmSchema),
+    rowGaps: z.array(allowanceUmSchema),
+    grain: z.enum(["horizontal", "vertical"]),
+  })
+  .refine((face) => face.columnGaps.length === face.columns.length - 1 && face.rowGaps.length === face.rows.length - 1, {
+    message: "there is one gap fewer than columns, and one fewer than rows",
+  });
+
+export const cutLossSchema = z.object({
+  kerf: allowanceUmSchema,
+  cleanUpBefore: allowanceUmSchema,
+  cleanUpAfter: allowanceUmSchema,
+});
+
+const anchorPieceSchema = z.object({ piece: pieceIdSchema });
+
+const groupSchema = z.object({
+  id: z.string().min(1).max(40),
+  pieceIds: z.array(pieceIdSchema).min(1),
+  placement: z
+    .object({
+      stockId: idSchema,
+      at: pointSchema,
+      turns: z.union([z.literal(0), z.literal(1), z.literal(2), z.literal(3)]),
+    })
+    .nullable(),
+  takesPlaceOf: z.record(z.string(), pieceIdSchema),
+});
+
+export const faceLayoutSchema = z.object({
+  face: gridFaceSchema,
+  crosscut: cutLossSchema,
+  rip: cutLossSchema,
+  spacing: z.enum(["followGap", "tight"]),
+  anchorX: z.union([z.enum(["left", "centre", "right"]), anchorPieceSchema]),
+  anchorY: z.union([z.enum(["top", "centre", "bottom"]), anchorPieceSchema]),
+  groups: z.array(groupSchema).min(1).max(1600),
+});
+
+/** Fails to compile when the wire and the core drift apart. */
+export const faceLayoutForCore = (layout: z.output<typeof faceLayoutSchema>): FaceLayout => layout;
+
+/** A board as the layout table needs it: tag and the version of its picture that this layout uses. */
+export const layoutBoardSchema = z.object({
+  boardId: idSchema,
+  tag: z.string(),
+  species: z.string(),
+  place: z.string(),
+  thickness: sizeUmSchema,
+  straightening: straighteningSchema,
+  /** A newer version than the one this layout was made on, if there is one. */
+  newerStraighteningId: idSchema.nullable(),
+  /** Other faces that lie on this board. */
+  heldBy: z.array(z.object({ faceId: idSchema, faceTitle: z.string(), jobTitle: z.string() })),
+});
+
+export const layoutSchema = z.object({
+  id: idSchema,
+  faceId: idSchema,
+  faceTitle: z.string(),
+  jobId: idSchema,
+  jobTitle: z.string(),
+  document: faceLayoutSchema,
+  crosscutSawId: idSchema.nullable(),
+  ripSawId: idSchema.nullable(),
+  revision: z.int(),
+  boards: z.array(layoutBoardSchema),
+  updatedAt: z.iso.datetime(),
+  updatedBy: z.string(),
+  /** The newest issued order of this face, and whether the layout has changed since. */
+  order: z.object({ id: idSchema, number: z.int(), revision: z.int(), superseded: z.boolean() }).nullable(),
+});
+export type Layout = z.output<typeof layoutSchema>;
+
+const makers = ["owner", "maker"] as const;
+const everyone = ["owner", "maker", "assistant"] as const;
+const faceParams = z.object({ faceId: idSchema });
+
+export const getLayout = defineEndpoint({
+  method: "GET",
+  path: "/api/faces/{faceId}/layout",
+  summary: "The layout of a face with the boards it lies on",
+  tag: "layouts",
+  access: everyone,
+  params: faceParams,
+  response: layoutSchema,
+});
+
+export const saveLayout = defineEndpoint({
+  method: "PUT",
+  path: "/api/faces/{faceId}/layout",
+  summary: "Save a layout from a base revision; a conflict carries the present revision, who saved it and its document",
+  tag: "layouts",
+  access: makers,
+  params: faceParams,
+  body: z.object({
+    baseRevision: z.int().min(1),
+    document: faceLayoutSchema,
+    crosscutSawId: idSchema.nullable(),
+    ripSawId: idSchema.nullable(),
+  }),
+  response: z.object({ revision: z.int(), updatedAt: z.iso.datetime() }),
+});
+
+export const addLayoutBoard = defineEndpoint({
+  method: "POST",
+  path: "/api/faces/{faceId}/layout/boards",
+  summary: "Put a board on the layout table, on the present version of its picture",
+  tag: "layouts",
+  access: makers,
+  params: faceParams,
+  body: z.object({ boardId: idSchema }),
+  response: layoutBoardSchema,
+});
+
+export const removeLayoutBoard = defineEndpoint({
+  method: "DELETE",
+  path: "/api/faces/{faceId}/layout/boards/{boardId}",
+  summary: "Take a board without pieces off the layout table",
+  tag: "layouts",
+  access: makers,
+  params: z.object({ faceId: idSchema, boardId: idSchema }),
+  response: null,
+});
+
+export const moveLayoutToVersion = defineEndpoint({
+  method: "POST",
+  path: "/api/faces/{faceId}/layout/boards/{boardId}/version",
+  summary: "Move the layout over to another version of the board's picture",
+  tag: "layouts",
+  access: makers,
+  params: z.object({ faceId: idSchema, boardId: idSchema }),
+  body: z.object({ straighteningId: idSchema }),
+  response: layoutBoardSchema,
+});
+
+export const getShowSidePng = defineEndpoint({
+  method: "GET",
+  path: "/api/faces/{faceId}/show-side",
+  summary: "The show side drawn from the photograph, true to scale, as a PNG",
+  tag: "layouts",
+  access: everyone,
+  params: faceParams,
+  query: z.object({ pxPerMm: z.coerce.number().min(0.1).max(8).default(2) }),
+  responseKind: "image/png",
+});

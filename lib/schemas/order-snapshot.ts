@@ -1,0 +1,43 @@
+/**
+ * What a cut order freezes when it is issued: everything the paper and the bench show, so that nothing printed later can differ
+ * from what was issued. Old snapshots must stay readable: a change of shape adds a `format`.
+ */
+import { z } from "zod";
+import { cuts } from "./board";
+import { cutProgramSchema } from "./cut-program";
+import { idSchema } from "./ids";
+import { faceLayoutSchema } from "./layout";
+import { rectSchema, sizeUmSchema, umSchema } from "./length";
+import { keepClearSchema, outlineSchema } from "./zones";
+
+const snapshotSawSchema = z.object({ name: z.string(), kerf: umSchema, cleanUp: umSchema });
+
+export const snapshotBoardSchema = z.object({
+  boardId: idSchema,
+  tag: z.string(),
+  species: z.string(),
+  cut: z.enum(cuts),
+  place: z.string(),
+  thickness: sizeUmSchema,
+  length: sizeUmSchema,
+  width: sizeUmSchema,
+  straighteningId: idSchema,
+  outline: outlineSchema.nullable(),
+  keepClear: z.array(keepClearSchema),
+  pieces: z.array(z.object({ pieceId: z.string(), label: z.string(), rect: rectSchema, turns: z.int().min(0).max(3) })),
+  program: cutProgramSchema,
+});
+export type SnapshotBoard = z.output<typeof snapshotBoardSchema>;
+
+export const orderSnapshotSchema = z.object({
+  format: z.literal(1),
+  shop: z.object({ name: z.string() }),
+  units: z.enum(["mm", "inch"]),
+  inchFraction: z.union([z.literal(32), z.literal(64)]),
+  job: z.object({ id: idSchema, number: z.int(), title: z.string(), client: z.string() }),
+  faces: z.array(z.object({ faceId: idSchema, title: z.string(), layoutRevision: z.int(), layout: faceLayoutSchema })).min(1),
+  crosscutSaw: snapshotSawSchema,
+  ripSaw: snapshotSawSchema,
+  boards: z.array(snapshotBoardSchema).min(1),
+});
+export type OrderSnapshot = z.output<typeof orderSnapshotSchema>;

@@ -1,0 +1,75 @@
+/** The shop's settings and saws. */
+import { z } from "zod";
+import { defineEndpoint, roles } from "./endpoint";
+import { idSchema } from "./ids";
+import { allowanceUmSchema, sizeUmSchema } from "./length";
+
+export const sawKinds = ["table", "track", "band", "hand"] as const;
+
+export const sawSchema = z.object({
+  id: idSchema,
+  name: z.string().trim().min(1, "Name the saw").max(80),
+  kind: z.enum(sawKinds),
+  kerf: allowanceUmSchema,
+  cleanUp: allowanceUmSchema,
+});
+export type Saw = z.output<typeof sawSchema>;
+
+const shopFields = {
+  name: z.string().trim().min(1, "Name the shop").max(120),
+  units: z.enum(["mm", "inch"]),
+  inchFraction: z.union([z.literal(32), z.literal(64)]),
+  timeZone: z.string().max(64),
+  paper: z.enum(["a4", "letter"]),
+  currency: z.string().regex(/^[A-Z]{3}$/, "Three capital letters, such as EUR"),
+  shortestCrosscut: sizeUmSchema,
+  narrowestRip: sizeUmSchema,
+  shortestMachined: sizeUmSchema,
+  offcutLength: sizeUmSchema,
+  offcutWidth: sizeUmSchema,
+};
+
+export const shopSchema = z.object({ id: idSchema, ...shopFields, revision: z.int(), saws: z.array(sawSchema) });
+export type Shop = z.output<typeof shopSchema>;
+
+export const getShop = defineEndpoint({
+  method: "GET",
+  path: "/api/shop",
+  summary: "The shop's settings and saws",
+  tag: "shop",
+  access: roles,
+  response: shopSchema,
+});
+
+export const updateShopSchema = z.object({ baseRevision: z.int(), ...shopFields });
+export const updateShop = defineEndpoint({
+  method: "PUT",
+  path: "/api/shop",
+  summary: "Save the shop's settings from a base revision",
+  tag: "shop",
+  access: ["owner"],
+  body: updateShopSchema,
+  response: shopSchema,
+});
+
+export const saveSawSchema = sawSchema.omit({ id: true });
+export const createSaw = defineEndpoint({
+  method: "POST",
+  path: "/api/shop/saws",
+  summary: "Add a saw",
+  tag: "shop",
+  access: ["owner", "maker"],
+  body: saveSawSchema,
+  response: sawSchema,
+});
+
+export const updateSaw = defineEndpoint({
+  method: "PUT",
+  path: "/api/shop/saws/{sawId}",
+  summary: "Change a saw; layouts keep the loss they were given",
+  tag: "shop",
+  access: ["owner", "maker"],
+  params: z.object({ sawId: idSchema }),
+  body: saveSawSchema,
+  response: sawSchema,
+});

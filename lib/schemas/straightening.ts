@@ -1,0 +1,88 @@
+/** Versions of a board's straightened picture. */
+import { z } from "zod";
+import { defineEndpoint } from "./endpoint";
+import { idSchema } from "./ids";
+import { sizeUmSchema, umSchema } from "./length";
+import { markingSchema } from "./marking";
+import { servedLevelSchema } from "./photo";
+import { zonesSaveSchema, zonesSchema } from "./zones";
+
+export const straighteningStates = ["waiting", "done", "failed", "cancelled"] as const;
+
+export const straighteningSchema = z.object({
+  id: idSchema,
+  boardId: idSchema,
+  photoId: idSchema,
+  version: z.int(),
+  marking: markingSchema,
+  state: z.enum(straighteningStates),
+  failure: z.string().nullable(),
+  /** The task that makes the picture, while state is "waiting". */
+  taskId: idSchema.nullable(),
+  length: umSchema,
+  width: umSchema,
+  pxPerMm: z.number(),
+  residual: umSchema.nullable(),
+  levels: z.array(servedLevelSchema),
+  zones: zonesSchema,
+  createdAt: z.iso.datetime(),
+});
+export type Straightening = z.output<typeof straighteningSchema>;
+
+const ownAndMaker = ["owner", "maker"] as const;
+const everyone = ["owner", "maker", "assistant"] as const;
+
+export const startStraightening = defineEndpoint({
+  method: "POST",
+  path: "/api/boards/{boardId}/straightenings",
+  summary: "Mark a photograph and have it straightened; makes a new version, earlier layouts keep theirs",
+  tag: "straightenings",
+  access: ownAndMaker,
+  params: z.object({ boardId: idSchema }),
+  body: z.object({ photoId: idSchema, marking: markingSchema }),
+  response: straighteningSchema,
+});
+
+export const getStraightening = defineEndpoint({
+  method: "GET",
+  path: "/api/straightenings/{straighteningId}",
+  summary: "One version with its zones",
+  tag: "straightenings",
+  access: everyone,
+  params: z.object({ straighteningId: idSchema }),
+  response: straighteningSchema,
+});
+
+export const listStraightenings = defineEndpoint({
+  method: "GET",
+  path: "/api/boards/{boardId}/straightenings",
+  summary: "All versions of a board's picture, newest first",
+  tag: "straightenings",
+  access: everyone,
+  params: z.object({ boardId: idSchema }),
+  response: z.object({ items: z.array(straighteningSchema) }),
+});
+
+export const saveZones = defineEndpoint({
+  method: "PUT",
+  path: "/api/straightenings/{straighteningId}/zones",
+  summary: "Save outline and keep-clear areas as one; a conflict names the present revision",
+  tag: "straightenings",
+  access: ownAndMaker,
+  params: z.object({ straighteningId: idSchema }),
+  body: zonesSaveSchema,
+  response: zonesSchema,
+});
+
+export const getStraighteningLevel = defineEndpoint({
+  method: "GET",
+  path: "/api/straightenings/{straighteningId}/levels/{level}",
+  summary: "The straightened picture at one size",
+  tag: "straightenings",
+  access: everyone,
+  params: z.object({ straighteningId: idSchema, level: z.coerce.number().int().min(0).max(11) }),
+  responseKind: "image/jpeg",
+});
+
+/** A distance the user has measured on the real board, checked against the straightened picture. */
+export const knownDistanceSchema = z.object({ measured: sizeUmSchema });

@@ -1,0 +1,49 @@
+/** Limits on tries, counted in the database so that every web process counts together. */
+import "server-only";
+import { RateLimiterMySQL, RateLimiterRes } from "rate-limiter-flexible";
+import { openPool } from "./database";
+import { FaultError } from "./faults";
+
+interface Limit {
+  readonly points: number;
+  readonly seconds: number;
+}
+
+/** Common practice, no source: generous to a person mistyping, dull for a machine guessing. */
+const limits = {
+  signInAccount: { points: 8, seconds: 15 * 60 },
+  signInAddress: { points: 60, seconds: 15 * 60 },
+} as const satisfies Record<string, Limit>;
+
+export type LimitName = keyof typeof limits;
+
+const limiter = (name: LimitName) =>
+  new RateLimiterMySQL({
+    storeClient: openPool().pool,
+    storeType: "pool",
+    dbName: openPool().databaseName,
+    tableName: "rate_limit",
+    tableCreated: true,
+    keyPrefix: name,
+    points: limits[name].points,
+    duration: limits[name].seconds,
+  });
+
+/** Counts one try, or refuses and says how long to wait. */
+export async function countTry(name: LimitName, key: string): Promise<void> {
+  try {
+    await limiter(name).consume(key);
+  } catch (error) {
+    if (!(error instanceof RateLimiterRes)) throw error;
+    const minutes = Math.max(1, Math.ceil(error.msBeforeNext / 60_000));
+    throw new FaultError(
+      "too-many-tries",
+      `Too many tries. Wait ${minutes} ${minutes === 1 ? "minute" : "minutes"} and try again.`,
+    );
+  }
+}
+
+/** Forgets the tries of a key that turned out to be right. */
+export async function forgetTries(name: LimitName, key: string): Promise<void> {
+  await limiter(name).delete(key);
+}

@@ -1,0 +1,82 @@
+/** The shop's settings and saws. */
+import "server-only";
+import type { z } from "zod";
+import { recordHistory } from "@/db/queries/history";
+import { findSaw, insertSaw, listSaws, readShop, updateSaw, updateShop } from "@/db/queries/shop";
+import type { ShopId } from "@/db/shop-id";
+import type { Saw, Shop, saveSawSchema, updateShopSchema } from "@/lib/schemas/shop";
+import type { ShopAccess } from "./access";
+import { database } from "./database";
+import { conflict, notFound, refused } from "./faults";
+
+export async function shopSettings(shopId: ShopId): Promise<Shop> {
+  const row = await readShop(database(), shopId);
+  if (!row) throw notFound("shop");
+  const { nextBoardNumber, nextJobNumber, nextOrderNumber, createdAt, ...settings } = row;
+  const saws = await listSaws(database(), shopId);
+  return { ...settings, inchFraction: settings.inchFraction === 32 ? 32 : 64, saws: saws.map(sawOf) };
+}
+
+const sawOf = ({ id, name, kind, kerf, cleanUp }: Saw): Saw => ({ id, name, kind, kerf, cleanUp });
+
+export async function saveShopSettings(access: ShopAccess, body: z.output<typeof updateShopSchema>): Promise<Shop> {
+  const { baseRevision, ...fields } = body;
+  if (!isTimeZone(fields.timeZone))
+    throw refused(`“${fields.timeZone}” is not a time zone, such as Europe/Berlin.`, { timeZone: ["Not a time zone"] });
+  await database().transaction(async (tx) => {
+    const saved = await updateShop(tx, access.shopId, baseRevision, fields);
+    if (!saved) throw conflict("Somebody else saved the settings meanwhile. Load them again and repeat your change.");
+    await recordHistory(
+      tx,
+      access.shopId,
+      { userId: access.userId, noun: "shop", nounId: access.shopId, verb: "changed", detail: fields },
+      new Date(),
+    );
+  });
+  return shopSettings(access.shopId);
+}
+
+function isTimeZone(name: string): boolean {
+  try {
+    new Intl.DateTimeFormat("en", { timeZone: name });
+    return true;
+  } catch {
+    return false;
+  }
+}
+
+export async function addSaw(access: ShopAccess, fields: z.output<typeof saveSawSchema>): Promise<Saw> {
+  return database().transaction(async (tx) => {
+    await refuseTakenName(access.shopId, fields.name, null);
+    const id = await insertSaw(tx, access.shopId, fields);
+    await recordHistory(
+      tx,
+      access.shopId,
+      { userId: access.userId, noun: "saw", nounId: id, verb: "added", detail: fields },
+      new Date(),
+    );
+    return { id, ...fields };
+  });
+}
+
+export async function changeSaw(access: ShopAccess, sawId: string, fields: z.output<typeof saveSawSchema>): Promise<Saw> {
+  return database().transaction(async (tx) => {
+    const before = await findSaw(tx, access.shopId, sawId);
+    if (!before) throw notFound("saw");
+    await refuseTakenName(access.shopId, fields.name, sawId);
+    await updateSaw(tx, access.shopId, sawId, fields);
+    const detail = { before: { name: before.name, kerf: before.kerf, cleanUp: before.cleanUp }, after: fields };
+    await recordHistory(
+      tx,
+      access.shopId,
+      { userId: access.userId, noun: "saw", nounId: sawId, verb: "changed", detail },
+      new Date(),
+    );
+    return { id: sawId, ...fields };
+  });
+}
+
+async function refuseTakenName(shopId: ShopId, name: string, exceptId: string | null): Promise<void> {
+  const taken = (await listSaws(database(), shopId)).some((saw) => saw.name === name && saw.id !== exceptId);
+  if (taken) throw refused(`There is a saw called ${name} already.`, { name: ["Taken already"] });
+}

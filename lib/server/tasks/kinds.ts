@@ -1,0 +1,7 @@
+/** Every kind of long work there is. */
+import "server-only";
+import type { taskKinds } from "@/lib/schemas/task";
+import { straightenTask } from "../straightenings/straighten-task";
+import type { TaskKind } from "./task-kind";
+
+export const kinds: Record<(typeof taskKinds)[number], TaskKind> = { straighten: straightenTask };
