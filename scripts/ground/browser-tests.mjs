@@ -16,7 +16,8 @@ import { runTool, toolScript } from "./tools.mjs";
 export async function runBrowserTests(environment, patterns) {
   say("\nBrowser tests");
   const port = await freePort("the tests' web server", 3100);
-  const env = { ...environment(port), NEXT_DIST_DIR: ".next-test", NODE_ENV: /** @type {const} */ ("production") };
+  /** @type {NodeJS.ProcessEnv} */
+  const env = { ...environment(port), NEXT_DIST_DIR: ".next-test", NODE_ENV: "production" };
   const log = inData("test-server.log");
   const out = fs.openSync(log, "w");
   try {

@@ -22,10 +22,10 @@ export function givenSettings() {
  */
 export function mergeSettings(...layers) {
   /** @type {NodeJS.ProcessEnv} */
-  const merged = Object.create(null);
+  const merged = {};
   for (const layer of layers) {
     for (const [name, value] of Object.entries(layer)) {
-      if (value !== undefined && (value !== "" || merged[name] === undefined)) merged[name] = value;
+      if (value !== undefined && value !== "") merged[name] = value;
     }
   }
   return merged;
