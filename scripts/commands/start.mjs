@@ -20,7 +20,7 @@ export async function command() {
 
 /**
  * The port to serve on.
- * @param {NodeJS.ProcessEnv} settings
+ * @param {import("../ground/settings.mjs").Settings} settings
  */
 export function webPort(settings) {
   return settings.PORT === undefined

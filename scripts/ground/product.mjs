@@ -10,7 +10,7 @@ import { givenSettings, keptSecret } from "./settings.mjs";
 /**
  * Prepares everything but the pages.
  * @param {"production" | "development"} mode
- * @param {(settings: NodeJS.ProcessEnv) => Promise<number>} choosePort called first, so that a taken port is said before the long work
+ * @param {(settings: import("./settings.mjs").Settings) => Promise<number>} choosePort called first, so that a taken port is said before the long work
  */
 export async function prepareProduct(mode, choosePort) {
   prepareDataFolder();

@@ -5,9 +5,11 @@ import util from "node:util";
 import { newSecret } from "./database-access.mjs";
 import { inData, inProject } from "./project.mjs";
 
+/** @typedef {Record<string, string | undefined>} Settings variables by name */
+
 /**
  * The shell's environment over the one in .env, as Next.js itself reads it.
- * @returns {NodeJS.ProcessEnv}
+ * @returns {Settings}
  */
 export function givenSettings() {
   const file = inProject(".env");
@@ -17,11 +19,11 @@ export function givenSettings() {
 
 /**
  * Later ones win, except that an empty value counts as not set, as an untouched line of .env.example is.
- * @param {...NodeJS.ProcessEnv} layers
- * @returns {NodeJS.ProcessEnv}
+ * @param {...Settings} layers
+ * @returns {Settings}
  */
 export function mergeSettings(...layers) {
-  /** @type {NodeJS.ProcessEnv} */
+  /** @type {Settings} */
   const merged = {};
   for (const layer of layers) {
     for (const [name, value] of Object.entries(layer)) {

@@ -13,7 +13,7 @@ afterEach(() => {
 });
 
 /** Runs the stand-in by a shell command and waits until it has named its children. */
-async function startGround(shellCommand: string, env: NodeJS.ProcessEnv = {}) {
+async function startGround(shellCommand: string, env: Record<string, string> = {}) {
   const ground = spawn("sh", ["-c", shellCommand, "sh", process.execPath, program], {
     env: { ...process.env, ...env },
     stdio: ["ignore", "pipe", "inherit"],
