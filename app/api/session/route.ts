@@ -11,4 +11,5 @@ export const POST = handle(endpoint.signIn, async ({ body, request }) =>
 
 export const DELETE = handle(endpoint.signOut, async ({ access }) => {
   await signOut(access);
+  return null;
 });

@@ -28,9 +28,8 @@ export type RouteHandler = (request: Request, context: RouteContext) => Promise<
 /** JSON bodies are documents of a few kilobytes; a layout of 1600 pieces stays below 1 MB. */
 const maxJsonBytes = 2 * 1024 * 1024;
 
-/** What acting answers: JSON by the endpoint's schema, a file, or nothing where the endpoint says so. */
-type Acted<E extends Endpoint> =
-  undefined extends Answer<E> ? Promise<Response | undefined | void> : Promise<Answer<E> | Response>;
+/** What acting answers: JSON by the endpoint's schema, a file, or null where the endpoint answers with nothing. */
+type Acted<E extends Endpoint> = undefined extends Answer<E> ? Promise<Response | null> : Promise<Answer<E> | Response>;
 
 export function handle<E extends Endpoint>(endpoint: E, act: (call: Call<E>) => Acted<E>): RouteHandler {
   return async (request, context) => {
