@@ -5,7 +5,6 @@ const config: NextConfig = {
   distDir: process.env.NEXT_DIST_DIR || ".next",
   poweredByHeader: false,
   reactStrictMode: true,
-  typedRoutes: true,
   // Compiled parts, worker files and data files that these packages find by their own place on disk.
   serverExternalPackages: [
     "@node-rs/argon2",

@@ -14,7 +14,7 @@ const threads = fs
   .map((file) => path.join("lib", "server", file))
   .sort();
 
-const { outputFiles } = await build({
+const result = await build({
   absWorkingDir: root,
   entryPoints: Object.fromEntries([...programs, ...threads].map((file) => [path.basename(file, ".ts"), file])),
   outdir: inData("build"),
@@ -30,10 +30,14 @@ const { outputFiles } = await build({
   sourcemap: "linked",
   write: false,
   logLevel: "warning",
+}).catch((failure) => {
+  // What stops esbuild it has printed by itself.
+  if (!("errors" in failure)) throw failure;
+  process.exit(1);
 });
 
 fs.mkdirSync(inData("build"), { recursive: true });
-for (const { path: file, contents } of outputFiles) {
+for (const { path: file, contents } of result.outputFiles) {
   // A server that is running may be about to load this very file: replace it whole, and only when it has changed.
   if (fs.existsSync(file) && fs.readFileSync(file).equals(contents)) continue;
   const draft = `${file}.${process.pid}`;

@@ -9,20 +9,28 @@ import { newSecret } from "../ground/database-access.mjs";
 import { ensureDependencies } from "../ground/dependencies.mjs";
 import { withLock } from "../ground/lock.mjs";
 import { ensurePackages } from "../ground/packages.mjs";
+import { isEnding } from "../ground/processes.mjs";
 import { inData, prepareDataFolder } from "../ground/project.mjs";
-import { Refusal, say } from "../ground/say.mjs";
-import { sum, summaryLine } from "../ground/summary.mjs";
+import { complain, Refusal, say } from "../ground/say.mjs";
+import { countOfCheck, sum, summaryLine } from "../ground/summary.mjs";
 
 /** @typedef {"unit" | "api" | "e2e"} Part */
+
+/** @typedef {import("../ground/summary.mjs").Count} Count */
 
 /** @param {string[]} args nothing, or --only PART and patterns */
 export function command(args) {
   const { only, patterns } = readArguments(args);
   prepareDataFolder();
   return withLock("test", "running the tests", async () => {
-    await ensurePackages(only === "unit" ? [] : ["database", "browser", "pdfReader"]);
-    await ensureDependencies();
-    const total = sum(await runParts(only, patterns));
+    /** @type {Count[]} */
+    const counts = [];
+    // What cannot be prepared is one failure; the parts that need it are left out, and the line at the end is still printed.
+    await runParts(only, patterns, counts).catch((failure) => {
+      if (!isEnding()) complain(failure);
+      counts.push(countOfCheck(false));
+    });
+    const total = sum(counts);
     say(`\n${summaryLine(total)}`);
     return total.failed === 0 ? 0 : 1;
   });
@@ -31,15 +39,25 @@ export function command(args) {
 /**
  * @param {Part | undefined} only
  * @param {string[]} patterns
+ * @param {Count[]} counts added to
  */
-async function runParts(only, patterns) {
-  const counts = [];
+async function runParts(only, patterns, counts) {
+  await ensurePackages(only === "unit" ? [] : ["database", "browser", "pdfReader"]);
+  await ensureDependencies();
   if (!only) counts.push(...(await checkTypes()), ...(await checkLint()));
-  if (only === "unit") return runVitest("unit", process.env, patterns);
+  if (only === "unit" || !only) counts.push(...(await runVitest("unit", process.env, only ? patterns : [])));
+  if (only === "unit") return;
   await buildBundles();
-  // API and browser tests never see each other's rows, nor the tasks the other one's server works off.
+  const environment = await prepareDatabase();
+  if (only !== "e2e") counts.push(...(await runVitest("api", environment("api", 3100), patterns)));
+  if (only !== "api") counts.push(...(await runBrowserTests((port) => environment("e2e", port), patterns)));
+}
+
+/** Starts the test database with one empty, migrated database each for API and browser tests, which thus never see each other's rows and tasks. */
+async function prepareDatabase() {
   const database = await startDatabase("mariadb-test", ["grainwright_api", "grainwright_e2e"]);
   fs.rmSync(inData("test-uploads"), { recursive: true, force: true });
+  const secret = newSecret();
   /** @type {(name: "api" | "e2e", port: number) => NodeJS.ProcessEnv} */
   const environment = (name, port) => ({
     ...process.env,
@@ -50,17 +68,9 @@ async function runParts(only, patterns) {
     UPLOADS_DIR: inData("test-uploads", name),
     GRAINWRIGHT_DEMO: "0",
   });
-  const secret = newSecret();
-  if (only !== "e2e") {
-    const env = environment("api", 3100);
-    await migrate(env);
-    counts.push(...(await runVitest(only ?? "all", env, patterns)));
-  }
-  if (only !== "api") {
-    await migrate(environment("e2e", 3100));
-    counts.push(...(await runBrowserTests((port) => environment("e2e", port), patterns)));
-  }
-  return counts;
+  await migrate(environment("api", 3100));
+  await migrate(environment("e2e", 3100));
+  return environment;
 }
 
 /**

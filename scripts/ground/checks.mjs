@@ -8,7 +8,7 @@ import { runTool, toolScript } from "./tools.mjs";
 /** Folders of tests that need no database. */
 const unitFolders = ["layout", "reference", "sawmill", "pictures", "editor"].map((name) => `tests/${name}/`);
 
-/** @typedef {"unit" | "api" | "all"} VitestPart unit: without a database; api: the others */
+/** @typedef {"unit" | "api"} VitestPart unit: without a database; api: all others */
 
 export async function checkTypes() {
   say("\nTypes");
@@ -37,7 +37,7 @@ export async function checkLint() {
  * @param {string[]} [patterns] only files whose path holds one of these
  */
 export async function runVitest(part, env, patterns = []) {
-  say(part === "unit" ? "\nUnit tests" : "\nUnit and API tests");
+  say(part === "unit" ? "\nUnit tests" : "\nAPI tests");
   const report = inData("reports", `${part}.json`);
   fs.rmSync(report, { force: true });
   const filters = patterns.length > 0 ? patterns : part === "unit" ? unitFolders : [];
