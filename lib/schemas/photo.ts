@@ -31,11 +31,6 @@ export const photoSchema = z.object({
 });
 export type Photo = z.output<typeof photoSchema>;
 
-/** 40 MB: the largest file taken in. */
-export const maxUploadBytes = 40 * 1024 * 1024;
-/** 60 megapixels: the largest picture taken in. */
-export const maxUploadPixels = 60_000_000;
-
 export const uploadPhoto = defineEndpoint({
   method: "POST",
   path: "/api/photos",
