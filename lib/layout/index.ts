@@ -1,5 +1,11 @@
 /** The one door of the layout core: everything other rooms may use, and nothing else. */
+export { type LyingPiece, lyingPieces } from "./fit/lying-piece";
+export { outsideBy, usableOutline } from "./fit/outline";
 export type { Problem } from "./fit/problem";
+export { problems } from "./fit/problems";
+export { leastSlide } from "./fit/slide";
+export { type Snap, type SnappedSlide, type SnapTarget, snapSlide } from "./fit/snap";
+export { type Spans, spansOf } from "./fit/span";
 export { boundsOf, polygonToStock, rectToStock, toStock } from "./frame/apply-isometry";
 export { composed, inverted, quarterTurn, turnedVector } from "./frame/combine-isometries";
 export type { Isometry } from "./frame/isometry";
@@ -7,6 +13,7 @@ export { identity } from "./frame/isometry";
 export type { FacePoint, FaceRect, Frame, Point, Rect, StockPoint, StockRect } from "./frame/point";
 export { changeAnchor } from "./pattern/change-anchor";
 export { changeCuts, changeFace, type FaceChange } from "./pattern/change-face";
+export { cleanUpEdges } from "./pattern/clean-up-edges";
 export type {
   AnchorX,
   AnchorY,
@@ -69,7 +76,18 @@ export { type Drift, drifts } from "./seam/drift";
 export type { Seam, UmRange } from "./seam/seam";
 export { seams } from "./seam/seams";
 export type { BoardFace, KeepClear, KeepClearKind, KeepClearShape } from "./stock/board";
+export {
+  carpentersTriangle,
+  TRIANGLE_INSET,
+  type TriangleBase,
+  type TriangleMark,
+  type TriangleSegment,
+  type TriangleSide,
+  triangleCorners,
+} from "./triangle/carpenters-triangle";
 export type { InchDenominator, LengthStyle } from "./units/length-style";
+export { boardFeet, boardFeetByRule, type HalfGoes, surfaceMeasure, tallyLength, tallyWidth } from "./units/lumber";
+export { type NominalThickness, nominalThicknesses, nominalThicknessOf } from "./units/nominal-thickness";
 export { type BareUnit, LONGEST_UM, type ParsedLength, parseLength } from "./units/parse-length";
 export { type PrintedLength, printedLength, printLength } from "./units/print-length";
 export type { Um } from "./units/um";

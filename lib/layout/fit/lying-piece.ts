@@ -1,0 +1,29 @@
+/** Pieces as they lie on their boards, with what the tests of this room need to know of them. */
+import { boundsOf, polygonToStock } from "../frame/apply-isometry";
+import { cleanUpEdges } from "../pattern/clean-up-edges";
+import type { FaceLayout } from "../pattern/face-layout";
+import { layOut } from "../pattern/lay-out";
+import type { Piece, PieceId, StockId } from "../piece";
+import type { Edge } from "../program/program";
+import type { Um } from "../units/um";
+import { type Spans, spansOf } from "./span";
+
+export interface LyingPiece {
+  readonly id: PieceId;
+  readonly groupId: string;
+  readonly stockId: StockId;
+  readonly spans: Spans;
+  /** Taken off each edge after sawing, by edge of the stock frame. */
+  readonly cleanUp: Readonly<Record<Edge, Um>>;
+}
+
+/** Every piece laid on wood, in reading order. */
+export function lyingPieces(layout: FaceLayout, pieces: readonly Piece[] = layOut(layout)): LyingPiece[] {
+  const groupById = new Map(layout.groups.flatMap((group) => group.pieceIds.map((id) => [id, group] as const)));
+  return pieces.flatMap(({ id, stockId, outline, stockFromFace }): LyingPiece[] => {
+    const group = groupById.get(id);
+    if (group === undefined || group.placement === null) return [];
+    const spans = spansOf(boundsOf(polygonToStock(stockFromFace, outline)));
+    return [{ id, groupId: group.id, stockId, spans, cleanUp: cleanUpEdges(layout, group.placement.turns) }];
+  });
+}
