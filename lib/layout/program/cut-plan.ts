@@ -61,18 +61,38 @@ export interface CostFrame {
   readonly settingNumber: (cut: CandidateCut) => number;
 }
 
+/** Cuts of this one that hold something short or narrow. */
+const ownUnsafe = (cut: CandidateCut, { limits }: CostFrame): number =>
+  Number(isHeldShort(cut, limits)) + Number(isNarrowRip(cut, limits));
+
+const isShortened = (region: Region, { root }: CostFrame): boolean => sizeOf(region.x) < sizeOf(root.x);
+
+const ownLateRips = (cut: CandidateCut, frame: CostFrame): number => Number(cut.axis === "y" && isShortened(cut.region, frame));
+
+/** At least so many late rips are needed in what a cut leaves: one where a shortened part is not yet at its width. */
+function leastLateRips(region: Region | null, frame: CostFrame): number {
+  if (!region || !isShortened(region, frame)) return 0;
+  return Number(region.blanks.some((blank) => sizeOf(blank.y) < sizeOf(region.y)));
+}
+
+/** Whether a plan that begins with this cut can still be as safe as the one at hand; a test that costs no search. */
+export function isSafeEnough(cut: CandidateCut, best: CutPlan | undefined, frame: CostFrame): boolean {
+  if (!best) return true;
+  const late = ownLateRips(cut, frame) + leastLateRips(cut.low, frame) + leastLateRips(cut.high, frame);
+  return (ownUnsafe(cut, frame) - best.unsafe || late - best.lateRips) <= 0;
+}
+
 /** The cost of one cut followed by the plans of what it leaves. */
 export function planOf(cut: CandidateCut, low: CutPlan | null, high: CutPlan | null, frame: CostFrame): CutPlan {
-  const { limits, root } = frame;
+  const { limits } = frame;
   const sum = (of: (plan: CutPlan) => number) => (low ? of(low) : 0) + (high ? of(high) : 0);
-  const shortened = sizeOf(cut.region.x) < sizeOf(root.x);
   const racked = (side: Region | null) => (side && isOffcut(side, limits) ? areaOf(side) : 0);
   return {
     cut,
     low,
     high,
-    unsafe: sum((plan) => plan.unsafe) + Number(isHeldShort(cut, limits)) + Number(isNarrowRip(cut, limits)),
-    lateRips: sum((plan) => plan.lateRips) + Number(cut.axis === "y" && shortened),
+    unsafe: sum((plan) => plan.unsafe) + ownUnsafe(cut, frame),
+    lateRips: sum((plan) => plan.lateRips) + ownLateRips(cut, frame),
     settings: union(union(low?.settings ?? [], high?.settings ?? []), [frame.settingNumber(cut)]),
     turns: sum((plan) => plan.turns + Number(turnBetween(cut, plan.cut) !== "none")),
     cuts: sum((plan) => plan.cuts) + 1,

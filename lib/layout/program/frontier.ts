@@ -15,11 +15,19 @@ export interface Frontier {
 
 export const emptyFrontier: Frontier = { plans: [], whole: true };
 
-/** The frontier with one more plan weighed against it; of equals the earlier stays. `room`: most plans kept. */
-export function withPlan(frontier: Frontier, plan: CutPlan, room: number): Frontier {
+export interface FrontierLimits {
+  /** Most plans kept for one rectangle. */
+  readonly room: number;
+  /** Settings of the best tree known: a plan with more of them is no part of a better tree that is as safe. */
+  readonly mostSettings: number;
+}
+
+/** The frontier with one more plan weighed against it; of equals the earlier stays. It never becomes empty again. */
+export function withPlan(frontier: Frontier, plan: CutPlan, limits: FrontierLimits): Frontier {
   if (frontier.plans.some((kept) => makesNeedless(kept, plan))) return frontier;
   const plans = [...frontier.plans.filter((kept) => !makesNeedless(plan, kept)), plan].sort(comparePlans);
-  return plans.length > room ? { plans: plans.slice(0, room), whole: false } : { plans, whole: frontier.whole };
+  const few = plans.filter((kept, i) => i === 0 || kept.settings.length <= limits.mostSettings);
+  return few.length > limits.room ? { plans: few.slice(0, limits.room), whole: false } : { plans: few, whole: frontier.whole };
 }
 
 function makesNeedless(kept: CutPlan, other: CutPlan): boolean {

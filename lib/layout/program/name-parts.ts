@@ -25,12 +25,18 @@ export function partNamer(kerf: KerfByAxis, limits: ShopLimits): PartNamer {
   const strip = (): Name => ({ kind: "strip", label: stripLabel(strips++), pieceId: null });
 
   function unsawn(parent: Part, region: Region, siblings: readonly Region[]): Name {
-    const alone = siblings.every((other) => other === region || isOut(other));
-    const keeps = alone && (parent.kind !== "board" || groupsAlong(region, "y", kerf.y).length > 1);
+    const unsawnSiblings = siblings.filter((other) => other !== region && !isOut(other));
+    const rows = (of: Region) => groupsAlong(of, "y", kerf.y).length;
+    // A board stays the board until single rows come off it, a strip keeps its letter while pieces do.
+    const keeps =
+      parent.kind === "board"
+        ? rows(region) > 1 && unsawnSiblings.every((other) => rows(other) === 1)
+        : unsawnSiblings.length === 0;
     if (keeps) return { kind: parent.kind, label: parent.label, pieceId: parent.pieceId };
     const [blank, second] = region.blanks;
     // One piece parted from the others, still to be trimmed: it is marked as that piece at once.
-    if (!alone && blank && !second) return { kind: "blank", label: blank.piece.label, pieceId: blank.piece.pieceId };
+    if (unsawnSiblings.length > 0 && parent.kind === "strip" && blank && !second)
+      return { kind: "blank", label: blank.piece.label, pieceId: blank.piece.pieceId };
     return strip();
   }
 

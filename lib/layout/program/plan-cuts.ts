@@ -51,7 +51,7 @@ function kerfByAxis(request: CutRequest): KerfByAxis {
 }
 
 /** Shares of the budget and how wide each stage looks: a quick one that always helps, then one that is complete on small layouts. */
-const stages: readonly (Omit<SearchLimits, "budget"> & { readonly share: number })[] = [
+const stages: readonly (Pick<SearchLimits, "scope" | "room"> & { readonly share: number })[] = [
   { scope: "peel", room: 3, share: 0.4 },
   { scope: "all", room: 24, share: 0.6 },
 ];
@@ -78,14 +78,20 @@ function searchWay(way: TruingWay, kerf: KerfByAxis, request: CutRequest, budget
   }
   let steps = plan.cuts;
   let proven = false;
-  for (const { share, ...stage } of stages) {
-    const outcome = searchPlans(way.board, kerf, request.limits, { ...stage, budget: Math.floor(budget * share) });
+  for (const { share, scope, room } of stages) {
+    const stage = { scope, room, mostSettings: plan.settings.length, budget: Math.floor(budget * share) };
+    const outcome = searchPlans(way.board, kerf, request.limits, stage);
     steps += outcome.steps;
     if (!outcome.found) continue;
+    // Plans were left out for their settings, which is sound only among plans as safe as the one they were measured by.
+    proven = scope === "all" && outcome.whole && isAsSafe(outcome.found, plan);
     if (comparePlans(outcome.found, plan) < 0) plan = outcome.found;
-    proven = stage.scope === "all" && outcome.whole;
   }
   return { plan, steps, proven };
+}
+
+function isAsSafe(a: CutPlan, b: CutPlan): boolean {
+  return a.unsafe === b.unsafe && a.lateRips === b.lateRips;
 }
 
 function isBetter(plan: CutPlan | null, than: CutPlan | null): boolean {

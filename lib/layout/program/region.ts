@@ -44,6 +44,17 @@ export function regionKey(region: Region): string {
   return `${region.x.from} ${region.x.to} ${region.y.from} ${region.y.to}`;
 }
 
+/** Equal for rectangles that are cut alike: sizes, where the blanks lie in it, which edges are rough and of which blanks they may stay so. */
+export function shapeKey(region: Region): string {
+  const { x, y } = region;
+  const rough = everyEdge.filter((edge) => !isStraight(region, edge));
+  const blanks = region.blanks.map((blank) => {
+    const place = [blank.x.from - x.from, blank.x.to - x.from, blank.y.from - y.from, blank.y.to - y.from];
+    return [...place, ...rough.filter((edge) => blank.piece.cleanUp[edge] > 0)].join(" ");
+  });
+  return `${sizeOf(x)} ${sizeOf(y)} ${rough.join(" ")}:${blanks.sort().join(",")}`;
+}
+
 /** The coordinate at which an edge lies. */
 export function edgeAt(rect: { readonly x: Span; readonly y: Span }, edge: Edge): number {
   const span = rect[axisOfEdge[edge]];

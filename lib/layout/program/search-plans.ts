@@ -1,17 +1,15 @@
 /**
- * The best tree of cuts through a rectangle, remembered by rectangle: what a rectangle holds and how its edges are follows from
- * where it lies in the board. The budget is counted in plans weighed, so the same input always stops at the same place.
+ * The best tree of cuts through a rectangle, remembered by shape: rectangles with blanks of the same sizes at the same places are
+ * cut alike wherever they lie in the board. The budget is counted in plans weighed, so the same input always stops at the same place.
  */
-import { candidateCuts, type KerfByAxis, type Scope } from "./candidate-cuts";
-import { type CostFrame, type CutPlan, planOf, settingKey } from "./cut-plan";
-import { emptyFrontier, type Frontier, withPlan } from "./frontier";
+import { type CandidateCut, candidateCuts, type KerfByAxis, type Scope } from "./candidate-cuts";
+import { type CostFrame, type CutPlan, isSafeEnough, planOf, settingKey } from "./cut-plan";
+import { emptyFrontier, type Frontier, type FrontierLimits, withPlan } from "./frontier";
 import type { ShopLimits } from "./program";
-import { isFinished, type Region, regionKey } from "./region";
+import { isFinished, part, type Region, shapeKey } from "./region";
 
-export interface SearchLimits {
+export interface SearchLimits extends FrontierLimits {
   readonly scope: Scope;
-  /** Most plans kept for one rectangle. */
-  readonly room: number;
   /** Most plans weighed. */
   readonly budget: number;
 }
@@ -25,35 +23,52 @@ type Result = Frontier | "finished" | null;
 
 export function searchPlans(root: Region, kerf: KerfByAxis, limits: ShopLimits, search: SearchLimits): SearchOutcome {
   const frame = costFrame(root, limits);
-  const known = new Map<string, Result>();
+  const known = new Map<string, Frontier>();
   let steps = 0;
 
-  function weigh(region: Region): Result {
-    if (isFinished(region)) return "finished";
-    const key = regionKey(region);
+  function weigh(region: Region | null): Result {
+    if (!region || isFinished(region)) return "finished";
+    const key = shapeKey(region);
     const before = known.get(key);
     if (before) return before;
     let frontier = emptyFrontier;
     for (const cut of candidateCuts(region, kerf, search.scope)) {
-      const low = cut.low ? weigh(cut.low) : "finished";
-      const high = low && cut.high ? weigh(cut.high) : "finished";
-      if (!low || !high) return null;
-      for (const lowPlan of plansIn(low)) {
-        for (const highPlan of plansIn(high)) {
-          steps++;
-          if (steps > search.budget) return null;
-          frontier = withPlan(frontier, planOf(cut, lowPlan, highPlan, frame), search.room);
-        }
-      }
-      frontier = { plans: frontier.plans, whole: frontier.whole && isWhole(low) && isWhole(high) };
+      if (!isSafeEnough(cut, frontier.plans[0], frame)) continue;
+      const next: Frontier | null = weighCut(cut, frontier);
+      if (!next) return null;
+      frontier = next;
     }
     known.set(key, frontier);
     return frontier;
   }
 
+  function weighCut(cut: CandidateCut, soFar: Frontier): Frontier | null {
+    const low = weigh(cut.low);
+    const high = low && weigh(cut.high);
+    if (!low || !high) return null;
+    let frontier = soFar;
+    for (const lowPlan of plansIn(low)) {
+      for (const highPlan of plansIn(high)) {
+        steps++;
+        if (steps > search.budget) return null;
+        frontier = withPlan(frontier, planOf(cut, lowPlan, highPlan, frame), search);
+      }
+    }
+    return { plans: frontier.plans, whole: frontier.whole && isWhole(low) && isWhole(high) };
+  }
+
   const result = weigh(root);
   const found = result && result !== "finished" ? result.plans[0] : undefined;
-  return found && result ? { found, steps, whole: isWhole(result) } : { found: null, steps };
+  return found && result ? { found: inPlace(found, root, frame), steps, whole: isWhole(result) } : { found: null, steps };
+}
+
+/** A plan may have been worked out for the same shape elsewhere in the board; here it is moved to where it is carried out. */
+function inPlace(plan: CutPlan, region: Region, frame: CostFrame): CutPlan {
+  const { cut } = plan;
+  const shift = region[cut.axis].from - cut.region[cut.axis].from;
+  const halves = part(region, cut.axis, { from: cut.kerf.from + shift, to: cut.kerf.to + shift });
+  const follow = (side: CutPlan | null, half: Region | null) => (side && half ? inPlace(side, half, frame) : null);
+  return planOf({ ...cut, ...halves, region }, follow(plan.low, halves.low), follow(plan.high, halves.high), frame);
 }
 
 /** One tree without search, the first candidate at every rectangle: what is followed when the budget allows nothing better. */

@@ -5,7 +5,7 @@ import { cautionsOf } from "./choose-cautions";
 import { conservationOf } from "./conservation";
 import { type CutPlan, settingKey } from "./cut-plan";
 import type { CutRequest } from "./cut-request";
-import { partNamer } from "./name-parts";
+import { type PartNamer, partNamer } from "./name-parts";
 import { type OrderedCut, orderOfWork } from "./order-of-work";
 import type { CleanUp, CutProgram, CutStep, Part, SearchReport } from "./program";
 import { axisOfEdge, everyEdge, type Region, regionKey, stockRectOf, wholeBoard } from "./region";
@@ -18,8 +18,9 @@ export interface ChosenTree {
 }
 
 export function writeProgram(request: CutRequest, kerf: KerfByAxis, tree: ChosenTree, search: SearchReport): CutProgram {
-  const truing = truingSteps(request, tree.way);
-  const steps = [...truing, ...cutSteps(request, kerf, tree.plan, truing)];
+  const namer = partNamer(kerf, request.limits);
+  const truing = truingSteps(request, tree, namer);
+  const steps = [...truing, ...cutSteps(request, tree.plan, truing, namer)];
   const parts = finalParts(steps);
   const blanks = parts.filter((part) => part.pieceId !== null);
   const pieces = blanks.map((part) => finished(part, request));
@@ -36,7 +37,7 @@ export function writeProgram(request: CutRequest, kerf: KerfByAxis, tree: Chosen
   return { ...program, conservation: conservationOf(request.board, program) };
 }
 
-function truingSteps(request: CutRequest, way: TruingWay): readonly CutStep[] {
+function truingSteps(request: CutRequest, { way, plan }: ChosenTree, namer: PartNamer): readonly CutStep[] {
   let rect = wholeBoard(request) as Pick<Region, "x" | "y">;
   let part: Part = { id: "board", kind: "board", label: null, pieceId: null, rect: stockRectOf(rect) };
   return way.edges.map((edge, i) => {
@@ -48,6 +49,8 @@ function truingSteps(request: CutRequest, way: TruingWay): readonly CutStep[] {
     rect = { ...rect, [axis]: low ? { from: from + takes, to } : { from, to: to - takes } };
     const before = part;
     part = { ...before, id: `${i + 1}.1`, rect: stockRectOf(rect) };
+    // Where nothing is left to saw, the last edge trued leaves the piece.
+    if (!plan && i === way.edges.length - 1) part = namer.nameAll(before, [way.board], i + 1)[0] ?? part;
     return {
       number: i + 1,
       kind: "true",
@@ -66,13 +69,12 @@ function truingSteps(request: CutRequest, way: TruingWay): readonly CutStep[] {
   });
 }
 
-function cutSteps(request: CutRequest, kerf: KerfByAxis, plan: CutPlan | null, truing: readonly CutStep[]): readonly CutStep[] {
+function cutSteps(request: CutRequest, plan: CutPlan | null, truing: readonly CutStep[], namer: PartNamer): readonly CutStep[] {
   if (!plan) return [];
   const board = truing.at(-1)?.yields[0];
   const root = plan.cut.region;
   const inHand = new Map<string, Part>();
   inHand.set(regionKey(root), board ?? { id: "board", kind: "board", label: null, pieceId: null, rect: stockRectOf(root) });
-  const namer = partNamer(kerf, request.limits);
   const settings = new Map<string, number>();
   return orderOfWork(plan).map((ordered, i) => {
     const { cut } = ordered.plan;

@@ -24,7 +24,12 @@ export function front(number: number, x: number, y: number, width: number, heigh
   };
 }
 
-export function request(lengthMm: number, widthMm: number, pieces: readonly PlacedPiece[], change: Partial<CutRequest> = {}): CutRequest {
+export function request(
+  lengthMm: number,
+  widthMm: number,
+  pieces: readonly PlacedPiece[],
+  change: Partial<CutRequest> = {},
+): CutRequest {
   return {
     board: { length: umFromMm(lengthMm), width: umFromMm(widthMm) },
     pieces,

@@ -1,0 +1,92 @@
+/** Layouts that can be sawn for certain: a board cut up at random by straight cuts, with a piece set into some of the rectangles. */
+import fc from "fast-check";
+import type { BoardEdges, CutRequest, PlacedPiece } from "@/lib/layout/program/cut-request";
+import { um } from "@/lib/layout/units/um";
+import { limits } from "./row-of-fronts";
+
+interface Rect {
+  readonly x: number;
+  readonly y: number;
+  readonly width: number;
+  readonly height: number;
+}
+
+/** Smallest side of a rectangle that is cut again, µm. */
+const smallest = 60_000;
+const state = fc.constantFrom("rough" as const, "trued" as const);
+
+export const anyBoardEdges: fc.Arbitrary<BoardEdges> = fc.record({ left: state, right: state, top: state, bottom: state });
+
+/** Every choice is drawn from one list of numbers, so that a failing layout shrinks to one with few cuts. */
+export const sawableRequest: fc.Arbitrary<CutRequest> = fc
+  .record({
+    choices: fc.array(fc.nat(9_999), { maxLength: 90 }),
+    length: fc.integer({ min: 300_000, max: 2_500_000 }),
+    width: fc.integer({ min: 100_000, max: 600_000 }),
+    rip: fc.constantFrom(0, 2_381, 3_200),
+    crosscut: fc.constantFrom(0, 1_800, 3_200),
+    boardEdges: anyBoardEdges,
+    takes: fc.constantFrom(0, 1_500, 5_000),
+  })
+  .map(({ choices, length, width, rip, crosscut, boardEdges, takes }) => {
+    const pieces = pieceUp(
+      choices,
+      { x: takes, y: takes, width: length - 2 * takes, height: width - 2 * takes },
+      { rip, crosscut },
+      takes,
+    );
+    return {
+      board: { length: um(length), width: um(width) },
+      pieces,
+      kerf: { rip: um(rip), crosscut: um(crosscut) },
+      boardEdges,
+      truingTakes: { longEdge: um(takes), end: um(takes) },
+      limits,
+      budget: 20_000,
+    };
+  })
+  .filter((request) => request.pieces.length > 0);
+
+function pieceUp(choices: readonly number[], board: Rect, kerf: { rip: number; crosscut: number }, takes: number): PlacedPiece[] {
+  const pieces: PlacedPiece[] = [];
+  let next = 0;
+  const choose = (count: number) => (choices[next++] ?? 0) % count;
+  const fill = (rect: Rect, depth: number): void => {
+    const crosscut = choose(2) === 1;
+    const size = crosscut ? rect.width : rect.height;
+    if (depth < 5 && size > 2 * smallest && choose(5) > 0) {
+      const blade = crosscut ? kerf.crosscut : kerf.rip;
+      const at = smallest + Math.floor(((size - 2 * smallest - blade) * choose(8)) / 8);
+      if (at < smallest) return;
+      const rest = size - at - blade;
+      fill(crosscut ? { ...rect, width: at } : { ...rect, height: at }, depth + 1);
+      const second = crosscut
+        ? { ...rect, x: rect.x + at + blade, width: rest }
+        : { ...rect, y: rect.y + at + blade, height: rest };
+      fill(second, depth + 1);
+      return;
+    }
+    if (choose(6) < 5) pieces.push(setInto(rect, pieces.length + 1, choose));
+  };
+  if (board.width > 4 * takes && board.height > 4 * takes) fill(board, 0);
+  return pieces;
+}
+
+/** A piece with some room round it on each side (none, less than a blade, more) and some clean-up. */
+function setInto(rect: Rect, number: number, choose: (count: number) => number): PlacedPiece {
+  const room = () => [0, 0, 400, 2_381, 9_100, 20_000][choose(6)] ?? 0;
+  const clean = () => um([0, 0, 0, 500][choose(4)] ?? 0);
+  const inset = { left: room(), right: room(), top: room(), bottom: room() };
+  const cleanUp = { left: clean(), right: clean(), top: clean(), bottom: clean() };
+  return {
+    pieceId: `p${number}`,
+    label: String(number),
+    cleanUp,
+    rect: {
+      x: um(rect.x + inset.left + cleanUp.left),
+      y: um(rect.y + inset.top + cleanUp.top),
+      width: um(rect.width - inset.left - inset.right - cleanUp.left - cleanUp.right),
+      height: um(rect.height - inset.top - inset.bottom - cleanUp.top - cleanUp.bottom),
+    },
+  };
+}
