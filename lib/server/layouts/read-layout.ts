@@ -1,0 +1,61 @@
+/** The layout of a face with the boards on its table. */
+import "server-only";
+import type { z } from "zod";
+import type { Connection } from "@/db/client";
+import { findLayout, listHolds, listLayoutBoards, listNewestOrders } from "@/db/queries/layout";
+import type { ShopId } from "@/db/shop-id";
+import type { Layout, layoutBoardSchema } from "@/lib/schemas/layout";
+import { printTag } from "@/lib/schemas/tag";
+import type { ShopAccess } from "../access";
+import { database } from "../database";
+import { notFound } from "../faults";
+import { straighteningOf } from "../straightenings/straightening-of";
+
+export type LayoutBoard = z.output<typeof layoutBoardSchema>;
+
+export async function readLayout(access: ShopAccess, faceId: string): Promise<Layout> {
+  const db = database();
+  const found = await findLayout(db, access.shopId, faceId);
+  if (!found) throw notFound("face");
+  const { layout } = found;
+  return {
+    id: layout.id,
+    faceId,
+    faceTitle: found.faceTitle,
+    jobId: found.jobId,
+    jobTitle: found.jobTitle,
+    document: layout.document,
+    crosscutSawId: layout.crosscutSawId,
+    ripSawId: layout.ripSawId,
+    revision: layout.revision,
+    boards: await layoutBoards(db, access.shopId, layout.id),
+    updatedAt: layout.updatedAt.toISOString(),
+    updatedBy: found.updatedByName,
+    order: (await listNewestOrders(db, access.shopId, [faceId])).get(faceId) ?? null,
+  };
+}
+
+/** Every board on the table, with the version of its picture used and who else counts on it. */
+export async function layoutBoards(db: Connection, shopId: ShopId, layoutId: string): Promise<LayoutBoard[]> {
+  const rows = await listLayoutBoards(db, shopId, layoutId);
+  const holds = await listHolds(
+    db,
+    shopId,
+    rows.map(({ board }) => board.id),
+    layoutId,
+  );
+  return Promise.all(
+    rows.map(async ({ board, straightening, currentStraighteningId }) => ({
+      boardId: board.id,
+      tag: printTag(board.tagNumber),
+      species: board.species,
+      place: board.place,
+      thickness: board.thickness,
+      straightening: await straighteningOf(db, shopId, straightening),
+      newerStraighteningId: currentStraighteningId === straightening.id ? null : currentStraighteningId,
+      heldBy: holds
+        .filter(({ boardId }) => boardId === board.id)
+        .map(({ faceId, faceTitle, jobTitle }) => ({ faceId, faceTitle, jobTitle })),
+    })),
+  );
+}
