@@ -1,5 +1,5 @@
 import { char, index, int, mysqlTable, primaryKey, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
-import { orderSnapshotSchema } from "@/lib/schemas/order-snapshot";
+import { orderSnapshotSchema, orderSummarySchema } from "@/lib/schemas/order-snapshot";
 import { idColumn, jsonOf, utcColumn } from "../columns";
 import type { ShopId } from "../shop-id";
 import { face, job } from "./job";
@@ -63,6 +63,7 @@ export const orderRevision = mysqlTable(
     /** 1 prints as A, 2 as B; I and O are left out. */
     revision: int("revision").notNull(),
     snapshot: jsonOf(orderSnapshotSchema)("snapshot").notNull(),
+    summary: jsonOf(orderSummarySchema)("summary").notNull(),
     /** SHA-256 of the snapshot's JSON, printed in short on every page. */
     fingerprint: char("fingerprint", { length: 64 }).notNull(),
     issuedBy: idColumn("issued_by")

@@ -41,3 +41,7 @@ export const orderSnapshotSchema = z.object({
   boards: z.array(snapshotBoardSchema).min(1),
 });
 export type OrderSnapshot = z.output<typeof orderSnapshotSchema>;
+
+/** What lists of orders show of a revision, kept beside the snapshot so that a list need not read the whole of each. */
+export const orderSummarySchema = z.object({ faceTitles: z.array(z.string()), boards: z.array(z.string()), steps: z.int() });
+export type OrderSummary = z.output<typeof orderSummarySchema>;

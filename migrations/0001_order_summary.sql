@@ -1,0 +1,1 @@
+ALTER TABLE `order_revision` ADD `summary` json NOT NULL;
