@@ -31,7 +31,14 @@ export async function runBrowserTests(environment, patterns) {
   const report = inData("reports", "e2e.json");
   fs.rmSync(report, { force: true });
   const code = await runTool(toolScript("@playwright/test", "playwright"), ["test", ...patterns], {
-    env: { ...env, NODE_ENV: "test", BASE_URL: env.APP_URL, CHROMIUM: process.env.CHROMIUM || whereIs("chromium") },
+    env: {
+      ...env,
+      NODE_ENV: "test",
+      BASE_URL: env.APP_URL,
+      CHROMIUM: process.env.CHROMIUM || whereIs("chromium"),
+      // Playwright knows only this way of going without colours, and Node.js warns when it meets both.
+      ...(env.NO_COLOR && { NO_COLOR: undefined, FORCE_COLOR: "0" }),
+    },
   });
   if (code !== 0) say(`What the web server said: ${log}`);
   return [countReport(report, code, countOfPlaywright)];
