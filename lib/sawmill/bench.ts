@@ -3,7 +3,7 @@
  *
  * Bench frame: the board's face frame carried straight down to the bench, mm.
  */
-import { hashAt, smoothNoise } from "./noise";
+import { hashAt, roughNoise, smoothNoise } from "./noise";
 import { between, type Random } from "./random";
 import type { Tone } from "./species";
 
@@ -23,10 +23,10 @@ export interface Strokes {
 }
 
 const TONES: readonly Tone[] = [
-  { r: 118, g: 124, b: 126 },
-  { r: 92, g: 101, b: 104 },
-  { r: 138, g: 138, b: 134 },
-  { r: 84, g: 96, b: 92 },
+  { r: 122, g: 125, b: 126 },
+  { r: 99, g: 104, b: 107 },
+  { r: 142, g: 141, b: 137 },
+  { r: 96, g: 103, b: 98 },
 ];
 
 /** A bench chosen by chance. */
@@ -40,13 +40,16 @@ export function benchStain(bench: Bench, xMm: number, yMm: number): number {
   const wide = smoothNoise(xMm / 260, yMm / 260, 0.5, bench.seed ^ 0x61);
   const middling = smoothNoise(xMm / 70, yMm / 70, 1.5, bench.seed ^ 0x62);
   const small = smoothNoise(xMm / 21, yMm / 21, 2.5, bench.seed ^ 0x63);
-  const spot = Math.max(0, smoothNoise(xMm / 46, yMm / 46, 3.5, bench.seed ^ 0x64) - 0.52);
-  return 1 + bench.stain * (1.1 * wide + 0.7 * middling + 0.4 * small) - 1.1 * spot;
+  const spot = Math.max(0, smoothNoise(xMm / 46, yMm / 46, 3.5, bench.seed ^ 0x64) - 0.62);
+  return 1 + bench.stain * (1.1 * wide + 0.7 * middling + 0.4 * small) - 0.6 * spot;
 }
 
-/** Fine part of the bench's brightness, about 0: grains of 1.1 mm. */
+/** Fine part of the bench's brightness, about 0: grains of 1 mm on a grit of 4 mm, with a paler chip of dust here and there. */
 export function benchSpeckle(bench: Bench, xMm: number, yMm: number): number {
-  return (bench.speckle * hashAt(Math.floor(xMm / 1.1), Math.floor(yMm / 1.1), 9, bench.seed ^ 0x65)) / 2147483648;
+  const grain = hashAt(Math.floor(xMm), Math.floor(yMm), 9, bench.seed ^ 0x65);
+  const grit = roughNoise(xMm / 4.1, yMm / 4.1, 0.5, bench.seed ^ 0x66);
+  const dust = (grain & 1023) === 7 ? 0.2 : 0;
+  return bench.speckle * (grain / 2147483648 + 0.7 * grit) + dust;
 }
 
 /** Scratches, scattered over a rectangle of the bench. */

@@ -64,3 +64,10 @@ function growBranch(branching: Branching, z: number, azimuth: number, radiusMm: 
 export function branchRadiusMm(branch: Branch, alongMm: number): number {
   return 1.2 + branch.flare * Math.min(alongMm, branch.deadFromMm);
 }
+
+/** Share of that radius left on the last stretch, where the stub was worn round before it was grown over; 0 past its end. */
+export function stubShare(branch: Branch, alongMm: number): number {
+  const left = (branch.endMm - alongMm) / branchRadiusMm(branch, branch.endMm);
+  if (left <= 0) return 0;
+  return left >= 1 ? 1 : Math.sqrt(left * (2 - left));
+}

@@ -81,7 +81,8 @@ function countCells(log: Log, index: number, plane: Plane, size: FaceSize, [left
       if (place.alongBranchMm > (log.branches[index]?.deadFromMm ?? 0)) deadCells++;
       sumX += x;
       sumY += y;
-      const [l, t, r, b] = [x - CELL_MM / 2, y - CELL_MM / 2, x + CELL_MM / 2, y + CELL_MM / 2];
+      const [l, t] = [x - CELL_MM / 2, y - CELL_MM / 2];
+      const [r, b] = [Math.min(right, x + CELL_MM / 2), Math.min(bottom, y + CELL_MM / 2)];
       box = box === null ? [l, t, r, b] : [Math.min(box[0], l), Math.min(box[1], t), Math.max(box[2], r), Math.max(box[3], b)];
     }
   }

@@ -4,7 +4,7 @@
  *
  * Log frame: z up the tree from the butt, x and y across it, origin at the mean pith. Millimetres.
  */
-import { BRANCH_REACH, type Branch, branchRadiusMm, growBranches } from "./branches";
+import { BRANCH_REACH, type Branch, branchRadiusMm, growBranches, stubShare } from "./branches";
 import { smoothNoise } from "./noise";
 import { between, randomFor } from "./random";
 import { growRings, type Rings } from "./rings";
@@ -42,7 +42,9 @@ export interface WoodPlace {
   z: number;
   /** Branch whose own wood this is, or −1. */
   branch: number;
-  /** Distance from that branch's axis, and its radius there. */
+  /** Offsets from that branch's axis, sideways and up, their length, and the branch's radius there. */
+  offSideMm: number;
+  offLiftMm: number;
   offAxisMm: number;
   branchRadiusMm: number;
   /** Place along that branch's axis. */
@@ -53,7 +55,19 @@ export interface WoodPlace {
 
 /** An empty place to hand to `readLog`. */
 export function emptyPlace(): WoodPlace {
-  return { growthMm: 0, fibreX: 0, fibreY: 0, z: 0, branch: -1, offAxisMm: 0, branchRadiusMm: 0, alongBranchMm: 0, strain: 0 };
+  return {
+    growthMm: 0,
+    fibreX: 0,
+    fibreY: 0,
+    z: 0,
+    branch: -1,
+    offSideMm: 0,
+    offLiftMm: 0,
+    offAxisMm: 0,
+    branchRadiusMm: 0,
+    alongBranchMm: 0,
+    strain: 0,
+  };
 }
 
 const PITH_STEP_MM = 2;
@@ -110,7 +124,9 @@ export function branchesNear(log: Log, fromZ: number, toZ: number): number[] {
   return near;
 }
 
+// Scratch of one reading, kept here because a photograph takes millions of them.
 const pithHere = { x: 0, y: 0 };
+const bent = { x: 0, y: 0, youngerMm: 0 };
 
 /** The pith's place at a height, straight between the steps it was grown in. Fills and returns `into`. */
 export function pithAt(log: Log, z: number, into: { x: number; y: number } = { x: 0, y: 0 }): { x: number; y: number } {
@@ -130,61 +146,66 @@ export function pithAt(log: Log, z: number, into: { x: number; y: number } = { x
 export function readLog(log: Log, x: number, y: number, z: number, near: readonly number[], place: WoodPlace): void {
   const { species, seed } = log;
   pithAt(log, z, pithHere);
-  let px = x - pithHere.x;
-  let py = y - pithHere.y;
-
+  bent.x = x - pithHere.x;
+  bent.y = y - pithHere.y;
+  bent.youngerMm = 0;
   place.z = z;
   place.branch = -1;
   place.strain = 0;
-  let collarMm = 0;
   for (const index of near) {
     const branch = log.branches[index];
-    if (branch === undefined) continue;
-    const outward = px * branch.outX + py * branch.outY;
-    const rise = z - branch.rootZMm;
-    const along = outward * branch.out + rise * branch.up;
-    if (along <= 0) continue;
-    const radius = branchRadiusMm(branch, along);
-    const side = py * branch.outX - px * branch.outY;
-    // Offset from the axis within the plane that holds axis and trunk, seen square to the axis.
-    const lift = rise * branch.out - outward * branch.up;
-    const reach = BRANCH_REACH * radius;
-    if (side > reach || side < -reach || lift > reach || lift < -reach) continue;
-    const offAxis = Math.sqrt(side * side + lift * lift);
-    if (
-      along < branch.endMm &&
-      offAxis < radius &&
-      (place.branch < 0 || offAxis / radius < place.offAxisMm / place.branchRadiusMm)
-    ) {
-      place.branch = index;
-      place.offAxisMm = offAxis;
-      place.branchRadiusMm = radius;
-      place.alongBranchMm = along;
-    }
-    const healed = along < branch.endMm ? 1 : Math.max(0, 1 - (along - branch.endMm) / (4 * radius));
-    if (healed === 0) continue;
-    // Grain parts round the branch as water round a pile, drawn out along the trunk.
-    const drawn = side * side + 0.16 * lift * lift;
-    const window = 1 - (offAxis * offAxis) / (reach * reach);
-    if (window <= 0) continue;
-    const push = (healed * window * window * 1.1 * radius * radius) / (drawn + 1.1 * radius * radius);
-    px += branch.outY * side * push;
-    py -= branch.outX * side * push;
-    // Each year's growth runs out along the branch a little way: next to it the wood is younger than its distance says.
-    const gap = Math.max(0, Math.sqrt(drawn) - 0.6 * radius);
-    const near1 = healed * window * Math.exp(-gap / (0.75 * radius));
-    collarMm += near1 * radius * 0.9;
-    if (near1 > place.strain) place.strain = near1;
+    if (branch !== undefined) meetBranch(branch, index, z, seed, place);
   }
 
-  const radius = Math.sqrt(px * px + py * py);
+  const radius = Math.sqrt(bent.x * bent.x + bent.y * bent.y);
   const wave =
     2.2 * smoothNoise(x / 120, y / 120, z / 520, seed ^ 0x11) +
     smoothNoise(x / 34, y / 34, z / 170, seed ^ 0x12) +
     0.22 * smoothNoise(x / 8, y / 8, z / 40, seed ^ 0x13);
-  const growth = radius + species.taper * z + species.waveMm * wave * Math.min(1, radius / 40) - collarMm;
+  const growth = radius + species.taper * z + species.waveMm * wave * Math.min(1, radius / 40) - bent.youngerMm;
   const spread = growth / Math.max(radius, 2);
   place.growthMm = growth;
-  place.fibreX = px * spread;
-  place.fibreY = py * spread;
+  place.fibreX = bent.x * spread;
+  place.fibreY = bent.y * spread;
+}
+
+/** Notes whether the point lies in this branch, and bends the trunk's grain round it. */
+function meetBranch(branch: Branch, index: number, z: number, seed: number, place: WoodPlace): void {
+  const outward = bent.x * branch.outX + bent.y * branch.outY;
+  const rise = z - branch.rootZMm;
+  const along = outward * branch.out + rise * branch.up;
+  if (along <= 0) return;
+  const radius = branchRadiusMm(branch, along);
+  const reach = BRANCH_REACH * radius;
+  const side = bent.y * branch.outX - bent.x * branch.outY;
+  // Offset from the axis within the plane that holds axis and trunk, square to the axis.
+  const lift = rise * branch.out - outward * branch.up;
+  const offAxis = Math.sqrt(side * side + lift * lift);
+  if (offAxis >= reach) return;
+  if (along < branch.endMm && offAxis < radius * 1.3) {
+    // No branch is quite round: its outline swells and shrinks by up to three tenths.
+    const swell = 1 + 0.3 * smoothNoise((1.1 * side) / radius, (1.1 * lift) / radius, along / 50, seed ^ (index + 0x100));
+    const outline = radius * swell * stubShare(branch, along);
+    if (offAxis < outline && (place.branch < 0 || offAxis * place.branchRadiusMm < place.offAxisMm * outline)) {
+      place.branch = index;
+      place.offSideMm = side;
+      place.offLiftMm = lift;
+      place.offAxisMm = offAxis;
+      place.branchRadiusMm = outline;
+      place.alongBranchMm = along;
+    }
+  }
+  const healed = along < branch.endMm ? 1 : 1 - (along - branch.endMm) / (4 * radius);
+  if (healed <= 0) return;
+  // Grain parts round the branch as water round a pile, drawn out along the trunk, and is straight again where its reach ends.
+  const drawn = side * side + 0.16 * lift * lift;
+  const window = 1 - (offAxis * offAxis) / (reach * reach);
+  const push = (healed * window * window * 1.1 * radius * radius) / (drawn + 1.1 * radius * radius);
+  bent.x += branch.outY * side * push;
+  bent.y -= branch.outX * side * push;
+  // Each year's growth runs out along the branch a little way: next to it the wood is younger than its distance says.
+  const gap = Math.max(0, Math.sqrt(drawn) - 0.6 * radius);
+  const closeness = healed * window * Math.exp(-gap / (0.75 * radius));
+  bent.youngerMm += closeness * radius * 0.9;
+  place.strain = Math.max(place.strain, closeness);
 }

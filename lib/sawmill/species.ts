@@ -33,6 +33,7 @@ export interface Rays {
   /** Level of a noise of ±1 above which a ray is present: higher is sparser. */
   readonly threshold: number;
   readonly tone: Tone;
+  readonly borderTone: Tone;
 }
 
 export interface Branching {
@@ -74,6 +75,8 @@ export interface Species {
   /** Loss of radius per millimetre up the tree. */
   readonly taper: number;
   readonly wanderMm: number;
+  /** How far fibres of one year stray from its radius: frays arches. */
+  readonly frayMm: number;
   readonly waveMm: number;
   readonly pores: Pores | null;
   readonly rays: Rays | null;
@@ -83,7 +86,7 @@ export interface Species {
 const walnut: Species = {
   name: "black walnut",
   radiusMm: 225,
-  ringMm: 3.6,
+  ringMm: 4.2,
   ringSpread: 0.34,
   lateShare: 0.42,
   lateOnset: 0.25,
@@ -93,12 +96,13 @@ const walnut: Species = {
   sapDepthMm: 24,
   sapBlendMm: 4,
   sapContrast: 0.3,
-  pigment: 0.42,
-  pigmentTone: { r: 72, g: 50, b: 41 },
-  fibre: 0.1,
+  pigment: 0.6,
+  pigmentTone: { r: 80, g: 56, b: 44 },
+  fibre: 0.08,
   shimmer: 0.05,
-  taper: 0.013,
-  wanderMm: 5,
+  taper: 0.016,
+  wanderMm: 4,
+  frayMm: 0.45,
   waveMm: 1.7,
   pores: {
     pitchMm: 0.85,
@@ -113,9 +117,9 @@ const walnut: Species = {
   branching: {
     whorlMm: 900,
     mostPerWhorl: 2,
-    flare: [0.05, 0.1],
+    flare: [0.07, 0.13],
     deadShare: 0.3,
-    tone: { r: 96, g: 64, b: 46 },
+    tone: { r: 104, g: 73, b: 54 },
     rim: { r: 46, g: 31, b: 25 },
   },
 };
@@ -123,7 +127,7 @@ const walnut: Species = {
 const oak: Species = {
   name: "white oak",
   radiusMm: 260,
-  ringMm: 2.6,
+  ringMm: 3.2,
   ringSpread: 0.3,
   lateShare: 0.6,
   lateOnset: 0.6,
@@ -133,12 +137,13 @@ const oak: Species = {
   sapDepthMm: 20,
   sapBlendMm: 5,
   sapContrast: 0.8,
-  pigment: 0.25,
-  pigmentTone: { r: 158, g: 120, b: 82 },
+  pigment: 0.5,
+  pigmentTone: { r: 154, g: 116, b: 78 },
   fibre: 0.06,
   shimmer: 0.03,
-  taper: 0.012,
+  taper: 0.014,
   wanderMm: 4,
+  frayMm: 0.4,
   waveMm: 1.2,
   pores: {
     pitchMm: 0.5,
@@ -149,7 +154,14 @@ const oak: Species = {
     depth: 0.62,
     tone: { r: 104, g: 74, b: 48 },
   },
-  rays: { around: 1300, radialMm: 42, heightMm: 6.5, threshold: 0.24, tone: { r: 219, g: 192, b: 151 } },
+  rays: {
+    around: 1300,
+    radialMm: 42,
+    heightMm: 6.5,
+    threshold: 0.24,
+    tone: { r: 219, g: 192, b: 151 },
+    borderTone: { r: 138, g: 100, b: 66 },
+  },
   branching: {
     whorlMm: 1400,
     mostPerWhorl: 1,
@@ -163,22 +175,23 @@ const oak: Species = {
 const cherry: Species = {
   name: "black cherry",
   radiusMm: 210,
-  ringMm: 3.2,
+  ringMm: 3.8,
   ringSpread: 0.35,
   lateShare: 0.35,
   lateOnset: 0.2,
-  early: { r: 203, g: 155, b: 117 },
-  late: { r: 176, g: 121, b: 85 },
+  early: { r: 199, g: 152, b: 110 },
+  late: { r: 168, g: 117, b: 79 },
   sap: { r: 226, g: 198, b: 158 },
   sapDepthMm: 18,
   sapBlendMm: 4,
   sapContrast: 0.45,
-  pigment: 0.3,
-  pigmentTone: { r: 162, g: 106, b: 74 },
+  pigment: 0.55,
+  pigmentTone: { r: 158, g: 108, b: 78 },
   fibre: 0.04,
   shimmer: 0.06,
-  taper: 0.012,
-  wanderMm: 5,
+  taper: 0.015,
+  wanderMm: 4,
+  frayMm: 0.35,
   waveMm: 1.5,
   pores: {
     pitchMm: 0.6,
@@ -189,7 +202,14 @@ const cherry: Species = {
     depth: 0.4,
     tone: { r: 112, g: 66, b: 42 },
   },
-  rays: { around: 2200, radialMm: 4, heightMm: 2.2, threshold: 0.42, tone: { r: 206, g: 152, b: 112 } },
+  rays: {
+    around: 2200,
+    radialMm: 4,
+    heightMm: 2.2,
+    threshold: 0.42,
+    tone: { r: 206, g: 152, b: 112 },
+    borderTone: { r: 138, g: 100, b: 66 },
+  },
   branching: {
     whorlMm: 1000,
     mostPerWhorl: 1,
@@ -203,7 +223,7 @@ const cherry: Species = {
 const ash: Species = {
   name: "ash",
   radiusMm: 220,
-  ringMm: 3.4,
+  ringMm: 4,
   ringSpread: 0.33,
   lateShare: 0.6,
   lateOnset: 0.5,
@@ -213,12 +233,13 @@ const ash: Species = {
   sapDepthMm: 70,
   sapBlendMm: 22,
   sapContrast: 0.9,
-  pigment: 0.22,
+  pigment: 0.5,
   pigmentTone: { r: 186, g: 154, b: 114 },
   fibre: 0.045,
   shimmer: 0.035,
-  taper: 0.013,
-  wanderMm: 5,
+  taper: 0.016,
+  wanderMm: 4,
+  frayMm: 0.45,
   waveMm: 1.7,
   pores: {
     pitchMm: 0.42,
@@ -243,22 +264,23 @@ const ash: Species = {
 const pine: Species = {
   name: "pine",
   radiusMm: 190,
-  ringMm: 3.3,
+  ringMm: 3.6,
   ringSpread: 0.4,
   lateShare: 0.3,
   lateOnset: 0.35,
   early: { r: 234, g: 208, b: 160 },
-  late: { r: 202, g: 149, b: 92 },
+  late: { r: 205, g: 155, b: 100 },
   sap: { r: 237, g: 214, b: 170 },
   sapDepthMm: 55,
   sapBlendMm: 14,
   sapContrast: 0.95,
-  pigment: 0.1,
+  pigment: 0.22,
   pigmentTone: { r: 214, g: 168, b: 112 },
   fibre: 0.035,
   shimmer: 0.03,
-  taper: 0.011,
-  wanderMm: 4,
+  taper: 0.014,
+  wanderMm: 3.5,
+  frayMm: 0.24,
   waveMm: 1.1,
   pores: {
     pitchMm: 2.6,
@@ -271,11 +293,11 @@ const pine: Species = {
   },
   rays: null,
   branching: {
-    whorlMm: 420,
-    mostPerWhorl: 4,
-    flare: [0.06, 0.13],
+    whorlMm: 340,
+    mostPerWhorl: 5,
+    flare: [0.07, 0.15],
     deadShare: 0.4,
-    tone: { r: 156, g: 96, b: 54 },
+    tone: { r: 168, g: 112, b: 66 },
     rim: { r: 84, g: 48, b: 28 },
   },
 };

@@ -43,7 +43,7 @@ function trunkColor(log: Log, place: WoodPlace, color: MutableTone): void {
   const { fibreX, fibreY, z } = place;
   const streak = smoothNoise(fibreX / 2.2, fibreY / 2.2, z / 160, seed ^ 0x21);
   // Fibres of one year do not all stop at one radius: this frays the tips of arches, where a face grazes the rings.
-  const fray = 0.5 * streak + 0.3 * smoothNoise(fibreX / 0.9, fibreY / 0.9, z / 45, seed ^ 0x26);
+  const fray = species.frayMm * (streak + 0.6 * smoothNoise(fibreX / 1.6, fibreY / 1.6, z / 45, seed ^ 0x26));
   readRing(log.rings, place.growthMm + fray, ring);
 
   // Early to late: a rise that begins where latewood does, then a drop within 0.2 mm as the next spring starts.
@@ -61,14 +61,14 @@ function trunkColor(log: Log, place: WoodPlace, color: MutableTone): void {
   color.b = species.early.b;
   lean(color, species.late, Math.min(1.25, Math.max(0, lateness + 0.25 * streak)));
 
-  const cloud = smoothNoise(place.growthMm / 11, fibreX / 70, z / 900 + fibreY / 70, seed ^ 0x22);
+  const cloud = smoothNoise(place.growthMm / 13, fibreX / 70, z / 900 + fibreY / 70, seed ^ 0x22);
   const band = smoothNoise(place.growthMm / 4.5, fibreX / 160, z / 1500, seed ^ 0x23);
   const sap = ramp(
     -species.sapBlendMm / 2,
     species.sapBlendMm / 2,
     place.growthMm - (log.radiusMm - species.sapDepthMm) - species.taper * z * 0.6 - 5 * cloud,
   );
-  const pigment = species.pigment * Math.max(0, 0.3 + 1.5 * cloud + 0.9 * band) * (1 - sap);
+  const pigment = species.pigment * Math.max(0, 0.28 + 1.9 * cloud + 0.8 * band) * (1 - 0.7 * sap);
   lean(color, species.pigmentTone, Math.min(0.85, pigment));
   if (sap > 0) {
     const depth = species.sapContrast * lateness;
@@ -134,24 +134,38 @@ function rayColor(rays: Rays, seed: number, place: WoodPlace, color: MutableTone
     ) +
     0.25 * smoothNoise(place.growthMm / 3, place.z / 5, wrapped * 1.37, seed ^ 0x44);
   const presence = ramp(rays.threshold, rays.threshold + 0.12, level - 0.25 * across * across);
-  if (presence > 0) lean(color, rays.tone, presence * 0.75);
+  if (presence <= 0) return;
+  // The ribbon's core is bright; its borders, which are most of what a flat-sawn face shows of it, are dull.
+  if (across < 0.55) lean(color, rays.tone, presence * 0.68);
+  else lean(color, rays.borderTone, presence * 0.3);
 }
 
-/** A branch's own wood: its rings seen on end, darker to the rim, in bark where it had died. */
+/** A branch's own wood: its rings seen on end, darker to the rim, in bark and split where it had died. */
 function branchColor(log: Log, place: WoodPlace, color: MutableTone): void {
   const { branching } = log.species;
   const branch = log.branches[place.branch];
   const seed = log.seed + place.branch * 977;
-  const share = place.offAxisMm / place.branchRadiusMm;
-  const rough = smoothNoise(place.fibreX / 3, place.fibreY / 3, place.z / 3, seed ^ 0x51);
-  const rings = Math.sin((place.offAxisMm + 0.5 * rough) * 5.2);
+  const { offSideMm, offLiftMm, offAxisMm } = place;
+  const share = offAxisMm / place.branchRadiusMm;
+  const along = place.alongBranchMm / 60;
+  const rough = smoothNoise(offSideMm / 3.5, offLiftMm / 3.5, along, seed ^ 0x51);
+  const fine = roughNoise(offSideMm / 0.5, offLiftMm / 0.5, place.alongBranchMm / 3, seed ^ 0x52);
+  // Rings of about 1.1 mm, not quite round and not quite even.
+  const rings = smoothNoise((offAxisMm + 1.3 * rough) * 1.7, 0.5, along, seed ^ 0x53);
   color.r = branching.tone.r;
   color.g = branching.tone.g;
   color.b = branching.tone.b;
-  scale(color, 1.06 + 0.1 * rings + 0.1 * rough - 0.12 * share);
+  scale(color, 1.08 + 0.26 * rings + 0.16 * rough + 0.07 * fine - 0.14 * share);
   const dead = branch !== undefined && place.alongBranchMm > branch.deadFromMm;
-  const rim = ramp(dead ? 0.72 : 0.84, 1, share + 0.06 * rough);
-  lean(color, branching.rim, (dead ? 0.25 : 0) + rim * (dead ? 0.72 : 0.55));
-  // The soft middle that every branch starts from.
-  lean(color, branching.rim, 0.5 * (1 - ramp(0.4, 1.3, place.offAxisMm)));
+  const rim = ramp(dead ? 0.78 : 0.7, 1, share + 0.1 * rough);
+  lean(color, branching.rim, (dead ? 0.22 : 0) + rim * (dead ? 0.72 : 0.42));
+  if (dead) {
+    // One drying check through the middle, wandering a little.
+    const turn = hashAt(place.branch, 1, 1, seed) / 683565276;
+    const off = offSideMm * Math.cos(turn) + offLiftMm * Math.sin(turn) + 0.12 * place.branchRadiusMm * rough;
+    const open = 1 - ramp(0.12, 0.45 + 0.03 * place.branchRadiusMm, Math.abs(off));
+    lean(color, branching.rim, 0.85 * open * (1 - ramp(0.55, 0.9, share)));
+  } else {
+    lean(color, branching.rim, 0.4 * (1 - ramp(0.3, 1.1, offAxisMm)));
+  }
 }
