@@ -5,9 +5,10 @@
 import "server-only";
 import { randomUUID } from "node:crypto";
 import { createReadStream } from "node:fs";
-import { mkdir, open, readFile, rename, rm, stat } from "node:fs/promises";
+import { mkdir, open, readFile, rename, rm, stat, writeFile } from "node:fs/promises";
 import path from "node:path";
 import type { Readable } from "node:stream";
+import { env } from "./env";
 
 export interface StoredStream {
   readonly stream: ReadableStream<Uint8Array>;
@@ -65,6 +66,14 @@ export function createFolderStorage(root: string): Storage {
   };
 }
 
+let own: Storage | undefined;
+
+/** The storage of this process, as the environment sets it. */
+export function storage(): Storage {
+  own ??= createFolderStorage(env().UPLOADS_DIR);
+  return own;
+}
+
 /** Throws on a key that was not made by this program: keys never come from outside as they are. */
 function partsOf(key: string): string[] {
   const parts = key.split("/");
@@ -76,7 +85,7 @@ function partsOf(key: string): string[] {
 async function writeThrough(file: string, content: Uint8Array | ReadableStream<Uint8Array>): Promise<void> {
   const handle = await open(file, "wx", 0o600);
   try {
-    await handle.writeFile(content instanceof Uint8Array ? content : chunksOf(content));
+    await writeFile(handle, content instanceof Uint8Array ? content : chunksOf(content));
     await handle.sync();
   } finally {
     await handle.close();
