@@ -1,0 +1,27 @@
+import type { Metadata } from "next";
+import { Saws } from "@/components/shop/saws";
+import { ShopForm } from "@/components/shop/shop-form";
+import { PageTitle } from "@/components/ui/page-title";
+import { pageAccess } from "@/lib/server/access";
+import { shopSettings } from "@/lib/server/shops";
+
+export const metadata: Metadata = { title: "Shop" };
+
+export default async function ShopPage() {
+  const access = await pageAccess("/shop");
+  const shop = await shopSettings(access.shopId);
+  return (
+    <>
+      <PageTitle title="Shop" />
+      <div className="flex flex-col gap-10 p-4 md:p-5">
+        <Saws initial={shop} mayEdit={access.role !== "assistant"} />
+        <section aria-labelledby="settings">
+          <h2 id="settings" className="mb-3 text-xl">
+            Settings
+          </h2>
+          <ShopForm shop={shop} mayEdit={access.role === "owner"} />
+        </section>
+      </div>
+    </>
+  );
+}

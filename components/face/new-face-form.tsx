@@ -1,0 +1,123 @@
+"use client";
+import { useMutation } from "@tanstack/react-query";
+import { useRouter } from "next/navigation";
+import { type FormEvent, useState } from "react";
+import { useUnits } from "@/components/shell/units";
+import { Button } from "@/components/ui/button";
+import { SelectField, TextField } from "@/components/ui/field";
+import { Notice } from "@/components/ui/notice";
+import { messageOf } from "@/lib/client/fault-from-server";
+import { createFace } from "@/lib/client/job";
+import type { GridFace } from "@/lib/layout";
+import type { Job } from "@/lib/schemas/job";
+import type { Saw } from "@/lib/schemas/shop";
+import { type AxisDraft, axisSizes, startingDraft } from "./axis-draft";
+import { AxisForm } from "./axis-form";
+import { FaceDrawing } from "./face-drawing";
+import { lossOfSaw } from "./loss-of-saw";
+
+/** Describes a face of fronts: sizes across and down, which way the grain runs, and the saws that part them. */
+export function NewFaceForm({ job, saws }: { job: Job; saws: readonly Saw[] }) {
+  const router = useRouter();
+  const { units } = useUnits();
+  const [title, setTitle] = useState("");
+  const [grain, setGrain] = useState<GridFace["grain"]>("horizontal");
+  const [columns, setColumns] = useState<AxisDraft>(() => startingDraft("columns", units));
+  const [rows, setRows] = useState<AxisDraft>(() => startingDraft("rows", units));
+  const [crosscutSawId, setCrosscutSawId] = useState(saws[0]?.id ?? "");
+  const [ripSawId, setRipSawId] = useState(saws[0]?.id ?? "");
+  const create = useMutation({
+    mutationFn: (body: Parameters<typeof createFace>[1]) => createFace(job.id, body),
+    onSuccess: (face) => router.push(`/jobs/${job.id}/faces/${face.id}`),
+  });
+
+  const face = faceOf(columns, rows, grain);
+  const submit = (event: FormEvent) => {
+    event.preventDefault();
+    if (!face) return;
+    create.mutate({
+      title,
+      face: {
+        ...face,
+        columns: [...face.columns],
+        rows: [...face.rows],
+        columnGaps: [...face.columnGaps],
+        rowGaps: [...face.rowGaps],
+      },
+      crosscut: lossOfSaw(saws.find(({ id }) => id === crosscutSawId)),
+      rip: lossOfSaw(saws.find(({ id }) => id === ripSawId)),
+      crosscutSawId: crosscutSawId || null,
+      ripSawId: ripSawId || null,
+      spacing: "followGap",
+    });
+  };
+
+  return (
+    <form onSubmit={submit} className="grid gap-5 p-4 md:p-5 lg:grid-cols-[minmax(0,30rem)_1fr]">
+      <div className="flex flex-col gap-4">
+        <TextField
+          label="Title"
+          required
+          maxLength={120}
+          hint="Such as Top row, four fronts"
+          value={title}
+          onChange={(event) => setTitle(event.target.value)}
+        />
+        <AxisForm axis="columns" draft={columns} onChange={setColumns} />
+        <AxisForm axis="rows" draft={rows} onChange={setRows} />
+        <SelectField
+          label="Grain runs"
+          value={grain}
+          onChange={(event) => setGrain(event.target.value === "vertical" ? "vertical" : "horizontal")}
+        >
+          <option value="horizontal">Across the face</option>
+          <option value="vertical">Up and down</option>
+        </SelectField>
+        <SawSelect label="Crosscuts made with" saws={saws} value={crosscutSawId} onChange={setCrosscutSawId} />
+        <SawSelect label="Rips made with" saws={saws} value={ripSawId} onChange={setRipSawId} />
+        {create.isError && <Notice kind="stop">{messageOf(create.error)}</Notice>}
+        <Button type="submit" kind="primary" disabled={!face || title.trim() === "" || create.isPending || create.isSuccess}>
+          Add face
+        </Button>
+      </div>
+      <div className="lg:sticky lg:top-5 lg:self-start">
+        <h2 className="mb-2 text-lg">As it will stand</h2>
+        {face ? (
+          <FaceDrawing face={face} className="max-h-[60dvh] w-full" />
+        ) : (
+          <p className="text-pencil">Nothing to draw until the sizes fit.</p>
+        )}
+      </div>
+    </form>
+  );
+}
+
+function SawSelect({
+  label,
+  saws,
+  value,
+  onChange,
+}: {
+  label: string;
+  saws: readonly Saw[];
+  value: string;
+  onChange: (sawId: string) => void;
+}) {
+  const { print } = useUnits();
+  return (
+    <SelectField label={label} value={value} onChange={(event) => onChange(event.target.value)} required>
+      {saws.map((saw) => (
+        <option key={saw.id} value={saw.id}>
+          {saw.name}, kerf {print(saw.kerf)}
+        </option>
+      ))}
+    </SelectField>
+  );
+}
+
+function faceOf(columns: AxisDraft, rows: AxisDraft, grain: GridFace["grain"]): GridFace | null {
+  const across = axisSizes(columns);
+  const down = axisSizes(rows);
+  if (!across.ok || !down.ok) return null;
+  return { columns: across.sizes, rows: down.sizes, columnGaps: across.gaps, rowGaps: down.gaps, grain };
+}
