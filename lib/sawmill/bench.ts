@@ -15,10 +15,10 @@ export interface Bench {
   readonly seed: number;
 }
 
-export interface Strokes {
+export interface Scratch {
   readonly fromMm: readonly [number, number];
   readonly toMm: readonly [number, number];
-  /** Added to the brightness where the stroke lies. */
+  /** Change of brightness along it, as a share. */
   readonly change: number;
 }
 
@@ -60,7 +60,7 @@ export function benchScratches(
   top: number,
   right: number,
   bottom: number,
-): readonly Strokes[] {
+): readonly Scratch[] {
   return Array.from({ length: count }, () => {
     const x = between(random, left, right);
     const y = between(random, top, bottom);

@@ -33,9 +33,10 @@ const BUTT_ROOM_MM = 100;
 // The rim of a log is bark and wane; boards are taken inside this share of its radius.
 const SOUND_SHARE = 0.97;
 
-/** Saws a board: the seed settles the tree and the place of the board in it. */
+/** Saws a board: the seed settles the tree and the place of the board in it. Throws on a size that is no board. */
 export function sawBoard(options: BoardOptions): SawnBoard {
   const { cut, lengthMm, widthMm, seed } = options;
+  if (!(lengthMm > 0 && widthMm > 0)) throw new RangeError(`no board is ${lengthMm} mm long and ${widthMm} mm wide`);
   const random = randomFor(seed, "saw");
   const azimuth = random() * 2 * Math.PI;
   const outward: Vector = { x: Math.cos(azimuth), y: Math.sin(azimuth), z: 0 };

@@ -6,6 +6,7 @@ import { type Flitch, type LeafSide, type LeafSlip, leafPlane } from "./flitch";
 import { type KnotTruth, knotsOnFace } from "./knots-on-face";
 import { type Photograph, type PhotoOptions, type PhotoTruth, photographSubject } from "./photograph";
 import { planeFace } from "./plane";
+import type { Card } from "./subject";
 
 export interface WoodTruth extends PhotoTruth {
   readonly knots: readonly KnotTruth[];
@@ -16,6 +17,8 @@ export interface WoodPhotograph extends Photograph {
 }
 
 export interface BoardPhotoOptions extends BoardOptions, PhotoOptions {
+  /** A card of known size lying on the board. */
+  readonly card?: Card;
   /** 26 mm unless given. */
   readonly thicknessMm?: number;
 }
@@ -27,6 +30,7 @@ export function photographBoard(options: BoardPhotoOptions): WoodPhotograph {
     {
       ...size(board),
       thicknessMm: options.thicknessMm ?? 26,
+      card: options.card,
       render: (pxPerMm) => planeFace(board.log, board.plane, board, pxPerMm),
     },
     options,

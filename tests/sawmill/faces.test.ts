@@ -19,6 +19,16 @@ describe("board faces", () => {
     expect(Buffer.compare(one.rgb, other.rgb)).not.toBe(0);
   });
 
+  it("are refused when they would have no size", () => {
+    for (const [lengthMm, widthMm] of [
+      [0, 100],
+      [100, -1],
+      [Number.NaN, 100],
+    ] as const) {
+      expect(() => sawBoard({ species: "oak", cut: "flat", seed: 1, lengthMm, widthMm })).toThrow(RangeError);
+    }
+  });
+
   it("run along the log with unit vectors at right angles, inside the log", () => {
     for (const cut of ["flat", "rift", "quarter"] as const) {
       for (let seed = 0; seed < 20; seed++) {

@@ -89,7 +89,7 @@ describe("a photograph of a board", () => {
 
   it("gives the flat face back when it is straightened by its truth", () => {
     for (const k1 of [0, 0.03]) {
-      const photo = photographBoard({ ...BOARD, photo: { widthPx: 1200, heightPx: 900 }, lens: { k1 }, noise: 0, unevenness: 0 });
+      const photo = photographBoard({ ...BOARD, photo: { widthPx: 1000, heightPx: 750 }, lens: { k1 }, noise: 0, unevenness: 0 });
       const face = boardFace({ ...BOARD, pxPerMm: 1 });
       const light = luminance(photo);
       const straightened = Float64Array.from({ length: face.width * face.height }, (_, i) => {
@@ -123,6 +123,25 @@ describe("a photograph of a board", () => {
     }
     expect(Math.abs(sum / count)).toBeLessThan(0.1);
     expect(Math.sqrt(squares / count)).toBeCloseTo(3, 0);
+  });
+
+  it("shows a card of known size where the truth says it lies", () => {
+    const card = { xMm: 250, yMm: 50, lengthMm: 85.6, widthMm: 54 };
+    const photo = photographBoard({ ...BOARD, photo: PHOTO, card, lens: { k1: 0.03 }, noise: 0, unevenness: 0 });
+    const corners = photo.truth.cardCornersPx ?? expect.unreachable("no card in the truth");
+    const light = luminance(photo);
+    const middle = [0, 1].map((axis) => corners.reduce((sum, corner) => sum + (corner[axis] ?? 0), 0) / 4);
+    for (const [x, y] of corners) {
+      // From the card's middle to a corner: white nine tenths of the way, wood at twelve tenths.
+      const at = (share: number) => {
+        const px = (middle[0] ?? 0) + share * (x - (middle[0] ?? 0));
+        const py = (middle[1] ?? 0) + share * (y - (middle[1] ?? 0));
+        return light[Math.floor(py) * photo.width + Math.floor(px)] ?? 0;
+      };
+      expect(at(0.9)).toBeGreaterThan(225);
+      expect(at(1.2)).toBeLessThan(180);
+    }
+    expect(photographBoard({ ...BOARD, photo: { widthPx: 80, heightPx: 60 } }).truth.cardCornersPx).toBeNull();
   });
 
   it("has a homography that its inverse undoes", () => {
