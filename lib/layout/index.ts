@@ -58,6 +58,9 @@ export { measureMm, type PhotoGeometry, photoFromStockMm, stockMmFromPhoto, warp
 export { type LevelSize, pyramidLevels } from "./picture/pyramid";
 export { type Pixels, type WarpMap, warpInBands } from "./picture/warp";
 export type { Piece, PieceId, StockId } from "./piece";
+export { type ConservationLine, conservationLine, type WoodSum } from "./program/conservation-line";
+export { type BoardEdges, boardEdges, type CutRequest, defaultCutBudget, type PlacedPiece } from "./program/cut-request";
+export { cutRefusal, planCuts } from "./program/plan-cuts";
 export type {
   Caution,
   CleanUp,
@@ -70,8 +73,13 @@ export type {
   EdgeState,
   Part,
   PartKind,
+  SearchReport,
   ShopLimits,
+  StepKind,
 } from "./program/program";
+export { type ReplayFault, type ReplayOutcome, replay } from "./program/replay";
+export { cutRequestFor, piecesOnBoard } from "./program/request-for-board";
+export { type Verdict, verifyProgram } from "./program/verify-program";
 export { type Drift, drifts } from "./seam/drift";
 export type { Seam, UmRange } from "./seam/seam";
 export { seams } from "./seam/seams";

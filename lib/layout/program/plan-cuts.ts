@@ -50,10 +50,14 @@ function kerfByAxis(request: CutRequest): KerfByAxis {
   return { x: request.kerf.crosscut, y: request.kerf.rip };
 }
 
-/** Shares of the budget and how wide each stage looks: a quick one that always helps, then one that is complete on small layouts. */
+/**
+ * Shares of the budget and how wide each stage looks: a quick one that always helps; one that is complete on small layouts; and
+ * that one again with more room, measured by the tree it found.
+ */
 const stages: readonly (Pick<SearchLimits, "scope" | "room"> & { readonly share: number })[] = [
-  { scope: "peel", room: 3, share: 0.4 },
-  { scope: "all", room: 24, share: 0.6 },
+  { scope: "peel", room: 3, share: 0.3 },
+  { scope: "all", room: 24, share: 0.3 },
+  { scope: "all", room: 120, share: 0.4 },
 ];
 
 function bestTree(ways: readonly TruingWay[], kerf: KerfByAxis, request: CutRequest): { tree: ChosenTree; search: SearchReport } {
@@ -82,10 +86,13 @@ function searchWay(way: TruingWay, kerf: KerfByAxis, request: CutRequest, budget
     const stage = { scope, room, mostSettings: plan.settings.length, budget: Math.floor(budget * share) };
     const outcome = searchPlans(way.board, kerf, request.limits, stage);
     steps += outcome.steps;
+    // What one complete stage cannot finish, the next cannot either.
+    if (!outcome.found && scope === "all") break;
     if (!outcome.found) continue;
     // Plans were left out for their settings, which is sound only among plans as safe as the one they were measured by.
     proven = scope === "all" && outcome.whole && isAsSafe(outcome.found, plan);
     if (comparePlans(outcome.found, plan) < 0) plan = outcome.found;
+    if (proven) break;
   }
   return { plan, steps, proven };
 }

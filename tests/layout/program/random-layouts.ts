@@ -20,7 +20,7 @@ export const anyBoardEdges: fc.Arbitrary<BoardEdges> = fc.record({ left: state, 
 /** Every choice is drawn from one list of numbers, so that a failing layout shrinks to one with few cuts. */
 export const sawableRequest: fc.Arbitrary<CutRequest> = fc
   .record({
-    choices: fc.array(fc.nat(9_999), { maxLength: 90 }),
+    choices: fc.array(fc.nat(9_999), { maxLength: 160, size: "max" }),
     length: fc.integer({ min: 300_000, max: 2_500_000 }),
     width: fc.integer({ min: 100_000, max: 600_000 }),
     rip: fc.constantFrom(0, 2_381, 3_200),
@@ -42,7 +42,7 @@ export const sawableRequest: fc.Arbitrary<CutRequest> = fc
       boardEdges,
       truingTakes: { longEdge: um(takes), end: um(takes) },
       limits,
-      budget: 20_000,
+      budget: 4_000,
     };
   })
   .filter((request) => request.pieces.length > 0);
@@ -54,7 +54,7 @@ function pieceUp(choices: readonly number[], board: Rect, kerf: { rip: number; c
   const fill = (rect: Rect, depth: number): void => {
     const crosscut = choose(2) === 1;
     const size = crosscut ? rect.width : rect.height;
-    if (depth < 5 && size > 2 * smallest && choose(5) > 0) {
+    if (depth < 7 && size > 2 * smallest && choose(7) > 0) {
       const blade = crosscut ? kerf.crosscut : kerf.rip;
       const at = smallest + Math.floor(((size - 2 * smallest - blade) * choose(8)) / 8);
       if (at < smallest) return;
