@@ -1,0 +1,113 @@
+/**
+ * What pointers mean on the table, as a state machine without a screen: pressing marks, moving changes only the preview, letting go commits one step, Escape
+ * drops it. A press beside all pieces moves the view.
+ */
+import type { PieceId } from "@/lib/layout";
+import type { Pan, TablePoint } from "../view/geometry";
+import type { Side } from "../view/zoom";
+
+/** One pointer as the view reports it: pixels on its side, and the point of the table frame (stock side) below it. */
+export interface PointerAt {
+  readonly pointerId: number;
+  readonly side: Side;
+  readonly px: Pan;
+  readonly point: TablePoint;
+  /** Shift: add to the selection when pressing, keep to a straight line when dragging. */
+  readonly shift: boolean;
+  /** Alt: do not snap. */
+  readonly alt: boolean;
+}
+
+export type PointerInput =
+  | { readonly kind: "press"; readonly pointer: PointerAt; readonly piece: PieceId | null }
+  | { readonly kind: "move" | "release"; readonly pointer: PointerAt }
+  | { readonly kind: "cancel" };
+
+export type ToolState =
+  | { readonly kind: "idle" }
+  | { readonly kind: "pressed"; readonly from: PointerAt; readonly piece: PieceId | null }
+  | { readonly kind: "dragging"; readonly from: PointerAt }
+  | { readonly kind: "panning"; readonly from: PointerAt; readonly last: Pan };
+
+export type ToolEffect =
+  | { readonly do: "select"; readonly piece: PieceId; readonly add: boolean }
+  | { readonly do: "select-nothing" }
+  /** Drag the selected pieces from one point to the other. */
+  | {
+      readonly do: "preview";
+      readonly from: TablePoint;
+      readonly at: TablePoint;
+      readonly straight: boolean;
+      readonly snap: boolean;
+    }
+  | { readonly do: "commit-preview" | "drop-preview" }
+  | { readonly do: "pan"; readonly side: Side; readonly by: Pan };
+
+export interface ToolStep {
+  readonly state: ToolState;
+  readonly effects: readonly ToolEffect[];
+}
+
+export const idleTool: ToolState = { kind: "idle" };
+
+/** A hand trembles by a few pixels: below this a press is a tap. */
+export const DRAG_STARTS_PX = 4;
+
+export function toolStep(state: ToolState, input: PointerInput, isSelected: (piece: PieceId) => boolean): ToolStep {
+  if (input.kind === "cancel") return cancelled(state);
+  if (input.kind === "press") return state.kind === "idle" ? pressed(input.pointer, input.piece, isSelected) : only(state);
+  // A second finger is no part of this gesture.
+  if (state.kind === "idle" || state.from.pointerId !== input.pointer.pointerId) return only(state);
+  return input.kind === "move" ? moved(state, input.pointer) : released(state, input.pointer);
+}
+
+function pressed(from: PointerAt, piece: PieceId | null, isSelected: (piece: PieceId) => boolean): ToolStep {
+  const state: ToolState = { kind: "pressed", from, piece };
+  if (piece === null || (isSelected(piece) && !from.shift)) return only(state);
+  return { state, effects: [{ do: "select", piece, add: from.shift }] };
+}
+
+function moved(state: Exclude<ToolState, { kind: "idle" }>, at: PointerAt): ToolStep {
+  switch (state.kind) {
+    case "pressed": {
+      if (Math.hypot(at.px.x - state.from.px.x, at.px.y - state.from.px.y) < DRAG_STARTS_PX) return only(state);
+      const drags = state.piece !== null && state.from.side === "stock";
+      return moved(
+        drags ? { kind: "dragging", from: state.from } : { kind: "panning", from: state.from, last: state.from.px },
+        at,
+      );
+    }
+    case "dragging":
+      return {
+        state,
+        effects: [{ do: "preview", from: state.from.point, at: at.point, straight: at.shift, snap: !at.alt }],
+      };
+    case "panning": {
+      const by = { x: at.px.x - state.last.x, y: at.px.y - state.last.y };
+      return { state: { ...state, last: at.px }, effects: [{ do: "pan", side: state.from.side, by }] };
+    }
+  }
+}
+
+function released(state: Exclude<ToolState, { kind: "idle" }>, at: PointerAt): ToolStep {
+  switch (state.kind) {
+    case "pressed": {
+      const effects: ToolEffect[] = [];
+      if (state.piece === null) effects.push({ do: "select-nothing" });
+      else if (!state.from.shift) effects.push({ do: "select", piece: state.piece, add: false });
+      return { state: idleTool, effects };
+    }
+    case "dragging":
+      return { state: idleTool, effects: [...moved(state, at).effects, { do: "commit-preview" }] };
+    case "panning":
+      return { state: idleTool, effects: moved(state, at).effects };
+  }
+}
+
+function cancelled(state: ToolState): ToolStep {
+  return { state: idleTool, effects: state.kind === "dragging" ? [{ do: "drop-preview" }] : [] };
+}
+
+function only(state: ToolState): ToolStep {
+  return { state, effects: [] };
+}

@@ -1,0 +1,146 @@
+/**
+ * Where things lie on the two sides of the table. Pure. Show side and stock side share one scale where that fits, so that a front is as wide above as it is
+ * below. Lengths in µm, scales in CSS pixels per mm, pixels from the top left of each side.
+ *
+ * Table frame (stock side): x along every board from its left end, y down over the stacked boards, µm. Rulers and spaces between boards keep their size in pixels at
+ * every zoom, so their share of the table frame changes with it.
+ */
+import { type BoardFace, type FaceLayout, faceSize, type StockId, type Um, um } from "@/lib/layout";
+
+export interface Size {
+  readonly width: number;
+  readonly height: number;
+}
+
+export interface Pan {
+  readonly x: number;
+  readonly y: number;
+}
+
+export interface View {
+  /** 1: everything fits. */
+  readonly zoom: number;
+  /** Pixels that each side has been moved by. */
+  readonly show: Pan;
+  readonly stock: Pan;
+}
+
+export const wholeView: View = { zoom: 1, show: { x: 0, y: 0 }, stock: { x: 0, y: 0 } };
+export const LEAST_ZOOM = 1;
+export const GREATEST_ZOOM = 24;
+
+/** Left and right of boards and face. */
+export const MARGIN_PX = 20;
+/** The ruler above each board. */
+export const TAPE_PX = 26;
+/** Between a board and the ruler of the next, for the board's name. */
+export const BOARD_SPACE_PX = 30;
+/** Around the face for the jumps of its outer seams. */
+export const CHIP_ROOM_PX = 44;
+/** The face is drawn at the scale of the boards when it then takes up at least this share of the width; else as large as it fits. */
+const SHARE_FOR_ONE_SCALE = 0.4;
+/** A photograph enlarged beyond this shows nothing more, px per mm on the screen. */
+const LARGEST_FIT_PX_PER_MM = 4;
+
+export interface BoardPlace {
+  readonly stockId: StockId;
+  /** y of the board's edge in the table frame. */
+  readonly top: Um;
+}
+
+export interface TableGeometry {
+  readonly stockPxPerMm: number;
+  readonly showPxPerMm: number;
+  /** Both sides are drawn at one scale. */
+  readonly oneScale: boolean;
+  readonly boards: readonly BoardPlace[];
+  /** Height of all boards with rulers, px. */
+  readonly stockHeightPx: number;
+  /** Where the top left corner of the face, and of the table frame, lie on their sides, px. */
+  readonly showOrigin: Pan;
+  readonly stockOrigin: Pan;
+}
+
+export interface TableContent {
+  readonly boards: readonly BoardFace[];
+  readonly face: FaceLayout["face"];
+}
+
+export function tableGeometry({ boards, face }: TableContent, sides: { show: Size; stock: Size }, view: View): TableGeometry {
+  const { width, height } = faceSize(face);
+  const faceFit = Math.min(
+    usable(sides.show.width, 2 * MARGIN_PX + CHIP_ROOM_PX) / mm(width),
+    usable(sides.show.height, CHIP_ROOM_PX + 2 * MARGIN_PX) / mm(height),
+  );
+  const longest = Math.max(0, ...boards.map((board) => board.length));
+  const totalWidth = boards.reduce((sum, board) => sum + board.width, 0);
+  const fixed = boards.length * (TAPE_PX + BOARD_SPACE_PX);
+  const boardFit = Math.min(
+    longest > 0 ? usable(sides.stock.width, 2 * MARGIN_PX) / mm(longest) : faceFit,
+    totalWidth > 0 ? usable(sides.stock.height, fixed + MARGIN_PX) / mm(totalWidth) : faceFit,
+    LARGEST_FIT_PX_PER_MM,
+  );
+  const oneScale = boardFit <= faceFit && boardFit * mm(width) >= SHARE_FOR_ONE_SCALE * sides.show.width;
+  const stockPxPerMm = boardFit * view.zoom;
+  const showPxPerMm = (oneScale ? boardFit : Math.min(faceFit, LARGEST_FIT_PX_PER_MM)) * view.zoom;
+  const faceWidthPx = mm(width) * showPxPerMm;
+  const faceHeightPx = mm(height) * showPxPerMm;
+  const stacked = stackBoards(boards, stockPxPerMm);
+  return {
+    stockPxPerMm,
+    showPxPerMm,
+    oneScale,
+    ...stacked,
+    showOrigin: {
+      x: (oneScale ? MARGIN_PX : Math.max(MARGIN_PX, (sides.show.width - faceWidthPx) / 2)) + view.show.x,
+      y: Math.max(MARGIN_PX, (sides.show.height - CHIP_ROOM_PX - faceHeightPx) / 2) + view.show.y,
+    },
+    stockOrigin: {
+      x: MARGIN_PX + view.stock.x,
+      y: Math.max(0, (sides.stock.height - stacked.stockHeightPx) / 3) + view.stock.y,
+    },
+  };
+}
+
+function stackBoards(boards: readonly BoardFace[], pxPerMm: number): Pick<TableGeometry, "boards" | "stockHeightPx"> {
+  let px = 0;
+  const places = boards.map((board) => {
+    px += BOARD_SPACE_PX + TAPE_PX;
+    const place = { stockId: board.id, top: um(Math.round((px / pxPerMm) * 1000)) };
+    px += mm(board.width) * pxPerMm;
+    return place;
+  });
+  return { boards: places, stockHeightPx: px + MARGIN_PX };
+}
+
+/** A point of the table frame, not rounded: positions of a pointer. */
+export interface TablePoint {
+  readonly x: number;
+  readonly y: number;
+}
+
+/** The point of the table frame under a pixel of the stock side. */
+export function tablePointAt(geometry: TableGeometry, px: Pan): TablePoint {
+  const umPerPx = 1000 / geometry.stockPxPerMm;
+  return { x: (px.x - geometry.stockOrigin.x) * umPerPx, y: (px.y - geometry.stockOrigin.y) * umPerPx };
+}
+
+/** The board whose wood, or the nearest wood, lies at this height; null on an empty table. */
+export function boardNear(places: readonly BoardPlace[], boards: readonly BoardFace[], y: number): BoardPlace | null {
+  const distance = ({ stockId, top }: BoardPlace) => {
+    const width = boards.find(({ id }) => id === stockId)?.width ?? 0;
+    return Math.max(top - y, y - (top + width), 0);
+  };
+  return places.reduce<BoardPlace | null>(
+    (best, place) => (best === null || distance(place) < distance(best) ? place : best),
+    null,
+  );
+}
+
+function mm(value: Um | number): number {
+  return value / 1000;
+}
+
+function usable(px: number, taken: number): number {
+  return Math.max(40, px - taken);
+}
