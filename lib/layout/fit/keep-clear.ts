@@ -8,9 +8,11 @@ import { otherAxis, type Span, type Spans, type StockAxis } from "./span";
 /** Moves along one axis that bring the piece into the area, as open intervals. */
 export function movesIntoArea(piece: Spans, area: KeepClearShape, axis: StockAxis): Span[] {
   const band = piece[otherAxis(axis)];
-  const shadows =
-    area.shape === "ellipse" ? [ellipseShadow(area, axis, band) ?? []].flat() : polygonShadow(area.points, axis, band);
-  return unionOf(shadows.map((shadow) => movesInto(piece[axis], shadow)));
+  if (area.shape === "polygon") {
+    return unionOf(polygonShadow(area.points, axis, band).map((shadow) => movesInto(piece[axis], shadow)));
+  }
+  const shadow = ellipseShadow(area, axis, band);
+  return shadow === null ? [] : [movesInto(piece[axis], shadow)];
 }
 
 /**
@@ -18,6 +20,7 @@ export function movesIntoArea(piece: Spans, area: KeepClearShape, axis: StockAxi
  * For an edge that cuts into a round knot this is the height of what it cuts off.
  */
 export function reachInto(piece: Spans, area: KeepClearShape): number {
+  if (isFarFrom(piece, area)) return 0;
   const along = distanceOut(movesIntoArea(piece, area, "along"));
   return along === 0 ? 0 : Math.min(along, distanceOut(movesIntoArea(piece, area, "across")));
 }
@@ -27,6 +30,21 @@ export function middleAlong(area: KeepClearShape): number {
   if (area.shape === "ellipse") return area.centre.x;
   const xs = area.points.map((point) => point.x);
   return (Math.min(...xs) + Math.max(...xs)) / 2;
+}
+
+/** Most areas are nowhere near most pieces, and this runs for every pair of them while dragging. */
+function isFarFrom({ along, across }: Spans, area: KeepClearShape): boolean {
+  if (area.shape === "ellipse") {
+    const reach = Math.max(area.radiusX, area.radiusY);
+    const { x, y } = area.centre;
+    return x + reach <= along.from || x - reach >= along.to || y + reach <= across.from || y - reach >= across.to;
+  }
+  return (
+    area.points.every(({ x }) => x <= along.from) ||
+    area.points.every(({ x }) => x >= along.to) ||
+    area.points.every(({ y }) => y <= across.from) ||
+    area.points.every(({ y }) => y >= across.to)
+  );
 }
 
 function distanceOut(union: readonly Span[]): number {

@@ -29,8 +29,8 @@ export function usableOutline(board: Pick<BoardFace, "length" | "width" | "outli
  */
 export function outsideBy(piece: Spans, outline: readonly StockPoint[]): number {
   const overCorners = cornersOf(piece).map((corner) => (isInside(corner, outline) ? 0 : distanceTo(corner, outline)));
-  const cutInto = edgesOf(outline).map((edge) => depthInside(piece, edge));
-  return Math.max(0, ...overCorners, ...cutInto);
+  const cutInto = edgesOf(outline).reduce((deepest, edge) => Math.max(deepest, depthInside(piece, edge)), 0);
+  return Math.max(cutInto, ...overCorners);
 }
 
 /** Moves along one axis after which the piece is not inside the outline, as open intervals, infinite at both ends. */
@@ -74,10 +74,11 @@ function middleOf({ along, across }: Spans, axis: StockAxis, move: number): Plac
 /** Even-odd rule; either answer may come for a point on the outline, whose distance to it is 0 anyway. */
 function isInside({ x, y }: Place, outline: readonly StockPoint[]): boolean {
   let inside = false;
-  for (const { start, end } of edgesOf(outline)) {
-    if (start.y > y === end.y > y) continue;
+  outline.forEach((start, index) => {
+    const end = outline[(index + 1) % outline.length] ?? start;
+    if (start.y > y === end.y > y) return;
     if (x < start.x + ((end.x - start.x) * (y - start.y)) / (end.y - start.y)) inside = !inside;
-  }
+  });
   return inside;
 }
 
@@ -98,6 +99,9 @@ function distanceToEdge({ x, y }: Place, { start, end }: Edge): number {
  * in t along the edge; the least of linear functions is largest at an end or where two of them meet.
  */
 function depthInside({ along, across }: Spans, { start, end }: Edge): number {
+  // Most edges lie wholly beyond one side.
+  if (Math.max(start.x, end.x) <= along.from || Math.min(start.x, end.x) >= along.to) return 0;
+  if (Math.max(start.y, end.y) <= across.from || Math.min(start.y, end.y) >= across.to) return 0;
   const dx = end.x - start.x;
   const dy = end.y - start.y;
   const sides = [
@@ -106,8 +110,6 @@ function depthInside({ along, across }: Spans, { start, end }: Edge): number {
     { at: start.y - across.from, slope: dy },
     { at: across.to - start.y, slope: -dy },
   ];
-  // Most edges lie wholly beyond one side.
-  if (sides.some(({ at, slope }) => at <= 0 && at + slope <= 0)) return 0;
   const meetings = sides.flatMap((p, index) => sides.slice(index + 1).map((q) => (q.at - p.at) / (p.slope - q.slope)));
   const depths = [0, 1, ...meetings.filter((t) => t > 0 && t < 1)].map((t) =>
     Math.min(...sides.map(({ at, slope }) => at + slope * t)),

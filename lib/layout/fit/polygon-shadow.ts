@@ -8,54 +8,45 @@
 import type { StockPoint } from "../frame/point";
 import { coordinateOf, otherAxis, type Span, type StockAxis } from "./span";
 
-/** An edge in the coordinates of the shadow: u along the axis asked for, v along the other. */
-interface Edge {
-  readonly u0: number;
-  readonly v0: number;
-  readonly u1: number;
-  readonly v1: number;
-}
-
 /** Stretches along `axis`, in no order and possibly overlapping; a crack drawn as a line throws one of no width. */
 export function polygonShadow(points: readonly StockPoint[], axis: StockAxis, band: Span): Span[] {
   if (points.length < 2 || !(band.from < band.to)) return [];
-  const edges = edgesOf(points, axis);
-  return [...edges.flatMap((edge) => edgeShadow(edge, band) ?? []), ...stretchesAt(edges, band.from)];
+  return [...outlineShadow(points, axis, band), ...stretchesAt(points, axis, band.from)];
 }
 
 /** The shadows of the outline alone, without what it encloses. */
 export function outlineShadow(points: readonly StockPoint[], axis: StockAxis, band: Span): Span[] {
-  return edgesOf(points, axis).flatMap((edge) => edgeShadow(edge, band) ?? []);
-}
-
-function edgesOf(points: readonly StockPoint[], axis: StockAxis): Edge[] {
   const across = otherAxis(axis);
-  return points.map((point, index) => {
-    const next = points[(index + 1) % points.length] ?? point;
-    return {
-      u0: coordinateOf(point, axis),
-      v0: coordinateOf(point, across),
-      u1: coordinateOf(next, axis),
-      v1: coordinateOf(next, across),
-    };
+  const shadows: Span[] = [];
+  points.forEach((start, index) => {
+    const end = points[(index + 1) % points.length] ?? start;
+    const v0 = coordinateOf(start, across);
+    const v1 = coordinateOf(end, across);
+    // An edge that runs along the end of the open band is not inside it.
+    if ((v0 <= band.from && v1 <= band.from) || (v0 >= band.to && v1 >= band.to)) return;
+    const u0 = coordinateOf(start, axis);
+    const u1 = coordinateOf(end, axis);
+    const uAt = (v: number) => (v0 === v1 ? u0 : u0 + ((u1 - u0) * (v - v0)) / (v1 - v0));
+    const first = v0 < band.from ? uAt(band.from) : v0 > band.to ? uAt(band.to) : u0;
+    const last = v1 < band.from ? uAt(band.from) : v1 > band.to ? uAt(band.to) : u1;
+    shadows.push(first <= last ? { from: first, to: last } : { from: last, to: first });
   });
-}
-
-/** The reach of the part of an edge inside the open band; an edge that runs along the band's end is not inside. */
-function edgeShadow({ u0, v0, u1, v1 }: Edge, band: Span): Span | null {
-  if (Math.max(v0, v1) <= band.from || Math.min(v0, v1) >= band.to) return null;
-  const uAt = (v: number) => (v0 === v1 ? u0 : u0 + ((u1 - u0) * (v - v0)) / (v1 - v0));
-  const start = v0 < band.from ? uAt(band.from) : v0 > band.to ? uAt(band.to) : u0;
-  const end = v1 < band.from ? uAt(band.from) : v1 > band.to ? uAt(band.to) : u1;
-  return { from: Math.min(start, end), to: Math.max(start, end) };
+  return shadows;
 }
 
 /** The stretches inside the polygon of a line just above v: its crossings in order, taken in pairs. */
-function stretchesAt(edges: readonly Edge[], v: number): Span[] {
-  const crossings = edges
-    .filter(({ v0, v1 }) => v0 <= v !== v1 <= v)
-    .map(({ u0, v0, u1, v1 }) => u0 + ((u1 - u0) * (v - v0)) / (v1 - v0))
-    .sort((p, q) => p - q);
+function stretchesAt(points: readonly StockPoint[], axis: StockAxis, v: number): Span[] {
+  const across = otherAxis(axis);
+  const crossings: number[] = [];
+  points.forEach((start, index) => {
+    const end = points[(index + 1) % points.length] ?? start;
+    const v0 = coordinateOf(start, across);
+    const v1 = coordinateOf(end, across);
+    if (v0 <= v === v1 <= v) return;
+    const u0 = coordinateOf(start, axis);
+    crossings.push(u0 + ((coordinateOf(end, axis) - u0) * (v - v0)) / (v1 - v0));
+  });
+  crossings.sort((p, q) => p - q);
   const stretches: Span[] = [];
   for (let index = 0; index + 1 < crossings.length; index += 2) {
     stretches.push({ from: crossings[index] ?? 0, to: crossings[index + 1] ?? 0 });

@@ -35,6 +35,7 @@ export function problems(layout: FaceLayout, boards: readonly BoardFace[]): Prob
 type BoardsById = ReadonlyMap<StockId, BoardFace>;
 
 function notPlaced(layout: FaceLayout): Problem[] {
+  if (layout.groups.every(({ placement }) => placement !== null)) return [];
   const pieces = unplacedPieces(layout).map(({ id }) => id);
   return pieces.length === 0 ? [] : [{ kind: "not-placed", pieces }];
 }

@@ -9,7 +9,7 @@ import type { FaceLayout } from "./face-layout";
 import { faceGrid, outlineOf, placeOf, rectAt, spacedGrid } from "./grids";
 import { originOf } from "./group-origin";
 import { labelAt, pieceIdsOf, readingIndexOf } from "./piece-ids";
-import { groupOf, slotOf } from "./slots";
+import { slotOf } from "./slots";
 
 /** A piece as the face knows it, on wood or not. */
 export interface FacePiece {
@@ -50,5 +50,6 @@ export function layOut(layout: FaceLayout): Piece[] {
 
 /** The pieces that are not laid on wood yet, in reading order. */
 export function unplacedPieces(layout: FaceLayout): FacePiece[] {
-  return facePieces(layout).filter(({ id }) => (groupOf(layout, id)?.placement ?? null) === null);
+  const placed = new Set(layout.groups.flatMap((group) => (group.placement === null ? [] : group.pieceIds)));
+  return facePieces(layout).filter(({ id }) => !placed.has(id));
 }
