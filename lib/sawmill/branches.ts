@@ -60,9 +60,13 @@ function growBranch(branching: Branching, z: number, azimuth: number, radiusMm: 
   };
 }
 
-/** Radius of the branch at a distance along its axis; a dead branch no longer thickens. */
+// However long it lives, a branch grows no thicker than about this.
+const MOST_RADIUS_MM = 17;
+
+/** Radius of the branch at a distance along its axis: a cone at first, slower as it thickens; a dead branch grows no more. */
 export function branchRadiusMm(branch: Branch, alongMm: number): number {
-  return 1.2 + branch.flare * Math.min(alongMm, branch.deadFromMm);
+  const cone = branch.flare * Math.min(alongMm, branch.deadFromMm);
+  return 1.2 + MOST_RADIUS_MM * (1 - Math.exp(-cone / MOST_RADIUS_MM));
 }
 
 /** Share of that radius left on the last stretch, where the stub was worn round before it was grown over; 0 past its end. */

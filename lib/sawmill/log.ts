@@ -92,16 +92,24 @@ export function growLog(options: LogOptions): Log {
   };
 }
 
-function growPith(wanderMm: number, lengthMm: number, seed: number): Float64Array {
+function growPith(wanderMm: number, logMm: number, seed: number): Float64Array {
   const random = randomFor(seed, "pith");
-  const waves = [2400, 1300, 640, 330].map((waveLength, i) => ({
-    turnsPerMm: 1 / (waveLength * between(random, 0.8, 1.2)),
-    x: (wanderMm * between(random, 0.5, 1)) / 1.9 ** i,
-    y: (wanderMm * between(random, 0.5, 1)) / 1.9 ** i,
+  // Length and share of the whole wander. The long waves stay gentle: steeper than the taper they would turn arches into long blots.
+  const waves = (
+    [
+      [2400, 0.55],
+      [1300, 0.4],
+      [640, 0.26],
+      [330, 0.14],
+    ] as const
+  ).map(([lengthMm, share]) => ({
+    turnsPerMm: 1 / (lengthMm * between(random, 0.8, 1.2)),
+    x: wanderMm * share * between(random, 0.5, 1),
+    y: wanderMm * share * between(random, 0.5, 1),
     startX: random(),
     startY: random(),
   }));
-  const steps = Math.ceil(lengthMm / PITH_STEP_MM) + 2;
+  const steps = Math.ceil(logMm / PITH_STEP_MM) + 2;
   const pith = new Float64Array(steps * 2);
   for (let i = 0; i < steps; i++) {
     for (const wave of waves) {

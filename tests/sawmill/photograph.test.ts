@@ -5,8 +5,8 @@ import { growFlitch } from "@/lib/sawmill/flitch";
 import { photographBoard, photographLeaf } from "@/lib/sawmill/photograph-board";
 import { correlation, luminance, meanWithin } from "./measure";
 
-const BOARD = { species: "walnut", cut: "flat", lengthMm: 600, widthMm: 180, seed: 14 } as const;
-const PHOTO = { widthPx: 640, heightPx: 480 } as const;
+const BOARD = { species: "walnut", cut: "flat", lengthMm: 400, widthMm: 120, seed: 14 } as const;
+const PHOTO = { widthPx: 480, heightPx: 360 } as const;
 
 describe("the lens", () => {
   const lens = (k1: number): LensTruth => ({ k1, center: [2000, 1500], norm: 2500 });
@@ -33,7 +33,7 @@ describe("a photograph of a board", () => {
   it("is the same bytes for the same seed", () => {
     const one = photographBoard({ ...BOARD, photo: PHOTO, lens: { k1: 0.02 } });
     const two = photographBoard({ ...BOARD, photo: PHOTO, lens: { k1: 0.02 } });
-    expect(one.rgb.length).toBe(640 * 480 * 3);
+    expect(one.rgb.length).toBe(480 * 360 * 3);
     expect(Buffer.compare(one.rgb, two.rgb)).toBe(0);
     expect(one.truth).toEqual(two.truth);
     const other = photographBoard({ ...BOARD, seed: 15, photo: PHOTO, lens: { k1: 0.02 } });
@@ -44,24 +44,24 @@ describe("a photograph of a board", () => {
     for (const k1 of [0, 0.03, -0.04]) {
       const { truth } = photographBoard({ ...BOARD, photo: PHOTO, lens: { k1 } });
       const { homographyMmToPx: h, cornersPx, distortion } = truth;
-      expect(distortion).toEqual({ k1, center: [320, 240], norm: 400 });
+      expect(distortion).toEqual({ k1, center: [240, 180], norm: 300 });
       const mm = [
         [0, 0],
-        [600, 0],
-        [600, 180],
-        [0, 180],
+        [400, 0],
+        [400, 120],
+        [0, 120],
       ] as const;
       mm.forEach(([x, y], i) => {
         const w = h[6] * x + h[7] * y + h[8];
         const straight = [(h[0] * x + h[1] * y + h[2]) / w, (h[3] * x + h[4] * y + h[5]) / w];
         const [px, py] = cornersPx[i] ?? [Number.NaN, Number.NaN];
-        const factor = 1 + (k1 * ((px - 320) ** 2 + (py - 240) ** 2)) / 400 ** 2;
-        expect(320 + (px - 320) * factor).toBeCloseTo(straight[0] ?? Number.NaN, 6);
-        expect(240 + (py - 240) * factor).toBeCloseTo(straight[1] ?? Number.NaN, 6);
+        const factor = 1 + (k1 * ((px - 240) ** 2 + (py - 180) ** 2)) / 300 ** 2;
+        expect(240 + (px - 240) * factor).toBeCloseTo(straight[0] ?? Number.NaN, 6);
+        expect(180 + (py - 180) * factor).toBeCloseTo(straight[1] ?? Number.NaN, 6);
         expect(px).toBeGreaterThan(0);
-        expect(px).toBeLessThan(640);
+        expect(px).toBeLessThan(480);
         expect(py).toBeGreaterThan(0);
-        expect(py).toBeLessThan(480);
+        expect(py).toBeLessThan(360);
       });
       expect(cornersPx[0][0]).toBeLessThan(cornersPx[1][0]);
       expect(cornersPx[0][1]).toBeLessThan(cornersPx[3][1]);
@@ -78,18 +78,18 @@ describe("a photograph of a board", () => {
       return (photo.rgb[at] ?? 0) - (photo.rgb[at + 2] ?? 0);
     };
     const mm = 2.5 / photo.truth.pxPerMmCentre;
-    for (let x = 30; x < 600; x += 60) {
+    for (let x = 30; x < 400; x += 40) {
       expect(redAt(x, mm), `inside the near edge at ${x}`).toBeGreaterThan(20);
-      expect(redAt(x, 180 - mm), `inside the far edge at ${x}`).toBeGreaterThan(20);
+      expect(redAt(x, 120 - mm), `inside the far edge at ${x}`).toBeGreaterThan(20);
       // Board edges 26 mm deep may show outside the face, by no more than their height seen at 15°.
       expect(redAt(x, -12), `outside the near edge at ${x}`).toBeLessThan(12);
-      expect(redAt(x, 192), `outside the far edge at ${x}`).toBeLessThan(12);
+      expect(redAt(x, 132), `outside the far edge at ${x}`).toBeLessThan(12);
     }
   });
 
   it("gives the flat face back when it is straightened by its truth", () => {
     for (const k1 of [0, 0.03]) {
-      const photo = photographBoard({ ...BOARD, photo: { widthPx: 1000, heightPx: 750 }, lens: { k1 }, noise: 0, unevenness: 0 });
+      const photo = photographBoard({ ...BOARD, photo: { widthPx: 720, heightPx: 540 }, lens: { k1 }, noise: 0, unevenness: 0 });
       const face = boardFace({ ...BOARD, pxPerMm: 1 });
       const light = luminance(photo);
       const straightened = Float64Array.from({ length: face.width * face.height }, (_, i) => {
@@ -106,8 +106,8 @@ describe("a photograph of a board", () => {
     const uneven = photographBoard({ ...BOARD, photo: PHOTO, noise: 0, unevenness: 1 });
     const ratio = (x: number, y: number) =>
       meanWithin(uneven, luminance(uneven), x, y, 12) / meanWithin(even, luminance(even), x, y, 12);
-    expect(ratio(320, 240)).toBeCloseTo(1, 1);
-    expect(ratio(625, 465)).toBeLessThan(0.95);
+    expect(ratio(240, 180)).toBeCloseTo(1, 1);
+    expect(ratio(466, 346)).toBeLessThan(0.95);
   });
 
   it("carries as much noise as asked", () => {
@@ -126,7 +126,7 @@ describe("a photograph of a board", () => {
   });
 
   it("shows a card of known size where the truth says it lies", () => {
-    const card = { xMm: 250, yMm: 50, lengthMm: 85.6, widthMm: 54 };
+    const card = { xMm: 150, yMm: 30, lengthMm: 85.6, widthMm: 54 };
     const photo = photographBoard({ ...BOARD, photo: PHOTO, card, lens: { k1: 0.03 }, noise: 0, unevenness: 0 });
     const corners = photo.truth.cardCornersPx ?? expect.unreachable("no card in the truth");
     const light = luminance(photo);
@@ -154,10 +154,10 @@ describe("a photograph of a board", () => {
 
 describe("photographs of leaves", () => {
   it("carry the leaf's own knots and size", () => {
-    const flitch = growFlitch({ species: "pine", cut: "flat", seed: 3, lengthMm: 700, widthMm: 160 });
+    const flitch = growFlitch({ species: "pine", cut: "flat", seed: 3, lengthMm: 500, widthMm: 160 });
     const first = photographLeaf(flitch, { leaf: 0, seed: 1, photo: PHOTO });
     const next = photographLeaf(flitch, { leaf: 1, seed: 2, photo: PHOTO });
-    expect(first.truth.sizeMm).toEqual([700, 160]);
+    expect(first.truth.sizeMm).toEqual([500, 160]);
     expect(first.truth.knots.length).toBeGreaterThan(0);
     const partners = first.truth.knots.flatMap((knot) =>
       next.truth.knots.filter((other) => other.branch === knot.branch).map((other) => [knot, other] as const),
