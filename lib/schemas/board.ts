@@ -29,11 +29,12 @@ export const boardRowSchema = z.object({
   tag: z.string(),
   state: z.enum(boardStates),
   ...boardFields,
+  /** 0 while nobody has measured. */
   length: umSchema,
   width: umSchema,
   /** Percent, one decimal. */
   moisturePercent: z.number().nullable(),
-  /** By the rule: thickness in inches (at least 1) × width in inches × length in feet ÷ 12. */
+  /** By the rule: thickness in inches, nominal where sold by quarters, at least 1, × width in inches × length in feet ÷ 12. */
   boardFeet: z.number(),
   straighteningId: idSchema.nullable(),
   /** Level small enough for the rack, or null when there is no picture. */
@@ -99,7 +100,12 @@ export const listBoards = defineEndpoint({
   response: boardPageSchema,
 });
 
-export const createBoardSchema = z.object({ ...boardFields, length: sizeUmSchema, width: sizeUmSchema });
+export const createBoardSchema = z.object({
+  ...boardFields,
+  /** null: to be measured from its photograph; 0 until then. */
+  length: sizeUmSchema.nullable(),
+  width: sizeUmSchema.nullable(),
+});
 export const createBoard = defineEndpoint({
   method: "POST",
   path: "/api/boards",
@@ -132,6 +138,9 @@ export const updateBoard = defineEndpoint({
   body: z.object({
     baseRevision: z.int(),
     ...z.object({ ...boardFields, state: z.enum(boardStates) }).partial().shape,
+    /** By hand only while there is no straightened picture, which tells the size. */
+    length: sizeUmSchema.optional(),
+    width: sizeUmSchema.optional(),
   }),
   response: boardSchema,
 });

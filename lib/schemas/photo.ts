@@ -15,6 +15,7 @@ export const pictureLevelsSchema = z.array(pictureLevelSchema).max(12);
 
 /** A size of a picture as the browser sees it. */
 export const servedLevelSchema = z.object({ widthPx: z.int().min(1), heightPx: z.int().min(1), url: z.string() });
+export type ServedLevel = z.output<typeof servedLevelSchema>;
 
 export const photoSchema = z.object({
   id: idSchema,

@@ -4,6 +4,7 @@ import type { z } from "zod";
 import { recordHistory } from "@/db/queries/history";
 import { findSaw, insertSaw, listSaws, readShop, updateSaw, updateShop } from "@/db/queries/shop";
 import type { ShopId } from "@/db/shop-id";
+import type { LengthStyle } from "@/lib/layout";
 import type { Saw, Shop, saveSawSchema, updateShopSchema } from "@/lib/schemas/shop";
 import type { ShopAccess } from "./access";
 import { database } from "./database";
@@ -15,6 +16,13 @@ export async function shopSettings(shopId: ShopId): Promise<Shop> {
   const { nextBoardNumber, nextJobNumber, nextOrderNumber, createdAt, ...settings } = row;
   const saws = await listSaws(database(), shopId);
   return { ...settings, inchFraction: settings.inchFraction === 32 ? 32 : 64, saws: saws.map(sawOf) };
+}
+
+/** How the shop writes lengths, for sentences made on the server. */
+export async function lengthStyleOf(shopId: ShopId): Promise<LengthStyle> {
+  const row = await readShop(database(), shopId);
+  if (!row) throw notFound("shop");
+  return row.units === "mm" ? { unit: "mm" } : { unit: "inch", denominator: row.inchFraction === 32 ? 32 : 64 };
 }
 
 const sawOf = ({ id, name, kind, kerf, cleanUp }: Saw): Saw => ({ id, name, kind, kerf, cleanUp });

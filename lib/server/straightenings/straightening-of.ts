@@ -3,6 +3,7 @@ import "server-only";
 import type { Connection } from "@/db/client";
 import { listKeepClear, type StraighteningRow } from "@/db/queries/straightening";
 import type { ShopId } from "@/db/shop-id";
+import type { ServedLevel } from "@/lib/schemas/photo";
 import type { Straightening } from "@/lib/schemas/straightening";
 
 export async function straighteningOf(db: Connection, shopId: ShopId, row: StraighteningRow): Promise<Straightening> {
@@ -19,12 +20,13 @@ export async function straighteningOf(db: Connection, shopId: ShopId, row: Strai
     width: row.width,
     pxPerMm: row.pxPerMm,
     residual: row.residual,
-    levels: row.levels.map(({ level, widthPx, heightPx }) => ({
-      widthPx,
-      heightPx,
-      url: `/api/straightenings/${row.id}/levels/${level}`,
-    })),
+    levels: row.levels.map((level) => servedLevel(row.id, level)),
     zones: { outline: row.outline, keepClear: await listKeepClear(db, shopId, row.id), revision: row.zonesRevision },
     createdAt: row.createdAt.toISOString(),
   };
+}
+
+export function servedLevel(straighteningId: string, level: StraighteningRow["levels"][number]): ServedLevel {
+  const { widthPx, heightPx } = level;
+  return { widthPx, heightPx, url: `/api/straightenings/${straighteningId}/levels/${level.level}` };
 }

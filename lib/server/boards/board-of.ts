@@ -1,0 +1,51 @@
+/** A board as the browser sees it, from its row. */
+import "server-only";
+import type { BoardWithPicture, listBoardHolds } from "@/db/queries/board";
+import { boardFeet, type Um, um } from "@/lib/layout";
+import type { BoardRow } from "@/lib/schemas/board";
+import { printTag } from "@/lib/schemas/tag";
+import { servedLevel } from "../straightenings/straightening-of";
+
+type Hold = Awaited<ReturnType<typeof listBoardHolds>>[number];
+
+/** Wide enough for a board that fills the rack's page, px. */
+const rackPicturePx = 1000;
+const umPerQuarter = 6350;
+
+export function boardRowOf({ board, straighteningId, levels }: BoardWithPicture, holds: readonly Hold[]): BoardRow {
+  const { id, state, species, cut, nominalQuarters, thickness, length, width, place, source, costMinor, note, revision } = board;
+  return {
+    id,
+    tag: printTag(board.tagNumber),
+    state,
+    species,
+    cut,
+    nominalQuarters,
+    thickness,
+    length,
+    width,
+    place,
+    source,
+    costMinor,
+    note,
+    moisturePercent: board.moistureTenths === null ? null : board.moistureTenths / 10,
+    boardFeet: boardFeet(width, length, tradeThickness(nominalQuarters, thickness)),
+    straighteningId,
+    picture: straighteningId === null ? null : rackPicture(straighteningId, levels ?? []),
+    held: holds
+      .filter(({ boardId }) => boardId === id)
+      .map(({ faceId, faceTitle, jobId, jobTitle }) => ({ faceId, faceTitle, jobId, jobTitle })),
+    revision,
+    createdAt: board.createdAt.toISOString(),
+  };
+}
+
+/** Lumber is bought by its nominal thickness, however much planing has taken since. */
+function tradeThickness(nominalQuarters: number | null, thickness: Um): Um {
+  return nominalQuarters === null ? thickness : um(nominalQuarters * umPerQuarter);
+}
+
+function rackPicture(straighteningId: string, levels: NonNullable<BoardWithPicture["levels"]>): BoardRow["picture"] {
+  const level = levels.findLast(({ widthPx }) => widthPx >= rackPicturePx) ?? levels[0];
+  return level ? servedLevel(straighteningId, level) : null;
+}

@@ -1,0 +1,20 @@
+/** One board with its readings. */
+import "server-only";
+import type { Connection } from "@/db/client";
+import { findBoard, listBoardHolds, listReadings } from "@/db/queries/board";
+import type { Board } from "@/lib/schemas/board";
+import type { ShopAccess } from "../access";
+import { database } from "../database";
+import { notFound } from "../faults";
+import { boardRowOf } from "./board-of";
+
+export async function readBoard(access: ShopAccess, boardId: string, db: Connection = database()): Promise<Board> {
+  const found = await findBoard(db, access.shopId, boardId);
+  if (!found) throw notFound("board");
+  const holds = await listBoardHolds(db, access.shopId, [boardId]);
+  const readings = await listReadings(db, access.shopId, boardId);
+  return {
+    ...boardRowOf(found, holds),
+    readings: readings.map(({ id, tenths, takenOn, takenBy }) => ({ id, percent: tenths / 10, takenOn, takenBy })),
+  };
+}
