@@ -84,6 +84,8 @@ export { type Drift, drifts } from "./seam/drift";
 export type { Seam, UmRange } from "./seam/seam";
 export { seams } from "./seam/seams";
 export type { BoardFace, KeepClear, KeepClearKind, KeepClearShape } from "./stock/board";
+export { type CarriedOutline, carryOutline, liesOnBoard } from "./stock/carry-zones";
+export { type BoardSize, outsideFault, type PolygonFault, polygonFault } from "./stock/polygon-fault";
 export {
   carpentersTriangle,
   TRIANGLE_INSET,
