@@ -24,8 +24,8 @@ export interface LineMark {
   readonly line: StockLine;
 }
 
-/** Passes that turn the algebraic error into millimetres; the depths settle in two or three, the rest is margin. */
-const REWEIGHTINGS = 8;
+/** Passes that turn the algebraic error into millimetres; the depths settle in two or three. */
+const REWEIGHTINGS = 4;
 
 /**
  * Stock mm from photo px, or null where the marks do not fix a map (fewer than eight conditions, points in line) or would put a

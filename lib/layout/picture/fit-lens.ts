@@ -27,8 +27,8 @@ export interface ResidualsMm {
 
 /** Fewer say nothing beyond the perspective that they fix. */
 export const FEWEST_EDGE_POINTS = 3;
-/** Scan before closing in, in case the sum of squares has more than one valley. */
-const SCAN_STEPS = 50;
+/** Steps each way of the scan before closing in, in case the sum of squares has more than one valley. */
+const SCAN_STEPS = 8;
 const GOLDEN = (Math.sqrt(5) - 1) / 2;
 /** 1e-8 of k1 moves the corner of a 12-megapixel photo by 0.000025 px. */
 const K1_TOLERANCE = 1e-8;

@@ -34,14 +34,15 @@ export function leastSquares(rows: readonly (readonly number[])[], rightSide: re
 
 /** Clears column k below the diagonal in every later column; returns the new diagonal entry. */
 function reflect(work: readonly Float64Array[], k: number, width: number): number {
-  let norm = 0;
-  for (let i = k; i < work.length; i++) norm = Math.hypot(norm, at(work, i, k));
+  let squares = 0;
+  for (let i = k; i < work.length; i++) squares += at(work, i, k) ** 2;
+  const norm = Math.sqrt(squares);
   if (norm === 0) return 0;
   const pivot = at(work, k, k);
   const diagonal = pivot > 0 ? -norm : norm;
   // v = column − diagonal·e_k; the sign keeps the first entry from cancelling.
-  const v = work.map((_, i) => (i < k ? 0 : i === k ? pivot - diagonal : at(work, i, k)));
-  const vv = v.reduce((sum, value) => sum + value * value, 0);
+  const v = Float64Array.from(work, (row, i) => (i < k ? 0 : i === k ? pivot - diagonal : (row[k] as number)));
+  const vv = 2 * (squares - diagonal * pivot);
   for (let j = k; j < width; j++) {
     let dot = 0;
     for (let i = k; i < work.length; i++) dot += (v[i] as number) * at(work, i, j);

@@ -3,8 +3,8 @@
  * averages several samples over each picture pixel, so nothing flickers or turns to moiré. Beyond the photo's rim the rim's
  * colour goes on. Works in bands of rows, so that the caller can report progress and stop in between.
  */
-import { composeHomographies, type Homography, type Jacobian, jacobianAt } from "./homography";
-import { type Lens, shrinkAt } from "./lens";
+import { applyHomography, type Homography, jacobianAt, type PhotoPoint } from "./homography";
+import { type Lens, photoFromFlat } from "./lens";
 
 /** 8-bit pixels, row by row, without padding. */
 export interface Pixels {
@@ -22,23 +22,21 @@ export interface WarpMap {
 
 /** Rows between two reports of progress. */
 const BAND_ROWS = 64;
-/** Columns that share one count of samples. */
+/** Columns that share one count of samples and, as a rule, one parabola of places. */
 const BLOCK_COLUMNS = 64;
 /** Bilinear reads two pixels each way, so samples this far apart still touch every photo pixel between them. */
 const SAMPLE_SPACING_PX = 1.25;
-/** Steps of the table of the lens' radial factor; linear between them it is right to 1e-6 px on a 60-megapixel photo. */
-const LENS_STEPS = 2048;
+/** Places may be off by this much, px: four times finer than the steps of 1/256 px at which pixels are read. */
+const PLACE_TOLERANCE_PX = 1 / 1024;
 
 /** Fills `picture` from `photo`, both with the same channels, and yields the share done (0..1] after each band. */
 export function* warpInBands(photo: Pixels, picture: Pixels, map: WarpMap): Generator<number, void, void> {
   if (photo.channels !== picture.channels) throw new RangeError("photo and picture need the same channels");
-  const lens = lensTable(map.lens);
   for (let row = 0; row < picture.height; row += BAND_ROWS) {
     const end = Math.min(picture.height, row + BAND_ROWS);
     for (let y = row; y < end; y++) {
-      for (let x = 0; x < picture.width; x += BLOCK_COLUMNS) {
-        warpBlock(photo, picture, map.flatFromPicture, lens, y, x, Math.min(picture.width, x + BLOCK_COLUMNS));
-      }
+      for (let x = 0; x < picture.width; x += BLOCK_COLUMNS)
+        warpBlock(photo, picture, map, y, x, Math.min(BLOCK_COLUMNS, picture.width - x));
     }
     yield end / picture.height;
   }
@@ -49,140 +47,155 @@ export function warp(photo: Pixels, picture: Pixels, map: WarpMap): void {
   for (const _ of warpInBands(photo, picture, map));
 }
 
-/** The lens with its factor tabulated over the squared flat radius; null where it does not bend. */
-interface LensTable {
+/** `count` pixels of row y from column x on. */
+function warpBlock(photo: Pixels, picture: Pixels, map: WarpMap, y: number, x: number, count: number): void {
+  const stretch = jacobianAt(map.flatFromPicture, { x: x + count / 2, y: y + 0.5 });
+  const across = samplesFor(Math.hypot(stretch.xx, stretch.yx));
+  const down = samplesFor(Math.hypot(stretch.xy, stretch.yy));
+  const offset = (y * picture.width + x) * picture.channels;
+  if (across * down === 1) sampleRun(photo, map, picture.data, offset, { x: x + 0.5, y: y + 0.5, step: 1, count });
+  else averageBlock(photo, picture, map, { x, y, count, across, down });
+}
+
+/** How many samples one picture pixel needs that spans so many photo pixels. */
+function samplesFor(photoPx: number): number {
+  return Number.isFinite(photoPx) ? Math.max(1, Math.ceil(photoPx / SAMPLE_SPACING_PX)) : 1;
+}
+
+interface AveragedBlock {
   readonly x: number;
   readonly y: number;
-  readonly stepsPerPx2: number;
-  readonly factors: Float64Array;
+  readonly count: number;
+  readonly across: number;
+  readonly down: number;
 }
 
-function lensTable(lens: Lens): LensTable | null {
-  if (lens.k1 === 0) return null;
-  // The corner of the picture lies at radius 1; a fifth more leaves room for what the clamped rim is asked for.
-  const reach = (1.2 * (1 + Math.abs(lens.k1))) ** 2;
-  const factors = Float64Array.from({ length: LENS_STEPS + 2 }, (_, i) => shrinkAt(lens.k1, (reach * i) / LENS_STEPS));
-  return { x: lens.centre.x, y: lens.centre.y, stepsPerPx2: LENS_STEPS / (reach * lens.norm * lens.norm), factors };
-}
-
-function warpBlock(
-  photo: Pixels,
-  picture: Pixels,
-  h: Homography,
-  lens: LensTable | null,
-  y: number,
-  from: number,
-  to: number,
-): void {
-  const { across, down } = samplesAt(jacobianAt(h, { x: (from + to) / 2, y: y + 0.5 }));
-  if (across * down === 1) bilinearRun(photo, picture, h, lens, y, from, to);
-  else averagedRun(photo, picture, h, lens, y, from, to, across, down);
-}
-
-/** How many samples one picture pixel needs along and down. */
-function samplesAt(j: Jacobian): { across: number; down: number } {
-  const count = (photoPx: number): number => (Number.isFinite(photoPx) ? Math.max(1, Math.ceil(photoPx / SAMPLE_SPACING_PX)) : 1);
-  return { across: count(Math.hypot(j.xx, j.yx)), down: count(Math.hypot(j.xy, j.yy)) };
-}
-
-/**
- * One bilinear sample per picture pixel. Numerators and depth of the homography grow by a constant from pixel to pixel; weights
- * hold 8 bits each way, so a level is off by less than one.
- */
-function bilinearRun(
-  photo: Pixels,
-  picture: Pixels,
-  h: Homography,
-  lens: LensTable | null,
-  y: number,
-  from: number,
-  to: number,
-): void {
-  const { data, width, height, channels } = photo;
-  const out = picture.data;
-  const stride = width * channels;
-  const lastX = (width - 1) * 256;
-  const lastY = (height - 1) * 256;
-  let u = h[0] * (from + 0.5) + h[1] * (y + 0.5) + h[2];
-  let v = h[3] * (from + 0.5) + h[4] * (y + 0.5) + h[5];
-  let w = h[6] * (from + 0.5) + h[7] * (y + 0.5) + h[8];
-  let o = (y * picture.width + from) * channels;
-  for (let x = from; x < to; x++) {
-    let px = u / w;
-    let py = v / w;
-    u += h[0];
-    v += h[3];
-    w += h[6];
-    if (lens !== null) {
-      const dx = px - lens.x;
-      const dy = py - lens.y;
-      const factor = factorAt(lens, dx * dx + dy * dy);
-      px = lens.x + dx * factor;
-      py = lens.y + dy * factor;
-    }
-    // Pixel centres lie at +0.5; 1/256 px steps, clamped to the centres of the rim.
-    const sx = Math.round((px - 0.5) * 256);
-    const sy = Math.round((py - 0.5) * 256);
-    const cx = sx < 0 ? 0 : sx > lastX ? lastX : sx | 0;
-    const cy = sy < 0 ? 0 : sy > lastY ? lastY : sy | 0;
-    const fx = cx & 255;
-    const fy = cy & 255;
-    const a = (cy >> 8) * stride + (cx >> 8) * channels;
-    const b = fx === 0 ? a : a + channels;
-    const below = fy === 0 ? 0 : stride;
-    const wa = (256 - fx) * (256 - fy);
-    const wb = fx * (256 - fy);
-    const wc = (256 - fx) * fy;
-    const wd = fx * fy;
-    for (let c = 0; c < channels; c++) {
-      out[o + c] =
-        ((data[a + c] as number) * wa +
-          (data[b + c] as number) * wb +
-          (data[a + below + c] as number) * wc +
-          (data[b + below + c] as number) * wd +
-          32768) >>
-        16;
-    }
-    o += channels;
-  }
-}
-
-/** The mean of across × down bilinear samples spread evenly over each picture pixel. */
-function averagedRun(
-  photo: Pixels,
-  picture: Pixels,
-  h: Homography,
-  lens: LensTable | null,
-  y: number,
-  from: number,
-  to: number,
-  across: number,
-  down: number,
-): void {
+/** The mean of across × down samples spread evenly over each picture pixel. */
+function averageBlock(photo: Pixels, picture: Pixels, map: WarpMap, { x, y, count, across, down }: AveragedBlock): void {
   const channels = photo.channels;
-  const columns = (to - from) * across;
-  const line: Pixels = { data: new Uint8Array(columns * channels), width: columns, height: 1, channels };
-  const sums = new Uint32Array((to - from) * channels);
+  const samples = new Uint8Array(count * across * channels);
+  const sums = new Uint32Array(count * channels);
   for (let s = 0; s < down; s++) {
-    // Sample i of sub-row s sits at picture point (from + (i + ½)/across, y + (s + ½)/down).
-    const fromSample: Homography = [1 / across, 0, from, 0, 1, y + (s + 0.5) / down - 0.5, 0, 0, 1];
-    bilinearRun(photo, line, composeHomographies(h, fromSample), lens, 0, 0, columns);
-    let i = 0;
-    for (let x = 0; x < to - from; x++) {
+    const run = { x: x + 0.5 / across, y: y + (s + 0.5) / down, step: 1 / across, count: count * across };
+    sampleRun(photo, map, samples, 0, run);
+    for (let i = 0, pixel = 0; pixel < sums.length; pixel += channels) {
       for (let n = 0; n < across; n++) {
-        for (let c = 0; c < channels; c++)
-          sums[x * channels + c] = (sums[x * channels + c] as number) + (line.data[i++] as number);
+        for (let c = 0; c < channels; c++) sums[pixel + c] = (sums[pixel + c] as number) + (samples[i++] as number);
       }
     }
   }
-  const count = across * down;
-  const start = (y * picture.width + from) * channels;
-  for (let i = 0; i < sums.length; i++) picture.data[start + i] = Math.round((sums[i] as number) / count);
+  const start = (y * picture.width + x) * channels;
+  for (let i = 0; i < sums.length; i++) picture.data[start + i] = Math.round((sums[i] as number) / (across * down));
 }
 
-function factorAt(lens: LensTable, radiusPx2: number): number {
-  const at = Math.min(LENS_STEPS, radiusPx2 * lens.stepsPerPx2);
-  const i = at | 0;
-  const low = lens.factors[i] as number;
-  return low + ((lens.factors[i + 1] as number) - low) * (at - i);
+/** Samples at picture points (x + i·step, y), i from 0 to count − 1. */
+interface Run {
+  readonly x: number;
+  readonly y: number;
+  readonly step: number;
+  readonly count: number;
+}
+
+/** Photo coordinates along a run: a + b·i + c·i². */
+interface Parabola {
+  readonly a: number;
+  readonly b: number;
+  readonly c: number;
+}
+
+/**
+ * Perspective and lens change slowly, so a parabola through both ends and the middle of a run tells its places without a division
+ * or a root per pixel. Where it strays, the run is halved; one or two samples are always exact.
+ */
+function sampleRun(photo: Pixels, map: WarpMap, out: Uint8Array, offset: number, run: Run): void {
+  const sourceAt = (i: number): PhotoPoint =>
+    photoFromFlat(map.lens, applyHomography(map.flatFromPicture, { x: run.x + i * run.step, y: run.y }));
+  const last = run.count - 1;
+  const first = sourceAt(0);
+  const middle = last > 1 ? sourceAt(last / 2) : null;
+  const end = last > 0 ? sourceAt(last) : first;
+  const x = parabola(first.x, middle?.x ?? null, end.x, last);
+  const y = parabola(first.y, middle?.y ?? null, end.y, last);
+
+  // The cubic that a parabola through three even places misses is greatest close to the quarters.
+  const strays = middle !== null && [last / 4, (last * 3) / 4].some((i) => straysAt(i, x, y, sourceAt(i)));
+  if (!strays) {
+    sampleAlong(photo, out, offset, run.count, x, y);
+    return;
+  }
+  const half = run.count >> 1;
+  sampleRun(photo, map, out, offset, { ...run, count: half });
+  sampleRun(photo, map, out, offset + half * photo.channels, { ...run, x: run.x + half * run.step, count: run.count - half });
+}
+
+function parabola(first: number, middle: number | null, end: number, last: number): Parabola {
+  if (last === 0) return { a: first, b: 0, c: 0 };
+  const c = middle === null ? 0 : (2 * (first - 2 * middle + end)) / (last * last);
+  return { a: first, b: (end - first) / last - c * last, c };
+}
+
+function straysAt(i: number, x: Parabola, y: Parabola, exact: PhotoPoint): boolean {
+  const off = Math.abs(x.a + (x.b + x.c * i) * i - exact.x) + Math.abs(y.a + (y.b + y.c * i) * i - exact.y);
+  return off > PLACE_TOLERANCE_PX;
+}
+
+/** The inner loop: one bilinear sample per step, weights of 8 bits each way, so a level is off by less than one. */
+function sampleAlong(photo: Pixels, out: Uint8Array, offset: number, count: number, x: Parabola, y: Parabola): void {
+  const { data, width, height, channels } = photo;
+  const stride = width * channels;
+  const lastX = (width - 1) * 256;
+  const lastY = (height - 1) * 256;
+  // In steps of 1/256 px; pixel centres lie at +0.5, and the half step more rounds to the nearest.
+  let px = x.a * 256 - 127.5;
+  let dx = (x.b + x.c) * 256;
+  const ddx = x.c * 512;
+  let py = y.a * 256 - 127.5;
+  let dy = (y.b + y.c) * 256;
+  const ddy = y.c * 512;
+  for (let i = 0, o = offset; i < count; i++, o += channels) {
+    // Written so that what is no number (a place on the vanishing line) becomes the first pixel.
+    const cx = px > 0 ? (px < lastX ? px | 0 : lastX) : 0;
+    const cy = py > 0 ? (py < lastY ? py | 0 : lastY) : 0;
+    px += dx;
+    dx += ddx;
+    py += dy;
+    dy += ddy;
+    const fx = cx & 255;
+    const fy = cy & 255;
+    const a = (cy >> 8) * stride + (cx >> 8) * channels;
+    // In the last column and row the neighbour has no weight; reading the pixel itself keeps within the photo.
+    const b = fx === 0 ? a : a + channels;
+    const below = fy === 0 ? 0 : stride;
+    const wd = fx * fy;
+    const wc = (fy << 8) - wd;
+    const wb = (fx << 8) - wd;
+    const wa = 65536 - wb - wc - wd;
+    const c = a + below;
+    const d = b + below;
+    out[o] =
+      ((data[a] as number) * wa + (data[b] as number) * wb + (data[c] as number) * wc + (data[d] as number) * wd + 32768) >> 16;
+    out[o + 1] =
+      ((data[a + 1] as number) * wa +
+        (data[b + 1] as number) * wb +
+        (data[c + 1] as number) * wc +
+        (data[d + 1] as number) * wd +
+        32768) >>
+      16;
+    out[o + 2] =
+      ((data[a + 2] as number) * wa +
+        (data[b + 2] as number) * wb +
+        (data[c + 2] as number) * wc +
+        (data[d + 2] as number) * wd +
+        32768) >>
+      16;
+    if (channels === 4) {
+      out[o + 3] =
+        ((data[a + 3] as number) * wa +
+          (data[b + 3] as number) * wb +
+          (data[c + 3] as number) * wc +
+          (data[d + 3] as number) * wd +
+          32768) >>
+        16;
+    }
+  }
 }

@@ -83,15 +83,23 @@ describe("fitHomography", () => {
     );
   });
 
-  test("turning, stretching and moving the photo changes nothing on the wood", () => {
-    const affine = fc.tuple(...Array.from({ length: 6 }, () => fc.double({ min: -3, max: 3, noNaN: true })));
+  test("turning, stretching, mirroring and moving the photo changes nothing on the wood", () => {
+    const between = (min: number, max: number) => fc.double({ min, max, noNaN: true });
+    const affine = fc.record({
+      turn: between(-4, 4),
+      wide: between(0.4, 2.5),
+      high: between(-2.5, -0.4),
+      shear: between(-1, 1),
+      x: between(-900, 900),
+    });
     fc.assert(
-      fc.property(photoFromStockMm, affine, (photo, [a, b, c, d, e, f]) => {
-        fc.pre(Math.abs((a as number) * (d as number) - (b as number) * (c as number)) > 0.2);
-        const move = (p: { x: number; y: number }) => ({
-          x: (a as number) * p.x + (b as number) * p.y + 500 * (e as number),
-          y: (c as number) * p.x + (d as number) * p.y + 500 * (f as number),
-        });
+      fc.property(photoFromStockMm, affine, (photo, { turn, wide, high, shear, x }) => {
+        // A turn after a shear after a stretch; `high` is negative, so the photo is mirrored too.
+        const move = (p: { x: number; y: number }) => {
+          const u = wide * p.x + shear * high * p.y;
+          const v = high * p.y;
+          return { x: Math.cos(turn) * u - Math.sin(turn) * v + x, y: Math.sin(turn) * u + Math.cos(turn) * v - x };
+        };
         const moved = fitHomography(seenBy(photo, corners).map((mark) => ({ ...mark, photo: move(mark.photo) })));
         if (moved === null) throw new Error("no fit");
         for (const { photo: p, stockMm } of seenBy(photo, grid)) {
