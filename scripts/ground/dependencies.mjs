@@ -1,4 +1,5 @@
 // Sees that node_modules is what package-lock.json says, and runs `npm ci` when it is not.
+import { spawnSync } from "node:child_process";
 import fs from "node:fs";
 import { withLock } from "./lock.mjs";
 import { run } from "./processes.mjs";
@@ -61,8 +62,8 @@ export async function ensureDependencies() {
   await withLock("dependencies", "installing the npm packages", async () => {
     if (isInstalled()) return;
     say("Installing the npm packages (a minute or two the first time).");
-    // The npm that started this command, if one did. NODE_ENV=production would leave out what the build and the tests need.
-    const [program, ...args] = process.env.npm_execpath ? [process.execPath, process.env.npm_execpath] : ["npm"];
+    const [program, ...args] = npmCommand();
+    // NODE_ENV=production would leave out what the build and the tests need.
     const code = await run(program, [...args, "ci", "--include=dev", "--include=optional"], { cwd: inProject() });
     if (code !== 0 || !isInstalled()) {
       throw new Refusal(
@@ -71,4 +72,23 @@ export async function ensureDependencies() {
       );
     }
   });
+}
+
+/** The newest npm that runs on every supported Node.js. */
+const readyNpm = "npm@10.9.9";
+
+/**
+ * The npm that started this command, if one did. Debian 13 ships npm 9.2, which cannot read a lock file whose overrides name a folder
+ * ("Invalid comparator: file:…"); it can fetch and run a newer one, though.
+ * @returns {[string, ...string[]]}
+ */
+function npmCommand() {
+  /** @type {[string, ...string[]]} */
+  const npm = process.env.npm_execpath ? [process.execPath, process.env.npm_execpath] : ["npm"];
+  const [program, ...args] = npm;
+  const version = spawnSync(program, [...args, "--version"], { encoding: "utf8" });
+  if (version.error) throw new Refusal("npm is not on the PATH.", "Install npm beside Node.js, then run the command again.");
+  if (Number.parseInt(version.stdout, 10) >= 10) return npm;
+  say(`npm ${version.stdout.trim()} is too old for the lock file; using ${readyNpm} for this step.`);
+  return [program, ...args, "exec", "--yes", `--package=${readyNpm}`, "--", "npm"];
 }
