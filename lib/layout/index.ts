@@ -1,12 +1,13 @@
 /** The one door of the layout core: everything other rooms may use, and nothing else. */
 export { type LyingPiece, lyingPieces } from "./fit/lying-piece";
+export { overBoardBy } from "./fit/on-board";
 export { outsideBy, usableOutline } from "./fit/outline";
 export type { Problem } from "./fit/problem";
 export { problems } from "./fit/problems";
 export { leastSlide } from "./fit/slide";
 export { type Snap, type SnappedSlide, type SnapTarget, snapSlide } from "./fit/snap";
 export { type Spans, spansOf } from "./fit/span";
-export { boundsOf, polygonToStock, rectToStock, toStock } from "./frame/apply-isometry";
+export { boundsOf, polygonToStock, rectToStock, toFace, toStock } from "./frame/apply-isometry";
 export { composed, inverted, quarterTurn, turnedVector } from "./frame/combine-isometries";
 export type { Isometry } from "./frame/isometry";
 export { identity } from "./frame/isometry";

@@ -141,6 +141,18 @@ export function boardOf(id: string, length: number, width: number, more: Partial
   return { id, length: um(length), width: um(width), thickness: um(27_000), outline: null, keepClear: [], ...more };
 }
 
+/** Long and wide beside what `arbitraryLayout` makes, with a few knots among it: sliding usually helps. */
+export const arbitraryRoomyBoard = (id: string): fc.Arbitrary<BoardFace> =>
+  fc
+    .record({
+      length: umBetween(2_000_000, 3_000_000),
+      width: umBetween(900_000, 1_500_000),
+      areas: fc.array(arbitraryKeepClear, { minLength: 1, maxLength: 3 }),
+    })
+    .map(({ length, width, areas }) =>
+      boardOf(id, length, width, { keepClear: areas.map((area, index) => ({ id: `k${index + 1}`, kind: "stain", area })) }),
+    );
+
 export const arbitraryBoard = (id: string): fc.Arbitrary<BoardFace> =>
   fc
     .record({

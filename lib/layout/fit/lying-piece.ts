@@ -12,7 +12,10 @@ export interface LyingPiece {
   readonly id: PieceId;
   readonly groupId: string;
   readonly stockId: StockId;
+  /** Finished size. */
   readonly spans: Spans;
+  /** As it must leave the saw: finished size and clean-up. */
+  readonly blank: Spans;
   /** Taken off each edge after sawing, by edge of the stock frame. */
   readonly cleanUp: Readonly<Record<Edge, Um>>;
 }
@@ -24,6 +27,14 @@ export function lyingPieces(layout: FaceLayout, pieces: readonly Piece[] = layOu
     const group = groupById.get(id);
     if (group === undefined || group.placement === null) return [];
     const spans = spansOf(boundsOf(polygonToStock(stockFromFace, outline)));
-    return [{ id, groupId: group.id, stockId, spans, cleanUp: cleanUpEdges(layout, group.placement.turns) }];
+    const cleanUp = cleanUpEdges(layout, group.placement.turns);
+    return [{ id, groupId: group.id, stockId, spans, blank: grownBy(spans, cleanUp), cleanUp }];
   });
+}
+
+function grownBy({ along, across }: Spans, cleanUp: LyingPiece["cleanUp"]): Spans {
+  return {
+    along: { from: along.from - cleanUp.left, to: along.to + cleanUp.right },
+    across: { from: across.from - cleanUp.top, to: across.to + cleanUp.bottom },
+  };
 }

@@ -6,7 +6,7 @@ import type { Um } from "../units/um";
 export type Problem =
   | { readonly kind: "not-placed"; readonly pieces: readonly PieceId[] }
   | { readonly kind: "unknown-stock"; readonly pieces: readonly PieceId[]; readonly stockId: StockId }
-  /** Reaches over the usable outline by this much at the worst corner. */
+  /** Reaches over the usable outline, or its sawn size with clean-up over the board, by this much at the worst corner. */
   | { readonly kind: "outside"; readonly piece: PieceId; readonly by: Um }
   /** Reaches into a keep-clear area; `by` is how far, `atX` where along the board, `slide` the least slide along the board of
    *  the piece's whole group that clears it (negative: left), null when none does. */

@@ -13,7 +13,7 @@ import { kerfsOf, missingBetween } from "./apart";
 import { middleAlong, reachInto } from "./keep-clear";
 import { type LyingPiece, lyingPieces } from "./lying-piece";
 import { wholeDepth } from "./noise";
-import { outsideBy, usableOutline } from "./outline";
+import { overBoardBy } from "./on-board";
 import type { Problem } from "./problem";
 import { leastSlide } from "./slide";
 
@@ -62,7 +62,7 @@ function againstGrain(layout: FaceLayout): Problem[] {
 function outside(piece: LyingPiece, boards: BoardsById): Problem[] {
   const board = boards.get(piece.stockId);
   if (board === undefined) return [];
-  const by = wholeDepth(outsideBy(piece.spans, usableOutline(board)));
+  const by = wholeDepth(overBoardBy(piece, board));
   return by === 0 ? [] : [{ kind: "outside", piece: piece.id, by: um(by) }];
 }
 

@@ -1,11 +1,11 @@
-/** The least slide along the board that mends a group: clear of every keep-clear area, inside the outline, the saw's loss from other groups. */
+/** The least slide along the board that mends a group: clear of every keep-clear area, on its board, the saw's loss from other groups. */
 import type { BoardFace } from "../stock/board";
 import { type Um, um } from "../units/um";
 import { type Kerfs, movesTooClose } from "./apart";
 import { leastMove, unionOf } from "./forbidden-moves";
 import { movesIntoArea } from "./keep-clear";
 import type { LyingPiece } from "./lying-piece";
-import { movesOutside, usableOutline } from "./outline";
+import { movesOverBoard } from "./on-board";
 import type { Span, StockAxis } from "./span";
 
 /** What the group moves among: the pieces of other groups that lie on the same board, and the board. */
@@ -17,10 +17,9 @@ export interface Surroundings {
 
 /** Every move of the group along one axis after which any of its pieces is in trouble, as open intervals in order. */
 export function troubledMoves(group: readonly LyingPiece[], { board, others, kerfs }: Surroundings, axis: StockAxis): Span[] {
-  const outline = usableOutline(board);
   return unionOf(
     group.flatMap((piece) => [
-      ...movesOutside(piece.spans, outline, axis),
+      ...movesOverBoard(piece, board, axis),
       ...board.keepClear.flatMap(({ area }) => movesIntoArea(piece.spans, area, axis)),
       ...others.flatMap((other) => movesTooClose(piece, other, axis, kerfs) ?? []),
     ]),

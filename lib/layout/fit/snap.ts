@@ -12,14 +12,14 @@ import { isForbidden, unionOf } from "./forbidden-moves";
 import { movesIntoArea } from "./keep-clear";
 import { type LyingPiece, lyingPieces } from "./lying-piece";
 import { NOISE_UM } from "./noise";
-import { movesOutside, usableOutline } from "./outline";
+import { movesOverBoard } from "./on-board";
 import type { Surroundings } from "./slide";
 import { movedSpans, type Span, type StockAxis } from "./span";
 
 export type SnapTarget =
   /** The saw's loss away from that piece. */
   | { readonly kind: "loss"; readonly piece: PieceId }
-  /** Touching the usable outline, or the end or edge of a board that has none. */
+  /** As far as the usable outline or the board goes; clean-up keeps a finished edge that much from the board's own. */
   | { readonly kind: "outline" }
   /** Just clear of that area. */
   | { readonly kind: "keep-clear"; readonly areaId: string }
@@ -83,7 +83,6 @@ function snapOf(candidate: Candidate | null): Snap | null {
 }
 
 function candidates(moving: readonly LyingPiece[], { board, others, kerfs }: Surroundings, axis: StockAxis): Candidate[] {
-  const outline = usableOutline(board);
   const atLoss = moving.flatMap((piece) =>
     others.flatMap((other) => {
       const forbidden = movesTooClose(piece, other, axis, kerfs);
@@ -91,7 +90,7 @@ function candidates(moving: readonly LyingPiece[], { board, others, kerfs }: Sur
     }),
   );
   const atOutline = moving.flatMap((piece) =>
-    movesOutside(piece.spans, outline, axis).map((forbidden) => ({ piece, forbidden, target: { kind: "outline" } as const })),
+    movesOverBoard(piece, board, axis).map((forbidden) => ({ piece, forbidden, target: { kind: "outline" } as const })),
   );
   const atAreas = moving.flatMap((piece) =>
     board.keepClear.flatMap(({ id, area }) =>
@@ -138,7 +137,11 @@ function candidate(move: number, edgeBefore: number, target: SnapTarget): Candid
 }
 
 function moved(pieces: readonly LyingPiece[], axis: StockAxis, by: number): LyingPiece[] {
-  return pieces.map((piece) => ({ ...piece, spans: movedSpans(piece.spans, axis, by) }));
+  return pieces.map((piece) => ({
+    ...piece,
+    spans: movedSpans(piece.spans, axis, by),
+    blank: movedSpans(piece.blank, axis, by),
+  }));
 }
 
 function nameOf(target: SnapTarget): string {

@@ -3,12 +3,18 @@
  * rounded to whole micrometres here and nowhere earlier.
  */
 import { type Um, um } from "../units/um";
+import { inverted } from "./combine-isometries";
 import type { Isometry } from "./isometry";
 import type { FacePoint, FaceRect, Frame, Point, Rect, StockPoint, StockRect } from "./point";
 
 /** The point of the wood that lies under a point of the face. */
 export function toStock(stockFromFace: Isometry, point: FacePoint): StockPoint {
   return applied(stockFromFace, point);
+}
+
+/** The point of the face that shows a point of the wood. */
+export function toFace(stockFromFace: Isometry, point: StockPoint): FacePoint {
+  return applied(inverted(stockFromFace), point);
 }
 
 /** The smallest upright rectangle in the wood that holds a rectangle of the face: the rectangle itself after quarter turns. */

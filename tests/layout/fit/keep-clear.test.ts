@@ -8,10 +8,10 @@ import { areaInside, shareInsideEllipse, shifted } from "./oracle";
 
 const arbitraryPiece: fc.Arbitrary<Spans> = fc
   .record({
-    x: umBetween(0, 900_000),
-    y: umBetween(0, 300_000),
-    width: umBetween(5_000, 300_000),
-    height: umBetween(5_000, 200_000),
+    x: umBetween(0, 700_000),
+    y: umBetween(0, 200_000),
+    width: umBetween(50_000, 500_000),
+    height: umBetween(50_000, 300_000),
   })
   .map(spansOf);
 

@@ -31,9 +31,9 @@ const arbitraryOutline = fc
   .map((radii) => starPolygon({ x: 500_000, y: 400_000 }, radii));
 const arbitraryPiece = fc
   .record({
-    x: umBetween(0, 900_000),
-    y: umBetween(0, 700_000),
-    width: umBetween(5_000, 300_000),
+    x: umBetween(200_000, 700_000),
+    y: umBetween(200_000, 500_000),
+    width: umBetween(5_000, 250_000),
     height: umBetween(5_000, 200_000),
   })
   .map(spansOf);
