@@ -26,5 +26,8 @@ export function openDatabase(url: string, connectionLimit = 10): OpenDatabase {
     supportBigNumbers: true,
     decimalNumbers: true,
   });
+  // Without gap locks: under REPEATABLE READ a locking read that finds nothing (no order of this face yet) keeps others from
+  // inserting theirs, and two that issue at once lock each other out. Rows that must not change meanwhile are locked by name.
+  pool.on("connection", (connection) => connection.query("SET SESSION TRANSACTION ISOLATION LEVEL READ COMMITTED"));
   return { db: drizzle(pool, { schema, mode: "planetscale" }), pool, databaseName: new URL(url).pathname.slice(1) };
 }

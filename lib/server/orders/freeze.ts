@@ -1,0 +1,138 @@
+/**
+ * From a saved layout to what an order freezes: pieces and cut programs worked out anew from the document, never taken from the
+ * browser. Refuses, in words, whatever cannot be cut as it lies.
+ */
+import "server-only";
+import type { listLayoutBoards } from "@/db/queries/layout";
+import type { readShop } from "@/db/queries/shop";
+import {
+  type BoardEdges,
+  type BoardFace,
+  boardEdges,
+  type CutProgram,
+  type CutRequest,
+  cutRequestFor,
+  defaultCutBudget,
+  type FaceLayout,
+  groupOf,
+  type PieceId,
+  type PlacedPiece,
+  piecesOnBoard,
+  planCuts,
+  problems,
+  type QuarterTurns,
+  um,
+  verifyProgram,
+} from "@/lib/layout";
+import { cutProgramSchema } from "@/lib/schemas/cut-program";
+import type { OrderSnapshot, SnapshotBoard } from "@/lib/schemas/order-snapshot";
+import { printTag } from "@/lib/schemas/tag";
+import type { KeepClearArea } from "@/lib/schemas/zones";
+import { cutRefusalSentence, problemSentence } from "@/lib/words/layout-problem";
+import { styleOf } from "@/lib/words/order-step";
+import { refused } from "../faults";
+
+export interface ToFreeze {
+  readonly shop: NonNullable<Awaited<ReturnType<typeof readShop>>>;
+  readonly job: OrderSnapshot["job"];
+  readonly face: OrderSnapshot["faces"][number];
+  readonly crosscutSaw: OrderSnapshot["crosscutSaw"];
+  readonly ripSaw: OrderSnapshot["ripSaw"];
+  readonly boards: readonly LayoutBoard[];
+}
+
+export interface LayoutBoard extends Pick<Awaited<ReturnType<typeof listLayoutBoards>>[number], "board" | "straightening"> {
+  readonly keepClear: readonly KeepClearArea[];
+}
+
+/** The snapshot, or a refusal that names everything in the way. */
+export function freeze(given: ToFreeze): OrderSnapshot {
+  const { shop, face } = given;
+  const heading = {
+    format: 1,
+    shop: { name: shop.name },
+    units: shop.units,
+    inchFraction: shop.inchFraction === 32 ? 32 : 64,
+    job: given.job,
+    faces: [face],
+    crosscutSaw: given.crosscutSaw,
+    ripSaw: given.ripSaw,
+  } as const;
+  const style = styleOf({ ...heading, faces: [face], boards: [] });
+  const tagOf = (stockId: string) => {
+    const found = given.boards.find(({ board }) => board.id === stockId);
+    return found ? printTag(found.board.tagNumber) : stockId;
+  };
+  const wrong = problems(face.layout, given.boards.map(boardFaceOf));
+  if (wrong.length > 0) throw refusedFor(wrong.map((problem) => problemSentence(problem, style, tagOf)));
+
+  const used = given.boards.filter(({ board }) => piecesOnBoard(face.layout, board.id).length > 0);
+  const boards = used.map((one): SnapshotBoard | string => {
+    const request = cutRequestOf(given, one);
+    const outcome = planCuts(request);
+    if (!outcome.ok) return cutRefusalSentence(outcome, style, tagOf(one.board.id));
+    const verdict = verifyProgram(request, outcome.program);
+    // The planner's work carried out by an independent replay: a fault here is ours, and nothing is issued on it.
+    if (!verdict.ok) throw new Error(`the cut program of ${tagOf(one.board.id)} does not hold: ${JSON.stringify(verdict)}`);
+    return snapshotBoard(face.layout, one, request, outcome.program);
+  });
+  const refusals = boards.filter((board) => typeof board === "string");
+  if (refusals.length > 0) throw refusedFor(refusals);
+  return { ...heading, faces: [face], boards: boards.filter((board) => typeof board !== "string") };
+}
+
+/** The first few in full; a long list is worked off at the layout table, where each problem can be seen. */
+function refusedFor(sentences: readonly string[]) {
+  const shown = sentences.slice(0, 3);
+  const more = sentences.length - shown.length;
+  return refused(`This layout cannot be cut yet. ${shown.join(" ")}${more > 0 ? ` And ${more} more.` : ""}`);
+}
+
+/** The board as its picture of that version shows it: size, outline and keep-clear areas are in the picture's frame. */
+function boardFaceOf({ board, straightening, keepClear }: LayoutBoard): BoardFace {
+  const { length, width, outline } = straightening;
+  return { id: board.id, length, width, thickness: board.thickness, outline, keepClear };
+}
+
+function cutRequestOf({ shop, face }: ToFreeze, one: LayoutBoard): CutRequest {
+  const board = boardFaceOf(one);
+  return cutRequestFor(face.layout, board, {
+    boardEdges: edgesAsTheyCame(piecesOnBoard(face.layout, board.id), board),
+    // Boards are marked along the line that truing reaches.
+    truingTakes: { longEdge: um(0), end: um(0) },
+    limits: shop,
+    budget: defaultCutBudget,
+  });
+}
+
+/**
+ * No shop is asked about every board yet, so its long edges count as rough: one is jointed before the first rip. An end needs no
+ * truing to be marked from; only where a front reaches to it must it become that front's edge.
+ */
+function edgesAsTheyCame(pieces: readonly PlacedPiece[], board: BoardFace): BoardEdges {
+  const flushLeft = pieces.some(({ rect, cleanUp }) => rect.x <= cleanUp.left);
+  const flushRight = pieces.some(({ rect, cleanUp }) => rect.x + rect.width + cleanUp.right >= board.length);
+  return { ...boardEdges(false, true), ...(flushLeft && { left: "rough" }), ...(flushRight && { right: "rough" }) };
+}
+
+function snapshotBoard(layout: FaceLayout, one: LayoutBoard, request: CutRequest, program: CutProgram): SnapshotBoard {
+  const { board, straightening, keepClear } = one;
+  const { length, width } = request.board;
+  return {
+    boardId: board.id,
+    tag: printTag(board.tagNumber),
+    species: board.species,
+    cut: board.cut,
+    place: board.place,
+    thickness: board.thickness,
+    length,
+    width,
+    straighteningId: straightening.id,
+    outline: straightening.outline,
+    keepClear: [...keepClear],
+    pieces: request.pieces.map(({ pieceId, label, rect }) => ({ pieceId, label, rect, turns: turnsOf(layout, pieceId) })),
+    program: cutProgramSchema.parse(program),
+  };
+}
+
+const turnsOf = (layout: FaceLayout, pieceId: PieceId): QuarterTurns => groupOf(layout, pieceId)?.placement?.turns ?? 0;

@@ -1,0 +1,13 @@
+/** The usual cautions in words. They remind; they do not teach. */
+import type { Caution } from "@/lib/layout";
+
+export const cautionWords: Readonly<Record<Caution, string>> = {
+  "short-crosscut-clamp": "Short part: clamp it to the gauge, hands well clear of the blade.",
+  "narrow-rip-push-stick": "Narrow rip: use a push stick.",
+  "guard-and-riving-knife": "Guard and riving knife on.",
+  "offcut-not-between-fence-and-blade": "Cut to a mark: what comes off must not be caught between fence or stop and blade.",
+  "too-short-for-planer": "Too short for jointer and planer: clean it up by hand.",
+};
+
+/** Printed on every order and shown with every step that has a caution. */
+export const firstOfAll = "The machine's manual, local rules and trained practice come first.";

@@ -1,0 +1,65 @@
+/** What is wrong with a layout, in plain words: what, by how much, and what would mend it. */
+import { type CutProgramOutcome, type LengthStyle, type PieceId, type Problem, printLength, type Um, um } from "@/lib/layout";
+import { labelRanges } from "./part-name";
+
+type CutRefusal = Extract<CutProgramOutcome, { ok: false }>;
+
+/** Boards by id, for the problems that name one. */
+export type TagOf = (stockId: string) => string;
+
+export function problemSentence(problem: Problem, style: LengthStyle, tagOf: TagOf): string {
+  const print = (length: Um) => printLength(length, style);
+  switch (problem.kind) {
+    case "not-placed":
+      return `${fronts(problem.pieces)} ${isOrAre(problem.pieces)} not laid on a board yet.`;
+    case "unknown-stock":
+      return `${fronts(problem.pieces)} ${liesOrLie(problem.pieces)} on a board that is not on the table.`;
+    case "outside":
+      return outsideSentence(problem.piece, print(problem.by));
+    case "keep-clear":
+      return `${fronts([problem.piece])} reaches ${print(problem.by)} into the ${problem.area} at ${print(problem.atX)}. ${slideSentence(problem.slide, print)}`;
+    case "too-close":
+      return tooCloseSentence(problem.pieces, print(problem.missing));
+    case "blocked":
+      return blockedSentence(problem.pieces, tagOf(problem.stockId));
+    case "grain":
+      return `${fronts(problem.pieces)} ${liesOrLie(problem.pieces)} across the grain that the face asks for. Turn the set by a quarter.`;
+  }
+}
+
+/** Why no cut program could be made for a board. */
+export function cutRefusalSentence(refusal: CutRefusal, style: LengthStyle, tag: string): string {
+  switch (refusal.reason) {
+    case "blocked":
+      return blockedSentence(refusal.pieces, tag);
+    case "too-close":
+      return tooCloseSentence(refusal.pieces, printLength(refusal.missing, style));
+    case "outside":
+      return outsideSentence(refusal.piece, printLength(refusal.by, style));
+    case "nothing-to-cut":
+      return `Nothing is to be cut from board ${tag}: its one front is the whole board.`;
+  }
+}
+
+/** "Front 3", "Fronts 1–4". */
+function fronts(pieces: readonly PieceId[]): string {
+  const labels = pieces.map((id) => id.replace(/^p/, ""));
+  return `${labels.length === 1 ? "Front" : "Fronts"} ${labelRanges(labels)}`;
+}
+
+const isOrAre = (pieces: readonly PieceId[]) => (pieces.length === 1 ? "is" : "are");
+const liesOrLie = (pieces: readonly PieceId[]) => (pieces.length === 1 ? "lies" : "lie");
+
+const outsideSentence = (piece: PieceId, by: string) =>
+  `${fronts([piece])} reaches ${by} over the usable outline of the board. Slide it back inside.`;
+
+const tooCloseSentence = (pieces: readonly [PieceId, PieceId], missing: string) =>
+  `${fronts(pieces)} lie ${missing} too close for the saw. Move them apart by that much.`;
+
+const blockedSentence = (pieces: readonly PieceId[], tag: string) =>
+  `${fronts(pieces)} block one another: no straight cut from edge to edge of board ${tag} parts them. Line them up or move one to another board.`;
+
+function slideSentence(slide: Um | null, print: (length: Um) => string): string {
+  if (slide === null) return "No slide along the board clears it: let the front loose or take another board.";
+  return `Slide the set ${print(um(Math.abs(slide)))} ${slide < 0 ? "left" : "right"}.`;
+}

@@ -1,0 +1,130 @@
+/** Every step of a cut order in words: the same on paper, at the bench and on the maker's screen. */
+import { type CutStep, type Edge, type LengthStyle, type Part, printedLength, type Um } from "@/lib/layout";
+import type { OrderSnapshot } from "@/lib/schemas/order-snapshot";
+import type { CleanUpGroup, OrderStep } from "@/lib/schemas/order-steps";
+import { cautionWords } from "./caution";
+import { cutTitle, type Title, truingNote } from "./cut-title";
+import { edgeNames, measuredFrom } from "./edge-name";
+import { labelRanges, partName, sizeFigures } from "./part-name";
+
+/** Something a step gives: "front" in words, its label for the box, its size. */
+export interface Gives {
+  readonly word: string;
+  readonly label: string | null;
+  readonly size: string | null;
+}
+
+export interface StepWords extends Title {
+  /** What to keep in mind, in the order of importance. */
+  readonly notes: readonly string[];
+  readonly cautions: readonly string[];
+  /** Where the setting is measured from; null where nothing is set. */
+  readonly from: string | null;
+  /** How it is dialled in or marked; for the bench, where there is room for it. */
+  readonly measure: string | null;
+  /** The number to set. */
+  readonly setting: Um | null;
+  readonly gives: readonly Gives[];
+}
+
+/** The shop's way to write lengths, as frozen with the order. */
+export function styleOf({ units, inchFraction }: OrderSnapshot): LengthStyle {
+  return units === "mm" ? { unit: "mm" } : { unit: "inch", denominator: inchFraction };
+}
+
+/** `before` is the step done just before, on paper the row above: it tells whether the saw stands right already. */
+export function stepWords(step: OrderStep, style: LengthStyle, before?: OrderStep): StepWords {
+  switch (step.kind) {
+    case "fetch":
+      return { ...bare, verb: "Fetch", rest: `board ${step.board.tag}${step.board.place && ` from ${step.board.place}`}` };
+    case "mark":
+      return { ...bare, verb: "Mark", rest: `board ${step.board.tag}`, notes: [markNote] };
+    case "test-cut":
+      return testCutWords(step);
+    case "cut":
+      return cutWords(step, style, before);
+    case "clean-up":
+      return cleanUpWords(step.group, style);
+    case "rack":
+      return { ...bare, verb: "Label and rack", rest: "what is left", gives: [givesOf(step.offcut, style)] };
+  }
+}
+
+/** Said once above the steps, and again as a step to tick. */
+export const markNote = "Face up as in the picture. Chalk the triangle over the fronts before any cut.";
+
+const bare = { notes: [], cautions: [], from: null, measure: null, setting: null, gives: [] } as const;
+
+function testCutWords({ saw, cuts }: Extract<OrderStep, { kind: "test-cut" }>): StepWords {
+  return {
+    ...bare,
+    verb: "Test cut",
+    rest: `in scrap with ${saw.name}`,
+    notes: [
+      `For ${cuts.map((cut) => (cut === "rip" ? "the rips" : "the crosscuts")).join(" and ")}. A true kerf that differs goes to the maker before the first cut.`,
+    ],
+    from: "planned kerf",
+    measure: "Planned kerf: measure the true one and write it on the sheet",
+    setting: saw.kerf,
+  };
+}
+
+function cutWords(step: Extract<OrderStep, { kind: "cut" }>, style: LengthStyle, before: OrderStep | undefined): StepWords {
+  const { cut, board } = step;
+  const truing = cut.kind === "true";
+  return {
+    ...cutTitle(cut, board),
+    notes: truing ? [truingNote(cut, style)] : cutNotes(cut, before),
+    cautions: cut.cautions.map((caution) => cautionWords[caution]),
+    from: truing ? edgeNames[cut.fromEdge] : measuredFrom(cut.fromEdge, cut.fromEdgeState),
+    measure: truing ? null : measure(cut),
+    setting: truing ? null : cut.setting,
+    gives: truing ? [] : cut.yields.filter((part) => part.kind !== "board").map((part) => givesOf(part, style)),
+  };
+}
+
+function cutNotes(cut: CutStep, before: OrderStep | undefined): string[] {
+  const notes: string[] = [];
+  if (cut.turn === "end-for-end") notes.push(cut.kind === "rip" ? "turn the other edge to the fence" : "turn end for end");
+  if (cut.bladeSide === "far") notes.push("cut on the near side of the mark");
+  if (before?.kind === "cut" && before.cut.kind === cut.kind && before.cut.settingNumber === cut.settingNumber)
+    notes.push("same setting");
+  return notes;
+}
+
+function measure(cut: CutStep): string {
+  const edge = measuredFrom(cut.fromEdge, cut.fromEdgeState);
+  if (cut.bladeSide === "far") return `Mark from the ${edge}, cut on the near side of the mark`;
+  return cut.kind === "rip" ? `Fence to blade, ${edge} against the fence` : `Stop to blade, ${edge} against the stop`;
+}
+
+function cleanUpWords(group: CleanUpGroup, style: LengthStyle): StepWords {
+  const labels = labelRanges(group.labels);
+  const size = sizeFigures({ width: group.length, height: group.width }, style);
+  return {
+    ...bare,
+    verb: "Clean up",
+    rest: `${group.labels.length === 1 ? "front" : "fronts"} ${labels}`,
+    notes: [takesNote(group.takes, style)],
+    gives: [{ word: "finished", label: null, size }],
+  };
+}
+
+function takesNote(takes: CleanUpGroup["takes"], style: LengthStyle): string {
+  const figure = (amount: Um) => printedLength(amount, style).figure;
+  const pair = (a: Edge, b: Edge, both: string): string[] => {
+    const [first, second] = [takes[a], takes[b]];
+    if (first !== undefined && first === second) return [`${figure(first)} off ${both}`];
+    return [a, b].flatMap((edge) => {
+      const amount = takes[edge];
+      return amount === undefined ? [] : [`${figure(amount)} off the ${edgeNames[edge]}`];
+    });
+  };
+  return [...pair("left", "right", "each end"), ...pair("top", "bottom", "each long edge")].join(", ");
+}
+
+function givesOf(part: Part, style: LengthStyle): Gives {
+  if (part.kind === "waste") return { word: "waste", label: null, size: null };
+  const word = part.kind === "offcut" ? "offcut" : "";
+  return { word, label: part.label ?? partName(part), size: sizeFigures(part.rect, style) };
+}
