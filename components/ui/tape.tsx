@@ -2,8 +2,8 @@
 /** The yellow tape: a ruler in the shop's units, drawn at the scale of the wood beside it. Horizontal; starts at its left end. */
 import { useMemo } from "react";
 import { mmFromUm, type Um } from "@/lib/layout";
+import { type TapeMark, tapeMarks } from "@/lib/words/tape-marks";
 import { useUnits } from "../shell/units";
-import { type TapeMark, tapeMarks } from "./tape-marks";
 
 const heightPx = 26;
 const markPx: Record<TapeMark["size"], number> = { short: 5, middle: 9, long: 14 };

@@ -1,6 +1,6 @@
 import { describe, expect, test } from "vitest";
-import { tapeMarks } from "@/components/ui/tape-marks";
 import { um } from "@/lib/layout";
+import { tapeMarks } from "@/lib/words/tape-marks";
 
 const figures = (length: number, pxPerMm: number, unit: "mm" | "inch") =>
   tapeMarks(um(length), pxPerMm, unit)

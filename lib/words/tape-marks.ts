@@ -9,9 +9,9 @@ export interface TapeMark {
   readonly figure: string;
 }
 
-/** Closer marks than this run into each other, px. */
+/** Closer marks than this run into each other: pixels on the screen, points on paper. */
 const nearestMarksPx = 4;
-/** Room for the widest figure, `2400` or `23 1⁄2`, px. */
+/** Room for the widest figure, `2400` or `23 1⁄2`, likewise. */
 const nearestFiguresPx = 46;
 const mmPerInch = 25.4;
 
@@ -21,7 +21,7 @@ const steps = {
   inch: [1 / 32, 1 / 16, 1 / 8, 1 / 4, 1 / 2, 1, 2, 3, 6, 12, 24, 48, 96, 192, 384],
 } as const;
 
-/** Marks from 0 to `length`; `pxPerMm` is the scale on the screen. Nothing for a length or scale of 0. */
+/** Marks from 0 to `length`; `pxPerMm` is the scale on screen or paper. Nothing for a length or scale of 0. */
 export function tapeMarks(length: Um, pxPerMm: number, unit: "mm" | "inch"): readonly TapeMark[] {
   if (!(length > 0) || !(pxPerMm > 0)) return [];
   const mmPerUnit = unit === "mm" ? 1 : mmPerInch;
