@@ -1,4 +1,6 @@
 /** The one door of the layout core: everything other rooms may use, and nothing else. */
+export { type Kerfs, kerfsOf } from "./fit/apart";
+export { type Clearance, clearances } from "./fit/clearance";
 export { type LyingPiece, lyingPieces } from "./fit/lying-piece";
 export { overBoardBy } from "./fit/on-board";
 export { outsideBy, usableOutline } from "./fit/outline";

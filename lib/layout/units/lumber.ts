@@ -9,7 +9,6 @@ import type { Um } from "./um";
 /** Which way an exact half goes. The rule takes turns within a tally, so the caller keeps count. */
 export type HalfGoes = "up" | "down";
 
-/** 144 in³ in whole micrometres cubed would pass 2^53, so board feet are reckoned in inches and feet. */
 const UM_PER_FOOT = UM_PER_INCH * INCHES_PER_FOOT;
 
 /** Board feet of a board by its plain measures, not rounded; under 1 in thick counts as 1 in. */

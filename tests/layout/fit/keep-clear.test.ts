@@ -106,12 +106,12 @@ describe("reachInto", () => {
       fc.property(arbitraryPiece, arbitraryKeepClear, (spans, area) => {
         const reach = reachInto(spans, area);
         fc.pre(reach > 2);
-        const after = (by: number) =>
+        const reachesAfter = (by: number) =>
           [shifted(spans, by, 0), shifted(spans, -by, 0), shifted(spans, 0, by), shifted(spans, 0, -by)].map((one) =>
             reachInto(one, area),
           );
-        expect(Math.min(...after(reach + 1e-3))).toBe(0);
-        expect(Math.min(...after(reach - 1))).toBeGreaterThan(0);
+        expect(Math.min(...reachesAfter(reach + 1e-3))).toBe(0);
+        expect(Math.min(...reachesAfter(reach - 1))).toBeGreaterThan(0);
       }),
       { numRuns: 500 },
     );
