@@ -94,6 +94,14 @@ describe.skipIf(!present)(present ? "camera files" : "camera files (skipped: ../
     expect(data[0]).toBeGreaterThanOrEqual(252);
   });
 
+  test("a HEIC cut short is refused as truncated", async () => {
+    const whole = read("heic/libheif_example.heic");
+    for (const share of [0.3, 0.7, 0.95]) {
+      const outcome = await inspectUpload(whole.subarray(0, Math.floor(whole.length * share)));
+      expect(outcome).toMatchObject({ ok: false, refusal: { reason: "truncated" } });
+    }
+  });
+
   test.each([
     ["bombs/sharp_giant-image.jpg", "too-many-pixels"],
     ["bombs/sharp_65536-uint32-limit.png", "too-many-pixels"],

@@ -21,6 +21,7 @@ import type { Marking } from "./marking";
 import { checkCorners, checkQuadrilateral, GREATEST_DEPTH_RATIO, type MarksRefusal, outsidePhotoPx } from "./marks-check";
 import { type OutputScale, outputScale, photoPxPerMmAt } from "./output-scale";
 import { type PhotoGeometry, stockMmFromPhoto } from "./photo-geometry";
+import { sheetLooksTurned } from "./sheet-sides";
 
 /** How far off one mark is, mm on the wood. */
 export interface MarkResidual {
@@ -46,6 +47,8 @@ export type MarkingFit =
       /** How far the worst corner of the board moves on the wood when one reference corner is marked one pixel off. */
       readonly mmPerPixelOfMark: number;
       readonly scale: OutputScale;
+      /** Length and width of the sheet seem to have changed places; always false with the board as reference. */
+      readonly sheetLooksTurned: boolean;
     }
   | { readonly ok: false; readonly refusal: MarksRefusal };
 
@@ -91,6 +94,7 @@ export function fitMarking(marking: Marking, photo: PhotoSize): MarkingFit {
     lens,
     mmPerPixelOfMark: mmPerPixelOfMark(marking, photo, fit),
     scale: outputScale(geometry, lengthMm, widthMm),
+    sheetLooksTurned: looksTurned(marking, fit),
   };
 }
 
@@ -152,6 +156,11 @@ function checkResiduals(marking: Marking, fit: ReferenceFit, mmPerPx: number): M
   const mark = worst(["corner", "extra"]);
   if (mark === null || mark.mm <= RESIDUAL_LIMIT_PX * mmPerPx) return null;
   return { reason: "residual", worst: mark.mark, index: mark.index, mm: mark.mm, limitMm: RESIDUAL_LIMIT_PX * mmPerPx };
+}
+
+function looksTurned({ reference }: Marking, fit: ReferenceFit): boolean {
+  const flatFromSheetMm = reference.kind === "sheet" ? invertHomography(fit.referenceMmFromFlat) : null;
+  return flatFromSheetMm !== null && sheetLooksTurned(flatFromSheetMm, reference.length / 1000, reference.width / 1000);
 }
 
 /** Each reference corner moved by a pixel along x and along y in turn, the lens held. */

@@ -29,7 +29,12 @@ export async function readHeader(bytes: Uint8Array): Promise<HeaderOutcome> {
   const identified = await identifyKind(bytes);
   if (identified.is === "animated") return refused({ reason: "animated" });
   if (identified.is === "other") return refused({ reason: "wrong-type", found: identified.found });
-  return judge(bytes, identified.kind);
+  const { kind } = identified;
+  // These tell their own length. Their decoders would take a file whose main picture is there and something after it is not.
+  if ((kind === "avif" || kind === "heic" || kind === "webp") && isCutOff(kind, bytes)) {
+    return refused({ reason: "truncated", detail: "the file is shorter than it says" });
+  }
+  return judge(bytes, kind);
 }
 
 async function judge(bytes: Uint8Array, kind: PictureKind): Promise<HeaderOutcome> {

@@ -38,7 +38,7 @@ export interface StraightenRequest {
   readonly source: Uint8Array;
   /** In pixels of the upright picture's full size. */
   readonly marking: Marking;
-  /** 0 to 1, never falling. */
+  /** 0 to 1, never falling; the last call of a picture that succeeds is 1. */
   readonly onProgress?: (share: number) => void;
   readonly signal?: AbortSignal;
 }
@@ -65,13 +65,18 @@ async function run<Name extends PixelJobName>(
   const raise = (): void => raiseCancelFlag(cancel);
   signal?.addEventListener("abort", raise, { once: true });
   const { port1, port2 } = new MessageChannel();
-  port1.on("message", (share: number) => {
+  let reached = 0;
+  const report = (share: number): void => {
+    reached = share;
     if (signal?.aborted !== true) onProgress?.(share);
-  });
+  };
+  port1.on("message", report);
   const task: PixelTask<Name> = { request, cancel, progress: port2 };
   try {
     const answer: PixelJobs[Name]["answer"] = await pixelPool().run(task, { name, transferList: [port2] });
     signal?.throwIfAborted();
+    // The answer takes another way than the reports and may overtake the last of them.
+    if (answer.ok && reached < 1) report(1);
     return answer;
   } catch (error) {
     signal?.throwIfAborted();

@@ -203,6 +203,15 @@ describe("a sheet lying on the board", () => {
     expect(fit.cornersMm[2]?.y).toBeCloseTo(200, 3);
   });
 
+  test("a sheet whose length and width have changed places is told, a rightly marked one is not", () => {
+    const right = sheetMarking(0, 3, { length: 297, width: 210 });
+    expect(fitted(right).sheetLooksTurned).toBe(false);
+    expect(
+      fitted({ ...right, reference: { ...right.reference, length: um(210_000), width: um(297_000) } }).sheetLooksTurned,
+    ).toBe(true);
+    expect(fitted(boardMarking(camera(0))).sheetLooksTurned).toBe(false);
+  });
+
   test("paper sizes are those of the standards", () => {
     expect(paperSizes).toEqual({ a4: { lengthUm: 297_000, widthUm: 210_000 }, letter: { lengthUm: 279_400, widthUm: 215_900 } });
   });
