@@ -13,6 +13,8 @@ export interface Box {
   readonly y1: number;
 }
 
+export type BoardEdge = "x low" | "x high" | "y low" | "y high";
+
 interface Tree {
   readonly unsafe: number;
   readonly late: number;
@@ -27,7 +29,9 @@ interface Tree {
 interface Shop {
   readonly limits: ShopLimits;
   readonly kerf: { readonly x: number; readonly y: number };
-  readonly boardLength: number;
+  readonly board: Box;
+  /** Edges of the board that nothing may be measured from: "x low", "y high", … */
+  readonly rough: ReadonlySet<BoardEdge>;
   /** Give up beyond so many trees; tests count how often that happens. */
   readonly most: number;
 }
@@ -35,8 +39,8 @@ interface Shop {
 const nothing: Tree = { unsafe: 0, late: 0, settings: new Set(), turns: 0, cuts: 0, racked: 0, first: "" };
 
 /** The least cost of all trees; "too many" when there are more than the shop's `most` different ones. */
-export function leastCost(board: Box, blanks: readonly Box[], shop: Shop): Cost | "too many" | "impossible" {
-  const trees = allTrees(board, blanks, shop);
+export function leastCost(blanks: readonly Box[], shop: Shop): Cost | "too many" | "impossible" {
+  const trees = allTrees(shop.board, blanks, shop);
   if (!trees) return "too many";
   const costs = trees.map((t): Cost => [t.unsafe, t.late, t.settings.size, t.turns, t.cuts, -t.racked]);
   const [least] = costs.sort((a, b) => a.reduce((order, value, i) => order || value - (b[i] ?? 0), 0));
@@ -68,13 +72,15 @@ function allTrees(box: Box, blanks: readonly Box[], shop: Shop): Tree[] | null {
 }
 
 interface Way {
-  readonly edge: string;
+  readonly edge: BoardEdge;
   readonly side: "near" | "far";
   readonly setting: number;
   readonly between: number;
 }
 
 function bladesAlong(axis: "x" | "y", box: Box, blanks: readonly Box[], shop: Shop) {
+  // Without a straight long edge nothing lies square against the fence.
+  if (axis === "x" && !isStraight(box, "y low", shop) && !isStraight(box, "y high", shop)) return [];
   const kerf = shop.kerf[axis];
   const of = (one: Box) => (axis === "x" ? { from: one.x0, to: one.x1 } : { from: one.y0, to: one.y1 });
   const whole = of(box);
@@ -101,27 +107,19 @@ function bladesAlong(axis: "x" | "y", box: Box, blanks: readonly Box[], shop: Sh
       ways.push({ edge: `${axis} low`, side: "far", setting: to - whole.from, between: lowest - whole.from });
     const cut = (a: number, b: number): Box => (axis === "x" ? { ...box, x0: a, x1: b } : { ...box, y0: a, y1: b });
     const parts = [cut(whole.from, lowest), cut(highest, whole.to)].filter((one) => one.x1 > one.x0 && one.y1 > one.y0);
-    blades.push({ ways, parts });
+    blades.push({ ways: ways.filter(({ edge }) => isStraight(box, edge, shop)), parts });
   }
   return blades;
 }
 
-function joined(
-  axis: "x" | "y",
-  way: Way,
-  parts: readonly Box[],
-  box: Box,
-  a: Tree,
-  b: Tree,
-  { limits, boardLength }: Shop,
-): Tree {
+function joined(axis: "x" | "y", way: Way, parts: readonly Box[], box: Box, a: Tree, b: Tree, { limits, board }: Shop): Tree {
   const held = axis === "y" ? box.x1 - box.x0 : Math.max(...parts.map((one) => one.x1 - one.x0));
   const first = way.edge;
   const turn = (tree: Tree) => Number(tree.first !== "" && tree.first !== first);
   return {
     unsafe:
       a.unsafe + b.unsafe + Number(held < limits.shortestCrosscut) + Number(axis === "y" && way.between < limits.narrowestRip),
-    late: a.late + b.late + Number(axis === "y" && box.x1 - box.x0 < boardLength),
+    late: a.late + b.late + Number(axis === "y" && box.x1 - box.x0 < board.x1 - board.x0),
     settings: new Set([...a.settings, ...b.settings, `${axis} ${way.side} ${way.setting}`]),
     turns: a.turns + b.turns + turn(a) + turn(b),
     cuts: a.cuts + b.cuts + 1,
@@ -133,6 +131,17 @@ function joined(
 function keep(trees: Map<string, Tree>, tree: Tree): void {
   const { settings, ...rest } = tree;
   trees.set(JSON.stringify([[...settings].sort(), rest]), tree);
+}
+
+/** An edge inside the board has been sawn. */
+function isStraight(box: Box, edge: BoardEdge, { board, rough }: Shop): boolean {
+  const at = {
+    "x low": box.x0 === board.x0,
+    "x high": box.x1 === board.x1,
+    "y low": box.y0 === board.y0,
+    "y high": box.y1 === board.y1,
+  };
+  return !(rough.has(edge) && at[edge]);
 }
 
 const same = (a: Box, b: Box) => a.x0 === b.x0 && a.x1 === b.x1 && a.y0 === b.y0 && a.y1 === b.y1;

@@ -6,7 +6,7 @@ import { planCuts } from "@/lib/layout/program/plan-cuts";
 import type { CutProgram } from "@/lib/layout/program/program";
 import { verifyProgram } from "@/lib/layout/program/verify-program";
 import { compareCosts, costOfProgram } from "./cost-of-program";
-import { sawableRequest } from "./random-layouts";
+import { sawableRequest, tiledRequest } from "./random-layouts";
 
 const runs = { numRuns: 120 };
 
@@ -31,6 +31,16 @@ describe("planCuts on layouts made by cutting a board up at random", () => {
       runs,
     );
     expect(found).toBeGreaterThan(runs.numRuns / 2);
+  });
+
+  test("never takes a plan for a part with straight edges to one that looks alike but has a rough edge", () => {
+    fc.assert(
+      fc.property(tiledRequest, (request) => {
+        const program = programOf(request);
+        if (program) expect(verifyProgram(request, program)).toEqual({ ok: true });
+      }),
+      { numRuns: 150 },
+    );
   });
 
   test("dials in whole positive settings, inside the part in hand, one number per setting", () => {

@@ -90,3 +90,38 @@ function setInto(rect: Rect, number: number, choose: (count: number) => number):
     },
   };
 }
+
+/** The same piece in the same room again and again, filling the board, whose edges are trued by nothing: equal shapes that differ only in their edges. */
+export const tiledRequest: fc.Arbitrary<CutRequest> = fc
+  .record({
+    columns: fc.integer({ min: 1, max: 4 }),
+    rows: fc.integer({ min: 1, max: 3 }),
+    inset: fc.record({ left: fc.nat(3), right: fc.nat(3), top: fc.nat(3), bottom: fc.nat(3) }),
+    kerf: fc.constantFrom(0, 2_400),
+    boardEdges: anyBoardEdges,
+  })
+  .map(({ columns, rows, inset, kerf, boardEdges }) => {
+    const cell = { width: 320_000, height: 140_000 };
+    const none = { left: um(0), right: um(0), top: um(0), bottom: um(0) };
+    const pieces = Array.from({ length: columns * rows }, (_, i): PlacedPiece => {
+      const x = (i % columns) * (cell.width + kerf) + inset.left * 1_300;
+      const y = Math.floor(i / columns) * (cell.height + kerf) + inset.top * 1_300;
+      const width = cell.width - (inset.left + inset.right) * 1_300;
+      const height = cell.height - (inset.top + inset.bottom) * 1_300;
+      return {
+        pieceId: `p${i + 1}`,
+        label: String(i + 1),
+        cleanUp: none,
+        rect: { x: um(x), y: um(y), width: um(width), height: um(height) },
+      };
+    });
+    return {
+      board: { length: um(columns * (cell.width + kerf) - kerf), width: um(rows * (cell.height + kerf) - kerf) },
+      pieces,
+      kerf: { rip: um(kerf), crosscut: um(kerf) },
+      boardEdges,
+      truingTakes: { longEdge: um(0), end: um(0) },
+      limits,
+      budget: 20_000,
+    };
+  });
