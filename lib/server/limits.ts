@@ -19,7 +19,8 @@ export type LimitName = keyof typeof limits;
 
 const limiter = (name: LimitName) =>
   new RateLimiterMySQL({
-    storeClient: openPool().pool,
+    // The pool below the one that answers with promises: this store asks by callback.
+    storeClient: openPool().pool.pool,
     storeType: "pool",
     dbName: openPool().databaseName,
     tableName: "rate_limit",

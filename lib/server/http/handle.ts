@@ -23,7 +23,11 @@ export interface Call<E extends Endpoint> {
 }
 
 type RouteContext = { params: Promise<Record<string, string | string[] | undefined>> };
-export type RouteHandler = (request: Request, context: RouteContext) => Promise<Response>;
+export interface RouteHandler {
+  (request: Request, context: RouteContext): Promise<Response>;
+  /** What it was made from: a test holds it against the file's place and name. */
+  readonly endpoint: Endpoint;
+}
 
 /** JSON bodies are documents of a few kilobytes; a layout of 1600 pieces stays below 1 MB. */
 const maxJsonBytes = 2 * 1024 * 1024;
@@ -32,15 +36,15 @@ const maxJsonBytes = 2 * 1024 * 1024;
 type Acted<E extends Endpoint> = undefined extends Answer<E> ? Promise<Response | null> : Promise<Answer<E> | Response>;
 
 export function handle<E extends Endpoint>(endpoint: E, act: (call: Call<E>) => Acted<E>): RouteHandler {
-  return async (request, context) => {
+  const answer = async (request: Request, context: RouteContext): Promise<Response> => {
     const requestId = crypto.randomUUID();
     const started = performance.now();
     const line = { requestId, method: request.method, path: new URL(request.url).pathname };
     try {
       const call = await readCall(endpoint, request, context, requestId);
-      const answer = write(endpoint, await act(call), requestId);
-      log().info({ ...line, status: answer.status, ms: Math.round(performance.now() - started) }, "answered");
-      return answer;
+      const response = write(endpoint, await act(call), requestId);
+      log().info({ ...line, status: response.status, ms: Math.round(performance.now() - started) }, "answered");
+      return response;
     } catch (error) {
       const fault =
         error instanceof FaultError ? error : new FaultError("unexpected", "Something went wrong on our side. Try again.");
@@ -49,6 +53,7 @@ export function handle<E extends Endpoint>(endpoint: E, act: (call: Call<E>) => 
       return faultResponse(fault, requestId);
     }
   };
+  return Object.assign(answer, { endpoint });
 }
 
 async function readCall<E extends Endpoint>(
