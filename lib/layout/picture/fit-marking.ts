@@ -59,29 +59,22 @@ export type MarkingFit =
 const RESIDUAL_LIMIT_PX = 6;
 const EDGE_LIMIT_PX = 30;
 
+const refused = (refusal: MarksRefusal): MarkingFit => ({ ok: false, refusal });
+
 /** Brings the marked photo to scale, or says why not. `photo`: size of the upright photo the marks were made on. */
 export function fitMarking(marking: Marking, photo: PhotoSize): MarkingFit {
   const refusal = checkMarks(marking, photo);
-  if (refusal !== null) return { ok: false, refusal };
+  if (refusal !== null) return refused(refusal);
   const straight = fitAtK1(marking, photo, 0);
-  if (straight === null)
-    return { ok: false, refusal: { reason: "in-line", of: referenceRectangle(marking), corner: 0, angleDeg: 0 } };
+  if (straight === null) return refused({ reason: "in-line", of: marking.reference.kind, corner: 0, angleDeg: 0 });
 
   const lens = chooseLens(marking, photo);
   const fit = lens.kind === "taken-out" ? (fitAtK1(marking, photo, lens.k1) ?? straight) : straight;
   const placed = placeBoard(marking, fit);
-  if (placed === null)
-    return {
-      ok: false,
-      refusal: { reason: "scale-varies", of: "board", ratio: Number.POSITIVE_INFINITY, limit: GREATEST_DEPTH_RATIO },
-    };
-
+  if (!placed.ok) return refused(placed.refusal);
   const { geometry, lengthMm, widthMm } = placed;
   const disagreement = checkResiduals(marking, fit, 1 / photoPxPerMmAt(geometry, { x: lengthMm / 2, y: widthMm / 2 }));
-  if (disagreement !== null) return { ok: false, refusal: disagreement };
-  const measured =
-    marking.reference.kind === "sheet" ? checkCorners("board", marking.corners, umFromMm(lengthMm), umFromMm(widthMm)) : null;
-  if (measured !== null) return { ok: false, refusal: measured };
+  if (disagreement !== null) return refused(disagreement);
 
   return {
     ok: true,
@@ -98,10 +91,6 @@ export function fitMarking(marking: Marking, photo: PhotoSize): MarkingFit {
   };
 }
 
-function referenceRectangle(marking: Marking): "board" | "sheet" {
-  return marking.reference.kind;
-}
-
 function checkMarks(marking: Marking, photo: PhotoSize): MarksRefusal | null {
   const { reference, corners } = marking;
   const groups = [
@@ -116,8 +105,11 @@ function checkMarks(marking: Marking, photo: PhotoSize): MarksRefusal | null {
       if (byPx > 0) return { reason: "outside-photo", mark, index, byPx };
     }
   }
-  if (reference.kind === "board") return checkCorners("board", corners, reference.length, reference.width);
-  return checkCorners("sheet", reference.corners, reference.length, reference.width) ?? checkQuadrilateral("board", corners);
+  if (reference.kind === "board") return checkCorners("board", corners, reference.length / 1000, reference.width / 1000);
+  return (
+    checkCorners("sheet", reference.corners, reference.length / 1000, reference.width / 1000) ??
+    checkQuadrilateral("board", corners)
+  );
 }
 
 function chooseLens(marking: Marking, photo: PhotoSize): LensOutcome {
@@ -128,19 +120,29 @@ function chooseLens(marking: Marking, photo: PhotoSize): LensOutcome {
   return fitLens((k1) => fitAtK1(marking, photo, k1)?.leftOver ?? null, points + 2 * marking.extraPoints.length);
 }
 
-/** Puts the stock frame on the board; null where a corner of the board would lie behind the camera. */
-function placeBoard(marking: Marking, fit: ReferenceFit): { geometry: PhotoGeometry; lengthMm: number; widthMm: number } | null {
+type PlacedBoard =
+  | { readonly ok: true; readonly geometry: PhotoGeometry; readonly lengthMm: number; readonly widthMm: number }
+  | { readonly ok: false; readonly refusal: MarksRefusal };
+
+/** Puts the stock frame on the board. A board measured by a sheet is judged only here, where its size is known. */
+function placeBoard(marking: Marking, fit: ReferenceFit): PlacedBoard {
   const { reference, corners } = marking;
   const flat = corners.map((corner) => flatFromPhoto(fit.lens, corner));
-  if (flat.some((p) => !(depthAt(fit.referenceMmFromFlat, p) > 0))) return null;
+  if (flat.some((p) => !(depthAt(fit.referenceMmFromFlat, p) > 0))) {
+    const ratio = Number.POSITIVE_INFINITY;
+    return { ok: false, refusal: { reason: "scale-varies", of: "board", ratio, limit: GREATEST_DEPTH_RATIO } };
+  }
   const extent =
     reference.kind === "board"
       ? { stockMmFromSheetMm: identityHomography, lengthMm: reference.length / 1000, widthMm: reference.width / 1000 }
       : boardExtent(flat.map((p) => applyHomography(fit.referenceMmFromFlat, p)));
+  const { lengthMm, widthMm } = extent;
+  const refusal = reference.kind === "board" ? null : checkCorners("board", corners, lengthMm, widthMm);
+  if (refusal !== null) return { ok: false, refusal };
   const stockMmFromFlat = composeHomographies(extent.stockMmFromSheetMm, fit.referenceMmFromFlat);
   const flatFromStockMm = invertHomography(stockMmFromFlat);
-  if (flatFromStockMm === null) return null;
-  return { geometry: { lens: fit.lens, stockMmFromFlat, flatFromStockMm }, lengthMm: extent.lengthMm, widthMm: extent.widthMm };
+  if (flatFromStockMm === null) return { ok: false, refusal: { reason: "in-line", of: "board", corner: 0, angleDeg: 0 } };
+  return { ok: true, geometry: { lens: fit.lens, stockMmFromFlat, flatFromStockMm }, lengthMm, widthMm };
 }
 
 function checkResiduals(marking: Marking, fit: ReferenceFit, mmPerPx: number): MarksRefusal | null {

@@ -2,7 +2,6 @@
  * Marks that cannot be a rectangle seen by a camera, or lie so badly that nothing can be made of them, refused with the reason
  * and how far it is off. Looks at four corners at a time; fitting and residuals are `fit-marking.ts`.
  */
-import type { Um } from "../units/um";
 import { fitHomography, type Mark } from "./fit-homography";
 import { type Homography, invertHomography, jacobianAt, type PhotoPoint, stretches } from "./homography";
 import type { PhotoSize } from "./lens";
@@ -54,6 +53,9 @@ export type MarksRefusal =
       readonly limitMm: number;
     };
 
+/** Nothing that is sawn or laid on a board as its measure is smaller, and no stock is larger. */
+const SHORTEST_MM = 10;
+const LONGEST_MM = 30_000;
 /** A hand marks to about a pixel; a side of this many keeps the scale within some percent. */
 const SHORTEST_SIDE_PX = 12;
 /** Corners nearer than this to a straight line let a pixel's error swing the perspective. */
@@ -72,10 +74,10 @@ export function outsidePhotoPx(p: PhotoPoint, photo: PhotoSize): number {
   return by <= OUTSIDE_ALLOWANCE * Math.hypot(photo.width, photo.height) ? 0 : by;
 }
 
-/** The reason the four corners cannot be used, or null. Corners in photo px, finite; true size in µm. */
-export function checkCorners(of: MarkedRectangle, corners: FourCorners, length: Um, width: Um): MarksRefusal | null {
-  if (![length, width].every((side) => side >= 10_000 && side <= 30_000_000)) return { reason: "size", of };
-  return checkQuadrilateral(of, corners) ?? checkView(of, corners, length / 1000, width / 1000);
+/** The reason the four corners cannot be used, or null. Corners in photo px, finite; true size in mm. */
+export function checkCorners(of: MarkedRectangle, corners: FourCorners, lengthMm: number, widthMm: number): MarksRefusal | null {
+  if (![lengthMm, widthMm].every((side) => side >= SHORTEST_MM && side <= LONGEST_MM)) return { reason: "size", of };
+  return checkQuadrilateral(of, corners) ?? checkView(of, corners, lengthMm, widthMm);
 }
 
 /** The part of `checkCorners` that needs no true size: for a board that is only measured. */

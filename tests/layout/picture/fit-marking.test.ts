@@ -282,20 +282,52 @@ describe("marks that are refused", () => {
     });
   });
 
+  const point = fc.record({
+    x: fc.double({ min: -50, max: 4050, noNaN: true }),
+    y: fc.double({ min: -50, max: 3050, noNaN: true }),
+  });
+  const anyFour = fc.tuple(point, point, point, point);
+  const finite = (fit: MarkingFit): boolean =>
+    !fit.ok ||
+    [...fit.geometry.stockMmFromFlat, fit.rmsMm, fit.mmPerPixelOfMark, fit.scale.widthPx, fit.scale.heightPx].every(
+      Number.isFinite,
+    );
+
   test("whatever four points are marked, the answer is a fit of finite numbers or a reason", () => {
-    const point = fc.record({
-      x: fc.double({ min: -50, max: 4050, noNaN: true }),
-      y: fc.double({ min: -50, max: 3050, noNaN: true }),
-    });
     fc.assert(
-      fc.property(fc.tuple(point, point, point, point), (marks) => {
-        const fit = fitMarking(boardMarking(camera(0), { corners: marks }), photo);
-        if (!fit.ok) return;
-        expect(fit.scale.widthPx).toBeGreaterThan(0);
-        expect([...fit.geometry.stockMmFromFlat, fit.rmsMm, fit.mmPerPixelOfMark].every(Number.isFinite)).toBe(true);
+      fc.property(anyFour, (marks) => finite(fitMarking(boardMarking(camera(0), { corners: marks }), photo))),
+      { numRuns: 500 },
+    );
+  });
+
+  test("the same with any sheet on any board, and with edge points anywhere", () => {
+    const edges = fc.array(fc.record({ photo: point, edge: fc.constantFrom<BoardEdge>("top", "right", "bottom", "left") }), {
+      maxLength: 6,
+    });
+    const share = fc.double({ min: 0, max: 1, noNaN: true });
+    // Rectangles with every corner moved by up to a third of a side; wholly free points would nearly all be refused.
+    const quadrilateral = fc
+      .tuple(point, share, share, fc.array(share, { minLength: 8, maxLength: 8 }))
+      .map(([from, w, h, moves]): FourCorners => {
+        const width = 100 + 2500 * w;
+        const height = 100 + 1500 * h;
+        const at = (i: number, right: number, down: number): PhotoPoint => ({
+          x: from.x / 3 + width * (right + ((moves[i] ?? 0) - 0.5) / 1.5),
+          y: from.y / 3 + height * (down + ((moves[i + 1] ?? 0) - 0.5) / 1.5),
+        });
+        return [at(0, 0, 0), at(2, 1, 0), at(4, 1, 1), at(6, 0, 1)];
+      });
+    let accepted = 0;
+    fc.assert(
+      fc.property(quadrilateral, quadrilateral, edges, (sheet, board, edgePoints) => {
+        const reference = { kind: "sheet", length: um(297_000), width: um(210_000), corners: sheet } as const;
+        const fit = fitMarking({ reference, corners: board, extraPoints: [], edgePoints }, photo);
+        if (fit.ok) accepted++;
+        return finite(fit);
       }),
       { numRuns: 500 },
     );
+    expect(accepted).toBeGreaterThan(5);
   });
 });
 
