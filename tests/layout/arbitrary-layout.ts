@@ -1,4 +1,7 @@
-/** Random layouts and boards for property tests: anything `layoutFaults` accepts, loose and swapped pieces and all turns included. */
+/**
+ * Random layouts and boards for property tests: anything `layoutFaults` accepts, loose and swapped pieces and all turns
+ * included.
+ */
 import fc from "fast-check";
 import {
   type AnchorX,
@@ -19,6 +22,7 @@ import {
   type QuarterTurns,
   type Spacing,
   swapPieces,
+  turnGroup,
   turnsAlongGrain,
   um,
 } from "@/lib/layout";
@@ -102,7 +106,7 @@ export const arbitraryLayout: fc.Arbitrary<FaceLayout> = arbitrarySet.chain((set
       if (group === undefined) continue;
       layout =
         stockId === "b1"
-          ? accepted(moveGroup(change.layout, group.id, { x, y }))
+          ? accepted(moveGroup(turns < 2 ? change.layout : accepted(turnGroup(change.layout, group.id)), group.id, { x, y }))
           : accepted(placeGroup(change.layout, group.id, stockId, { x, y }, turns));
     }
     for (const [p, q] of swaps) {

@@ -1,8 +1,9 @@
 /**
  * Fractions of an inch against published sizes.
  *
- * Sources: general and magazine articles on saw blades give 1/8 in = 3.18 mm, 3/32 in = 2.38 mm, 1/10 in = 2.54 mm, 5/64 in = 1.98 mm; the Architectural Woodwork
- * Standards give 1/4 in = 6.4 mm, 1/8 in = 3.2 mm, 1/2 in = 12.7 mm; machine settings of 1/64 in = 0.397 mm and 1/32 in = 0.794 mm follow from the international inch of 25.4 mm.
+ * Sources: general and magazine articles on saw blades give 1/8 in = 3.18 mm, 3/32 in = 2.38 mm, 1/10 in = 2.54 mm, 5/64 in =
+ * 1.98 mm; the Architectural Woodwork Standards give 1/4 in = 6.4 mm, 1/8 in = 3.2 mm, 1/2 in = 12.7 mm; machine settings of
+ * 1/64 in = 0.397 mm and 1/32 in = 0.794 mm follow from the international inch of 25.4 mm.
  */
 import { expect, test } from "vitest";
 import { parseLength, printLength } from "@/lib/layout";

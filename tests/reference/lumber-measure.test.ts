@@ -1,8 +1,9 @@
 /**
  * Lumber measure against published worked examples and tables.
  *
- * Sources: an export council's account of the NHLA rules (board foot, surface measure, the 2 × 6¼ in × 8 ft example, the tally of a
- * 5¼ in × 8½ ft board, stock under 1 in); two tables of rough and surfaced hardwood thickness that agree with one another.
+ * Sources: an export council's account of the NHLA rules (board foot, surface measure, the 2 × 6¼ in × 8 ft example, the
+ * tally of a 5¼ in × 8½ ft board, stock under 1 in); two tables of rough and surfaced hardwood thickness that agree with one
+ * another.
  */
 import { describe, expect, test } from "vitest";
 import {

@@ -1,6 +1,7 @@
 /**
- * Whether the saw gets between two pieces. They come apart by a crosscut when there is room for its loss between them along the board, or by a rip when
- * there is room across it; room equal to the loss is enough. The loss is the kerf and the clean-up of the two edges that face each other.
+ * Whether the saw gets between two pieces. They come apart by a crosscut when there is room for its loss between them along
+ * the board, or by a rip when there is room across it; room equal to the loss is enough. The loss is the kerf and the
+ * clean-up of the two edges that face each other.
  */
 import type { FaceLayout } from "../pattern/face-layout";
 import type { LyingPiece } from "./lying-piece";

@@ -1,6 +1,7 @@
 /**
- * How near the pieces lie to what they must keep clear of, for the maker's eye: "front 4 is 21 mm from a knot". Straight slides only, along the board or across
- * it, as wood is moved; a corner that misses an area diagonally may lie nearer than this says.
+ * How near the pieces lie to what they must keep clear of, for the maker's eye: "front 4 is 21 mm from a knot". Straight
+ * slides only, along the board or across it, as wood is moved; a corner that misses an area diagonally may lie nearer than
+ * this says.
  */
 import type { FaceLayout } from "../pattern/face-layout";
 import type { PieceId } from "../piece";

@@ -4,8 +4,8 @@
  * With s the matrix R·diag(rx², ry²)·Rᵀ of the turned ellipse, u the axis asked for and v the other, both from the centre:
  *   reach along u: U = √s_uu, at v = s_uv / U;   reach along v: V = √s_vv
  *   at a given v the ellipse spans u = (s_uv / s_vv)·v ± w·√(1 − v²/s_vv),   w = rx·ry / V
- * The upper end is concave in v, so its largest value in a band is at v = s_uv / U, or at the end of the band nearest to it; the lower end likewise
- * at −s_uv / U.
+ * The upper end is concave in v, so its largest value in a band is at v = s_uv / U, or at the end of the band nearest to it;
+ * the lower end likewise at −s_uv / U.
  */
 import type { KeepClearShape } from "../stock/board";
 import { coordinateOf, otherAxis, type Span, type StockAxis } from "./span";

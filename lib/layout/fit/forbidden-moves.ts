@@ -1,6 +1,6 @@
 /**
- * Sets of moves along one axis that are not allowed, as open intervals: a move to the very end of an interval touches what it avoids, and
- * touching is allowed. Real numbers, µm; the ends of the axis may be infinite.
+ * Sets of moves along one axis that are not allowed, as open intervals: a move to the very end of an interval touches what it
+ * avoids, and touching is allowed. Real numbers, µm; the ends of the axis may be infinite.
  */
 import { NOISE_UM } from "./noise";
 import type { Span } from "./span";
@@ -31,8 +31,8 @@ export function isForbidden(union: readonly Span[], move: number): boolean {
 }
 
 /**
- * The shortest whole-micrometre move that is allowed, 0 when standing still is; the one towards the origin where two are equally short; null when every
- * move is forbidden.
+ * The shortest whole-micrometre move that is allowed, 0 when standing still is; the one towards the origin where two are
+ * equally short; null when every move is forbidden.
  */
 export function leastMove(union: readonly Span[]): number | null {
   if (!isForbidden(union, 0)) return 0;

@@ -16,8 +16,8 @@ export function movesIntoArea(piece: Spans, area: KeepClearShape, axis: StockAxi
 }
 
 /**
- * How far a piece reaches into an area: the shortest straight move, along the board or across it, that takes it off; 0 where it only touches.
- * For an edge that cuts into a round knot this is the height of what it cuts off.
+ * How far a piece reaches into an area: the shortest straight move, along the board or across it, that takes it off; 0 where
+ * it only touches. For an edge that cuts into a round knot this is the height of what it cuts off.
  */
 export function reachInto(piece: Spans, area: KeepClearShape): number {
   if (isFarFrom(piece, area)) return 0;

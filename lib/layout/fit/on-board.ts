@@ -1,7 +1,7 @@
 /**
- * Whether a piece lies on its board: its finished size inside the usable outline, and what is sawn for it, the finished size and the clean-up of
- * its edges, inside the board itself. Bark may run through wood that is cleaned away, but nothing can be cleaned off where there is no wood.
- * Touching is inside.
+ * Whether a piece lies on its board: its finished size inside the usable outline, and what is sawn for it, the finished size
+ * and the clean-up of its edges, inside the board itself. Bark may run through wood that is cleaned away, but nothing can be
+ * cleaned off where there is no wood. Touching is inside.
  */
 import type { BoardFace } from "../stock/board";
 import { unionOf } from "./forbidden-moves";

@@ -1,5 +1,6 @@
 /**
- * Whether a piece lies inside the usable outline of a board, a simple polygon that may be concave. Touching from inside is inside.
+ * Whether a piece lies inside the usable outline of a board, a simple polygon that may be concave. Touching from inside is
+ * inside.
  *
  * A rectangle lies inside a simple polygon when no edge of the polygon passes through its open interior and its middle is inside.
  */
@@ -24,8 +25,8 @@ export function usableOutline(board: Pick<BoardFace, "length" | "width" | "outli
 }
 
 /**
- * How far a piece reaches over the outline: the larger of how far its worst corner lies outside, and how deep the outline cuts into it (a notch
- * can do that while all corners are inside). 0 when it is inside or touches.
+ * How far a piece reaches over the outline: the larger of how far its worst corner lies outside, and how deep the outline
+ * cuts into it (a notch can do that while all corners are inside). 0 when it is inside or touches.
  */
 export function outsideBy(piece: Spans, outline: readonly StockPoint[]): number {
   const overCorners = cornersOf(piece).map((corner) => (isInside(corner, outline) ? 0 : distanceTo(corner, outline)));
@@ -95,8 +96,8 @@ function distanceToEdge({ x, y }: Place, { start, end }: Edge): number {
 }
 
 /**
- * The greatest depth below the piece's sides that an edge reaches. The depth of a point is the least of its four distances to the sides, each linear
- * in t along the edge; the least of linear functions is largest at an end or where two of them meet.
+ * The greatest depth below the piece's sides that an edge reaches. The depth of a point is the least of its four distances to
+ * the sides, each linear in t along the edge; the least of linear functions is largest at an end or where two of them meet.
  */
 function depthInside({ along, across }: Spans, { start, end }: Edge): number {
   // Most edges lie wholly beyond one side.

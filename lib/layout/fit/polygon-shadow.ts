@@ -1,9 +1,10 @@
 /**
- * The shadow of a simple polygon, possibly concave: where it reaches along one axis within a band of the other, in as many stretches as it
- * has there. Exact.
+ * The shadow of a simple polygon, possibly concave: where it reaches along one axis within a band of the other, in as many
+ * stretches as it has there. Exact.
  *
- * Every part of the polygon inside the band is bounded from below by its own edges or by the lower end of the band. So the shadow of those, the
- * edges clipped to the band and the stretches of the band's lower end inside the polygon, is the shadow of the whole.
+ * Every part of the polygon inside the band is bounded from below by its own edges or by the lower end of the band. So the
+ * shadow of those, the edges clipped to the band and the stretches of the band's lower end inside the polygon, is the shadow
+ * of the whole.
  */
 import type { StockPoint } from "../frame/point";
 import { coordinateOf, otherAxis, type Span, type StockAxis } from "./span";

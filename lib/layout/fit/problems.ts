@@ -1,6 +1,6 @@
 /**
- * Everything that is wrong with a layout on its boards, except whether straight cuts can part it (the cut program says that). Runs while a group is
- * dragged, so it stays in closed forms and touches every piece and area once.
+ * Everything that is wrong with a layout on its boards, except whether straight cuts can part it (the cut program says that).
+ * Runs while a group is dragged, so it stays in closed forms and touches every piece and area once.
  */
 import type { FaceLayout } from "../pattern/face-layout";
 import { layOut, unplacedPieces } from "../pattern/lay-out";

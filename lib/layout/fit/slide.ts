@@ -1,4 +1,7 @@
-/** The least slide along the board that mends a group: clear of every keep-clear area, on its board, the saw's loss from other groups. */
+/**
+ * The least slide along the board that mends a group: clear of every keep-clear area, on its board, the saw's loss from other
+ * groups.
+ */
 import type { BoardFace } from "../stock/board";
 import { type Um, um } from "../units/um";
 import { type Kerfs, movesTooClose } from "./apart";

@@ -1,7 +1,8 @@
 /**
- * Snapping while groups are slid on a board: the raw slide of the pointer becomes the nearest slide, within a tolerance, at which a piece comes to lie the
- * saw's loss from another, along the outline, just clear of a keep-clear area, or flush with another piece. Along the board first, then across it
- * from there. Snapping helps the hand; whether the place is sound is for `problems.ts` to say.
+ * Snapping while groups are slid on a board: the raw slide of the pointer becomes the nearest slide, within a tolerance, at
+ * which a piece comes to lie the saw's loss from another, along the outline, just clear of a keep-clear area, or flush with
+ * another piece. Along the board first, then across it from there. Snapping helps the hand; whether the place is sound is for
+ * `problems.ts` to say.
  */
 import type { FaceLayout } from "../pattern/face-layout";
 import type { PieceId } from "../piece";

@@ -1,6 +1,7 @@
 /**
- * Upright rectangles of the stock as two spans, one along the grain and one across it, so that every test is written once and used on both
- * axes. On solid stock pieces are turned by quarter turns only, so a piece is always such a rectangle. Real numbers, µm.
+ * Upright rectangles of the stock as two spans, one along the grain and one across it, so that every test is written once and
+ * used on both axes. On solid stock pieces are turned by quarter turns only, so a piece is always such a rectangle. Real
+ * numbers, µm.
  */
 import type { StockPoint, StockRect } from "../frame/point";
 

@@ -1,6 +1,6 @@
 /**
- * Changes sizes, gaps, counts, loss or spacing of a layout. The anchor of every group stays where it is in the wood; the rest moves
- * away from it or towards it.
+ * Changes sizes, gaps, counts, loss or spacing of a layout. The anchor of every group stays where it is in the wood; the rest
+ * moves away from it or towards it.
  */
 import type { PieceId } from "../piece";
 import type { AnchorX, AnchorY, FaceLayout, GridFace } from "./face-layout";
@@ -22,8 +22,8 @@ export function changeCuts(layout: FaceLayout, cuts: Partial<CutChoices>): FaceL
 }
 
 /**
- * Another grid of fronts. Pieces that exist before and after stay in their groups; new ones join the set; what an anchor or a swap
- * refers to and is no longer there is given up.
+ * Another grid of fronts. Pieces that exist before and after stay in their groups; new ones join the set; what an anchor or a
+ * swap refers to and is no longer there is given up.
  */
 export function changeFace(layout: FaceLayout, face: GridFace): FaceChange {
   const ids = pieceIdsOf(face);
@@ -50,8 +50,8 @@ export function changeFace(layout: FaceLayout, face: GridFace): FaceChange {
 }
 
 /**
- * Slots are a permutation of the pieces. A cycle of it stays whole while all its pieces are there and of one size; otherwise all of
- * it is undone, so that the slots remain a permutation.
+ * Slots are a permutation of the pieces. A cycle of it stays whole while all its pieces are there and of one size; otherwise
+ * all of it is undone, so that the slots remain a permutation.
  */
 function undoneSwaps(layout: FaceLayout, face: GridFace, present: ReadonlySet<PieceId>): Set<PieceId> {
   const next = new Map(layout.groups.flatMap((group) => group.pieceIds.map((id) => [id, slotOf(group, id)] as const)));

@@ -8,8 +8,8 @@ import { cutBetween } from "./loss";
 const clockwise = ["top", "right", "bottom", "left"] as const satisfies readonly Edge[];
 
 /**
- * Clean-up per stock edge of a piece laid with these turns. On the face the edge before a cut is a piece's right or bottom one, the edge after
- * it the next piece's left or top one; outer edges of the face are sawn and cleaned like the rest.
+ * Clean-up per stock edge of a piece laid with these turns. On the face the edge before a cut is a piece's right or bottom
+ * one, the edge after it the next piece's left or top one; outer edges of the face are sawn and cleaned like the rest.
  */
 export function cleanUpEdges(layout: FaceLayout, turns: QuarterTurns): Readonly<Record<Edge, Um>> {
   const columnCut = layout[cutBetween("columns", layout.face.grain)];

@@ -1,8 +1,8 @@
 /**
- * Front sizes from an opening: so many fronts, the gaps between and around them, and how they grow from the first (top, or left) to the
- * last. What the sizes cannot take up without a fraction is left over and said: it widens the last outer gap, so that
- * opening = outer gap + fronts + gaps + outer gap to the last micrometre, fronts meant to be equal are equal, and constant steps are
- * constant.
+ * Front sizes from an opening: so many fronts, the gaps between and around them, and how they grow from the first (top, or
+ * left) to the last. What the sizes cannot take up without a fraction is left over and said: it widens the last outer gap, so
+ * that opening = outer gap + fronts + gaps + outer gap to the last micrometre, fronts meant to be equal are equal, and
+ * constant steps are constant.
  */
 import { type Um, um } from "../units/um";
 
@@ -13,7 +13,10 @@ export type Graduation =
   /** Each front is `ratio` times the one before. */
   | { readonly kind: "ratio"; readonly ratio: number };
 
-/** A division of the rule that sizes are brought down to: `um` parted into `parts`. Half a millimetre is 500/1, 1/64 in 25400/64. */
+/**
+ * A division of the rule that sizes are brought down to: `um` parted into `parts`. Half a millimetre is 500/1, 1/64 in
+ * 25400/64.
+ */
 export interface SizeStep {
   readonly um: number;
   readonly parts: number;

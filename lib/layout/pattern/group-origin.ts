@@ -1,6 +1,6 @@
 /**
- * The origin of a placed group: the stock point that carries the origin of the spaced grid. A placement says the same by way of the
- * anchor; the origin does not depend on it, so "leave the wood where it is" means "keep the origin".
+ * The origin of a placed group: the stock point that carries the origin of the spaced grid. A placement says the same by way
+ * of the anchor; the origin does not depend on it, so "leave the wood where it is" means "keep the origin".
  */
 import { quarterTurn, turnedVector } from "../frame/combine-isometries";
 import type { StockPoint } from "../frame/point";

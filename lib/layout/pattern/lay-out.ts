@@ -1,6 +1,6 @@
 /**
- * The pattern of solid fronts: from the document of a layout to its pieces. A piece that is laid on wood gets its map; one that is
- * not has only its place on the face. Judges nothing: what does not fit is said by `fit/problems.ts`.
+ * The pattern of solid fronts: from the document of a layout to its pieces. A piece that is laid on wood gets its map; one
+ * that is not has only its place on the face. Judges nothing: what does not fit is said by `fit/problems.ts`.
  */
 import { quarterTurn, turnedVector } from "../frame/combine-isometries";
 import type { FacePoint, FaceRect } from "../frame/point";

@@ -1,6 +1,6 @@
 /**
- * Whether a layout that came from outside (a file, the wire) means anything at all, before `layOut` is asked. Faults are mistakes of
- * a program, not of a maker: what a maker can get wrong is in `fit/problems.ts`.
+ * Whether a layout that came from outside (a file, the wire) means anything at all, before `layOut` is asked. Faults are
+ * mistakes of a program, not of a maker: what a maker can get wrong is in `fit/problems.ts`.
  */
 import type { PieceId } from "../piece";
 import type { FaceLayout } from "./face-layout";

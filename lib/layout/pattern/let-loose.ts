@@ -1,4 +1,7 @@
-/** Lets a piece loose from the set, or takes it back. Letting loose moves no wood; taking back returns the piece to its place in the set. */
+/**
+ * Lets a piece loose from the set, or takes it back. Letting loose moves no wood; taking back returns the piece to its place
+ * in the set.
+ */
 import type { PieceId } from "../piece";
 import type { FaceLayout, PieceGroup } from "./face-layout";
 import { groupAt, originOf } from "./group-origin";

@@ -25,7 +25,10 @@ export function spacingOf(cut: CutLoss, gap: Um, spacing: Spacing): Um {
   return spacing === "followGap" ? um(Math.max(loss, gap)) : loss;
 }
 
-/** How far the figure jumps at the seam, along its normal: positive where wood is missing, negative where some is seen twice over. */
+/**
+ * How far the figure jumps at the seam, along its normal: positive where wood is missing, negative where some is seen twice
+ * over.
+ */
 export function jumpAcrossGap(cut: CutLoss, gap: Um, spacing: Spacing): Um {
   return um(spacingOf(cut, gap, spacing) - gap);
 }

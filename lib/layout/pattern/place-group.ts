@@ -40,8 +40,9 @@ export function moveGroup(layout: FaceLayout, groupId: string, by: { readonly x:
 }
 
 /**
- * Turns the group end for end about the middle of its own rectangle, which stays exactly where it is. With o the origin, R the turn and
- * c₀, c₁ the opposite corners of the group's box in the spaced grid: o + R·c₀ = o' − R·c₁, so o' = o + R·(c₀ + c₁), a whole number.
+ * Turns the group end for end about the middle of its own rectangle, which stays exactly where it is. With o the origin, R
+ * the turn and c₀, c₁ the opposite corners of the group's box in the spaced grid: o + R·c₀ = o' − R·c₁, so o' = o + R·(c₀ +
+ * c₁), a whole number.
  */
 export function turnGroup(layout: FaceLayout, groupId: string): LayoutChange {
   const group = groupById(layout, groupId);

@@ -1,6 +1,6 @@
 /**
- * Two pieces of one size change places in the wood: each takes the other's slot and the other's group, so that no wood moves and only
- * the labels on it change.
+ * Two pieces of one size change places in the wood: each takes the other's slot and the other's group, so that no wood moves
+ * and only the labels on it change.
  */
 import type { PieceId } from "../piece";
 import type { FaceLayout, PieceGroup } from "./face-layout";
@@ -32,7 +32,10 @@ export function swapPieces(layout: FaceLayout, p: PieceId, q: PieceId): LayoutCh
   return changed(withSlots(withSlots(layout, groupP, slotsP), groupQ, slotsQ));
 }
 
-/** The group with other pieces in its slots, its wood where it was: an anchor piece may have left the group or changed its slot. */
+/**
+ * The group with other pieces in its slots, its wood where it was: an anchor piece may have left the group or changed its
+ * slot.
+ */
 function withSlots(layout: FaceLayout, group: PieceGroup, slots: ReadonlyMap<PieceId, PieceId>): FaceLayout {
   return withGroup(layout, groupAt(layout, groupWith(layout, group, slots), originOf(layout, group)));
 }

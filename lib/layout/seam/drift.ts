@@ -1,9 +1,11 @@
 /**
- * Drift: jumps added up. How far the figure of each piece has wandered from an uncut board that runs past the whole face and agrees with
- * it at the anchor of the set, such as a rail above a row. The centre anchor halves the largest.
+ * Drift: jumps added up. How far the figure of each piece has wandered from an uncut board that runs past the whole face and
+ * agrees with it at the anchor of the set, such as a rail above a row. Where all jumps go one way the centre anchor halves the
+ * largest.
  *
- * The uncut board is the map that takes the set's anchor point on the hung face to its point in the wood, with the set's turn; the drift
- * of a piece is its own shift less that map's. A piece from other stock, or turned the other way, has no drift that one figure can tell.
+ * The uncut board is the map that takes the set's anchor point on the hung face to its point in the wood, with the set's
+ * turn; the drift of a piece is its own shift less that map's. A piece from other stock, or turned the other way, has no
+ * drift that one figure can tell.
  */
 import { quarterTurn, turnedVector } from "../frame/combine-isometries";
 import { faceAnchor } from "../pattern/anchor";

@@ -1,8 +1,10 @@
 /**
- * The carpenter's triangle: one triangle drawn across the whole face, so that each piece carries its own part of it and the set goes together one way
- * only. Cut here into the line segments on each piece, on the face and in the wood. What falls into a gap is on no piece.
+ * The carpenter's triangle: one triangle drawn across the whole face, so that each piece carries its own part of it and the
+ * set goes together one way only. Cut here into the line segments on each piece, on the face and in the wood. What falls into
+ * a gap is on no piece.
  *
- * Every front of a row or a stack carries part of it. On a larger grid a front beside the apex may carry none: its label alone places it.
+ * Every front of a row or a stack carries part of it. On a larger grid a front beside the apex may carry none: its label
+ * alone places it.
  */
 import { toStock } from "../frame/apply-isometry";
 import type { FacePoint, FaceRect, StockPoint } from "../frame/point";
@@ -31,7 +33,10 @@ export interface TriangleMark {
   readonly segments: readonly TriangleSegment[];
 }
 
-/** The triangle stays this share of the shorter side of the face away from its edges, so that the base is a line on the wood, not its edge. */
+/**
+ * The triangle stays this share of the shorter side of the face away from its edges, so that the base is a line on the wood,
+ * not its edge.
+ */
 export const TRIANGLE_INSET = 1 / 12;
 
 /** The part of the triangle on every piece, in reading order. */
@@ -91,7 +96,10 @@ function triangleLines(layout: FaceLayout, base: TriangleBase): Line[] {
   ];
 }
 
-/** The part of a line inside a rectangle, edges included (Liang and Barsky 1984); null where it only passes by or touches a corner. */
+/**
+ * The part of a line inside a rectangle, edges included (Liang and Barsky 1984); null where it only passes by or touches a
+ * corner.
+ */
 function clippedTo(rect: FaceRect, { from, to }: Line): { from: FacePoint; to: FacePoint } | null {
   const [dx, dy] = [to.x - from.x, to.y - from.y];
   let [enter, leave] = [0, 1];

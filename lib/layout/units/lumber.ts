@@ -1,7 +1,8 @@
 /**
- * Lumber measure in board feet. Source: an export council's account of the NHLA rules: a board foot is 1 ft × 1 ft × 1 in, so BF = W(in)·L(ft)·T(in)/12;
- * surface measure = W·L/12 rounded to the whole number; BF = surface measure × thickness; stock under 1 in counts as 1 in; in a tally widths go to the nearest
- * whole inch, exact halves up and down by turns, and lengths down to the whole foot.
+ * Lumber measure in board feet. Source: an export council's account of the NHLA rules: a board foot is 1 ft × 1 ft × 1 in, so
+ * BF = W(in)·L(ft)·T(in)/12; surface measure = W·L/12 rounded to the whole number; BF = surface measure × thickness; stock
+ * under 1 in counts as 1 in; in a tally widths go to the nearest whole inch, exact halves up and down by turns, and lengths
+ * down to the whole foot.
  */
 import { INCHES_PER_FOOT, UM_PER_INCH } from "./length-style";
 import type { Um } from "./um";

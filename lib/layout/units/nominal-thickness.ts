@@ -1,7 +1,7 @@
 /**
- * Nominal thickness of rough lumber in quarters of an inch, and the least it comes to when surfaced on two sides. Source: two published
- * tables of rough and surfaced hardwood thickness that agree (NHLA grading minimums). They are grading minimums: real 4/4 stock may be anything from 3/4 to 15/16 in,
- * so the board's own measured thickness decides wherever a saw is set.
+ * Nominal thickness of rough lumber in quarters of an inch, and the least it comes to when surfaced on two sides. Source: two
+ * published tables of rough and surfaced hardwood thickness that agree (NHLA grading minimums). They are grading minimums:
+ * real 4/4 stock may be anything from 3/4 to 15/16 in, so the board's own measured thickness decides wherever a saw is set.
  */
 import { UM_PER_INCH } from "./length-style";
 import { type Um, um } from "./um";

@@ -22,8 +22,8 @@ function distanceToSegment(p: Place, a: Place, b: Place): number {
 }
 
 /**
- * Squeezes the plane so that the ellipse becomes the unit circle; the piece becomes a parallelogram. Positive: it reaches into the circle by that share of the
- * radius; negative: it misses it.
+ * Squeezes the plane so that the ellipse becomes the unit circle; the piece becomes a parallelogram. Positive: it reaches
+ * into the circle by that share of the radius; negative: it misses it.
  */
 export function shareInsideEllipse(piece: Spans, area: Extract<KeepClearShape, { shape: "ellipse" }>): number {
   const turn = (area.turnDeg * Math.PI) / 180;
@@ -40,7 +40,10 @@ export function shareInsideEllipse(piece: Spans, area: Extract<KeepClearShape, {
   return centreInside ? 1 : 1 - nearest;
 }
 
-/** Area of a simple polygon inside a rectangle, by cutting it along one side after the other (Sutherland and Hodgman 1974). µm². */
+/**
+ * Area of a simple polygon inside a rectangle, by cutting it along one side after the other (Sutherland and Hodgman 1974).
+ * µm².
+ */
 export function areaInside(polygon: readonly Place[], { along, across }: Spans): number {
   const halfPlanes: ((p: Place) => number)[] = [
     (p) => p.x - along.from,

@@ -148,6 +148,14 @@ describe("swapPieces", () => {
     );
   });
 
+  test("moves no wood when the anchor piece itself changes places", () => {
+    const anchored = accepted(changeAnchor(row(200_000, 200_000, 200_000), { piece: "p1" }, "top"));
+    const swapped = accepted(swapPieces(anchored, "p1", "p3"));
+    expect(origin(swapped, "p2")).toEqual(origin(anchored, "p2"));
+    expect(origin(swapped, "p3")).toEqual(origin(anchored, "p1"));
+    expect(swapped.groups[0]?.placement?.at.x).toBe(100_000 + 2 * 203_000 + 100_000);
+  });
+
   test("refuses pieces of different sizes and says both, even when they differ by a micrometre", () => {
     expect(swapPieces(row(200_000, 200_001), "p1", "p2")).toEqual({
       ok: false,
