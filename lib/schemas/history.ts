@@ -9,6 +9,10 @@ export const historyRowSchema = z.object({
   by: z.string().nullable(),
   noun: z.string(),
   nounId: idSchema,
+  /** What the thing is called now: "B-041", "Map chest"; null when it is gone. */
+  label: z.string().nullable(),
+  /** Where to see it. */
+  path: z.string().nullable(),
   verb: z.string(),
   detail: z.record(z.string(), z.json()),
 });

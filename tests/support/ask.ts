@@ -21,7 +21,9 @@ export async function ask<E extends Endpoint>(
     headers: { "content-type": "application/json", ...headers },
     ...(sent.body !== undefined && { body: JSON.stringify(sent.body) }),
   });
-  const params: Record<string, string> = Object.fromEntries(Object.entries(sent.params ?? {}).map(([name, value]) => [name, String(value)]));
+  const params: Record<string, string> = Object.fromEntries(
+    Object.entries(sent.params ?? {}).map(([name, value]) => [name, String(value)]),
+  );
   const response = await handler(request, { params: Promise.resolve(params) });
   const text = await response.text();
   const json = response.headers.get("content-type")?.includes("json") ?? false;
