@@ -43,15 +43,18 @@ export function boardPageOf(db: Connection, shopId: ShopId, query: BoardQuery) {
   const { column, index } = sorts[query.sort];
   const falling = (query.direction === "down") !== (query.sort === "newest");
   const towards = falling ? desc : asc;
-  return db
-    .select(withPicture)
-    .from(board, { forceIndex: [index] })
-    .leftJoin(boardPicture, eq(boardPicture.boardId, board.id))
-    .leftJoin(straightening, eq(straightening.id, boardPicture.straighteningId))
-    .where(matching(db, shopId, query))
-    .orderBy(towards(column), towards(board.id))
-    .limit(query.pageSize)
-    .offset((query.page - 1) * query.pageSize);
+  return (
+    db
+      .select(withPicture)
+      .from(board, { forceIndex: [index] })
+      .leftJoin(boardPicture, eq(boardPicture.boardId, board.id))
+      .leftJoin(straightening, eq(straightening.id, boardPicture.straighteningId))
+      .where(matching(db, shopId, query))
+      // A tag has no equal; elsewhere the id breaks ties. The unique index would not serve an order that names the id as well.
+      .orderBy(...(query.sort === "tag" ? [towards(column)] : [towards(column), towards(board.id)]))
+      .limit(query.pageSize)
+      .offset((query.page - 1) * query.pageSize)
+  );
 }
 
 /** How many boards the query finds in all, and the longest of them in µm; 0 when there is none. */
