@@ -144,14 +144,6 @@ describe("autosave", () => {
     await w.answer({ kind: "unreachable" });
     await expect(failing).resolves.toBe(false);
   });
-
-  it("after it is stopped nothing is sent", () => {
-    const w = world();
-    w.sync.changed(slid(rowDocument(), 1));
-    w.sync.stop();
-    w.runTimers();
-    expect(w.requests).toHaveLength(0);
-  });
 });
 
 describe("a second window", () => {

@@ -23,8 +23,8 @@ export interface SyncWorld {
   /** Calls back after so many milliseconds; returns the way to call it off. */
   readonly after: (ms: number, then: () => void) => () => void;
   readonly onStatus: (status: SyncStatus) => void;
-  /** A second window's changes to other pieces were taken in: the table shows `document` from now on. */
-  readonly onMerged: (document: TableDocument, updatedBy: string) => void;
+  /** What a second window saved was taken in: the table shows `document` from now on. `oursKept`: together with what was done here. */
+  readonly onMerged: (document: TableDocument, updatedBy: string, oursKept: boolean) => void;
 }
 
 export interface Sync {
@@ -38,7 +38,6 @@ export interface Sync {
   readonly revision: () => number;
   /** Resolves once nothing is left to save, or false when something stands in the way. */
   readonly settled: () => Promise<boolean>;
-  readonly stop: () => void;
 }
 
 /** A drag or a few presses of a key are one request. */
@@ -56,7 +55,6 @@ export function createSync(world: SyncWorld, saved: TableDocument, revision: num
   let present = saved;
   let inFlight = false;
   let failures = 0;
-  let stopped = false;
   let status: SyncStatus = { kind: "saved" };
   let callOff: (() => void) | null = null;
   let waiting: ((done: boolean) => void)[] = [];
@@ -81,7 +79,7 @@ export function createSync(world: SyncWorld, saved: TableDocument, revision: num
   };
 
   const send = async () => {
-    if (stopped || inFlight || status.kind === "conflict") return;
+    if (inFlight || status.kind === "conflict") return;
     callOff?.();
     callOff = null;
     if (sameBytes(present, base.document)) return show({ kind: "saved" });
@@ -90,7 +88,7 @@ export function createSync(world: SyncWorld, saved: TableDocument, revision: num
     inFlight = true;
     const outcome = await world.save({ baseRevision: base.revision, document: sent });
     inFlight = false;
-    if (!stopped) take(outcome, sent);
+    take(outcome, sent);
   };
 
   const take = (outcome: SaveOutcome, sent: TableDocument) => {
@@ -113,7 +111,7 @@ export function createSync(world: SyncWorld, saved: TableDocument, revision: num
     base = theirs;
     present = merge.document;
     show({ kind: "saving" });
-    world.onMerged(merge.document, theirs.updatedBy);
+    world.onMerged(merge.document, theirs.updatedBy, true);
     void send();
   };
 
@@ -132,7 +130,7 @@ export function createSync(world: SyncWorld, saved: TableDocument, revision: num
       if (keep === "theirs") {
         present = theirs.document;
         show({ kind: "saved" });
-        world.onMerged(theirs.document, theirs.updatedBy);
+        world.onMerged(theirs.document, theirs.updatedBy, false);
         return;
       }
       show({ kind: "saving" });
@@ -147,10 +145,6 @@ export function createSync(world: SyncWorld, saved: TableDocument, revision: num
       if (isSaving() && !inFlight) void send();
       if (isSaving()) return new Promise((tell) => waiting.push(tell));
       return status.kind === "saved";
-    },
-    stop() {
-      stopped = true;
-      callOff?.();
     },
   };
 }

@@ -1,0 +1,14 @@
+/** How the table is looked at: not part of the document, not undone, not saved. */
+import { createStore, type Store } from "../store";
+import { type Size, type View, wholeView } from "./geometry";
+
+export interface ViewState {
+  readonly view: View;
+  readonly showTriangle: boolean;
+  /** In CSS pixels; null until the sides are on the screen. */
+  readonly sides: { readonly show: Size; readonly stock: Size } | null;
+}
+
+export function createViewState(): Store<ViewState> {
+  return createStore<ViewState>({ view: wholeView, showTriangle: true, sides: null });
+}
