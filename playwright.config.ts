@@ -8,6 +8,7 @@ if (!baseURL) throw new Error("BASE_URL is not set. Run the browser tests with: 
 export default defineConfig({
   testDir: "tests/e2e",
   testMatch: "**/*.spec.ts",
+  globalSetup: "./tests/e2e/support/bundle-make-shop.ts",
   outputDir: ".data/reports/e2e",
   reporter: [["list"], ["json", { outputFile: ".data/reports/e2e.json" }]],
   // One worker: the tests share one server and one database on what may be a small machine. No retries: a test that fails now and then is broken.

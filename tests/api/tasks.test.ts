@@ -176,3 +176,21 @@ describe("a task of another shop", () => {
     expect((await state(id))?.state).toBe("queued");
   });
 });
+
+describe("a task that cannot even be abandoned", () => {
+  it("ends as failed instead of being started for ever", async () => {
+    const id = await queue();
+    const row = await claimTask(database(), new Date(), inHalfAMinute());
+    if (!row) throw new Error("nothing claimed");
+    const broken: TaskKind = {
+      work: async () => {
+        throw new Error("no such payload");
+      },
+      abandon: async () => {
+        throw new Error("nor can it be abandoned");
+      },
+    };
+    await runTask(database(), broken, row, never);
+    expect(await state(id)).toMatchObject({ state: "failed", failure: "no such payload" });
+  });
+});

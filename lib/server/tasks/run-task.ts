@@ -74,9 +74,15 @@ async function giveUp(
   const state = cancelled ? "cancelled" : "failed";
   const message = error instanceof Error ? error.message : String(error);
   if (!cancelled) log().error({ err: error, taskId: row.id, kind: row.kind }, "task failed");
-  await db.transaction(async (tx) => {
-    if (await finishTask(tx, claim, { state, failure: message, at: new Date() })) {
+  const ended = { state, failure: message, at: new Date() } as const;
+  try {
+    await db.transaction(async (tx) => {
+      if (!(await finishTask(tx, claim, ended))) return;
       await kind.abandon(row.payload, { shopId: row.shopId, taskId: row.id }, { state, message }, tx);
-    }
-  });
+    });
+  } catch (fault) {
+    // What cannot be tidied up must not be started for ever: the task ends all the same, and the log tells what is left behind.
+    log().error({ err: fault, taskId: row.id, kind: row.kind }, "a task could not be abandoned cleanly");
+    await finishTask(db, claim, ended);
+  }
 }
