@@ -60,7 +60,15 @@ export function orderSteps(snapshot: OrderSnapshot): readonly OrderStep[] {
   return steps.map((step, index) => ({ ...step, number: index + 1 }));
 }
 
-function testCuts({ boards, ripSaw, crosscutSaw }: OrderSnapshot) {
+export interface TestCut {
+  readonly id: string;
+  readonly saw: OrderSnapshot["ripSaw"];
+  /** The cuts of the order that this saw makes. */
+  readonly cuts: readonly CutKind[];
+}
+
+/** One for each saw that the order uses. */
+export function testCuts({ boards, ripSaw, crosscutSaw }: OrderSnapshot): readonly TestCut[] {
   const used = new Set(boards.flatMap(({ program }) => program.steps.map(({ kind }) => kind)));
   const cuts = (["rip", "crosscut"] as const).filter((kind) => used.has(kind));
   const one = ripSaw.name === crosscutSaw.name && ripSaw.kerf === crosscutSaw.kerf;

@@ -86,7 +86,7 @@ function cutWords(step: Extract<OrderStep, { kind: "cut" }>, style: LengthStyle,
 function cutNotes(cut: CutStep, before: OrderStep | undefined): string[] {
   const notes: string[] = [];
   if (cut.turn === "end-for-end") notes.push(cut.kind === "rip" ? "turn the other edge to the fence" : "turn end for end");
-  if (cut.bladeSide === "far") notes.push("cut on the near side of the mark");
+  if (cut.bladeSide === "far") notes.push("blade on the waste side of the mark");
   if (before?.kind === "cut" && before.cut.kind === cut.kind && before.cut.settingNumber === cut.settingNumber)
     notes.push("same setting");
   return notes;
@@ -94,7 +94,7 @@ function cutNotes(cut: CutStep, before: OrderStep | undefined): string[] {
 
 function measure(cut: CutStep): string {
   const edge = measuredFrom(cut.fromEdge, cut.fromEdgeState);
-  if (cut.bladeSide === "far") return `Mark from the ${edge}, cut on the near side of the mark`;
+  if (cut.bladeSide === "far") return `Mark from the ${edge}, blade on the waste side of the mark`;
   return cut.kind === "rip" ? `Fence to blade, ${edge} against the fence` : `Stop to blade, ${edge} against the stop`;
 }
 

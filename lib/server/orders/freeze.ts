@@ -21,6 +21,7 @@ import {
   planCuts,
   problems,
   type QuarterTurns,
+  type ShopLimits,
   um,
   verifyProgram,
 } from "@/lib/layout";
@@ -33,7 +34,7 @@ import { styleOf } from "@/lib/words/order-step";
 import { refused } from "../faults";
 
 export interface ToFreeze {
-  readonly shop: NonNullable<Awaited<ReturnType<typeof readShop>>>;
+  readonly shop: ShopLimits & Pick<NonNullable<Awaited<ReturnType<typeof readShop>>>, "name" | "units" | "inchFraction">;
   readonly job: OrderSnapshot["job"];
   readonly face: OrderSnapshot["faces"][number];
   readonly crosscutSaw: OrderSnapshot["crosscutSaw"];
@@ -41,7 +42,11 @@ export interface ToFreeze {
   readonly boards: readonly LayoutBoard[];
 }
 
-export interface LayoutBoard extends Pick<Awaited<ReturnType<typeof listLayoutBoards>>[number], "board" | "straightening"> {
+type BoardRow = Awaited<ReturnType<typeof listLayoutBoards>>[number];
+
+export interface LayoutBoard {
+  readonly board: Pick<BoardRow["board"], "id" | "tagNumber" | "species" | "cut" | "place" | "thickness">;
+  readonly straightening: Pick<BoardRow["straightening"], "id" | "length" | "width" | "outline">;
   readonly keepClear: readonly KeepClearArea[];
 }
 
