@@ -61,7 +61,9 @@ export async function listJobs(db: Connection, shopId: ShopId, filter: JobFilter
   const matches = and(
     eq(job.shopId, shopId),
     eq(job.state, filter.state),
-    filter.search === "" ? undefined : or(like(job.title, pattern), like(job.client, pattern), eq(job.number, Number(filter.search) || -1)),
+    filter.search === ""
+      ? undefined
+      : or(like(job.title, pattern), like(job.client, pattern), eq(job.number, Number(filter.search) || -1)),
   );
   const rows = await db
     .select({ job, faces: sql<number>`(select count(*) from ${face} where ${face.jobId} = ${job.id})`.mapWith(Number) })

@@ -3,7 +3,19 @@ import "server-only";
 import { and, asc, eq, inArray, ne } from "drizzle-orm";
 import { v7 as newId } from "uuid";
 import type { Connection } from "../client";
-import { board, boardPicture, cutOrder, cutOrderFace, face, job, layout, layoutBoard, orderRevision, straightening, user } from "../schema";
+import {
+  board,
+  boardPicture,
+  cutOrder,
+  cutOrderFace,
+  face,
+  job,
+  layout,
+  layoutBoard,
+  orderRevision,
+  straightening,
+  user,
+} from "../schema";
 import type { ShopId } from "../shop-id";
 
 type Document = typeof layout.$inferSelect.document;
@@ -14,7 +26,14 @@ export interface LayoutFields {
   readonly ripSawId: string | null;
 }
 
-export async function insertLayout(db: Connection, shopId: ShopId, faceId: string, fields: LayoutFields, userId: string, at: Date) {
+export async function insertLayout(
+  db: Connection,
+  shopId: ShopId,
+  faceId: string,
+  fields: LayoutFields,
+  userId: string,
+  at: Date,
+) {
   const id = newId();
   await db.insert(layout).values({ ...fields, id, shopId, faceId, revision: 1, updatedBy: userId, updatedAt: at });
   return id;
@@ -41,7 +60,14 @@ export async function lockLayout(tx: Connection, shopId: ShopId, faceId: string)
   return row;
 }
 
-export async function updateLayout(tx: Connection, shopId: ShopId, layoutId: string, fields: LayoutFields & { revision: number }, userId: string, at: Date) {
+export async function updateLayout(
+  tx: Connection,
+  shopId: ShopId,
+  layoutId: string,
+  fields: LayoutFields & { revision: number },
+  userId: string,
+  at: Date,
+) {
   await tx
     .update(layout)
     .set({ ...fields, updatedBy: userId, updatedAt: at })
@@ -65,11 +91,23 @@ export async function listLayoutBoards(db: Connection, shopId: ShopId, layoutId:
     .orderBy(asc(board.tagNumber), asc(board.id));
 }
 
-export async function insertLayoutBoard(tx: Connection, shopId: ShopId, layoutId: string, boardId: string, straighteningId: string) {
+export async function insertLayoutBoard(
+  tx: Connection,
+  shopId: ShopId,
+  layoutId: string,
+  boardId: string,
+  straighteningId: string,
+) {
   await tx.insert(layoutBoard).values({ shopId, layoutId, boardId, straighteningId });
 }
 
-export async function updateLayoutBoard(tx: Connection, shopId: ShopId, layoutId: string, boardId: string, straighteningId: string) {
+export async function updateLayoutBoard(
+  tx: Connection,
+  shopId: ShopId,
+  layoutId: string,
+  boardId: string,
+  straighteningId: string,
+) {
   await tx
     .update(layoutBoard)
     .set({ straighteningId })
@@ -125,7 +163,10 @@ export async function listNewestOrders(db: Connection, shopId: ShopId, faceIds: 
     .orderBy(asc(cutOrder.number), asc(orderRevision.revision));
   // Later rows win: the newest order, and of it the newest revision.
   return new Map(
-    rows.map((row) => [row.faceId, { id: row.id, number: row.number, revision: row.revision, superseded: row.supersededAt !== null }]),
+    rows.map((row) => [
+      row.faceId,
+      { id: row.id, number: row.number, revision: row.revision, superseded: row.supersededAt !== null },
+    ]),
   );
 }
 
