@@ -4,7 +4,7 @@ import { facePieces, faceSize, type GridFace } from "@/lib/layout";
 export function FaceDrawing({ face, className = "" }: { face: GridFace; className?: string }) {
   const { width, height } = faceSize(face);
   const pieces = facePieces({ face });
-  const label = Math.max(Math.min(width, height * 2) / 14, 1);
+  const label = Math.max(Math.min(width, height * 2) / 8, 1);
   return (
     <svg
       viewBox={`${-width / 200} ${-width / 200} ${width * 1.01} ${height + width / 100}`}

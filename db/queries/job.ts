@@ -1,6 +1,6 @@
 /** Jobs and faces. */
 import "server-only";
-import { and, asc, count, desc, eq, like, max, or, sql } from "drizzle-orm";
+import { and, asc, count, desc, eq, like, max, or } from "drizzle-orm";
 import { v7 as newId } from "uuid";
 import type { Connection } from "../client";
 import { face, job } from "../schema";
@@ -66,9 +66,11 @@ export async function listJobs(db: Connection, shopId: ShopId, filter: JobFilter
       : or(like(job.title, pattern), like(job.client, pattern), eq(job.number, Number(filter.search) || -1)),
   );
   const rows = await db
-    .select({ job, faces: sql<number>`(select count(*) from ${face} where ${face.jobId} = ${job.id})`.mapWith(Number) })
+    .select({ job, faces: count(face.id) })
     .from(job)
+    .leftJoin(face, eq(face.jobId, job.id))
     .where(matches)
+    .groupBy(job.id)
     .orderBy(desc(job.updatedAt), desc(job.id))
     .limit(filter.pageSize)
     .offset((filter.page - 1) * filter.pageSize);

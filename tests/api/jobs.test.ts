@@ -72,6 +72,18 @@ describe("jobs", () => {
     expect(second).toMatchObject({ total: 3, items: [{ title: "Sideboard" }] });
   });
 
+  it("are listed with the number of their faces", async () => {
+    const own = await makeShop();
+    const { job } = await newFace(own.maker, own.sawId);
+    await addFace(own.maker, job.id, rowOfFour(own.sawId));
+    await openJob(own.maker, { ...fields, title: "Empty" });
+    const { items } = await readJobs(own.maker, { state: "open", search: "", page: 1, pageSize: 25 });
+    expect(items.map(({ title, faces }) => [title, faces])).toEqual([
+      ["Empty", 0],
+      ["Map chest", 2],
+    ]);
+  });
+
   it("refuse a change from an old revision and leave the job as it was", async () => {
     const job = await openJob(shop.maker, fields);
     await changeJob(shop.maker, job.id, { baseRevision: job.revision, title: "Map chest, low" });
