@@ -4,6 +4,7 @@ const config: NextConfig = {
   // The tests build and serve beside a running copy, so they have a build folder of their own.
   distDir: process.env.NEXT_DIST_DIR || ".next",
   poweredByHeader: false,
+  devIndicators: false,
   reactStrictMode: true,
   // Compiled parts, worker files and data files that these packages find by their own place on disk.
   serverExternalPackages: [
