@@ -5,7 +5,8 @@ export const cautionWords: Readonly<Record<Caution, string>> = {
   "short-crosscut-clamp": "Short part: clamp it to the gauge, hands well clear of the blade.",
   "narrow-rip-push-stick": "Narrow rip: use a push stick.",
   "guard-and-riving-knife": "Guard and riving knife on.",
-  "offcut-not-between-fence-and-blade": "Cut to a mark, no fence or stop: what comes off would be caught against the blade.",
+  "offcut-not-between-fence-and-blade":
+    "Cut to a mark, blade on its waste side. No fence or stop there: what comes off would be caught.",
   "too-short-for-planer": "Too short for jointer and planer: clean it up by hand.",
 };
 

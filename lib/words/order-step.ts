@@ -86,7 +86,6 @@ function cutWords(step: Extract<OrderStep, { kind: "cut" }>, style: LengthStyle,
 function cutNotes(cut: CutStep, before: OrderStep | undefined): string[] {
   const notes: string[] = [];
   if (cut.turn === "end-for-end") notes.push(cut.kind === "rip" ? "turn the other edge to the fence" : "turn end for end");
-  if (cut.bladeSide === "far") notes.push("blade on the waste side of the mark");
   if (before?.kind === "cut" && before.cut.kind === cut.kind && before.cut.settingNumber === cut.settingNumber)
     notes.push("same setting");
   return notes;

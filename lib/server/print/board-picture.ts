@@ -129,9 +129,8 @@ function closeTogether(
   return groups.map(({ at, numbers }) => ({ at, numbers: numbers.sort((a, b) => a - b).map(String) }));
 }
 
-function putAbove(drawing: Drawing, top: PagePoint, number: string, ends: number[]): void {
-  const { doc } = drawing;
-  const at = pageFrom(drawing, top);
+/** `at` on the page, at the upper edge of what is cut; left out where both rows are taken there. */
+function putAbove({ doc }: Drawing, at: PagePoint, number: string, ends: number[]): void {
   const width = widthOfText(doc, number, numberStyle);
   const row = ends.findIndex((end) => at.x - width / 2 > end + 1.5);
   const up = numberRows[row];
@@ -178,12 +177,14 @@ function drawFronts(drawing: Drawing, snapshot: OrderSnapshot, board: SnapshotBo
   for (const { label, rect } of board.pieces) {
     const corner = pageFrom(drawing, rect);
     const [width, height] = [rect.width * pointsPerUm, rect.height * pointsPerUm];
-    const size = Math.min(13, height * 0.5);
-    const style = { face: "title", size } as const;
-    const wide = widthOfText(doc, label, style) + 5;
-    // Too small to be read, or it would hide the front: the numbers of the cuts and the diagram still tell it.
-    if (size < 4.5 || wide > width * 0.8) continue;
-    doc.rect(corner.x + 3, corner.y + 3, wide, size + 2).fillAndStroke("#ffffff", black);
-    putText(doc, label, style, { x: corner.x + 5.5, y: corner.y + 3.2 + (size + 2 - size * 1.2) / 2 + 0.6, width: wide });
+    const full = { face: "title", size: Math.min(13, height * 0.5) } as const;
+    const fits = Math.min(1, (width - 7) / (widthOfText(doc, label, full) + 3));
+    const size = full.size * fits;
+    // Too small to be read: the numbers of the cuts and the diagram still tell it.
+    if (size < 4.5) continue;
+    const style = { ...full, size };
+    const wide = widthOfText(doc, label, style) + 4;
+    doc.rect(corner.x + 2.5, corner.y + 3, wide, size + 2).fillAndStroke("#ffffff", black);
+    putText(doc, label, style, { x: corner.x + 4.5, y: corner.y + 3.2 + (size + 2 - size * 1.2) / 2 + 0.6, width: wide });
   }
 }
