@@ -16,7 +16,7 @@ const numberRoom = 18;
 const numberStyle = { face: "measure", size: 7.5 } as const;
 /** Two rows of numbers above the board, so that two close crosscuts can both have theirs. */
 const numberRows = [0, 8] as const;
-const numberHeight = 17;
+const numberHeight = 20;
 
 /** Where the board lies on the page. */
 interface Drawing {
@@ -138,10 +138,10 @@ function putAbove({ doc }: Drawing, at: PagePoint, number: string, ends: number[
   ends[row] = at.x + width / 2;
   doc
     .lineWidth(0.4)
-    .moveTo(at.x, at.y - up - 1)
+    .moveTo(at.x, at.y - up - 3.5)
     .lineTo(at.x, at.y)
     .stroke(black);
-  putText(doc, number, numberStyle, { x: at.x - width / 2, y: at.y - up - 9, width: width + 1 });
+  putText(doc, number, numberStyle, { x: at.x - width / 2, y: at.y - up - 12, width: width + 1 });
 }
 
 /** Runs across the board: a crosscut, or an end that is squared. */

@@ -7,7 +7,7 @@ import { type LabelSheetName, labelPlace, labelSheets } from "./label-sheet";
 import { type OrderLabel, orderLabels } from "./order-labels";
 import { type PrintOrder, supersededAt } from "./print-order";
 import { closeDocument, openDocument } from "./sheet";
-import { black, grey, putText, widthOfText } from "./typeface";
+import { black, grey, heightOfText, putText, widthOfText } from "./typeface";
 
 type Order = PrintOrder["order"];
 
@@ -49,17 +49,19 @@ function drawLabel(doc: PDFKit.PDFDocument, order: Order, label: OrderLabel, roo
   const fits = Math.min(1, 66 / widthOfText(doc, label.label, style));
   const big = { ...style, size: style.size * fits };
   const bigWidth = widthOfText(doc, label.label, big);
-  putText(doc, label.label, big, { x: room.x, y: room.y - big.size * 0.2, width: bigWidth + 2 });
+  putText(doc, label.label, big, { x: room.x, y: room.y, width: bigWidth + 2 });
 
   const left = room.x + Math.max(bigWidth, 26) + 8;
   const right = room.x + room.width - (label.front ? drawingWidth + 6 : 0);
   const text = { x: left, width: right - left, oneLine: true };
+  // Three lines, level with the middle of the number.
+  const top = room.y + Math.max(0, (heightOfText(doc, label.label, big, { width: room.width, oneLine: true }) - 34) / 2);
   const size = `${sizeFigures(label.size, styleOf(snapshot))}${snapshot.units === "mm" ? "" : " in"}`;
-  putText(doc, size, { face: "measure", size: 10.5 }, { ...text, y: room.y });
-  putText(doc, `${kindWords[label.kind]}, board ${label.board.tag}`, { face: "words", size: 7.5 }, { ...text, y: room.y + 14 });
+  putText(doc, size, { face: "measure", size: 10.5 }, { ...text, y: top });
+  putText(doc, `${kindWords[label.kind]}, board ${label.board.tag}`, { face: "words", size: 7.5 }, { ...text, y: top + 14 });
   const superseded = supersededAt(order) === null ? "" : ", SUPERSEDED";
   const orderText = `Order ${order.number} ${revisionLetter(order.revision)}${superseded}`;
-  putText(doc, orderText, { face: "strong", size: 7.5 }, { ...text, y: room.y + 24.5 });
+  putText(doc, orderText, { face: "strong", size: 7.5 }, { ...text, y: top + 24.5 });
   const below = { x: room.x, width: right - room.x, oneLine: true, y: room.y + room.height - 9 };
   putText(doc, snapshot.job.title, { face: "words", size: 7, color: grey }, below);
   if (label.front) drawFront(doc, label.front, { ...room, x: room.x + room.width - drawingWidth, width: drawingWidth });

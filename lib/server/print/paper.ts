@@ -13,4 +13,4 @@ export const paperSizes: Readonly<Record<Paper, readonly [number, number]>> = {
 };
 
 /** Wide enough for the edge that printers leave bare (4–5 mm, common practice, no source) and for a hole punch. */
-export const margins = { side: 38, top: 40, bottom: 52 } as const;
+export const margins = { side: 38, top: 40, bottom: 58 } as const;
