@@ -7,11 +7,14 @@ import { inData, inProject, root } from "./ground/project.mjs";
 
 const programs = ["migrate", "seed", "worker"].map((name) => `scripts/${name}.ts`);
 
-/** Every file of lib/server named …-worker.ts runs in a worker thread under its own name: pixel-worker.ts becomes pixel-worker.mjs. */
-const threads = fs
-  .readdirSync(inProject("lib", "server"), { recursive: true, encoding: "utf8" })
-  .filter((file) => file.endsWith("-worker.ts"))
-  .map((file) => path.join("lib", "server", file))
+/** Every file of these rooms named …-worker.ts runs in a worker thread under its own name: pixel-worker.ts becomes pixel-worker.mjs. */
+const threads = ["lib/server", "scripts/demo"]
+  .flatMap((room) =>
+    fs
+      .readdirSync(inProject(room), { recursive: true, encoding: "utf8" })
+      .filter((file) => file.endsWith("-worker.ts"))
+      .map((file) => path.join(room, file)),
+  )
   .sort();
 
 const result = await build({

@@ -1,14 +1,15 @@
-/** The demo shop and its people: invented. */
-
+/** The demo shop, its people and its saws: invented. */
 import type { Connection } from "@/db/client";
 import { insertMembership, insertShop, insertUser } from "@/db/queries/member";
 import { insertSaw } from "@/db/queries/shop";
-import type { ShopId } from "@/db/shop-id";
-import { um, umFromMm } from "@/lib/layout";
+import { type CutLoss, um, umFromMm } from "@/lib/layout";
+import type { Role } from "@/lib/schemas/endpoint";
+import type { ShopAccess } from "@/lib/server/access";
 import { hashPassword } from "@/lib/server/password";
 
 /** Told to whoever starts the demo; every one of them has the same password. */
 export const demoPassword = "try-the-demo";
+export const demoShopName = "Tarnholt Joinery";
 
 export const demoPeople = [
   { role: "owner", name: "Ilse Varga", email: "owner@tarnholt.example" },
@@ -16,15 +17,22 @@ export const demoPeople = [
   { role: "assistant", name: "Juno Pell", email: "assistant@tarnholt.example" },
 ] as const;
 
-export interface DemoShop {
-  readonly shopId: ShopId;
-  readonly userIds: Record<(typeof demoPeople)[number]["role"], string>;
-  readonly sawIds: { readonly table: string; readonly thin: string };
+/** A saw with what its cut costs: the clean-up is taken off both edges that the blade leaves. */
+export interface DemoSaw {
+  readonly id: string;
+  readonly loss: CutLoss;
 }
 
-export async function seedPeople(db: Connection, now: Date): Promise<DemoShop> {
+export interface DemoShop {
+  /** What the session gate would give each of them. */
+  readonly people: Readonly<Record<Role, ShopAccess>>;
+  readonly saws: { readonly crosscut: DemoSaw; readonly rip: DemoSaw };
+}
+
+/** Founds the shop with its people. They belong to it, and so can sign in, only once `letPeopleIn` has been called. */
+export async function foundShop(db: Connection, now: Date): Promise<DemoShop> {
   const shopId = await insertShop(db, {
-    name: "Tarnholt Joinery",
+    name: demoShopName,
     units: "mm",
     inchFraction: 64,
     timeZone: "Europe/Oslo",
@@ -39,17 +47,30 @@ export async function seedPeople(db: Connection, now: Date): Promise<DemoShop> {
     createdAt: now,
   });
   const passwordHash = await hashPassword(demoPassword);
-  const ids: Partial<DemoShop["userIds"]> = {};
-  for (const { role, name, email } of demoPeople) {
-    ids[role] = await insertUser(db, { email, name, passwordHash, createdAt: now });
-    await insertMembership(db, shopId, { userId: ids[role], role, createdAt: now });
+  const person = async (role: Role): Promise<ShopAccess> => {
+    const found = demoPeople.find((one) => one.role === role);
+    if (!found) throw new Error(`the demo has nobody who is ${role}`);
+    const { email, name } = found;
+    const userId = await insertUser(db, { email, name, passwordHash, createdAt: now });
+    return { sessionId: "", userId, userName: name, email, shopId, shopName: demoShopName, role };
+  };
+  const people = { owner: await person("owner"), maker: await person("maker"), assistant: await person("assistant") };
+
+  const saw = async (name: string, kind: "table" | "track" | "band" | "hand", kerfUm: number, cleanUpUm: number) => {
+    const [kerf, cleanUp] = [um(kerfUm), um(cleanUpUm)];
+    const id = await insertSaw(db, shopId, { name, kind, kerf, cleanUp });
+    return { id, loss: { kerf, cleanUpBefore: cleanUp, cleanUpAfter: cleanUp } };
+  };
+  const crosscut = await saw("Panel saw, thin blade", "table", 2400, 200);
+  const rip = await saw("Table saw, full kerf", "table", 3200, 300);
+  await saw("Track saw", "track", 1800, 200);
+  await saw("Band saw", "band", 1200, 1000);
+  await saw("Fine pull saw", "hand", 500, 300);
+  return { people, saws: { crosscut, rip } };
+}
+
+export async function letPeopleIn(db: Connection, { people }: DemoShop, now: Date): Promise<void> {
+  for (const { shopId, userId, role } of Object.values(people)) {
+    await insertMembership(db, shopId, { userId, role, createdAt: now });
   }
-  const { owner, maker, assistant } = ids;
-  if (!owner || !maker || !assistant) throw new Error("a demo role has nobody");
-  const thin = await insertSaw(db, shopId, { name: "Panel saw, thin blade", kind: "table", kerf: um(2400), cleanUp: um(200) });
-  const table = await insertSaw(db, shopId, { name: "Table saw, full kerf", kind: "table", kerf: um(3200), cleanUp: um(300) });
-  await insertSaw(db, shopId, { name: "Track saw", kind: "track", kerf: um(1800), cleanUp: um(200) });
-  await insertSaw(db, shopId, { name: "Band saw", kind: "band", kerf: um(1200), cleanUp: um(1000) });
-  await insertSaw(db, shopId, { name: "Fine pull saw", kind: "hand", kerf: um(500), cleanUp: um(300) });
-  return { shopId, userIds: { owner, maker, assistant }, sawIds: { table, thin } };
 }
