@@ -82,6 +82,25 @@ export const getOrder = defineEndpoint({
   response: orderSchema,
 });
 
+/** What changes while an order is worked off; small, because benches ask for it every few seconds. */
+export const orderProgressSchema = z.object({
+  ticks: z.array(tickSchema),
+  /** Of the revision asked about. */
+  superseded: z.boolean(),
+  newestRevision: z.int(),
+});
+export type OrderProgress = z.output<typeof orderProgressSchema>;
+
+export const getOrderProgress = defineEndpoint({
+  method: "GET",
+  path: "/api/orders/{orderId}/revisions/{revisionId}/progress",
+  summary: "The ticks of a revision, and whether it still holds",
+  tag: "orders",
+  access: everyone,
+  params: z.object({ orderId: idSchema, revisionId: idSchema }),
+  response: orderProgressSchema,
+});
+
 export const tickStep = defineEndpoint({
   method: "PUT",
   path: "/api/orders/{orderId}/revisions/{revisionId}/steps/{stepId}/tick",

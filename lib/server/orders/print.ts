@@ -17,8 +17,9 @@ import { shopSettings } from "../shops";
 import { storage } from "../storage";
 import { readOrder } from "./read-orders";
 
-/** Where an order is worked off at the bench. */
-export const benchUrl = (orderId: string): string => new URL(`/bench/${orderId}`, env().APP_URL).href;
+/** Where an order is worked off at the bench. It names the revision: who scans an old sheet is told that it is old. */
+export const benchUrl = (orderId: string, revision: number): string =>
+  new URL(`/bench/${orderId}?revision=${revision}`, env().APP_URL).href;
 
 export async function orderFile(
   shopId: ShopId,
@@ -27,7 +28,12 @@ export async function orderFile(
 ): Promise<Response> {
   const order = await readOrder(shopId, orderId, wanted.revision);
   const shop = await shopSettings(shopId);
-  const print = { order, timeZone: shop.timeZone, benchUrl: benchUrl(orderId), pictures: await picturesOf(shopId, order) };
+  const print = {
+    order,
+    timeZone: shop.timeZone,
+    benchUrl: benchUrl(orderId, order.revision),
+    pictures: await picturesOf(shopId, order),
+  };
   const bytes = await orderPdf(print, wanted.paper ?? shop.paper);
   return pdfResponse(bytes, `cut-order-${order.number}-${revisionLetter(order.revision)}.pdf`);
 }

@@ -5,7 +5,7 @@ import { listTicks } from "@/db/queries/step-tick";
 import type { ShopId } from "@/db/shop-id";
 import type { QueryOf } from "@/lib/schemas/endpoint";
 import type * as endpoint from "@/lib/schemas/order";
-import type { Order, OrderRow } from "@/lib/schemas/order";
+import type { Order, OrderProgress, OrderRow } from "@/lib/schemas/order";
 import { orderSteps } from "@/lib/schemas/order-steps";
 import { database } from "../database";
 import { notFound } from "../faults";
@@ -52,6 +52,20 @@ export async function readOrder(shopId: ShopId, orderId: string, revision?: numb
       issuedBy,
       supersededAt: supersededAt?.toISOString() ?? null,
     })),
+  };
+}
+
+/** Who ticked what of a revision, and whether it still holds. */
+export async function orderProgress(shopId: ShopId, orderId: string, revisionId: string): Promise<OrderProgress> {
+  const revisions = await listRevisions(database(), shopId, orderId);
+  const asked = revisions.find(({ id }) => id === revisionId);
+  const [newest] = revisions;
+  if (!asked || !newest) throw notFound("revision of this cut order");
+  const ticks = await listTicks(database(), shopId, revisionId);
+  return {
+    ticks: ticks.map((tick) => ({ ...tick, at: tick.at.toISOString() })),
+    superseded: asked.supersededAt !== null,
+    newestRevision: newest.revision,
   };
 }
 
