@@ -31,3 +31,8 @@ export async function readBoardPage(access: ShopAccess, query: BoardQuery): Prom
     species,
   };
 }
+
+/** Every species of the shop, for typing ahead. */
+export async function readSpecies(access: ShopAccess): Promise<string[]> {
+  return listSpecies(database(), access.shopId);
+}

@@ -1,0 +1,49 @@
+/** One line of a board's story. Details are what the server wrote with the change; what is missing is left out. */
+import type { HistoryRow } from "@/lib/schemas/history";
+
+type Row = Pick<HistoryRow, "verb" | "detail">;
+
+export function boardEventWords({ verb, detail }: Row): string {
+  switch (verb) {
+    case "entered":
+      return "Entered into the rack";
+    case "changed":
+      return `Changed ${changedNames(detail.after)}`;
+    case "moisture read":
+      return `Moisture read: ${String(detail.percent)} %`;
+    case "marked":
+      return `Marked a photograph for version ${String(detail.version)}`;
+    case "straightened":
+      return `Version ${String(detail.version)} done${carriedWords(detail)}`;
+    case "straightening failed":
+      return `Version ${String(detail.version)} failed`;
+    case "straightening cancelled":
+      return `Version ${String(detail.version)} stopped`;
+    case "areas drawn":
+      return `Outline and areas drawn on version ${String(detail.version)}`;
+    default:
+      return verb;
+  }
+}
+
+const fieldNames: Readonly<Record<string, string>> = {
+  nominalQuarters: "nominal thickness",
+  costMinor: "cost",
+};
+
+function changedNames(after: HistoryRow["detail"][string] | undefined): string {
+  const names = typeof after === "object" && after !== null ? Object.keys(after) : [];
+  return names.length === 0 ? "nothing" : names.map((name) => fieldNames[name] ?? name).join(", ");
+}
+
+function carriedWords({ areasFrom, outline, areasKept, areasDropped }: Row["detail"]): string {
+  if (typeof areasFrom !== "number") return "";
+  const parts = [
+    outline === "cut" && "its outline cut to the new size",
+    outline === "dropped" && "its outline dropped, which no longer fits",
+    typeof areasKept === "number" && areasKept > 0 && `${areasKept} keep-clear areas`,
+    typeof areasDropped === "number" && areasDropped > 0 && `${areasDropped} areas dropped that lie off the board now`,
+  ].filter((part) => part !== false);
+  if (parts.length === 0 && outline === "kept") return `, with the outline of version ${areasFrom}`;
+  return parts.length === 0 ? "" : `, from version ${areasFrom}: ${parts.join("; ")}`;
+}

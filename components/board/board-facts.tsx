@@ -1,0 +1,52 @@
+"use client";
+import { useUnits } from "@/components/shell/units";
+import { printedLength } from "@/lib/layout";
+import type { BoardRow } from "@/lib/schemas/board";
+import { cutNames, quartersText, stateNames } from "./board-words";
+
+/** Tag, what holds it, and the facts one looks for on a rack, in three lines. */
+export function BoardFacts({ board }: { board: BoardRow }) {
+  const { print, style } = useUnits();
+  const measured = board.length > 0 && board.width > 0;
+  return (
+    <span className="flex flex-col gap-0.5 text-sm">
+      <span className="flex flex-wrap items-center gap-x-2 gap-y-1">
+        <span className="font-measure text-lg leading-tight font-semibold">{board.tag}</span>
+        <BoardBadges board={board} />
+      </span>
+      <span>
+        {board.species}, {cutNames[board.cut]}
+      </span>
+      <span className="flex flex-wrap gap-x-3 text-pencil">
+        <span className="measure text-graphite">
+          {[quartersText(board.nominalQuarters), print(board.thickness)].filter(Boolean).join(", ")}
+        </span>
+        {board.moisturePercent !== null && (
+          <span>
+            <span className="measure text-graphite">{board.moisturePercent.toFixed(1)}</span> %
+          </span>
+        )}
+        {board.place && <span>{board.place}</span>}
+      </span>
+      <span className="measure text-pencil">
+        {measured ? `${printedLength(board.length, style).figure} × ${print(board.width)}` : "not measured yet"}
+      </span>
+    </span>
+  );
+}
+
+const badge = "rounded-sm border px-1.5 text-xs leading-5";
+
+export function BoardBadges({ board }: { board: Pick<BoardRow, "held" | "state"> }) {
+  const jobs = [...new Set(board.held.map(({ jobTitle }) => jobTitle))];
+  return (
+    <>
+      {jobs.map((title) => (
+        <span key={title} className={`${badge} border-chalk bg-sheet text-chalk`}>
+          held, {title}
+        </span>
+      ))}
+      {board.state !== "rack" && <span className={`${badge} border-line bg-sheet text-graphite`}>{stateNames[board.state]}</span>}
+    </>
+  );
+}

@@ -1,0 +1,155 @@
+"use client";
+/** One board: its picture under the tape, what is written about it, how it came here and what holds it. */
+import Link from "next/link";
+import { type ReactNode, useState } from "react";
+import { Button, buttonClass } from "@/components/ui/button";
+import { PageTitle } from "@/components/ui/page-title";
+import type { Board } from "@/lib/schemas/board";
+import type { HistoryRow } from "@/lib/schemas/history";
+import type { Straightening } from "@/lib/schemas/straightening";
+import { BoardBadges } from "./board-facts";
+import { BoardPicture } from "./board-picture";
+import { BoardStory } from "./board-story";
+import { BoardStrip } from "./board-strip";
+import { ChangeBoardForm } from "./change-board-form";
+import { ChoosePhoto } from "./choose-photo";
+import { FactList } from "./fact-list";
+import { Readings } from "./readings";
+import { UseInJob } from "./use-in-job";
+import { VersionProgress } from "./version-progress";
+import { Versions } from "./versions";
+
+interface Props {
+  board: Board;
+  /** Newest first. */
+  versions: readonly Straightening[];
+  story: readonly HistoryRow[];
+  species: readonly string[];
+  mayEdit: boolean;
+}
+
+export function BoardScreen({ board, versions, story, species, mayEdit }: Props) {
+  const [editing, setEditing] = useState(false);
+  const shown = versions.find(({ id }) => id === board.straighteningId);
+  const newest = versions[0];
+  return (
+    <>
+      <PageTitle
+        title={`${board.tag}, ${board.species}`}
+        above={
+          <Link href="/rack" className="underline">
+            Rack
+          </Link>
+        }
+      >
+        {mayEdit && <BoardActions board={board} lastPhotoId={newest?.photoId ?? null} />}
+      </PageTitle>
+      <div className="flex flex-col gap-6 p-4 md:p-5">
+        {board.held.length + (board.state === "rack" ? 0 : 1) > 0 && (
+          <p className="flex flex-wrap gap-2">
+            <BoardBadges board={board} />
+          </p>
+        )}
+        {newest && newest.id !== shown?.id && <VersionProgress version={newest} mayEdit={mayEdit} />}
+        {shown ? <BoardPicture board={board} version={shown} /> : <NoPicture board={board} mayEdit={mayEdit} />}
+        <div className="grid gap-x-10 gap-y-8 lg:grid-cols-2">
+          <Section
+            title="Facts"
+            action={
+              mayEdit &&
+              !editing && (
+                <Button size="small" onClick={() => setEditing(true)}>
+                  Change
+                </Button>
+              )
+            }
+          >
+            {editing ? (
+              <ChangeBoardForm key={board.revision} board={board} species={species} onDone={() => setEditing(false)} />
+            ) : (
+              <FactList board={board} />
+            )}
+          </Section>
+          <Section title="Moisture">
+            <Readings board={board} />
+          </Section>
+          <Section title="Held for">
+            <Holds board={board} />
+          </Section>
+          <Section title="Versions of the picture">
+            <Versions versions={versions} currentId={board.straighteningId} />
+          </Section>
+          <Section title="History">
+            <BoardStory rows={story} />
+          </Section>
+        </div>
+      </div>
+    </>
+  );
+}
+
+function Section({ title, action, children }: { title: string; action?: ReactNode; children: ReactNode }) {
+  return (
+    <section className="min-w-0">
+      <div className="mb-2 flex min-h-9 items-center justify-between gap-4">
+        <h2 className="text-xl">{title}</h2>
+        {action}
+      </div>
+      {children}
+    </section>
+  );
+}
+
+function BoardActions({ board, lastPhotoId }: { board: Board; lastPhotoId: string | null }) {
+  const [open, setOpen] = useState<"photo" | "job" | null>(null);
+  const close = (isOpen: boolean) => setOpen(isOpen ? open : null);
+  const marked = board.straighteningId !== null;
+  return (
+    <>
+      <Button kind={marked ? "plain" : "primary"} onClick={() => setOpen("photo")}>
+        {marked ? "Mark again" : "Mark a photograph"}
+      </Button>
+      {marked && (
+        <>
+          <Link href={`/rack/${board.id}/zones`} className={buttonClass()}>
+            Outline and areas
+          </Link>
+          <Button kind="primary" onClick={() => setOpen("job")}>
+            Use in a job
+          </Button>
+        </>
+      )}
+      <ChoosePhoto boardId={board.id} lastPhotoId={lastPhotoId} open={open === "photo"} onOpenChange={close} />
+      <UseInJob board={board} open={open === "job"} onOpenChange={close} />
+    </>
+  );
+}
+
+function NoPicture({ board, mayEdit }: { board: Board; mayEdit: boolean }) {
+  return (
+    <div className="flex flex-col gap-2">
+      <div className="max-w-xl">
+        <BoardStrip board={board} />
+      </div>
+      <p className="text-pencil">
+        No picture yet.{" "}
+        {mayEdit ? "Mark a photograph of it: then it can be laid out." : "A maker marks a photograph of it first."}
+      </p>
+    </div>
+  );
+}
+
+function Holds({ board }: { board: Board }) {
+  if (board.held.length === 0) return <p className="text-pencil">Nothing. The whole board is free.</p>;
+  return (
+    <ul className="divide-y divide-rule">
+      {board.held.map(({ faceId, faceTitle, jobId, jobTitle }) => (
+        <li key={faceId} className="py-1.5">
+          <Link href={`/jobs/${jobId}/faces/${faceId}`} className="text-chalk underline-offset-4 hover:underline">
+            {jobTitle}: {faceTitle}
+          </Link>
+        </li>
+      ))}
+    </ul>
+  );
+}

@@ -1,0 +1,26 @@
+/** How a board's facts are written on screens. */
+import type { boardSorts, boardStates, cuts } from "@/lib/schemas/board";
+
+type Cut = (typeof cuts)[number];
+type BoardState = (typeof boardStates)[number];
+
+export const cutNames: Readonly<Record<Cut, string>> = { flat: "flat", rift: "rift", quarter: "quarter" };
+
+export const stateNames: Readonly<Record<BoardState, string>> = { rack: "in the rack", cut: "cut up", gone: "gone" };
+
+type Sort = (typeof boardSorts)[number];
+
+/** Each order of the rack and its reverse, as they stand in a list of choices. */
+export const orderNames: Readonly<Record<Sort, { readonly up: string; readonly down: string }>> = {
+  tag: { up: "tag, lowest first", down: "tag, highest first" },
+  species: { up: "species, A to Z", down: "species, Z to A" },
+  length: { up: "shortest first", down: "longest first" },
+  width: { up: "narrowest first", down: "widest first" },
+  thickness: { up: "thinnest first", down: "thickest first" },
+  moisture: { up: "driest first", down: "wettest first" },
+  place: { up: "place, A to Z", down: "place, Z to A" },
+  newest: { up: "newest first", down: "oldest first" },
+};
+
+/** "4/4" for a board sold by quarters. */
+export const quartersText = (nominalQuarters: number | null): string => (nominalQuarters === null ? "" : `${nominalQuarters}/4`);

@@ -1,0 +1,109 @@
+"use client";
+/** The rack as figures: one line a board, units in the headings, every order at a click. */
+import Link from "next/link";
+import type { ReactNode } from "react";
+import { BoardBadges } from "@/components/board/board-facts";
+import { cutNames, quartersText } from "@/components/board/board-words";
+import { moneyText } from "@/components/board/money";
+import { useUnits } from "@/components/shell/units";
+import { printedLength, type Um } from "@/lib/layout";
+import type { BoardRow, boardSorts } from "@/lib/schemas/board";
+import { changedState, type RackState, rackAddress } from "./rack-query";
+
+type Sort = (typeof boardSorts)[number];
+
+export function RackTable({ boards, state }: { boards: readonly BoardRow[]; state: RackState }) {
+  const { style, currency } = useUnits();
+  const unit = style.unit === "mm" ? "mm" : "in";
+  const figure = (length: Um) => (length > 0 ? printedLength(length, style).figure : "–");
+  return (
+    // A table wider than a phone scrolls in its own box; the links in it bring it along for the keyboard.
+    <section className="overflow-x-auto px-4 md:px-5" aria-label="Boards as a table">
+      <table className="w-full min-w-[60rem] border-collapse text-sm">
+        <thead>
+          <tr className="border-b border-line text-left align-bottom">
+            <Heading state={state} sort="tag" name="Tag" />
+            <Heading state={state} sort="species" name="Species" />
+            <th scope="col" className={plainHead}>
+              Cut
+            </th>
+            <th scope="col" className={`${plainHead} text-right`}>
+              Nominal
+            </th>
+            <Heading state={state} sort="thickness" name={`Thick, ${unit}`} right />
+            <Heading state={state} sort="length" name={`Length, ${unit}`} right />
+            <Heading state={state} sort="width" name={`Width, ${unit}`} right />
+            <th scope="col" className={`${plainHead} text-right`}>
+              Board feet
+            </th>
+            <Heading state={state} sort="moisture" name="Moisture, %" right />
+            <Heading state={state} sort="place" name="Place" />
+            <th scope="col" className={plainHead}>
+              Source
+            </th>
+            <th scope="col" className={`${plainHead} text-right`}>
+              Cost
+            </th>
+            <th scope="col" className={plainHead}>
+              Held
+            </th>
+          </tr>
+        </thead>
+        <tbody>
+          {boards.map((board) => (
+            <tr key={board.id} className="border-b border-rule hover:bg-sheet">
+              <th scope="row" className="py-1.5 pr-4 text-left">
+                <Link href={`/rack/${board.id}`} className="measure text-chalk underline-offset-4 hover:underline">
+                  {board.tag}
+                </Link>
+              </th>
+              <td className="pr-4">{board.species}</td>
+              <td className="pr-4">{cutNames[board.cut]}</td>
+              <Figure>{quartersText(board.nominalQuarters)}</Figure>
+              <Figure>{figure(board.thickness)}</Figure>
+              <Figure>{figure(board.length)}</Figure>
+              <Figure>{figure(board.width)}</Figure>
+              <Figure>{board.boardFeet > 0 ? board.boardFeet.toFixed(1) : "–"}</Figure>
+              <Figure>{board.moisturePercent?.toFixed(1) ?? "–"}</Figure>
+              <td className="pr-4">{board.place}</td>
+              <td className="pr-4">{board.source}</td>
+              <Figure>{board.costMinor === null ? "" : moneyText(board.costMinor, currency)}</Figure>
+              <td>
+                <span className="flex flex-wrap gap-1">
+                  <BoardBadges board={board} />
+                </span>
+              </td>
+            </tr>
+          ))}
+        </tbody>
+      </table>
+    </section>
+  );
+}
+
+const plainHead = "py-2 pr-4 font-semibold";
+
+function Figure({ children }: { children: ReactNode }) {
+  return <td className="measure pr-4 text-right whitespace-nowrap">{children}</td>;
+}
+
+/** A heading that sorts; a second click turns the order round. */
+function Heading({ state, sort, name, right = false }: { state: RackState; sort: Sort; name: string; right?: boolean }) {
+  const here = state.sort === sort;
+  const direction = here && state.direction === "up" ? "down" : "up";
+  const sorted = state.direction === "up" ? "ascending" : "descending";
+  return (
+    <th scope="col" aria-sort={here ? sorted : undefined} className={`${plainHead} ${right ? "text-right" : ""}`}>
+      <Link
+        href={rackAddress(changedState(state, { sort, direction }))}
+        scroll={false}
+        className="whitespace-nowrap hover:underline"
+      >
+        {name}
+        <span aria-hidden="true" className="text-chalk">
+          {here && (state.direction === "up" ? " ↑" : " ↓")}
+        </span>
+      </Link>
+    </th>
+  );
+}
