@@ -1,0 +1,116 @@
+"use client";
+/** One order for the maker: what was issued, what the bench has done, and everything to print. */
+import { useQuery } from "@tanstack/react-query";
+import Link from "next/link";
+import { useEffect } from "react";
+import { orderPdfUrl, orderQuery, progressQuery } from "@/lib/client/order";
+import type { Order } from "@/lib/schemas/order";
+import { orderSteps } from "@/lib/schemas/order-steps";
+import { revisionLetter } from "@/lib/words/revision-letter";
+import { buttonClass } from "../ui/button";
+import { Notice } from "../ui/notice";
+import { PageTitle } from "../ui/page-title";
+import type { BenchQr } from "./bench-code";
+import { BenchCode } from "./bench-code";
+import { FaceView } from "./face-view";
+import { LabelForm } from "./label-form";
+import { OrderRevisions } from "./order-revisions";
+import { OrderStepsTable } from "./order-steps-table";
+import { ProgressTape } from "./progress-tape";
+import { ShopDate } from "./shop-date";
+
+interface Props {
+  initial: Order;
+  /** The revision asked for in the address; undefined: the newest. */
+  revision: number | undefined;
+  paper: "a4" | "letter";
+  qr: BenchQr;
+}
+
+export function OrderPage({ initial, revision, paper, qr }: Props) {
+  const { data: order, refetch } = useQuery({ ...orderQuery(initial.id, revision), initialData: initial });
+  const { data: progress } = useQuery({
+    ...progressQuery(order.id, order.revisionId),
+    initialData: {
+      ticks: order.ticks,
+      superseded: order.superseded,
+      newestRevision: order.revisions[0]?.revision ?? order.revision,
+    },
+  });
+  // A revision issued meanwhile brings another snapshot and another list of revisions.
+  const known = order.revisions[0]?.revision;
+  useEffect(() => {
+    if (progress.newestRevision !== known) refetch();
+  }, [progress.newestRevision, known, refetch]);
+
+  const ticks = new Map(progress.ticks.map((tick) => [tick.stepId, tick]));
+  const steps = orderSteps(order.snapshot);
+  const done = steps.map(({ id }) => ticks.has(id));
+  const next = done.indexOf(false);
+  const letter = revisionLetter(order.revision);
+  const pdf = (size: "a4" | "letter") => orderPdfUrl(order.id, { paper: size, revision: order.revision });
+  return (
+    <>
+      <PageTitle
+        title={`Cut order ${order.number} ${letter}`}
+        above={
+          <Link href={`/jobs/${order.jobId}`} className="text-chalk underline">
+            {order.jobTitle}
+          </Link>
+        }
+      >
+        <a href={pdf("a4")} className={buttonClass(paper === "a4" ? "primary" : "plain")}>
+          Print on A4
+        </a>
+        <a href={pdf("letter")} className={buttonClass(paper === "letter" ? "primary" : "plain")}>
+          Print on Letter
+        </a>
+        <Link href={`/bench/${order.id}`} className={buttonClass("plain")}>
+          Open the bench
+        </Link>
+      </PageTitle>
+      <ProgressTape steps={steps.length} done={done} at={next < 0 || progress.superseded ? null : next} />
+      <div className="grid items-start gap-5 p-4 md:p-5 lg:grid-cols-[minmax(0,1fr)_20rem]">
+        <div className="flex min-w-0 flex-col gap-4">
+          {progress.superseded && <Superseded order={order} newest={progress.newestRevision} />}
+          {next < 0 && <Notice kind="sound">Every step is ticked.</Notice>}
+          <OrderStepsTable order={order} steps={steps} ticks={ticks} />
+        </div>
+        <aside className="flex flex-col gap-6">
+          {order.snapshot.faces.map(({ faceId, title, layout, layoutRevision }) => (
+            <section key={faceId}>
+              <h2 className="mb-2 text-lg">
+                <Link href={`/jobs/${order.jobId}/faces/${faceId}`} className="text-chalk underline">
+                  {title}
+                </Link>
+              </h2>
+              <FaceView layout={layout} title={title} />
+              <p className="mt-1 text-sm text-pencil">Made from layout {layoutRevision}</p>
+            </section>
+          ))}
+          <BenchCode qr={qr} />
+          <LabelForm orderId={order.id} revision={order.revision} paper={paper} />
+          <OrderRevisions order={order} />
+          <p className="text-sm break-all text-pencil">
+            Issued <ShopDate at={order.issuedAt} /> by {order.issuedBy}. Fingerprint {order.fingerprint.slice(0, 12)}
+          </p>
+        </aside>
+      </div>
+    </>
+  );
+}
+
+function Superseded({ order, newest }: { order: Order; newest: number }) {
+  return (
+    <Notice kind="stop">
+      Revision {revisionLetter(order.revision)} is superseded: the layout was changed after it was issued.{" "}
+      {newest > order.revision ? (
+        <Link href={`/orders/${order.id}`} className="text-chalk underline">
+          Go to revision {revisionLetter(newest)}
+        </Link>
+      ) : (
+        "Issue the layout again before anything more is cut."
+      )}
+    </Notice>
+  );
+}
