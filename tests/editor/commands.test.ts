@@ -30,19 +30,22 @@ const limits = {
 describe("laying on a board", () => {
   it("puts a set in the first sound place, clear of knots and inside the board", () => {
     for (const board of boards) {
-      const document = changedBy(unplacedDocument(), placeOnBoard(unplacedDocument(), [SET_ID], board));
+      const outcome = placeOnBoard(unplacedDocument(), [SET_ID], board);
+      expect(outcome).toMatchObject({ ok: true, said: { sound: true } });
+      const document = changedBy(unplacedDocument(), outcome);
       expect(problemsOf(document.layout, boards)).toEqual([]);
     }
   });
 
-  it("refuses a board without room, and says which", () => {
+  it("lays a set also where no place is sound, says so, and leaves the problems to be seen", () => {
     const low = { ...shortBoard, width: umFromMm(149) };
-    expect(placeOnBoard(unplacedDocument(), [SET_ID], low)).toEqual({
-      ok: false,
-      refusal: { reason: "no-room", stockId: low.id },
-    });
     const short = { ...shortBoard, length: umFromMm(960) };
-    expect(placeOnBoard(rowDocument(), [SET_ID], short)).toMatchObject({ ok: false, refusal: { reason: "no-room" } });
+    for (const board of [low, short]) {
+      const outcome = placeOnBoard(unplacedDocument(), [SET_ID], board);
+      expect(outcome).toMatchObject({ ok: true, said: { did: "placed", sound: false } });
+      const { layout } = changedBy(unplacedDocument(), outcome);
+      expect(problemsOf(layout, [board]).map(({ kind }) => kind)).toContain("outside");
+    }
   });
 
   it("keeps the saw's loss from what lies there already", () => {

@@ -1,22 +1,19 @@
 /** The lowest layer of the stock side: boards as photographed, their tapes, names, outlines and keep-clear areas. Still while pieces are dragged. */
 import type { StaticCanvas } from "fabric";
 import { type LengthStyle, printLength } from "@/lib/layout";
+import { tapeMarks } from "@/lib/words/tape-marks";
 import type { TableBoard } from "../table-board";
 import { BOARD_SPACE_PX, TAPE_PX, type TableGeometry } from "../view/geometry";
-import { paintTape, type TapeMark } from "./marks/tape-strip";
+import { paintTape } from "./marks/tape-strip";
 import { paintBoard } from "./marks/wood";
 import { paintZones } from "./marks/zones";
 import type { Palette } from "./palette";
 import type { Pictures } from "./pictures";
 import { Sketches } from "./sketches";
 
-/** Marks of a tape so long at this scale: the same that every other tape of the product uses. */
-export type TapeMarks = (length: TableBoard["face"]["length"], pxPerMm: number, unit: LengthStyle["unit"]) => readonly TapeMark[];
-
 export interface BoardsLook {
   readonly style: LengthStyle;
   readonly palette: Palette;
-  readonly tapeMarks: TapeMarks;
 }
 
 export class BoardsLayer {
@@ -42,7 +39,7 @@ export class BoardsLayer {
       const picture = pictures.at(board, scale * window.devicePixelRatio);
       this.#sketches.named(`${id} wood`).put(box, paintBoard(picture, visible, palette));
       this.#sketches.named(`${id} zones`).put(box, paintZones(board.face, scale, palette));
-      const marks = look.tapeMarks(length, scale, style.unit);
+      const marks = tapeMarks(length, scale, style.unit);
       const tape = { left: originX, top: top - TAPE_PX, width: box.width, height: TAPE_PX };
       this.#sketches.named(`${id} tape`).put(tape, paintTape(marks, scale, style.unit === "mm" ? "mm" : "in", palette));
       this.#name(board, top - TAPE_PX - BOARD_SPACE_PX, Math.max(originX, 12), look);
@@ -52,7 +49,8 @@ export class BoardsLayer {
 
   #name({ face, tag, species, place }: TableBoard, top: number, left: number, { palette, style }: BoardsLook): void {
     const size = `${printLength(face.length, style)} × ${printLength(face.width, style)} × ${printLength(face.thickness, style)}`;
-    const rest = [species, size, place].filter((part) => part !== "").join(", ");
+    const roomy = this.#canvas.width > 560;
+    const rest = (roomy ? [species, size, place] : [species]).filter((part) => part !== "").join(", ");
     const box = { left, top, width: this.#canvas.width, height: BOARD_SPACE_PX };
     this.#sketches.named(`${face.id} name`).put(box, (context) => {
       context.textBaseline = "alphabetic";

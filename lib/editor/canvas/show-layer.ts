@@ -19,6 +19,7 @@ export interface ShowLook {
   readonly boards: readonly TableBoard[];
   readonly selection: readonly PieceId[];
   readonly showTriangle: boolean;
+  readonly dragging: boolean;
   readonly style: LengthStyle;
 }
 
@@ -53,15 +54,18 @@ export class ShowLayer {
       const box = { left: left + rect.x * px, top: top + rect.y * px, width: rect.width * px, height: rect.height * px };
       this.#piece(id, box, lying.get(id), rect, look.boards, geometry, pictures, palette);
     }
+    const onWood = seams.filter(({ a, b }) => lying.has(a) && lying.has(b));
     const overlay: Box = { left, top, width, height };
     const chosen = facePieces.filter(({ id }) => look.selection.includes(id));
+    // A line around every front would hide the seams, which are what one looks at.
+    const outlined = look.dragging || chosen.length === facePieces.length ? [] : chosen;
     this.#sketches.named("overlay").put(overlay, (context) => {
-      for (const { rect } of chosen) {
+      for (const { rect } of outlined) {
         context.strokeStyle = palette.white;
-        context.lineWidth = 5;
+        context.lineWidth = 4;
         context.strokeRect(rect.x * px, rect.y * px, rect.width * px, rect.height * px);
         context.strokeStyle = palette.chalk;
-        context.lineWidth = 3;
+        context.lineWidth = 2;
         context.strokeRect(rect.x * px, rect.y * px, rect.width * px, rect.height * px);
       }
       if (look.showTriangle) {
@@ -70,17 +74,18 @@ export class ShowLayer {
         );
         chalkLines(context, lines, [], palette);
       }
-      for (const { label, rect } of facePieces) {
+      for (const { id, label, rect } of facePieces) {
+        const piece = { left: rect.x * px, top: rect.y * px, width: rect.width * px, height: rect.height * px };
         chip(
           context,
-          { x: rect.x * px + 4, y: rect.y * px + 4 },
+          piece,
           label,
-          { fill: "rgb(32 38 42 / 0.8)", ink: palette.white },
+          { fill: look.selection.includes(id) ? palette.chalk : "rgb(32 38 42 / 0.8)", ink: palette.white },
           palette,
         );
       }
     });
-    for (const [index, { x, y, lines, jumps }] of jumpChips(seams, size, geometry, look.style).entries()) {
+    for (const [index, { x, y, lines, jumps }] of jumpChips(onWood, size, geometry, look.style).entries()) {
       const tall = chipHeight({ lines });
       const box = { left: left + x - CHIP_SIZE.width / 2, top: top + y - tall / 2, width: CHIP_SIZE.width, height: tall };
       this.#sketches.named(`jump ${index}`).put(box, paintJump(lines, jumps, palette));
@@ -136,7 +141,7 @@ function paintBlank(palette: Palette): (context: CanvasRenderingContext2D, box: 
     context.fillStyle = palette.graphite;
     context.textBaseline = "middle";
     context.textAlign = "center";
-    if (width > 70) context.fillText("no wood yet", width / 2, height / 2);
+    if (width > 70 && height > 60) context.fillText("no wood yet", width / 2, height / 2);
     context.textAlign = "start";
   };
 }

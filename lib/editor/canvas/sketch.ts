@@ -47,7 +47,10 @@ export class Sketch extends FabricObject {
   }
 
   override _render(context: CanvasRenderingContext2D): void {
+    // The context of a cached picture is used again and again, and nobody else puts it back.
+    context.save();
     context.translate(-this.#box.width / 2, -this.#box.height / 2);
     this.#paint(context, this.#box);
+    context.restore();
   }
 }

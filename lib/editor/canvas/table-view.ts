@@ -10,11 +10,11 @@ import { piecesOfProblem, problemsOf } from "../selectors/facts";
 import type { Store } from "../store";
 import { previewAt } from "../tools/drag";
 import { idleTool, type PointerAt, type PointerInput, type ToolEffect, type ToolState, toolStep } from "../tools/pointer-tool";
-import { type Size, type TableGeometry, tableGeometry, tablePointAt } from "../view/geometry";
+import { type Size, type TableGeometry, tableGeometry, tablePointAt, type View } from "../view/geometry";
 import { pieceOnFaceAt, pieceOnStockAt } from "../view/piece-at";
 import type { ViewState } from "../view/view-state";
 import { pannedBy, type Side, zoomedAt } from "../view/zoom";
-import { BoardsLayer, type TapeMarks } from "./boards-layer";
+import { BoardsLayer } from "./boards-layer";
 import { createFrameClock } from "./frame-clock";
 import { readPalette } from "./palette";
 import { Pictures } from "./pictures";
@@ -27,7 +27,6 @@ export interface TableViewOptions {
   readonly editor: Editor;
   readonly viewState: Store<ViewState>;
   readonly style: LengthStyle;
-  readonly tapeMarks: TapeMarks;
 }
 
 export interface TableView {
@@ -43,7 +42,7 @@ const SNAP_PX = 7;
 const REACH_PX = 2;
 const FINGER_REACH_PX = 12;
 
-export function mountTableView({ hosts, editor, viewState, style, tapeMarks }: TableViewOptions): TableView {
+export function mountTableView({ hosts, editor, viewState, style }: TableViewOptions): TableView {
   const palette = readPalette();
   const canvases = {
     show: canvasIn(hosts.show),
@@ -79,6 +78,14 @@ export function mountTableView({ hosts, editor, viewState, style, tapeMarks }: T
     return tableGeometry({ boards: state.boardFaces, face: state.document.layout.face }, sides, view);
   };
 
+  const look = (view: View) => {
+    const state = viewState.get();
+    const { document, boardFaces } = editor.get();
+    if (!state.sides) return;
+    const held = tableGeometry({ boards: boardFaces, face: document.layout.face }, state.sides, view).view;
+    viewState.set({ ...state, view: held });
+  };
+
   const draw = () => {
     const geometry = geometryNow();
     const { sides, view, showTriangle } = viewState.get();
@@ -91,13 +98,13 @@ export function mountTableView({ hosts, editor, viewState, style, tapeMarks }: T
     drawn = { geometry, geometryKey: [sides, view, boardFaces, state.document.layout.face], boards };
 
     if (!still) {
-      layers.boards.sync(boards, geometry, pictures, { style, palette, tapeMarks });
+      layers.boards.sync(boards, geometry, pictures, { style, palette });
       canvases.boards.renderAll();
     }
     const trouble = new Set(problemsOf(layout, boardFaces).flatMap(piecesOfProblem));
     layers.pieces.sync({ layout, selection, trouble, showTriangle, preview }, geometry, palette);
     canvases.pieces.renderAll();
-    layers.show.sync({ layout, boards, selection, showTriangle, style }, geometry, pictures, palette);
+    layers.show.sync({ layout, boards, selection, showTriangle, dragging: preview !== null, style }, geometry, pictures, palette);
     canvases.show.renderAll();
   };
 
@@ -122,7 +129,7 @@ export function mountTableView({ hosts, editor, viewState, style, tapeMarks }: T
       case "drop-preview":
         return editor.dropPreview();
       case "pan":
-        return viewState.set({ ...viewState.get(), view: pannedBy(viewState.get().view, effect.side, effect.by) });
+        return look(pannedBy(viewState.get().view, effect.side, effect.by));
     }
   };
 
@@ -193,7 +200,7 @@ export function mountTableView({ hosts, editor, viewState, style, tapeMarks }: T
       const state = viewState.get();
       if (!geometry || !state.sides) return;
       const origins = { show: geometry.showOrigin, stock: geometry.stockOrigin };
-      viewState.set({ ...state, view: zoomedAt(state.view, factor, side, at, origins, state.sides) });
+      look(zoomedAt(state.view, factor, side, at, origins, state.sides));
     },
     onPan: (side, by) => act({ do: "pan", side, by }),
   };

@@ -18,17 +18,25 @@ import {
 /** Lines across the board that are tried, the middle one first, then further and further out on either side. */
 const LINES_ACROSS = 17;
 
-/** The layout with the group laid there, or null when no line has room for it. */
-export function laidAtFirstPlace(layout: FaceLayout, groupId: string, board: BoardFace, turns: QuarterTurns): FaceLayout | null {
-  for (const y of linesAcross(layout, groupId, board, turns)) {
+export interface LaidGroup {
+  readonly layout: FaceLayout;
+  /** False: no line has room for it; it lies at the left end in the middle, for the maker to see what is in the way. */
+  readonly sound: boolean;
+}
+
+/** The layout with the group laid on the board. The group exists and has pieces. */
+export function laidAtFirstPlace(layout: FaceLayout, groupId: string, board: BoardFace, turns: QuarterTurns): LaidGroup {
+  const lines = linesAcross(layout, groupId, board, turns);
+  for (const y of lines) {
     const placed = placeGroup(layout, groupId, board.id, { x: um(0), y }, turns);
-    if (!placed.ok) return null;
+    if (!placed.ok) continue;
     const slide = leastSlide(...moving(placed.layout, groupId, board));
     if (slide === null) continue;
     const slid = moveGroup(placed.layout, groupId, { x: slide, y: um(0) });
-    if (slid.ok) return slid.layout;
+    if (slid.ok) return { layout: slid.layout, sound: true };
   }
-  return null;
+  const left = placeGroup(layout, groupId, board.id, { x: um(0), y: lines[0] ?? um(0) }, turns);
+  return { layout: left.ok ? left.layout : layout, sound: false };
 }
 
 function moving(layout: FaceLayout, groupId: string, board: BoardFace): Parameters<typeof leastSlide> {
@@ -42,7 +50,7 @@ function linesAcross(layout: FaceLayout, groupId: string, board: BoardFace, turn
   const atOrigin = placeGroup(layout, groupId, board.id, { x: um(0), y: um(0) }, turns);
   const height = atOrigin.ok ? (groupBounds(atOrigin.layout, groupId)?.height ?? 0) : 0;
   const room = board.width - height;
-  if (room < 0) return [];
+  if (room < 0) return [um(0)];
   const half = (LINES_ACROSS - 1) / 2;
   const offsets = Array.from({ length: LINES_ACROSS }, (_, index) => (index % 2 === 0 ? index / 2 : -(index + 1) / 2));
   return [...new Set(offsets.map((offset) => um(Math.floor((room * (half + offset)) / (2 * half)))))];

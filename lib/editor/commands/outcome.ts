@@ -7,7 +7,13 @@ import type { TableDocument } from "../document";
 export type Said =
   | { readonly did: "slid"; readonly pieces: readonly PieceId[]; readonly by: { readonly x: Um; readonly y: Um } }
   | { readonly did: "turned" | "lifted"; readonly pieces: readonly PieceId[] }
-  | { readonly did: "placed" | "moved-to-board"; readonly pieces: readonly PieceId[]; readonly stockId: StockId }
+  | {
+      readonly did: "placed" | "moved-to-board";
+      readonly pieces: readonly PieceId[];
+      readonly stockId: StockId;
+      /** False: the board has no sound place for it, and it lies where that can be seen. */
+      readonly sound: boolean;
+    }
   | { readonly did: "swapped"; readonly pieces: readonly [PieceId, PieceId] }
   | { readonly did: "let-loose" | "regrouped"; readonly pieces: readonly PieceId[] }
   | { readonly did: "changed-cuts" | "changed-spacing" | "changed-anchor" | "changed-grain" }
@@ -18,9 +24,6 @@ export type CommandRefusal =
   | { readonly reason: "nothing-selected" }
   /** Swapping takes exactly two pieces. */
   | { readonly reason: "needs-two-pieces"; readonly selected: number }
-  /** No place on the board where the pieces lie inside its outline, off keep-clear areas and off other pieces. */
-  | { readonly reason: "no-room"; readonly stockId: StockId }
-  | { readonly reason: "not-on-one-board"; readonly pieces: readonly PieceId[] }
   | { readonly reason: "nothing-changes" };
 
 export type CommandOutcome =

@@ -5,21 +5,22 @@ import { laidAtFirstPlace } from "./find-place";
 import { type CommandOutcome, inTurn, refusedBecause, stepToLayout } from "./outcome";
 import { piecesOfGroups } from "./targets";
 
-/** Each group goes to the first place with room for it; a group that lay on wood keeps its turn. */
+/** Each group goes to the first place with room for it, or where its problems can be seen; a group that lay on wood keeps its turn. */
 export function placeOnBoard(document: TableDocument, groupIds: readonly string[], board: BoardFace): CommandOutcome {
   if (groupIds.length === 0) return refusedBecause({ reason: "nothing-selected" });
   const pieces = piecesOfGroups(document.layout, groupIds);
   const cameFromWood = groupIds.some((id) => groupById(document.layout, id)?.placement != null);
   let layout: FaceLayout = document.layout;
+  let sound = true;
   for (const id of groupIds) {
     const group = groupById(layout, id);
     if (group === null) return refusedBecause({ reason: "unknown-group", groupId: id });
     const turns = group.placement?.turns ?? turnsAlongGrain(layout.face.grain)[0];
     const laid = laidAtFirstPlace(layout, id, board, turns);
-    if (laid === null) return refusedBecause({ reason: "no-room", stockId: board.id });
-    layout = laid;
+    layout = laid.layout;
+    sound &&= laid.sound;
   }
-  return stepToLayout(document, layout, { did: cameFromWood ? "moved-to-board" : "placed", pieces, stockId: board.id });
+  return stepToLayout(document, layout, { did: cameFromWood ? "moved-to-board" : "placed", pieces, stockId: board.id, sound });
 }
 
 export function liftFromBoard(document: TableDocument, groupIds: readonly string[]): CommandOutcome {

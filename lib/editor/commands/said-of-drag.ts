@@ -11,7 +11,7 @@ export function saidOfDrag({ layout }: TableDocument, preview: Preview): Said {
   const before = first === undefined ? null : (groupById(layout, first)?.placement ?? null);
   const after = first === undefined ? null : (groupById(preview.layout, first)?.placement ?? null);
   if (before === null || after === null || before.stockId !== after.stockId) {
-    return { did: "moved-to-board", pieces, stockId: preview.stockId };
+    return { did: "moved-to-board", pieces, stockId: preview.stockId, sound: true };
   }
   const by: { x: Um; y: Um } = { x: um(after.at.x - before.at.x), y: um(after.at.y - before.at.y) };
   return { did: "slid", pieces, by };

@@ -35,10 +35,12 @@ export const MARGIN_PX = 20;
 export const TAPE_PX = 26;
 /** Between a board and the ruler of the next, for the board's name. */
 export const BOARD_SPACE_PX = 30;
-/** Around the face for the jumps of its outer seams. */
-export const CHIP_ROOM_PX = 44;
-/** The face is drawn at the scale of the boards when it then takes up at least this share of the width; else as large as it fits. */
-const SHARE_FOR_ONE_SCALE = 0.4;
+/** Below the face and beside it for the jumps of its outer seams. */
+const CHIP_ROOM_BELOW_PX = 46;
+const CHIP_ROOM_BESIDE_PX = 92;
+/** The face is drawn at the scale of the boards when it is then at least this large, as a share of the width and in pixels; else as large as it fits. */
+const SHARE_FOR_ONE_SCALE = 0.5;
+const HEIGHT_FOR_ONE_SCALE_PX = 90;
 /** A photograph enlarged beyond this shows nothing more, px per mm on the screen. */
 const LARGEST_FIT_PX_PER_MM = 4;
 
@@ -54,11 +56,11 @@ export interface TableGeometry {
   /** Both sides are drawn at one scale. */
   readonly oneScale: boolean;
   readonly boards: readonly BoardPlace[];
-  /** Height of all boards with rulers, px. */
-  readonly stockHeightPx: number;
   /** Where the top left corner of the face, and of the table frame, lie on their sides, px. */
   readonly showOrigin: Pan;
   readonly stockOrigin: Pan;
+  /** The view with both sides moved no further than there is something to see. */
+  readonly view: View;
 }
 
 export interface TableContent {
@@ -68,9 +70,11 @@ export interface TableContent {
 
 export function tableGeometry({ boards, face }: TableContent, sides: { show: Size; stock: Size }, view: View): TableGeometry {
   const { width, height } = faceSize(face);
+  const beside = face.rows.length > 1 ? CHIP_ROOM_BESIDE_PX : 0;
+  const below = face.columns.length > 1 ? CHIP_ROOM_BELOW_PX : 0;
   const faceFit = Math.min(
-    usable(sides.show.width, 2 * MARGIN_PX + CHIP_ROOM_PX) / mm(width),
-    usable(sides.show.height, CHIP_ROOM_PX + 2 * MARGIN_PX) / mm(height),
+    usable(sides.show.width, 2 * MARGIN_PX + beside) / mm(width),
+    usable(sides.show.height, 2 * MARGIN_PX + below) / mm(height),
   );
   const longest = Math.max(0, ...boards.map((board) => board.length));
   const totalWidth = boards.reduce((sum, board) => sum + board.width, 0);
@@ -80,29 +84,56 @@ export function tableGeometry({ boards, face }: TableContent, sides: { show: Siz
     totalWidth > 0 ? usable(sides.stock.height, fixed + MARGIN_PX) / mm(totalWidth) : faceFit,
     LARGEST_FIT_PX_PER_MM,
   );
-  const oneScale = boardFit <= faceFit && boardFit * mm(width) >= SHARE_FOR_ONE_SCALE * sides.show.width;
+  const oneScale =
+    boardFit <= faceFit &&
+    boardFit * mm(width) >= SHARE_FOR_ONE_SCALE * sides.show.width &&
+    boardFit * mm(height) >= HEIGHT_FOR_ONE_SCALE_PX;
   const stockPxPerMm = boardFit * view.zoom;
   const showPxPerMm = (oneScale ? boardFit : Math.min(faceFit, LARGEST_FIT_PX_PER_MM)) * view.zoom;
   const faceWidthPx = mm(width) * showPxPerMm;
   const faceHeightPx = mm(height) * showPxPerMm;
   const stacked = stackBoards(boards, stockPxPerMm);
+  const show = sideGeometry(
+    sides.show,
+    { width: faceWidthPx + beside, height: faceHeightPx + below },
+    {
+      x: oneScale ? MARGIN_PX : Math.max(MARGIN_PX, (sides.show.width - beside - faceWidthPx) / 2),
+      y: Math.max(MARGIN_PX, (sides.show.height - below - faceHeightPx) / 2),
+    },
+    view.show,
+  );
+  const stock = sideGeometry(
+    sides.stock,
+    { width: mm(longest) * stockPxPerMm, height: stacked.heightPx },
+    { x: MARGIN_PX, y: Math.max(0, (sides.stock.height - stacked.heightPx) / 3) },
+    view.stock,
+  );
   return {
     stockPxPerMm,
     showPxPerMm,
     oneScale,
-    ...stacked,
-    showOrigin: {
-      x: (oneScale ? MARGIN_PX : Math.max(MARGIN_PX, (sides.show.width - faceWidthPx) / 2)) + view.show.x,
-      y: Math.max(MARGIN_PX, (sides.show.height - CHIP_ROOM_PX - faceHeightPx) / 2) + view.show.y,
-    },
-    stockOrigin: {
-      x: MARGIN_PX + view.stock.x,
-      y: Math.max(0, (sides.stock.height - stacked.stockHeightPx) / 3) + view.stock.y,
-    },
+    boards: stacked.places,
+    showOrigin: show.origin,
+    stockOrigin: stock.origin,
+    view: { zoom: view.zoom, show: show.pan, stock: stock.pan },
   };
 }
 
-function stackBoards(boards: readonly BoardFace[], pxPerMm: number): Pick<TableGeometry, "boards" | "stockHeightPx"> {
+/** Where the content of a side starts. What fits is not moved; what does not is moved up to its edges and no further. */
+function sideGeometry(side: Size, content: Size, start: Pan, pan: Pan): { readonly origin: Pan; readonly pan: Pan } {
+  const held = (wish: number, from: number, length: number, room: number) =>
+    from + length + MARGIN_PX <= room ? 0 : Math.min(Math.max(wish, room - MARGIN_PX - length - from), MARGIN_PX - from);
+  const kept = {
+    x: held(pan.x, start.x, content.width, side.width),
+    y: held(pan.y, start.y, content.height, side.height),
+  };
+  return { origin: { x: start.x + kept.x, y: start.y + kept.y }, pan: kept };
+}
+
+function stackBoards(
+  boards: readonly BoardFace[],
+  pxPerMm: number,
+): { readonly places: BoardPlace[]; readonly heightPx: number } {
   let px = 0;
   const places = boards.map((board) => {
     px += BOARD_SPACE_PX + TAPE_PX;
@@ -110,7 +141,7 @@ function stackBoards(boards: readonly BoardFace[], pxPerMm: number): Pick<TableG
     px += mm(board.width) * pxPerMm;
     return place;
   });
-  return { boards: places, stockHeightPx: px + MARGIN_PX };
+  return { places, heightPx: px };
 }
 
 /** A point of the table frame, not rounded: positions of a pointer. */

@@ -21,7 +21,7 @@ export function chipHeight({ lines }: Pick<JumpChip, "lines">): number {
   return lines.length > 1 ? TWO_LINES_HEIGHT : CHIP_SIZE.height;
 }
 
-/** `face`: size of the face, µm. */
+/** `seams`: those between fronts that lie on wood. `face`: size of the face, µm. */
 export function jumpChips(
   seams: readonly Seam[],
   face: { readonly width: Um; readonly height: Um },

@@ -1,5 +1,5 @@
 /** Zooming and panning both sides. A zoom keeps the wood under the pointer where it is on the side it happened on, and the middle of the other. */
-import { GREATEST_ZOOM, LEAST_ZOOM, MARGIN_PX, type Pan, type Size, type View, wholeView } from "./geometry";
+import { GREATEST_ZOOM, LEAST_ZOOM, type Pan, type Size, type View, wholeView } from "./geometry";
 
 export type Side = "show" | "stock";
 
@@ -27,22 +27,12 @@ export function zoomedAt(
   return { zoom, show: panned("show"), stock: panned("stock") };
 }
 
-/** Moves one side by pixels. At the whole view there is nothing to move along the boards. */
+/** Moves one side by pixels; how far that may go is for the geometry to say. */
 export function pannedBy(view: View, side: Side, by: Pan): View {
   return { ...view, [side]: { x: view[side].x + by.x, y: view[side].y + by.y } };
 }
 
-/** Keeps at least a margin's worth of the content on its side. */
-export function keptInSight(pan: Pan, start: Pan, content: Size, side: Size): Pan {
-  const kept = (offset: number, from: number, length: number, room: number) => {
-    const least = 3 * MARGIN_PX - length - from;
-    const most = room - 3 * MARGIN_PX - from;
-    return clamped(offset, Math.min(least, most), Math.max(least, most));
-  };
-  return { x: kept(pan.x, start.x, content.width, side.width), y: kept(pan.y, start.y, content.height, side.height) };
-}
-
-/** What a wheel or a trackpad means: zoom with the usual modifier or a plain wheel that only turns up and down, else pan. */
+/** How much nearer one turn of the wheel brings the wood. */
 export function wheelFactor(deltaY: number): number {
   return Math.exp(-clamped(deltaY, -240, 240) / 480);
 }

@@ -43,7 +43,13 @@ export function paintPiece({ label, chosen, trouble, triangle }: PieceLook, pale
     context.lineWidth = chosen ? 3 : 1.5;
     context.strokeRect(0, 0, width, height);
     chalkLines(context, triangle, [7, 5], palette);
-    chip(context, { x: 4, y: 4 }, label, { fill: trouble ? palette.crayon : palette.chalk, ink: palette.white }, palette);
+    chip(
+      context,
+      { left: 0, top: 0, width, height },
+      label,
+      { fill: trouble ? palette.crayon : palette.chalk, ink: palette.white },
+      palette,
+    );
   };
 }
 

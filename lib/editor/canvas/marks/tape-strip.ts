@@ -1,14 +1,7 @@
 /** The yellow tape above a board, its marks in the shop's units. */
+import type { TapeMark } from "@/lib/words/tape-marks";
 import type { Palette } from "../palette";
 import type { Paint } from "../sketch";
-
-export interface TapeMark {
-  /** From the start of the tape, mm. */
-  readonly mm: number;
-  readonly size: "short" | "middle" | "long";
-  /** "" on marks without one. */
-  readonly figure: string;
-}
 
 const markPx: Readonly<Record<TapeMark["size"], number>> = { short: 5, middle: 9, long: 14 };
 /** A figure that would hang over the end of the tape is left out. */

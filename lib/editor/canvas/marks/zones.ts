@@ -57,13 +57,18 @@ function paintArea(
   context.strokeStyle = palette.crayon;
   context.stroke(path);
   context.font = `600 13px ${palette.measure}`;
-  const { width } = context.measureText(kind);
-  if (box.width < width + 8) return;
-  context.fillStyle = palette.white;
-  context.fillRect(box.left + box.width / 2 - width / 2 - 4, box.top + box.height / 2 - 9, width + 8, 18);
+  const width = context.measureText(kind).width + 8;
+  const middle = box.left + box.width / 2;
+  // The word stands in the area where that leaves enough of the hatching to see, else under it.
+  const inside = box.width > 2 * width && box.height > 44;
+  const top = inside ? box.top + box.height / 2 - 9 : box.top + box.height + 3;
+  context.fillStyle = palette.sheet;
+  context.fillRect(middle - width / 2, top, width, 18);
   context.fillStyle = palette.crayon;
+  context.textAlign = "center";
   context.textBaseline = "middle";
-  context.fillText(kind, box.left + box.width / 2 - width / 2, box.top + box.height / 2 + 1);
+  context.fillText(kind, middle, top + 10);
+  context.textAlign = "start";
 }
 
 function boxOf(area: KeepClear["area"], px: (length: number) => number) {

@@ -1,0 +1,109 @@
+"use client";
+import { useMutation } from "@tanstack/react-query";
+import Link from "next/link";
+import { useState } from "react";
+import { toast } from "sonner";
+import { useUnits } from "@/components/shell/units";
+import { Button } from "@/components/ui/button";
+import { Notice } from "@/components/ui/notice";
+import { messageOf } from "@/lib/client/fault-from-server";
+import { moveToVersion, takeBoardOffTable } from "@/lib/client/layout";
+import { type TableBoard, tableBoard } from "@/lib/editor/table-board";
+import { AddBoardDialog } from "./add-board-dialog";
+import { PanelSection } from "./panel-section";
+import { useTableActions } from "./table-actions";
+import { useEditorState, useTableContext } from "./table-context";
+
+export function BoardsSection() {
+  const { editor } = useTableContext();
+  const boards = useEditorState((state) => state.boards);
+  const [adding, setAdding] = useState(false);
+  return (
+    <PanelSection title="Boards on the table" beside={boards.length}>
+      {boards.length === 0 && <p className="text-sm">No board yet. Add one from the rack, then lay the fronts on it.</p>}
+      <ul className="flex flex-col gap-3">
+        {boards.map((board) => (
+          <BoardOnTable key={board.face.id} board={board} />
+        ))}
+      </ul>
+      {editor.mayChange && (
+        <Button size="small" onClick={() => setAdding(true)}>
+          Add a board…
+        </Button>
+      )}
+      <AddBoardDialog open={adding} onOpenChange={setAdding} />
+    </PanelSection>
+  );
+}
+
+function BoardOnTable({ board }: { board: TableBoard }) {
+  const { editor, sync, faceId } = useTableContext();
+  const { print } = useUnits();
+  const { layOn } = useTableActions();
+  const used = useEditorState(({ document }) =>
+    document.layout.groups.some(({ placement }) => placement?.stockId === board.face.id),
+  );
+  const { id, length, width } = board.face;
+  const takeOff = useMutation({
+    mutationFn: async () => {
+      // The server looks at what is saved: fronts that were just moved away must be saved first.
+      await sync.settled();
+      await takeBoardOffTable(faceId, id);
+    },
+    onSuccess: () => editor.setBoards(editor.get().boards.filter(({ face }) => face.id !== id)),
+    onError: (error) => toast.error(messageOf(error)),
+  });
+  const moveOver = useMutation({
+    mutationFn: (straighteningId: string) => moveToVersion(faceId, id, straighteningId),
+    onSuccess: (moved) => {
+      editor.setBoards(editor.get().boards.map((other) => (other.face.id === id ? tableBoard(moved) : other)));
+      toast.success(`Board ${moved.tag} is on its newest picture. Look over where the fronts lie.`);
+    },
+    onError: (error) => toast.error(messageOf(error)),
+  });
+  const newer = board.newerStraighteningId;
+  return (
+    <li className="flex flex-col gap-1.5 text-sm">
+      <p>
+        <Link href={`/rack/${id}`} className="measure text-base text-chalk underline-offset-2 hover:underline">
+          {board.tag}
+        </Link>{" "}
+        {board.species}
+        <span className="block text-pencil">
+          {print(length)} × {print(width)}
+          {board.place && `, ${board.place}`}
+        </span>
+      </p>
+      {board.heldBy.map(({ faceId: holder, faceTitle, jobTitle }) => (
+        <Notice key={holder} kind="care">
+          Also laid out for {faceTitle} ({jobTitle}).
+        </Notice>
+      ))}
+      {newer !== null && (
+        <Notice kind="care">
+          <span className="mb-1 block">
+            This layout lies on picture {board.version}; the board was marked again since. Fronts keep their places in mm.
+          </span>
+          <Button size="small" disabled={moveOver.isPending || !editor.mayChange} onClick={() => moveOver.mutate(newer)}>
+            Move over to the newest picture
+          </Button>
+        </Notice>
+      )}
+      {editor.mayChange && (
+        <div className="flex flex-wrap gap-2">
+          <Button size="small" onClick={() => layOn(board.face)}>
+            Lay fronts here
+          </Button>
+          <Button
+            size="small"
+            disabled={used || takeOff.isPending}
+            title={used ? "Move its fronts to another board first" : undefined}
+            onClick={() => takeOff.mutate()}
+          >
+            Take off the table
+          </Button>
+        </div>
+      )}
+    </li>
+  );
+}

@@ -1,0 +1,49 @@
+"use client";
+/** The fronts as a list that is not seen: what is drawn on the canvases, for the keyboard and for those who hear the page. */
+import { useUnits } from "@/components/shell/units";
+import { factsOf, piecesOfProblem, problemsOf } from "@/lib/editor/selectors/facts";
+import { boundsOf, groupOf, polygonToStock, SET_ID } from "@/lib/layout";
+import { useEditorState, useTableContext } from "./table-context";
+
+export function PieceList() {
+  const { editor } = useTableContext();
+  const { print } = useUnits();
+  const layout = useEditorState((state) => state.document.layout);
+  const boards = useEditorState((state) => state.boards);
+  const faces = useEditorState((state) => state.boardFaces);
+  const selection = useEditorState((state) => state.selection);
+  const { facePieces, pieces } = factsOf(layout);
+  const trouble = new Set(problemsOf(layout, faces).flatMap(piecesOfProblem));
+  const lying = new Map(pieces.map((piece) => [piece.id, piece]));
+
+  const described = facePieces.map(({ id, label, rect }) => {
+    const piece = lying.get(id);
+    const board = piece && boards.find(({ face }) => face.id === piece.stockId);
+    const at = piece && boundsOf(polygonToStock(piece.stockFromFace, piece.outline));
+    const where =
+      at && board ? `on board ${board.tag}, ${print(at.x)} from the left end, ${print(at.y)} from the edge` : "no wood yet";
+    const loose = groupOf(layout, id)?.id === SET_ID ? "" : ", loose";
+    return {
+      id,
+      text: `Front ${label}, ${print(rect.width)} × ${print(rect.height)}, ${where}${loose}${trouble.has(id) ? ", see problems" : ""}`,
+    };
+  });
+  return (
+    <ul aria-label="Fronts" className="sr-only">
+      {described.map(({ id, text }) => (
+        <li key={id}>
+          <button
+            type="button"
+            aria-pressed={selection.includes(id)}
+            onFocus={() => {
+              if (!editor.get().selection.includes(id)) editor.select([id]);
+            }}
+            onClick={() => editor.toggle(id)}
+          >
+            {text}
+          </button>
+        </li>
+      ))}
+    </ul>
+  );
+}

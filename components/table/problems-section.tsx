@@ -1,0 +1,96 @@
+"use client";
+import { useUnits } from "@/components/shell/units";
+import { Button } from "@/components/ui/button";
+import { piecesOfProblem } from "@/lib/editor/selectors/facts";
+import { type Problem, type Um, um } from "@/lib/layout";
+import { problemSentence } from "@/lib/words/layout-problem";
+import { PanelSection } from "./panel-section";
+import { useTableActions } from "./table-actions";
+import { useEditorState, useTableContext } from "./table-context";
+import type { Problems } from "./use-problems";
+import { useTagOf } from "./use-tag-of";
+
+export function ProblemsSection({ problems: { found, working } }: { problems: Problems }) {
+  return (
+    <PanelSection title="Problems" beside={found.length > 0 ? found.length : working ? "looking…" : "none"}>
+      {found.length === 0 ? (
+        <p className="text-sm text-moss">
+          {working
+            ? "Working out whether straight cuts part the fronts…"
+            : "Every front lies on sound wood, and straight cuts part them."}
+        </p>
+      ) : (
+        <ul className="flex flex-col gap-2">
+          {found.map((problem) => (
+            <ProblemItem key={keyOf(problem)} problem={problem} />
+          ))}
+        </ul>
+      )}
+    </PanelSection>
+  );
+}
+
+function ProblemItem({ problem }: { problem: Problem }) {
+  const { editor } = useTableContext();
+  const { style } = useUnits();
+  const tagOf = useTagOf();
+  return (
+    <li className="flex flex-col gap-1.5 rounded-sm border-l-4 border-crayon bg-crayon-wash px-3 py-2 text-sm">
+      <button
+        type="button"
+        onClick={() => editor.select(piecesOfProblem(problem))}
+        className="min-h-8 text-left underline-offset-2 hover:underline"
+      >
+        {problemSentence(problem, style, tagOf)}
+      </button>
+      {editor.mayChange && <Mend problem={problem} />}
+    </li>
+  );
+}
+
+/** What would mend it, as a button, where one step does. */
+function Mend({ problem }: { problem: Problem }) {
+  const { print } = useUnits();
+  const { slideOf, layOn } = useTableActions();
+  const boards = useEditorState((state) => state.boards);
+  if (problem.kind === "keep-clear" && problem.slide !== null && problem.slide !== 0) {
+    const { slide, piece } = problem;
+    return (
+      <Button size="small" className="self-start" onClick={() => slideOf(piece, slide)}>
+        Slide {print(magnitude(slide))} {slide < 0 ? "left" : "right"}
+      </Button>
+    );
+  }
+  if (problem.kind === "not-placed" && boards.length > 0) {
+    return (
+      <span className="flex flex-wrap gap-2">
+        {boards.map(({ face, tag }) => (
+          <LayButton key={face.id} tag={tag} pieces={problem.pieces} onLay={() => layOn(face)} />
+        ))}
+      </span>
+    );
+  }
+  return null;
+}
+
+function LayButton({ tag, pieces, onLay }: { tag: string; pieces: readonly string[]; onLay: () => void }) {
+  const { editor } = useTableContext();
+  return (
+    <Button
+      size="small"
+      onClick={() => {
+        editor.select(pieces);
+        onLay();
+      }}
+    >
+      Lay on {tag}
+    </Button>
+  );
+}
+
+const magnitude = (length: Um) => um(Math.abs(length));
+
+function keyOf(problem: Problem): string {
+  const about = "areaId" in problem ? problem.areaId : "stockId" in problem ? problem.stockId : "";
+  return [problem.kind, ...piecesOfProblem(problem), about].join(" ");
+}

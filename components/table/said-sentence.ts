@@ -1,0 +1,105 @@
+/** What happened at the table, in plain words, for the line below it and for those who hear it. */
+import type { CommandRefusal, Said } from "@/lib/editor/commands/outcome";
+import type { Announcement } from "@/lib/editor/editor";
+import { type LengthStyle, type PieceId, printLength, type Um, um } from "@/lib/layout";
+import type { TagOf } from "@/lib/words/layout-problem";
+import { labelRanges } from "@/lib/words/part-name";
+
+export function announcementSentence(announcement: Announcement, style: LengthStyle, tagOf: TagOf): string {
+  switch (announcement.kind) {
+    case "did":
+      return saidSentence(announcement.said, style, tagOf);
+    case "refused":
+      return refusalSentence(announcement.refusal, style);
+    case "undid":
+      return "Undone.";
+    case "redid":
+      return "Done again.";
+    case "nothing-to-undo":
+      return "There is nothing to undo.";
+    case "nothing-to-redo":
+      return "There is nothing to do again.";
+    case "drag-dropped":
+      return "Dropped: everything lies where it lay.";
+    case "read-only":
+      return "You may look at this layout but not change it. A maker can.";
+    case "merged":
+      return `${announcement.updatedBy} changed this layout in another window. The table shows it.`;
+  }
+}
+
+function saidSentence(said: Said, style: LengthStyle, tagOf: TagOf): string {
+  switch (said.did) {
+    case "slid":
+      return `${fronts(said.pieces)} slid ${way(said.by, style)}.`;
+    case "turned":
+      return `${fronts(said.pieces)} turned end for end.`;
+    case "lifted":
+      return `${fronts(said.pieces)} taken off the board.`;
+    case "placed":
+    case "moved-to-board": {
+      const moved = `${fronts(said.pieces)} ${said.did === "placed" ? "laid on" : "moved to"} board ${tagOf(said.stockId)}.`;
+      return said.sound ? moved : `${moved} It has no sound place for them as they are: see the problems.`;
+    }
+    case "swapped":
+      return `${fronts(said.pieces)} have changed places in the wood.`;
+    case "let-loose":
+      return `${fronts(said.pieces)} let loose. The wood has not moved.`;
+    case "regrouped":
+      return `${fronts(said.pieces)} back in the set.`;
+    case "changed-cuts":
+      return "What the cuts cost is changed.";
+    case "changed-spacing":
+      return "Spacing changed.";
+    case "changed-anchor":
+      return "Anchor changed. No wood has moved.";
+    case "changed-grain":
+      return "Grain turned by a quarter, and every group laid along its board again.";
+    case "changed-sizes":
+      return said.swapsUndone.length === 0
+        ? "Sizes changed."
+        : `Sizes changed. ${fronts(said.swapsUndone)} went back to their own places, no longer being of one size.`;
+  }
+}
+
+function refusalSentence(refusal: CommandRefusal, style: LengthStyle): string {
+  switch (refusal.reason) {
+    case "nothing-selected":
+      return "Choose a front first.";
+    case "needs-two-pieces":
+      return `Choose two fronts to swap; ${refusal.selected} ${refusal.selected === 1 ? "is" : "are"} chosen. Shift and click adds one.`;
+    case "nothing-changes":
+      return "That changes nothing.";
+    case "unknown-piece":
+      return `This face has no front ${refusal.piece.replace(/^p/, "")}.`;
+    case "unknown-group":
+      return "That group is no longer there.";
+    case "not-placed":
+      return "It does not lie on a board yet. Lay it on one first.";
+    case "already-loose":
+      return `${fronts([refusal.piece])} is loose already.`;
+    case "already-in-set":
+      return `${fronts([refusal.piece])} is in the set already.`;
+    case "same-piece":
+      return "A front cannot change places with itself.";
+    case "sizes-differ": {
+      const [p, q] = refusal.sizes;
+      const size = (of: typeof p) => `${printLength(of.width, style)} × ${printLength(of.height, style)}`;
+      return `Only fronts of one size can change places: these are ${size(p)} and ${size(q)}.`;
+    }
+  }
+}
+
+/** "Front 3", "Fronts 1–4". */
+export function fronts(pieces: readonly PieceId[]): string {
+  const labels = pieces.map((id) => id.replace(/^p/, ""));
+  return `${labels.length === 1 ? "Front" : "Fronts"} ${labelRanges(labels)}`;
+}
+
+function way({ x, y }: { readonly x: Um; readonly y: Um }, style: LengthStyle): string {
+  const print = (length: number) => printLength(um(Math.abs(length)), style);
+  const parts = [];
+  if (x !== 0) parts.push(`${print(x)} ${x > 0 ? "right" : "left"}`);
+  if (y !== 0) parts.push(`${print(y)} ${y > 0 ? "down" : "up"}`);
+  return parts.join(", ");
+}
