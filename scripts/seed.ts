@@ -1,5 +1,6 @@
 /** Puts the demo into an empty database, once; the lines it writes to the standard output say how to sign in. Progress goes to the other. */
 import { count, eq } from "drizzle-orm";
+import type { RowDataPacket } from "mysql2";
 import type { Database } from "@/db/client";
 import { shop, user } from "@/db/schema";
 import { openPool } from "@/lib/server/database";
@@ -18,7 +19,8 @@ const { db, pool } = openPool();
 // A second start on the same database must not take a demo in the making for one that was broken off. Held by this connection only.
 const guard = await pool.getConnection();
 try {
-  await guard.query("select get_lock('grainwright demo', 600)");
+  const [rows] = await guard.query<RowDataPacket[]>("select get_lock('grainwright demo', 600) as held");
+  if (rows[0]?.held !== 1) throw new Error("Another start has been making the demo for ten minutes. End it, then start again.");
   await seed(db);
   for (const { role, email } of demoPeople) {
     const [found] = await db.select({ id: user.id }).from(user).where(eq(user.email, email));

@@ -100,7 +100,7 @@ export const demoJobs: readonly DemoJob[] = [
       {
         title: "Right cabinet",
         face: bedsideFronts(),
-        place: { board: "cherry wide", xMm: 1180, yMm: 11 },
+        place: { board: "cherry wide", xMm: 959, yMm: 11 },
         leftInTrouble: true,
       },
     ],

@@ -2,8 +2,8 @@
 import type { Database } from "@/db/client";
 import { kinds } from "@/lib/server/tasks/kinds";
 import { workLoop } from "@/lib/server/tasks/work-loop";
+import { foundShop, letPeopleIn } from "./found-shop";
 import { openJobs } from "./open-jobs";
-import { foundShop, letPeopleIn } from "./people";
 import type { TakePhoto } from "./photographers";
 import { takeInBoards } from "./take-in-boards";
 
@@ -26,7 +26,7 @@ export async function makeDemo({ db, now, takePhoto, photoScale, say }: Making):
   // Pictures are straightened by the same queue as in the product; other machines that work off this database may help.
   const working = workLoop(db, kinds, ending.signal);
   try {
-    const boardIds = await takeInBoards({ shop, now, takePhoto, photoScale, say });
+    const boardIds = await takeInBoards({ shop, now, takePhoto, photoScale, say, ending: ending.signal });
     say("Opening jobs, laying out fronts and issuing cut orders");
     await openJobs({ shop, now, boardIds });
   } finally {

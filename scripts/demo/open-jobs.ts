@@ -15,9 +15,9 @@ import { issueOrder } from "@/lib/server/orders/issue";
 import { readOrder } from "@/lib/server/orders/read-orders";
 import { tickStep } from "@/lib/server/orders/ticks";
 import { dateFrom } from "./days";
+import type { DemoShop } from "./found-shop";
 import { type DemoFace, type DemoJob, demoJobs, revisedBy } from "./jobs";
 import { layFace, slide } from "./lay-face";
-import type { DemoShop } from "./people";
 
 export interface Opening {
   readonly shop: DemoShop;

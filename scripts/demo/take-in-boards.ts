@@ -13,8 +13,8 @@ import { startStraightening } from "@/lib/server/straightenings/start-straighten
 import { readTask } from "@/lib/server/tasks/tasks";
 import { type DemoBoard, type DemoPhoto, demoBoards, loosePhoto } from "./boards";
 import { dateFrom, daysFrom } from "./days";
+import type { DemoShop } from "./found-shop";
 import { markingOf, zonesOf } from "./marks";
-import type { DemoShop } from "./people";
 import type { TakenPhoto } from "./photograph";
 import type { TakePhoto } from "./photographers";
 
@@ -25,6 +25,8 @@ export interface Taking {
   /** Of the photographs' full size along each side. */
   readonly photoScale: number;
   readonly say: (line: string) => void;
+  /** Aborted when nobody works off tasks any more: waiting for a picture then is in vain. */
+  readonly ending: AbortSignal;
 }
 
 /** Board ids by the scenario's keys. All pictures are straightened when it answers; somebody has to be working off tasks meanwhile. */
@@ -32,7 +34,7 @@ export async function takeInBoards(taking: Taking): Promise<ReadonlyMap<string, 
   const { maker, assistant } = taking.shop.people;
   // All are begun at once; whoever takes them settles how many at a time.
   const photos = [...demoBoards.flatMap(({ photo }) => photo ?? []), loosePhoto];
-  const taken = new Map(photos.map((photo) => [photo, begin(taking, photo)]));
+  const taken = new Map(photos.map((photo, index) => [photo, begin(taking, photo, index)]));
   const ids = new Map<string, string>();
   const drawn: Promise<void>[] = [];
   let count = 0;
@@ -45,7 +47,7 @@ export async function takeInBoards(taking: Taking): Promise<ReadonlyMap<string, 
     taking.say(`Photographing board ${count} of ${taken.size - 1}: ${board.species.toLowerCase()}`);
     const shot = await shooting;
     const photo = await takeIn(assistant, board.photo, shot);
-    drawn.push(straightenAndDraw(maker, boardId, board, photo, shot));
+    drawn.push(straightenAndDraw(taking, boardId, board, photo, shot));
     // Looked at together below; until then a failure must not count as unhandled.
     drawn.at(-1)?.catch(() => undefined);
   }
@@ -56,8 +58,12 @@ export async function takeInBoards(taking: Taking): Promise<ReadonlyMap<string, 
   return ids;
 }
 
-function begin({ takePhoto, photoScale, now }: Taking, photo: DemoPhoto): Promise<TakenPhoto> {
-  const takenAt = daysFrom(now, -photo.daysAgo).toISOString();
+/** One photograph after the other, some minutes apart. */
+const minutesApart = 4;
+
+function begin({ takePhoto, photoScale, now }: Taking, photo: DemoPhoto, index: number): Promise<TakenPhoto> {
+  const minutes = 60 - index * minutesApart;
+  const takenAt = daysFrom(now, -photo.daysAgo - minutes / (24 * 60)).toISOString();
   const shot = takePhoto({ photo, scale: photoScale, takenAt });
   // Awaited in turn; one that fails early must not count as unhandled until then.
   shot.catch(() => undefined);
@@ -91,29 +97,29 @@ function takeIn(access: ShopAccess, { fileName }: DemoPhoto, { jpeg }: TakenPhot
 }
 
 async function straightenAndDraw(
-  access: ShopAccess,
+  { shop, ending }: Taking,
   boardId: string,
   board: DemoBoard,
   photo: Photo,
   shot: TakenPhoto,
 ): Promise<void> {
-  // Corners are true for the photograph as it was taken; an upright phone picture has them in the same pixels.
+  const { maker } = shop.people;
   const marking = markingSchema.parse(markingOf(board, shot));
-  const { id: straighteningId, taskId, zones } = await startStraightening(access, boardId, { photoId: photo.id, marking });
-  await untilDone(access, taskId ?? "");
+  const { id: straighteningId, taskId, zones } = await startStraightening(maker, boardId, { photoId: photo.id, marking });
+  await untilDone(maker, taskId ?? "", ending);
   const drawn = zonesOf(board, shot);
   if (drawn.outline || drawn.keepClear.length > 0) {
-    await saveZones(access, straighteningId, { ...drawn, revision: zones.revision });
+    await saveZones(maker, straighteningId, { ...drawn, revision: zones.revision });
   }
 }
 
 const lookEveryMs = 150;
 
-async function untilDone(access: ShopAccess, taskId: string): Promise<void> {
+async function untilDone(access: ShopAccess, taskId: string, ending: AbortSignal): Promise<void> {
   for (;;) {
     const { state, failure } = await readTask(access, taskId);
     if (state === "done") return;
     if (state === "failed" || state === "cancelled") throw new Error(`a picture was not straightened: ${failure ?? state}`);
-    await sleep(lookEveryMs);
+    await sleep(lookEveryMs, undefined, { signal: ending });
   }
 }
