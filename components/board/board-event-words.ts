@@ -41,9 +41,11 @@ function carriedWords({ areasFrom, outline, areasKept, areasDropped }: Row["deta
   const parts = [
     outline === "cut" && "its outline cut to the new size",
     outline === "dropped" && "its outline dropped, which no longer fits",
-    typeof areasKept === "number" && areasKept > 0 && `${areasKept} keep-clear areas`,
-    typeof areasDropped === "number" && areasDropped > 0 && `${areasDropped} areas dropped that lie off the board now`,
+    typeof areasKept === "number" && areasKept > 0 && areas(areasKept, "kept"),
+    typeof areasDropped === "number" && areasDropped > 0 && areas(areasDropped, "dropped because off the board now"),
   ].filter((part) => part !== false);
   if (parts.length === 0 && outline === "kept") return `, with the outline of version ${areasFrom}`;
   return parts.length === 0 ? "" : `, from version ${areasFrom}: ${parts.join("; ")}`;
 }
+
+const areas = (count: number, fate: string) => `${count} keep-clear ${count === 1 ? "area" : "areas"} ${fate}`;

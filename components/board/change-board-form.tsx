@@ -8,6 +8,7 @@ import { Button } from "@/components/ui/button";
 import { SelectField } from "@/components/ui/field";
 import { LengthField } from "@/components/ui/length-field";
 import { Notice } from "@/components/ui/notice";
+import { useFocusFirstError } from "@/components/ui/use-focus-first-error";
 import { updateBoard } from "@/lib/client/board";
 import { FaultFromServer, messageOf } from "@/lib/client/fault-from-server";
 import type { Um } from "@/lib/layout";
@@ -29,6 +30,7 @@ export function ChangeBoardForm({ board, species, onDone }: Props) {
   const [state, setState] = useState(board.state);
   const [size, setSize] = useState({ length: orNull(board.length), width: orNull(board.width) });
   const [errors, setErrors] = useState<DraftErrors>({});
+  const form = useFocusFirstError(errors);
   const byHand = board.straighteningId === null;
   const save = useMutation({
     mutationFn: (fields: Parameters<typeof updateBoard>[1]) => updateBoard(board.id, fields),
@@ -48,7 +50,7 @@ export function ChangeBoardForm({ board, species, onDone }: Props) {
     save.mutate({ baseRevision: board.revision, ...checked.fields, state, length, width });
   };
   return (
-    <form noValidate onSubmit={submit} className="grid gap-4 sm:grid-cols-2">
+    <form ref={form} noValidate onSubmit={submit} className="grid gap-4 sm:grid-cols-2">
       <BoardFields draft={draft} errors={errors} species={species} onChange={setDraft} />
       {byHand && (
         <>

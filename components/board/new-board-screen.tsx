@@ -11,6 +11,7 @@ import { TextField } from "@/components/ui/field";
 import { LengthField } from "@/components/ui/length-field";
 import { Notice } from "@/components/ui/notice";
 import { PageTitle } from "@/components/ui/page-title";
+import { useFocusFirstError } from "@/components/ui/use-focus-first-error";
 import { createBoard } from "@/lib/client/board";
 import { messageOf } from "@/lib/client/fault-from-server";
 import type { Um } from "@/lib/layout";
@@ -34,6 +35,7 @@ export function NewBoardScreen({ photo, species }: { photo: Photo; species: read
   const [percent, setPercent] = useState("");
   const [takenOn, setTakenOn] = useState(() => todayIn(timeZone));
   const [errors, setErrors] = useState<DraftErrors & { length?: string; width?: string; percent?: string }>({});
+  const form = useFocusFirstError(errors);
   const create = useMutation({
     mutationFn: createBoard,
     onSuccess: ({ id }) => router.push(`/rack/${id}/mark?photo=${photo.id}`),
@@ -67,7 +69,7 @@ export function NewBoardScreen({ photo, species }: { photo: Photo; species: read
       />
       <div className="grid gap-6 p-4 md:p-5 lg:grid-cols-2">
         <WholePhoto photo={photo} />
-        <form noValidate onSubmit={submit} className="grid content-start gap-4 sm:grid-cols-2">
+        <form ref={form} noValidate onSubmit={submit} className="grid content-start gap-4 sm:grid-cols-2">
           <SizeFields size={size} errors={errors} onChange={setSize} />
           <BoardFields draft={draft} errors={errors} species={species} onChange={setDraft} />
           <TextField

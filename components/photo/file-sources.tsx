@@ -20,10 +20,12 @@ export function FileSources({ onFiles }: Props) {
           <ImagePlus className="size-5" aria-hidden="true" />
           Choose photographs
         </FileButton>
-        <FileButton onFiles={onFiles} camera className={`${buttonClass("plain")} pointer-fine:hidden`}>
-          <Camera className="size-5" aria-hidden="true" />
-          Take a photograph
-        </FileButton>
+        <span className="pointer-fine:hidden">
+          <FileButton onFiles={onFiles} camera className={buttonClass("plain")}>
+            <Camera className="size-5" aria-hidden="true" />
+            Take a photograph
+          </FileButton>
+        </span>
       </div>
       <p className="text-sm text-pencil">
         <span className="pointer-coarse:hidden">Or drop them here, or paste one. </span>

@@ -10,18 +10,21 @@ import { messageOf } from "@/lib/client/fault-from-server";
 import { deletePhoto, photoKeys } from "@/lib/client/photo";
 import type { Photo } from "@/lib/schemas/photo";
 
+/** The first row of a wide screen. */
+const eagerly = 4;
+
 /** Photographs taken in and not yet used for a board. */
 export function LoosePhotos({ photos, mayEdit }: { photos: readonly Photo[]; mayEdit: boolean }) {
   return (
     <ul className="grid gap-4 sm:grid-cols-2 lg:grid-cols-3 2xl:grid-cols-4">
-      {photos.map((photo) => (
-        <LoosePhoto key={photo.id} photo={photo} mayEdit={mayEdit} />
+      {photos.map((photo, index) => (
+        <LoosePhoto key={photo.id} photo={photo} mayEdit={mayEdit} inView={index < eagerly} />
       ))}
     </ul>
   );
 }
 
-function LoosePhoto({ photo, mayEdit }: { photo: Photo; mayEdit: boolean }) {
+function LoosePhoto({ photo, mayEdit, inView }: { photo: Photo; mayEdit: boolean; inView: boolean }) {
   const level = photo.levels.at(-1);
   return (
     <li className="flex flex-col rounded-md border border-rule bg-sheet">
@@ -32,6 +35,7 @@ function LoosePhoto({ photo, mayEdit }: { photo: Photo; mayEdit: boolean }) {
           alt={`Photograph ${photo.fileName}`}
           width={level.widthPx}
           height={level.heightPx}
+          loading={inView ? "eager" : "lazy"}
           className="h-44 w-full rounded-t-md bg-graphite object-contain"
         />
       )}

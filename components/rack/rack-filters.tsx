@@ -21,7 +21,8 @@ const typingMs = 250;
 
 export function RackSearch({ state, onChange }: Omit<Props, "species">) {
   const [text, setText] = useState(state.search);
-  useEffect(() => setText(state.search), [state.search]);
+  // A change from outside (all boards, the browser's way back) is taken over; one's own typing keeps its spaces.
+  useEffect(() => setText((now) => (now.trim() === state.search ? now : state.search)), [state.search]);
   useEffect(() => {
     if (text.trim() === state.search) return;
     const timer = setTimeout(() => onChange({ search: text.trim() }), typingMs);

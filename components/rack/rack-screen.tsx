@@ -1,7 +1,7 @@
 "use client";
 import Link from "next/link";
 import { useRouter } from "next/navigation";
-import { useCallback, useState, useTransition } from "react";
+import { useCallback, useOptimistic, useState, useTransition } from "react";
 import type { z } from "zod";
 import { Button, buttonClass } from "@/components/ui/button";
 import { Empty } from "@/components/ui/empty";
@@ -20,14 +20,20 @@ interface Props {
 }
 
 /** All boards of the shop. What is shown follows from the address alone, so every view can be kept as a link. */
-export function RackScreen({ page, state, mayEdit }: Props) {
+export function RackScreen({ page, state: arrived, mayEdit }: Props) {
   const router = useRouter();
   const [pending, startTransition] = useTransition();
+  // What was asked for last; a second change before the first has arrived builds on it instead of undoing it.
+  const [state, setState] = useOptimistic(arrived);
   const [filtering, setFiltering] = useState(filterCount(state) > 0);
   const change = useCallback(
     (part: Partial<RackState>) =>
-      startTransition(() => router.replace(rackAddress(changedState(state, part)), { scroll: "page" in part })),
-    [router, state],
+      startTransition(() => {
+        const wanted = changedState(state, part);
+        setState(wanted);
+        router.replace(rackAddress(wanted), { scroll: "page" in part });
+      }),
+    [router, state, setState],
   );
   const takeIn = (
     <Link href="/rack/take-in" className={buttonClass("primary")}>
@@ -64,8 +70,8 @@ export function RackScreen({ page, state, mayEdit }: Props) {
             <Button onClick={() => change(clearedState(state))}>Show all boards</Button>
           </div>
         )}
-        {page.total > 0 && state.view === "scale" && <RackToScale boards={page.items} longest={page.longest} />}
-        {page.total > 0 && state.view === "table" && <RackTable boards={page.items} state={state} />}
+        {page.total > 0 && arrived.view === "scale" && <RackToScale boards={page.items} longest={page.longest} />}
+        {page.total > 0 && arrived.view === "table" && <RackTable boards={page.items} state={arrived} />}
       </div>
       <div className="px-4 md:px-5">
         <Pager {...page} onPage={(number) => change({ page: number })} />

@@ -1,0 +1,12 @@
+"use client";
+import { type RefObject, useEffect, useRef } from "react";
+
+/** For a form: after a submit that found errors, the first wrong field gets the focus. `errors` is a new object for every submit. */
+export function useFocusFirstError(errors: object): RefObject<HTMLFormElement | null> {
+  const form = useRef<HTMLFormElement>(null);
+  useEffect(() => {
+    if (Object.keys(errors).length === 0) return;
+    form.current?.querySelector<HTMLElement>("[aria-invalid=true]")?.focus();
+  }, [errors]);
+  return form;
+}
