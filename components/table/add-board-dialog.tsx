@@ -2,6 +2,7 @@
 /** Looks for a board in the rack and puts it on the table. Where no front lies on wood yet, they are laid on it at once. */
 import { useMutation, useQuery } from "@tanstack/react-query";
 import { useDeferredValue, useState } from "react";
+import { BoardStrip } from "@/components/board/board-strip";
 import { useUnits } from "@/components/shell/units";
 import { Button } from "@/components/ui/button";
 import { TextField } from "@/components/ui/field";
@@ -63,6 +64,7 @@ function BoardSearch({ onDone }: { onDone: () => void }) {
       />
       {add.error && <Notice kind="stop">{messageOf(add.error)}</Notice>}
       {page.error && <Notice kind="stop">{messageOf(page.error)}</Notice>}
+      {page.isPending && <p className="text-sm text-pencil">Looking through the rack…</p>}
       {page.data && found.length === 0 && (
         <p className="text-sm">No board with a picture answers to that, or it is on the table already.</p>
       )}
@@ -77,22 +79,23 @@ function BoardSearch({ onDone }: { onDone: () => void }) {
 
 function FoundBoard({ board, pending, onAdd }: { board: BoardRow; pending: boolean; onAdd: () => void }) {
   const { print } = useUnits();
-  const { tag, species, length, width, place, held, picture } = board;
+  const { tag, species, length, width, place, held } = board;
   return (
     <li className="flex items-center justify-between gap-3 py-2">
-      <div className="min-w-0 text-sm">
+      <div className="min-w-0 flex-1 text-sm">
         <p>
           <span className="measure text-base">{tag}</span> {species}
         </p>
         <p className="text-pencil">
-          {print(length)} × {print(width)}
+          <span className="measure">
+            {print(length)} × {print(width)}
+          </span>
           {place && `, ${place}`}
         </p>
         {held.length > 0 && <p>Held for {held.map(({ faceTitle }) => faceTitle).join(", ")}</p>}
-        {picture && (
-          // biome-ignore lint/performance/noImgElement: placeholder
-          <img src={picture.url} alt="" className="mt-1 h-8 max-w-full object-cover" />
-        )}
+        <div className="mt-1 max-w-80">
+          <BoardStrip board={board} />
+        </div>
       </div>
       <Button size="small" disabled={pending} onClick={onAdd} aria-label={`Put ${tag} on the table`}>
         Put on the table

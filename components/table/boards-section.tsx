@@ -70,7 +70,9 @@ function BoardOnTable({ board }: { board: TableBoard }) {
         </Link>{" "}
         {board.species}
         <span className="block text-pencil">
-          {print(length)} × {print(width)}
+          <span className="measure">
+            {print(length)} × {print(width)}
+          </span>
           {board.place && `, ${board.place}`}
         </span>
       </p>

@@ -2,10 +2,11 @@
 /** Freezes the layout as a cut order. Not to be pressed while anything stands in the way; says what. */
 import { useMutation } from "@tanstack/react-query";
 import Link from "next/link";
-import { useId } from "react";
+import { useId, useState } from "react";
 import { Button } from "@/components/ui/button";
 import { messageOf } from "@/lib/client/fault-from-server";
 import { issueOrder } from "@/lib/client/layout";
+import type { EditorState } from "@/lib/editor/editor";
 import type { Layout } from "@/lib/schemas/layout";
 import { revisionLetter } from "@/lib/words/revision-letter";
 import { useEditorState, useTableContext } from "./table-context";
@@ -23,17 +24,22 @@ export function IssueButton({ problems: { found, working }, order, openedAt }: P
   const status = useEditorState((state) => state.sync);
   const document = useEditorState((state) => state.document);
   const reasonId = useId();
+  const pictures = useEditorState(picturesUsed);
+  const [openedOn] = useState(pictures);
   const issue = useMutation({
     mutationFn: async () => {
       if (!(await sync.settled())) throw new Error("The layout is not saved yet.");
       const issued = await issueOrder(faceId, sync.revision());
-      return { ...issued, document: editor.get().document };
+      return { ...issued, document: editor.get().document, pictures: picturesUsed(editor.get()) };
     },
   });
   const issued = issue.data;
-  const reason = reasonAgainst(found.length, working, status.kind);
   const current = issued ?? order;
-  const outOfDate = issued ? issued.document !== document : order && (order.superseded || sync.revision() !== openedAt);
+  const outOfDate = issued
+    ? issued.document !== document || issued.pictures !== pictures
+    : order !== null && (order.superseded || sync.revision() !== openedAt || openedOn !== pictures);
+  const reason =
+    reasonAgainst(found.length, working, status.kind) ?? (current && !outOfDate ? "It is issued as it stands" : null);
   return (
     <div className="flex flex-wrap items-center justify-end gap-x-3 gap-y-1">
       <p className="text-sm" role="status">
@@ -64,6 +70,12 @@ export function IssueButton({ problems: { found, working }, order, openedAt }: P
       )}
     </div>
   );
+}
+
+/** Which versions of which pictures the fronts lie on: moving over to another makes an order out of date as a slide does. */
+function picturesUsed({ document, boards }: EditorState): string {
+  const used = new Set(document.layout.groups.flatMap(({ placement }) => placement?.stockId ?? []));
+  return boards.flatMap(({ face, straighteningId }) => (used.has(face.id) ? straighteningId : [])).join(" ");
 }
 
 function reasonAgainst(problems: number, working: boolean, status: string): string | null {

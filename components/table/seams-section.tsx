@@ -1,6 +1,7 @@
 "use client";
 import { useUnits } from "@/components/shell/units";
 import { factsOf } from "@/lib/editor/selectors/facts";
+import { type SeamRelation, seamRelation } from "@/lib/editor/selectors/seam-relation";
 import { jumpOf } from "@/lib/editor/view/jump-chips";
 import { cutBetween, type Drift, type GridFace, printedLength, type Seam, type UmRange } from "@/lib/layout";
 import { PanelSection } from "./panel-section";
@@ -11,8 +12,8 @@ export function SeamsSection() {
   const { editor } = useTableContext();
   const { style, units } = useUnits();
   const layout = useLiveLayout();
-  const { seams, drifts } = factsOf(layout);
-  const figure = (range: UmRange | undefined) => (range ? printedLength(jumpOf(range), style).figure : "–");
+  const { seams, drifts, pieceById } = factsOf(layout);
+  const figure = (range: UmRange) => printedLength(jumpOf(range), style).figure;
   return (
     <PanelSection title="Seams" beside={units === "mm" ? "mm" : "inches"}>
       {seams.length === 0 ? (
@@ -42,8 +43,7 @@ export function SeamsSection() {
                     </button>
                   </td>
                   <td className="text-right">{printedLength(seam.gap, style).figure}</td>
-                  <td className="text-right">{figure(seam.jump?.along)}</td>
-                  <td className="text-right">{figure(seam.jump?.across)}</td>
+                  <JumpCells seam={seam} relation={seamRelation(seam, pieceById)} figure={figure} />
                   <td className="text-right">{driftFigure(seam, layout.face, drifts.get(seam.b) ?? null)}</td>
                 </tr>
               ))}
@@ -63,4 +63,26 @@ export function SeamsSection() {
     const cut = cutBetween(normal === "right" ? "columns" : "rows", face.grain);
     return printedLength(cut === "crosscut" ? drift.along : drift.across, style).figure;
   }
+}
+
+const sayings: Readonly<Record<Exclude<SeamRelation, "runs-on">, string>> = {
+  "no-wood": "no wood yet",
+  "other-wood": "other wood",
+  turned: "turned",
+};
+
+function JumpCells({ seam, relation, figure }: { seam: Seam; relation: SeamRelation; figure: (range: UmRange) => string }) {
+  if (relation !== "runs-on" || seam.jump === null) {
+    return (
+      <td colSpan={2} className="text-right font-normal text-pencil">
+        {sayings[relation === "runs-on" ? "other-wood" : relation]}
+      </td>
+    );
+  }
+  return (
+    <>
+      <td className="text-right">{figure(seam.jump.along)}</td>
+      <td className="text-right">{figure(seam.jump.across)}</td>
+    </>
+  );
 }

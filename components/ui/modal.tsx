@@ -1,7 +1,7 @@
 "use client";
 import { X } from "lucide-react";
 import { Dialog } from "radix-ui";
-import type { ReactNode } from "react";
+import { type ReactNode, useRef } from "react";
 
 interface Props {
   open: boolean;
@@ -12,14 +12,23 @@ interface Props {
   children: ReactNode;
 }
 
-/** A dialog over the page: focus stays inside, Escape closes it. */
+/** A dialog over the page: focus stays inside, Escape closes it, and the focus goes back to where it was. */
 export function Modal({ open, onOpenChange, title, lead, children }: Props) {
+  const opener = useRef<Element | null>(null);
   return (
     <Dialog.Root open={open} onOpenChange={onOpenChange}>
       <Dialog.Portal>
         <Dialog.Overlay className="fixed inset-0 z-40 bg-graphite/50" />
         <Dialog.Content
           className="fixed top-1/2 left-1/2 z-50 max-h-[92dvh] w-[min(34rem,calc(100vw-1.5rem))] -translate-x-1/2 -translate-y-1/2 overflow-y-auto rounded-lg border border-line bg-sheet p-5 shadow-xl"
+          onOpenAutoFocus={() => {
+            opener.current = document.activeElement;
+          }}
+          onCloseAutoFocus={(event) => {
+            // By itself the dialog only finds back to a trigger, and many are opened by a key or from elsewhere.
+            event.preventDefault();
+            if (opener.current instanceof HTMLElement) opener.current.focus();
+          }}
           {...(!lead && { "aria-describedby": undefined })}
         >
           <div className="mb-4 flex items-start justify-between gap-4">

@@ -39,7 +39,7 @@ export class ShowLayer {
 
   sync(look: ShowLook, geometry: TableGeometry, pictures: Pictures, palette: Palette): void {
     const { layout } = look;
-    const { facePieces, pieces, triangle, seams } = factsOf(layout);
+    const { facePieces, pieceById, triangle, seams } = factsOf(layout);
     const px = geometry.showPxPerMm / 1000;
     const { x: left, y: top } = geometry.showOrigin;
     const size = faceSize(layout.face);
@@ -49,12 +49,10 @@ export class ShowLayer {
       context.fillStyle = palette.gap;
       context.fillRect(0, 0, box.width, box.height);
     });
-    const lying = new Map(pieces.map((piece) => [piece.id, piece]));
     for (const { id, rect } of facePieces) {
       const box = { left: left + rect.x * px, top: top + rect.y * px, width: rect.width * px, height: rect.height * px };
-      this.#piece(id, box, lying.get(id), rect, look.boards, geometry, pictures, palette);
+      this.#piece(id, box, pieceById.get(id), rect, look.boards, geometry, pictures, palette);
     }
-    const onWood = seams.filter(({ a, b }) => lying.has(a) && lying.has(b));
     const overlay: Box = { left, top, width, height };
     const chosen = facePieces.filter(({ id }) => look.selection.includes(id));
     // A line around every front would hide the seams, which are what one looks at.
@@ -85,7 +83,7 @@ export class ShowLayer {
         );
       }
     });
-    for (const [index, { x, y, lines, jumps }] of jumpChips(onWood, size, geometry, look.style).entries()) {
+    for (const [index, { x, y, lines, jumps }] of jumpChips(seams, pieceById, size, geometry, look.style).entries()) {
       const tall = chipHeight({ lines });
       const box = { left: left + x - CHIP_SIZE.width / 2, top: top + y - tall / 2, width: CHIP_SIZE.width, height: tall };
       this.#sketches.named(`jump ${index}`).put(box, paintJump(lines, jumps, palette));

@@ -21,6 +21,7 @@ export interface LayoutFacts {
   readonly facePieces: readonly FacePiece[];
   /** Those on wood. */
   readonly pieces: readonly Piece[];
+  readonly pieceById: ReadonlyMap<PieceId, Piece>;
   readonly seams: readonly Seam[];
   readonly drifts: ReadonlyMap<PieceId, Drift["drift"]>;
   readonly triangle: ReadonlyMap<PieceId, TriangleMark>;
@@ -35,6 +36,7 @@ export function factsOf(layout: FaceLayout): LayoutFacts {
   const facts: LayoutFacts = {
     facePieces: facePieces(layout),
     pieces,
+    pieceById: new Map(pieces.map((piece) => [piece.id, piece])),
     seams: seams(layout, pieces),
     drifts: new Map(drifts(layout, pieces).map(({ piece, drift }) => [piece, drift])),
     triangle: new Map(carpentersTriangle(layout, "bottom", pieces).map((mark) => [mark.piece, mark])),

@@ -2,7 +2,8 @@
  * Where the jump of each seam is written on the show side: under the bottom row and beside the last column, on paper; inside the face only where there is
  * something to say, since a chip covers wood. Chips that would lie on each other give way to those with a jump.
  */
-import { type LengthStyle, printedLength, type Seam, type Um, type UmRange, um } from "@/lib/layout";
+import { type LengthStyle, type Piece, type PieceId, printedLength, type Seam, type Um, type UmRange, um } from "@/lib/layout";
+import { seamRelation } from "../selectors/seam-relation";
 import type { Size, TableGeometry } from "./geometry";
 
 export interface JumpChip {
@@ -21,17 +22,19 @@ export function chipHeight({ lines }: Pick<JumpChip, "lines">): number {
   return lines.length > 1 ? TWO_LINES_HEIGHT : CHIP_SIZE.height;
 }
 
-/** `seams`: those between fronts that lie on wood. `face`: size of the face, µm. */
+/** `pieces`: those on wood; a seam beside one that is not gets no chip. `face`: size of the face, µm. */
 export function jumpChips(
   seams: readonly Seam[],
+  pieces: ReadonlyMap<PieceId, Piece>,
   face: { readonly width: Um; readonly height: Um },
   { showPxPerMm }: Pick<TableGeometry, "showPxPerMm">,
   style: LengthStyle,
 ): JumpChip[] {
   const px = (length: number) => (length / 1000) * showPxPerMm;
   const wanted = seams.flatMap((seam): JumpChip[] => {
-    const lines = jumpLines(seam, style);
-    const jumps = seam.jump !== null && largest(seam.jump.along, seam.jump.across) !== 0;
+    const lines = jumpLines(seam, pieces, style);
+    if (lines.length === 0) return [];
+    const jumps = lines.length > 1;
     const across = seam.normal === "right" ? px(seam.from.x) + px(seam.gap) / 2 : (px(seam.from.x) + px(seam.to.x)) / 2;
     const down = seam.normal === "right" ? (px(seam.from.y) + px(seam.to.y)) / 2 : px(seam.from.y) + px(seam.gap) / 2;
     const height = chipHeight({ lines });
@@ -55,15 +58,15 @@ export function jumpOf({ min, max }: UmRange): Um {
   return Math.abs(min) > Math.abs(max) ? min : max;
 }
 
-function jumpLines({ jump }: Seam, style: LengthStyle): string[] {
-  if (jump === null) return ["other wood"];
-  const [along, across] = [jumpOf(jump.along), jumpOf(jump.across)];
+/** Two lines where the figure jumps, one where there is nothing to measure or nothing to see. */
+function jumpLines(seam: Seam, pieces: ReadonlyMap<PieceId, Piece>, style: LengthStyle): string[] {
+  const relation = seamRelation(seam, pieces);
+  if (relation === "no-wood") return [];
+  if (relation === "turned") return ["turned"];
+  if (seam.jump === null) return ["other wood"];
+  const [along, across] = [jumpOf(seam.jump.along), jumpOf(seam.jump.across)];
   if (along === 0 && across === 0) return [`jump ${printedLength(um(0), style).figure}`];
   return [`along ${printedLength(along, style).figure}`, `across ${printedLength(across, style).figure}`];
-}
-
-function largest(along: UmRange, across: UmRange): number {
-  return Math.max(Math.abs(jumpOf(along)), Math.abs(jumpOf(across)));
 }
 
 function overlap(a: JumpChip, b: JumpChip): boolean {
