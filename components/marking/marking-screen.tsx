@@ -1,0 +1,197 @@
+"use client";
+/** Bringing a photograph of a board to scale: corners, what has a known size, the checks, and the straightening. */
+import { useMutation } from "@tanstack/react-query";
+import Link from "next/link";
+import { useMemo, useState } from "react";
+import { messageOf } from "@/lib/client/fault-from-server";
+import { startStraightening } from "@/lib/client/straightening";
+import type { Board } from "@/lib/schemas/board";
+import type { Photo } from "@/lib/schemas/photo";
+import type { Straightening } from "@/lib/schemas/straightening";
+import { useImage } from "../picture/use-image";
+import { useStageView } from "../picture/use-stage-view";
+import { Button } from "../ui/button";
+import { Notice } from "../ui/notice";
+import { PageTitle } from "../ui/page-title";
+import { useUnsavedWarning } from "../ui/use-unsaved-warning";
+import { CornersPanel } from "./corners-panel";
+import { draftFrom, freshDraft } from "./draft";
+import { EdgePointsPanel } from "./edge-points-panel";
+import { ExtraPointsPanel } from "./extra-points-panel";
+import { FineAdjust } from "./fine-adjust";
+import { FitReport, MarksNotice } from "./fit-report";
+import { KnownDistancePanel } from "./known-distance-panel";
+import { markName, positionWords } from "./mark-words";
+import { type MarkId, markAt } from "./marks";
+import { PanelSection } from "./panel-section";
+import { PhotoWithMarks } from "./photo-with-marks";
+import { Preview } from "./preview";
+import { ReferencePanel } from "./reference-panel";
+import { StraightenRun } from "./straighten-run";
+import { type Adding, type MarkingState, useMarking } from "./use-marking";
+
+/** CSS pixels per photo pixel at the nearest zoom: a pixel is then a square one can point at. */
+const MOST_SCALE = 12;
+/** Choosing a corner from the list zooms in at least this far. */
+const SCALE_AT_CORNER = 0.5;
+
+interface Props {
+  board: Board;
+  photo: Photo;
+  /** The version to start from; its marks hold only on the photograph they were made on. */
+  previous: Straightening | null;
+}
+
+export function MarkingScreen({ board, photo, previous }: Props) {
+  const size = useMemo(() => ({ width: photo.widthPx, height: photo.heightPx }), [photo.widthPx, photo.heightPx]);
+  const marking = useMarking(size, () =>
+    previous?.photoId === photo.id ? draftFrom(previous.marking, size, board) : freshDraft(size, board),
+  );
+  const stage = useStageView(size, MOST_SCALE);
+  const { image, state } = useImage(photo.levels[0]?.url ?? null);
+  const [started, setStarted] = useState<Straightening | null>(null);
+  useUnsavedWarning(marking.dirty && started === null);
+  const fit = marking.fit?.ok ? marking.fit : null;
+
+  const show = (mark: MarkId) => {
+    const at = markAt(marking.draft, mark);
+    if (at) stage.lookAt(at, SCALE_AT_CORNER);
+    marking.select(mark);
+  };
+  return (
+    <>
+      <PageTitle
+        title={`Mark ${board.tag}`}
+        above={
+          <Link href={`/rack/${board.id}`} className="underline">
+            {board.tag}, {board.species}
+          </Link>
+        }
+      />
+      <div className="lg:grid lg:grid-cols-[minmax(0,1fr)_25rem]">
+        <div className="min-w-0 lg:sticky lg:top-0 lg:self-start">
+          <PhotoWithMarks photo={photo} stage={stage} marking={marking} image={image} />
+          {state === "failed" && (
+            <Notice kind="stop">The photograph could not be loaded. Check the connection and load the page again.</Notice>
+          )}
+          <AddingNotice adding={marking.adding} onDone={() => marking.add(null)} />
+          <div className="px-4 py-3">
+            {started === null && <MarksNotice marking={marking} />}
+            {fit && started === null && (
+              <>
+                <h2 className="pb-2 text-lg">As it will come out</h2>
+                <Preview photo={photo} fit={fit} />
+              </>
+            )}
+          </div>
+        </div>
+        <div className="border-rule bg-sheet lg:border-l">
+          {started ? (
+            <PanelSection title="Straighten">
+              <StraightenRun started={started} onAgain={() => setStarted(null)} />
+            </PanelSection>
+          ) : (
+            <>
+              <SelectedMark marking={marking} image={image} />
+              <ReferencePanel marking={marking} />
+              <CornersPanel marking={marking} onShow={show} />
+              <EdgePointsPanel marking={marking} onShow={show} />
+              <ExtraPointsPanel marking={marking} onShow={show} />
+              <KnownDistancePanel marking={marking} />
+              <Finish board={board} photo={photo} marking={marking} onStarted={setStarted} />
+            </>
+          )}
+        </div>
+      </div>
+      <Spoken marking={marking} />
+    </>
+  );
+}
+
+function SelectedMark({ marking, image }: { marking: MarkingState; image: HTMLImageElement | null }) {
+  const { selected, draft } = marking;
+  const at = selected && markAt(draft, selected);
+  if (!selected || !at) return null;
+  return (
+    <div className="border-b border-rule px-4 py-4">
+      <FineAdjust
+        name={markName(selected)}
+        image={image}
+        picture={marking.photo}
+        at={at}
+        onMove={(to) => marking.move(selected, to)}
+      />
+    </div>
+  );
+}
+
+const addingWords: Readonly<Record<Adding, string>> = {
+  extra: "Tap the photograph where the point is.",
+  edge: "Tap along a straight edge. Each point goes to the edge it is nearest to.",
+  "known-from": "Tap one end of the distance.",
+  "known-to": "Tap the other end.",
+};
+
+function AddingNotice({ adding, onDone }: { adding: Adding | null; onDone: () => void }) {
+  if (!adding) return null;
+  return (
+    <div className="px-4 pt-3">
+      <Notice kind="care">
+        {addingWords[adding]} With the keyboard: move the photograph under the cross-hair and press Enter.{" "}
+        <button type="button" className="font-semibold text-chalk underline" onClick={onDone}>
+          Done
+        </button>
+      </Notice>
+    </div>
+  );
+}
+
+interface FinishProps {
+  board: Board;
+  photo: Photo;
+  marking: MarkingState;
+  onStarted: (started: Straightening) => void;
+}
+
+function Finish({ board, photo, marking, onStarted }: FinishProps) {
+  const { outcome, fit } = marking;
+  const start = useMutation({
+    mutationFn: async () => {
+      if (!outcome.complete) throw new Error("Put the marks in their place first.");
+      return startStraightening(board.id, { photoId: photo.id, marking: wireOf(outcome.marking) });
+    },
+    onSuccess: onStarted,
+  });
+  return (
+    <PanelSection title="Straighten" lead="Makes the picture true to scale. It becomes a new version; layouts keep theirs.">
+      <FitReport marking={marking} />
+      {start.error && <Notice kind="stop">{messageOf(start.error)}</Notice>}
+      <Button kind="primary" disabled={!fit?.ok || start.isPending} onClick={() => start.mutate()}>
+        Straighten
+      </Button>
+    </PanelSection>
+  );
+}
+
+/** The wire's lists may be written to, the core's may not. */
+function wireOf(marking: Extract<MarkingState["outcome"], { complete: true }>["marking"]) {
+  const { reference, corners, extraPoints, edgePoints } = marking;
+  const copied = ([a, b, c, d]: typeof corners): [typeof a, typeof b, typeof c, typeof d] => [a, b, c, d];
+  return {
+    reference: reference.kind === "sheet" ? { ...reference, corners: copied(reference.corners) } : reference,
+    corners: copied(corners),
+    extraPoints: [...extraPoints],
+    edgePoints: [...edgePoints],
+  };
+}
+
+/** Says where the selected mark is, once it rests: a screen reader would talk over itself while it moves. */
+function Spoken({ marking }: { marking: MarkingState }) {
+  const { selected, draft } = marking;
+  const at = selected && markAt(draft, selected);
+  return (
+    <p className="sr-only" aria-live="polite">
+      {selected && at ? `${markName(selected)}: ${positionWords(at)}` : ""}
+    </p>
+  );
+}
