@@ -31,17 +31,18 @@ import { removeUnfinished, tablesOfShops } from "@/scripts/demo/unfinished";
 import { bundlePixelWorker } from "../support/bundle-pixel-worker";
 
 const shared = process.env.DATABASE_URL ?? "";
-const name = `grainwright_demo_test_${process.pid}`;
+const name = "grainwright_demo_test";
 const uploads = fs.mkdtempSync(path.join(os.tmpdir(), "grainwright-demo-"));
 
-async function onSharedServer(statement: string): Promise<void> {
+async function onSharedServer(...statements: string[]): Promise<void> {
   const { pool } = openDatabase(shared, 1);
-  await pool.query(statement);
+  for (const statement of statements) await pool.query(statement);
   await pool.end();
 }
 
 beforeAll(async () => {
-  await onSharedServer(`create or replace database ${name}`);
+  // A run that was killed may have left one full of rows that refer to each other.
+  await onSharedServer("set foreign_key_checks = 0", `drop database if exists ${name}`, `create database ${name}`);
   const url = new URL(shared);
   url.pathname = name;
   process.env.DATABASE_URL = url.href;
