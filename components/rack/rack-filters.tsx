@@ -1,7 +1,6 @@
 "use client";
-/** Search, filters and order of the rack. Every change goes into the page's address. */
+/** Filters and order of the rack. Every change goes into the page's address. */
 import { SlidersHorizontal } from "lucide-react";
-import { useEffect, useState } from "react";
 import { cutNames, orderNames, stateNames } from "@/components/board/board-words";
 import { Button } from "@/components/ui/button";
 import { SelectField } from "@/components/ui/field";
@@ -14,30 +13,6 @@ interface Props {
   state: RackState;
   species: readonly string[];
   onChange: (change: Partial<RackState>) => void;
-}
-
-/** Long enough that a word is typed, short enough that the list seems to follow. */
-const typingMs = 250;
-
-export function RackSearch({ state, onChange }: Omit<Props, "species">) {
-  const [text, setText] = useState(state.search);
-  // A change from outside (all boards, the browser's way back) is taken over; one's own typing keeps its spaces.
-  useEffect(() => setText((now) => (now.trim() === state.search ? now : state.search)), [state.search]);
-  useEffect(() => {
-    if (text.trim() === state.search) return;
-    const timer = setTimeout(() => onChange({ search: text.trim() }), typingMs);
-    return () => clearTimeout(timer);
-  }, [text, state.search, onChange]);
-  return (
-    <input
-      type="search"
-      aria-label="Search the rack"
-      placeholder="Species, tag or place"
-      className="min-h-11 w-full rounded-md border border-line bg-sheet px-3 placeholder:text-pencil md:min-h-10 md:w-56"
-      value={text}
-      onChange={(event) => setText(event.target.value)}
-    />
-  );
 }
 
 export function FilterButton({ state, open, onToggle }: { state: RackState; open: boolean; onToggle: () => void }) {

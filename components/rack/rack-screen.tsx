@@ -8,8 +8,9 @@ import { Empty } from "@/components/ui/empty";
 import { PageTitle } from "@/components/ui/page-title";
 import { Pager } from "@/components/ui/pager";
 import type { boardPageSchema } from "@/lib/schemas/board";
-import { FilterButton, RackFilters, RackSearch } from "./rack-filters";
+import { FilterButton, RackFilters } from "./rack-filters";
 import { changedState, clearedState, filterCount, isUnfiltered, type RackState, rackAddress } from "./rack-query";
+import { RackSearch, useSearchText } from "./rack-search";
 import { RackTable } from "./rack-table";
 import { RackToScale } from "./rack-to-scale";
 
@@ -25,22 +26,24 @@ export function RackScreen({ page, state: arrived, mayEdit }: Props) {
   const [pending, startTransition] = useTransition();
   // What was asked for last; a second change before the first has arrived builds on it instead of undoing it.
   const [state, setState] = useOptimistic(arrived);
+  const [text, setText] = useSearchText(state.search);
   const [filtering, setFiltering] = useState(filterCount(state) > 0);
   const change = useCallback(
     (part: Partial<RackState>) =>
       startTransition(() => {
-        const wanted = changedState(state, part);
+        // What is being typed goes along with any other change.
+        const wanted = changedState(state, { search: text.trim(), ...part });
         setState(wanted);
         router.replace(rackAddress(wanted), { scroll: "page" in part });
       }),
-    [router, state, setState],
+    [router, state, text, setState],
   );
   const takeIn = (
     <Link href="/rack/take-in" className={buttonClass("primary")}>
       {mayEdit ? "Take in wood" : "Add photographs"}
     </Link>
   );
-  if (page.total === 0 && isUnfiltered(state)) {
+  if (page.total === 0 && isUnfiltered(arrived)) {
     return (
       <>
         <PageTitle title="Rack" />
@@ -55,7 +58,7 @@ export function RackScreen({ page, state: arrived, mayEdit }: Props) {
     <>
       <PageTitle title="Rack">
         <ViewSwitch state={state} onChange={change} />
-        <RackSearch state={state} onChange={change} />
+        <RackSearch state={state} text={text} onText={setText} onChange={change} />
         <FilterButton state={state} open={filtering} onToggle={() => setFiltering(!filtering)} />
         {takeIn}
       </PageTitle>
@@ -71,7 +74,7 @@ export function RackScreen({ page, state: arrived, mayEdit }: Props) {
           </div>
         )}
         {page.total > 0 && arrived.view === "scale" && <RackToScale boards={page.items} longest={page.longest} />}
-        {page.total > 0 && arrived.view === "table" && <RackTable boards={page.items} state={arrived} />}
+        {page.total > 0 && arrived.view === "table" && <RackTable boards={page.items} state={arrived} onChange={change} />}
       </div>
       <div className="px-4 md:px-5">
         <Pager {...page} onPage={(number) => change({ page: number })} />

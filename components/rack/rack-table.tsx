@@ -8,36 +8,42 @@ import { moneyText } from "@/components/board/money";
 import { useUnits } from "@/components/shell/units";
 import { printedLength, type Um } from "@/lib/layout";
 import type { BoardRow, boardSorts } from "@/lib/schemas/board";
-import { changedState, type RackState, rackAddress } from "./rack-query";
+import type { RackState } from "./rack-query";
 
 type Sort = (typeof boardSorts)[number];
 
-export function RackTable({ boards, state }: { boards: readonly BoardRow[]; state: RackState }) {
+interface Props {
+  boards: readonly BoardRow[];
+  state: RackState;
+  onChange: (change: Partial<RackState>) => void;
+}
+
+export function RackTable({ boards, state, onChange }: Props) {
   const { style, currency } = useUnits();
   const unit = style.unit === "mm" ? "mm" : "in";
   const figure = (length: Um) => (length > 0 ? printedLength(length, style).figure : "–");
   return (
-    // A table wider than a phone scrolls in its own box; the links in it bring it along for the keyboard.
+    // A table wider than a phone scrolls in its own box; what can be reached in it brings it along for the keyboard.
     <section className="overflow-x-auto px-4 md:px-5" aria-label="Boards as a table">
       <table className="w-full min-w-[60rem] border-collapse text-sm">
         <thead>
           <tr className="border-b border-line text-left align-bottom">
-            <Heading state={state} sort="tag" name="Tag" />
-            <Heading state={state} sort="species" name="Species" />
+            <Heading state={state} onChange={onChange} sort="tag" name="Tag" />
+            <Heading state={state} onChange={onChange} sort="species" name="Species" />
             <th scope="col" className={plainHead}>
               Cut
             </th>
             <th scope="col" className={`${plainHead} text-right`}>
               Nominal
             </th>
-            <Heading state={state} sort="thickness" name={`Thick, ${unit}`} right />
-            <Heading state={state} sort="length" name={`Length, ${unit}`} right />
-            <Heading state={state} sort="width" name={`Width, ${unit}`} right />
+            <Heading state={state} onChange={onChange} sort="thickness" name={`Thick, ${unit}`} right />
+            <Heading state={state} onChange={onChange} sort="length" name={`Length, ${unit}`} right />
+            <Heading state={state} onChange={onChange} sort="width" name={`Width, ${unit}`} right />
             <th scope="col" className={`${plainHead} text-right`}>
               Board feet
             </th>
-            <Heading state={state} sort="moisture" name="Moisture, %" right />
-            <Heading state={state} sort="place" name="Place" />
+            <Heading state={state} onChange={onChange} sort="moisture" name="Moisture, %" right />
+            <Heading state={state} onChange={onChange} sort="place" name="Place" />
             <th scope="col" className={plainHead}>
               Source
             </th>
@@ -87,23 +93,29 @@ function Figure({ children }: { children: ReactNode }) {
   return <td className="measure pr-4 text-right whitespace-nowrap">{children}</td>;
 }
 
+interface HeadingProps extends Pick<Props, "state" | "onChange"> {
+  sort: Sort;
+  name: string;
+  right?: boolean;
+}
+
 /** A heading that sorts; a second click turns the order round. */
-function Heading({ state, sort, name, right = false }: { state: RackState; sort: Sort; name: string; right?: boolean }) {
+function Heading({ state, onChange, sort, name, right = false }: HeadingProps) {
   const here = state.sort === sort;
   const direction = here && state.direction === "up" ? "down" : "up";
   const sorted = state.direction === "up" ? "ascending" : "descending";
   return (
     <th scope="col" aria-sort={here ? sorted : undefined} className={`${plainHead} ${right ? "text-right" : ""}`}>
-      <Link
-        href={rackAddress(changedState(state, { sort, direction }))}
-        scroll={false}
-        className="whitespace-nowrap hover:underline"
+      <button
+        type="button"
+        className="font-semibold whitespace-nowrap hover:underline"
+        onClick={() => onChange({ sort, direction })}
       >
         {name}
         <span aria-hidden="true" className="text-chalk">
           {here && (state.direction === "up" ? " ↑" : " ↓")}
         </span>
-      </Link>
+      </button>
     </th>
   );
 }
