@@ -31,8 +31,8 @@ export function Bench({ order }: { order: Order }) {
             step {at + 1} of {steps.length}
           </span>
         </div>
+        <ProgressTape steps={steps.length} done={done} at={bench.superseded || allDone ? null : at} />
       </header>
-      <ProgressTape steps={steps.length} done={done} at={bench.superseded || allDone ? null : at} />
       {bench.superseded ? (
         <SupersededStop order={order} newestRevision={bench.newestRevision} />
       ) : (

@@ -23,7 +23,7 @@ export function CutDrawing({ snapshot, board, cut, title }: Props) {
       board={board}
       window={window}
       label={`${title}: measured from the ${edgeNames[cut.fromEdge]}`}
-      className="rounded-sm"
+      className="max-h-[34dvh] rounded-sm"
     >
       <defs>
         <pattern

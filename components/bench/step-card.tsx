@@ -118,7 +118,7 @@ function Results({ step, words, style }: { step: OrderStep; words: StepWords; st
       {results.map(({ role, name, size }) => (
         <Box key={`${role} ${name}`} label={role}>
           {name && <p className="measure text-xl">{name}</p>}
-          {size && <p className="measure font-normal text-pencil">{size}</p>}
+          {size && <p className="measure text-pencil">{size}</p>}
         </Box>
       ))}
     </div>

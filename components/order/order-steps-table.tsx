@@ -43,7 +43,7 @@ export function OrderStepsTable({ order, steps, ticks }: Props) {
               <th className="hidden py-1.5 pr-3 font-normal sm:table-cell" scope="col">
                 From
               </th>
-              <th className="py-1.5 pr-3 text-right font-normal" scope="col">
+              <th className="py-1.5 pr-3 text-right font-normal whitespace-nowrap" scope="col">
                 Setting, {style.unit === "mm" ? "mm" : "in"}
               </th>
               <th className="hidden py-1.5 pr-3 font-normal md:table-cell" scope="col">

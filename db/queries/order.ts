@@ -10,16 +10,15 @@ export type CutOrderRow = typeof cutOrder.$inferSelect;
 type RevisionRow = typeof orderRevision.$inferSelect;
 type OrderState = CutOrderRow["state"];
 
-/** The newest order that cuts this face, locked until the transaction ends; undefined before the first. */
-export async function lockNewestOrderOfFace(tx: Connection, shopId: ShopId, faceId: string): Promise<CutOrderRow | undefined> {
-  const [row] = await tx
+/** The order with the highest number that cuts this face; undefined before the first. */
+export async function findNewestOrderOfFace(db: Connection, shopId: ShopId, faceId: string): Promise<CutOrderRow | undefined> {
+  const [row] = await db
     .select({ order: cutOrder })
     .from(cutOrder)
     .innerJoin(cutOrderFace, eq(cutOrderFace.orderId, cutOrder.id))
     .where(and(eq(cutOrder.shopId, shopId), eq(cutOrderFace.faceId, faceId)))
     .orderBy(desc(cutOrder.number))
-    .limit(1)
-    .for("update");
+    .limit(1);
   return row?.order;
 }
 

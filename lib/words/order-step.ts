@@ -79,7 +79,7 @@ function cutWords(step: Extract<OrderStep, { kind: "cut" }>, style: LengthStyle,
     from: truing ? edgeNames[cut.fromEdge] : measuredFrom(cut.fromEdge, cut.fromEdgeState),
     measure: truing ? null : measure(cut),
     setting: truing ? null : cut.setting,
-    gives: truing ? [] : cut.yields.filter((part) => part.kind !== "board").map((part) => givesOf(part, style)),
+    gives: truing ? [] : cut.yields.map((part) => givesOf(part, style)),
   };
 }
 
@@ -124,6 +124,7 @@ function takesNote(takes: CleanUpGroup["takes"], style: LengthStyle): string {
 
 function givesOf(part: Part, style: LengthStyle): Gives {
   if (part.kind === "waste") return { word: "waste", label: null, size: null };
-  const word = part.kind === "offcut" ? "offcut" : "";
-  return { word, label: part.label ?? partName(part), size: sizeFigures(part.rect, style) };
+  const size = sizeFigures(part.rect, style);
+  if (part.kind === "board") return { word: "board", label: null, size };
+  return { word: part.kind === "offcut" ? "offcut" : "", label: part.label ?? partName(part), size };
 }

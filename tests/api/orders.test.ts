@@ -1,6 +1,6 @@
 /** Issuing, superseding and ticking cut orders, against a real database. */
 import { and, eq } from "drizzle-orm";
-import { beforeAll, describe, expect, test, vi } from "vitest";
+import { afterAll, beforeAll, describe, expect, test, vi } from "vitest";
 import { board, history, layout, orderRevision, shop } from "@/db/schema";
 import { gridFace, groupOf, letLoose, moveGroup, placeGroup, umFromMm } from "@/lib/layout";
 import type { Role } from "@/lib/schemas/endpoint";
@@ -11,9 +11,11 @@ import { database } from "@/lib/server/database";
 import { env } from "@/lib/server/env";
 import { fingerprintOf } from "@/lib/server/orders/fingerprint";
 import { issueOrder } from "@/lib/server/orders/issue";
+import { closePlanPool } from "@/lib/server/orders/plan-pool";
 import { orderPage, readOrder } from "@/lib/server/orders/read-orders";
 import { markSuperseded } from "@/lib/server/orders/supersede";
 import { tickStep, untickStep } from "@/lib/server/orders/ticks";
+import { bundlePlanWorker } from "../support/bundle-worker";
 import { type MadeLayout, makeLayout } from "../support/make-layout";
 import { makeShop } from "../support/make-shop";
 
@@ -23,7 +25,9 @@ vi.mock("@/lib/server/session-cookie", () => ({ readSessionId: async () => sessi
 
 let shopOf: Readonly<Record<Role, ShopAccess>>;
 let maker: ShopAccess;
+afterAll(closePlanPool);
 beforeAll(async () => {
+  await bundlePlanWorker();
   shopOf = await makeShop();
   maker = shopOf.maker;
 });

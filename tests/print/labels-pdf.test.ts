@@ -32,7 +32,7 @@ describe.each(sheets)("$name", ({ name, columns, rows, width, height, left, top,
   });
 
   test.each([1, 5, columns * rows])("from position %i each label's words lie inside their own label", async (start) => {
-    const order = makeOrder({ frontsPerBoard: 6, boards: 2 });
+    const order = await makeOrder({ frontsPerBoard: 6, boards: 2 });
     const pages = pdfPages(await labelsPdf(order, name, start));
     const seen: number[] = [];
     pages.forEach(({ words }, page) => {
@@ -58,7 +58,7 @@ describe.each(sheets)("$name", ({ name, columns, rows, width, height, left, top,
 });
 
 test("a label says number, size, board, order and revision, and which way it goes", async () => {
-  const text = (await labelsPdf(makeOrder(), "a4-24", 1).then(pdfText)).join(" ").replace(/\s+/g, " ");
+  const text = (await labelsPdf(await makeOrder(), "a4-24", 1).then(pdfText)).join(" ").replace(/\s+/g, " ");
   expect(text).toContain("243.2 × 184.0");
   expect(text).toContain("front, board B-041");
   expect(text).toContain("strip, board B-041");
@@ -69,6 +69,6 @@ test("a label says number, size, board, order and revision, and which way it goe
 });
 
 test("labels of a superseded revision say so", async () => {
-  const text = (await labelsPdf(makeOrder({ superseded: true }), "letter-30", 1).then(pdfText)).join(" ");
+  const text = (await labelsPdf(await makeOrder({ superseded: true }), "letter-30", 1).then(pdfText)).join(" ");
   expect(text).toContain("Order 18 A, SUPERSEDED");
 });

@@ -34,7 +34,7 @@ describe.each([
 ] as const)("an order of %s", (_, change) => {
   describe.each(["a4", "letter"] as const)("on %s", (paper) => {
     test.each(["mm", "inch"] as const)("in %s has every step once, numbered pages and no word off the page", async (units) => {
-      const order = makeOrder({ ...change, units });
+      const order = await makeOrder({ ...change, units });
       const pdf = await print(order, paper);
       const pages = pdfPages(pdf);
       const [width, height] = paper === "a4" ? [595.28, 841.89] : [612, 792];
@@ -63,7 +63,7 @@ describe.each([
 });
 
 test("says what, from where, which setting and what it gives", async () => {
-  const text = plain(pdfText(await print(makeOrder(), "a4")));
+  const text = plain(pdfText(await print(await makeOrder(), "a4")));
   expect(text).toContain("Cut order 18");
   expect(text).toContain("Map chest for the reading room");
   expect(text).toContain("Revision A");
@@ -79,7 +79,7 @@ test("says what, from where, which setting and what it gives", async () => {
 
 test("figures of the check add up as printed", async () => {
   for (const units of ["mm", "inch"] as const) {
-    const text = plain(pdfText(await print(makeOrder({ units, boards: 2 }), "letter")));
+    const text = plain(pdfText(await print(await makeOrder({ units, boards: 2 }), "letter")));
     const checks = [...text.matchAll(/By area: (.*?) = board ([\d.]+) /g)];
     expect(checks).toHaveLength(2);
     for (const [, parts, whole] of checks) {
@@ -90,18 +90,18 @@ test("figures of the check add up as printed", async () => {
 });
 
 test("inches are printed as fractions with the fraction slash", async () => {
-  const text = plain(pdfText(await print(makeOrder({ units: "inch" }), "letter")));
+  const text = plain(pdfText(await print(await makeOrder({ units: "inch" }), "letter")));
   expect(text).toContain("92 17⁄32 × 8 9⁄32 × 1 1⁄32");
   expect(text).toContain("In inches.");
 });
 
 test("the day is the shop's: issued late on the 14th in UTC is the 15th in Auckland", async () => {
-  const order = { ...makeOrder(), issuedAt: "2026-03-14T20:30:00.000Z" };
+  const order = { ...(await makeOrder()), issuedAt: "2026-03-14T20:30:00.000Z" };
   expect(plain(pdfText(await print(order, "a4", "Pacific/Auckland")))).toContain("issued 15 Mar 2026");
 });
 
 test("the photograph is embedded as the JPEG it is, the fonts are embedded, the rest is vectors", async () => {
-  const pdf = await print(makeOrder(), "a4");
+  const pdf = await print(await makeOrder(), "a4");
   expect(pdfPictures(pdf)).toEqual([{ encoding: "jpeg", widthPx: 1600, heightPx: 143 }]);
   expect(Buffer.from(pdf).includes(Buffer.from(jpeg))).toBe(true);
   const fonts = pdfFonts(pdf);
@@ -113,27 +113,29 @@ test("the photograph is embedded as the JPEG it is, the fonts are embedded, the 
 });
 
 test("a board without a picture is drawn without one", async () => {
-  const order = makeOrder();
+  const order = await makeOrder();
   const pdf = await orderPdf({ order, timeZone: "UTC", benchUrl: "https://wood.example/bench/x", pictures: new Map() }, "a4");
   expect(pdfPictures(pdf)).toEqual([]);
   expect(pdfPages(pdf).length).toBeGreaterThanOrEqual(1);
 });
 
 test("every page of a superseded revision says so, and none of one that holds", async () => {
-  const superseded = pdfText(await print(makeOrder({ superseded: true, boards: 3 }), "letter"));
+  const superseded = pdfText(await print(await makeOrder({ superseded: true, boards: 3 }), "letter"));
   expect(superseded.length).toBeGreaterThan(2);
   for (const text of superseded) expect(text).toContain("SUPERSEDED 15 Mar 2026, 14:05. Do not cut from this sheet");
-  for (const text of pdfText(await print(makeOrder(), "letter"))) expect(text).not.toContain("SUPERSEDED");
+  for (const text of pdfText(await print(await makeOrder(), "letter"))) expect(text).not.toContain("SUPERSEDED");
 });
 
 test("words without a space wrap, and stay on the page", async () => {
   const long = "Donaudampfschifffahrtselektrizitätenhauptbetriebswerkbauunterbeamtengesellschaftsschrank".padEnd(118, "x");
-  const pages = pdfPages(await print(makeOrder({ jobTitle: long, sawName: long.slice(0, 80), place: long.slice(0, 80) }), "a4"));
+  const pages = pdfPages(
+    await print(await makeOrder({ jobTitle: long, sawName: long.slice(0, 80), place: long.slice(0, 80) }), "a4"),
+  );
   for (const { width, words } of pages) for (const word of words) expect(word.right, word.text).toBeLessThanOrEqual(width - bare);
   expect(pages[0]?.words.map(({ text }) => text).join("")).toContain(long);
 });
 
 test("the same order gives the same bytes", async () => {
-  const order = makeOrder();
+  const order = await makeOrder();
   expect(Buffer.from(await print(order, "a4")).equals(Buffer.from(await print(order, "a4")))).toBe(true);
 });

@@ -1,41 +1,6 @@
-/**
- * Bundles the pixel thread's program as scripts/bundle.mjs does, so that tests of pictures run by themselves. Worked out anew only
- * when a source is newer; written whole, because other test files may be about to load it.
- */
-import fs from "node:fs";
-import path from "node:path";
-import { build } from "esbuild";
-
-const root = process.cwd();
-const bundle = path.join(root, ".data", "build", "pixel-worker.mjs");
-const sources = ["lib/server/pictures", "lib/layout", "lib/schemas"];
+/** The pixel thread's program, for tests of pictures. */
+import { bundleWorker } from "./bundle-worker";
 
 /** Makes `.data/build/pixel-worker.mjs` what the sources say. */
-export async function bundlePixelWorker(): Promise<void> {
-  if (fs.existsSync(bundle) && newest(sources.map((source) => path.join(root, source))) < fs.statSync(bundle).mtimeMs) return;
-  const { outputFiles } = await build({
-    absWorkingDir: root,
-    entryPoints: ["lib/server/pictures/pixel-worker.ts"],
-    outfile: bundle,
-    bundle: true,
-    platform: "node",
-    format: "esm",
-    target: "node20",
-    packages: "external",
-    alias: { "@": root, "server-only": path.join(root, "node_modules/server-only/empty.js") },
-    conditions: ["react-server"],
-    write: false,
-    logLevel: "warning",
-  });
-  fs.mkdirSync(path.dirname(bundle), { recursive: true });
-  const draft = `${bundle}.${process.pid}`;
-  for (const { contents } of outputFiles) fs.writeFileSync(draft, contents);
-  fs.renameSync(draft, bundle);
-}
-
-function newest(folders: readonly string[]): number {
-  const times = folders.flatMap((folder) =>
-    fs.readdirSync(folder, { recursive: true, encoding: "utf8" }).map((file) => fs.statSync(path.join(folder, file)).mtimeMs),
-  );
-  return Math.max(...times);
-}
+export const bundlePixelWorker = () =>
+  bundleWorker("lib/server/pictures/pixel-worker.ts", ["lib/server/pictures", "lib/layout", "lib/schemas"]);

@@ -7,6 +7,7 @@ import { orderSteps } from "@/lib/schemas/order-steps";
 import type { KeepClearArea } from "@/lib/schemas/zones";
 import { fingerprintOf } from "@/lib/server/orders/fingerprint";
 import { freeze } from "@/lib/server/orders/freeze";
+import { planAndVerify } from "@/lib/server/orders/plan-cuts";
 
 export interface OrderWanted {
   readonly boards: number;
@@ -41,18 +42,19 @@ const usual: OrderWanted = {
 };
 
 /** Rows of fronts, one row on each board. */
-export function makeOrder(change: Partial<OrderWanted> = {}): Order {
+export async function makeOrder(change: Partial<OrderWanted> = {}): Promise<Order> {
   const wanted = { ...usual, ...change };
   const boards = Array.from({ length: wanted.boards }, (_, i) => boardOf(wanted, i));
   const saw = { name: wanted.sawName, kerf: umFromMm(wanted.kerfMm), cleanUp: umFromMm(wanted.cleanUpMm) };
-  const snapshot = freeze({
+  const given = {
     shop: { name: "Fenwater Joinery", units: wanted.units, inchFraction: 32, ...limits },
     job: { id: newId(), number: 7, title: wanted.jobTitle, client: "Reading room of Osterwick" },
     face: { faceId: newId(), title: "Top row", layoutRevision: 7, layout: faceLayoutSchema.parse(layoutOn(wanted, boards)) },
     crosscutSaw: saw,
     ripSaw: saw,
     boards,
-  });
+  } as const;
+  const snapshot = await freeze(given, async (request) => planAndVerify(request));
   const [issuedAt, revisionId] = ["2026-03-14T09:30:00.000Z", newId()];
   const supersededAt = wanted.superseded ? "2026-03-15T13:05:00.000Z" : null;
   return {

@@ -18,12 +18,10 @@ import {
   type PieceId,
   type PlacedPiece,
   piecesOnBoard,
-  planCuts,
   problems,
   type QuarterTurns,
   type ShopLimits,
   um,
-  verifyProgram,
 } from "@/lib/layout";
 import { cutProgramSchema } from "@/lib/schemas/cut-program";
 import type { OrderSnapshot, SnapshotBoard } from "@/lib/schemas/order-snapshot";
@@ -32,6 +30,7 @@ import type { KeepClearArea } from "@/lib/schemas/zones";
 import { cutRefusalSentence, problemSentence } from "@/lib/words/layout-problem";
 import { styleOf } from "@/lib/words/order-step";
 import { refused } from "../faults";
+import type { Planner } from "./plan-cuts";
 
 export interface ToFreeze {
   readonly shop: ShopLimits & Pick<NonNullable<Awaited<ReturnType<typeof readShop>>>, "name" | "units" | "inchFraction">;
@@ -51,7 +50,7 @@ export interface LayoutBoard {
 }
 
 /** The snapshot, or a refusal that names everything in the way. */
-export function freeze(given: ToFreeze): OrderSnapshot {
+export async function freeze(given: ToFreeze, plan: Planner): Promise<OrderSnapshot> {
   const { shop, face } = given;
   const heading = {
     format: 1,
@@ -72,15 +71,13 @@ export function freeze(given: ToFreeze): OrderSnapshot {
   if (wrong.length > 0) throw refusedFor(wrong.map((problem) => problemSentence(problem, style, tagOf)));
 
   const used = given.boards.filter(({ board }) => piecesOnBoard(face.layout, board.id).length > 0);
-  const boards = used.map((one): SnapshotBoard | string => {
+  const planned = used.map(async (one): Promise<SnapshotBoard | string> => {
     const request = cutRequestOf(given, one);
-    const outcome = planCuts(request);
+    const outcome = await plan(request);
     if (!outcome.ok) return cutRefusalSentence(outcome, style, tagOf(one.board.id));
-    const verdict = verifyProgram(request, outcome.program);
-    // The planner's work carried out by an independent replay: a fault here is ours, and nothing is issued on it.
-    if (!verdict.ok) throw new Error(`the cut program of ${tagOf(one.board.id)} does not hold: ${JSON.stringify(verdict)}`);
     return snapshotBoard(face.layout, one, request, outcome.program);
   });
+  const boards = await Promise.all(planned);
   const refusals = boards.filter((board) => typeof board === "string");
   if (refusals.length > 0) throw refusedFor(refusals);
   return { ...heading, faces: [face], boards: boards.filter((board) => typeof board !== "string") };

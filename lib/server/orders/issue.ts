@@ -3,10 +3,11 @@ import "server-only";
 import type { Connection } from "@/db/client";
 import { recordHistory } from "@/db/queries/history";
 import { findFace, findJob } from "@/db/queries/job";
-import { listLayoutBoards, lockLayout } from "@/db/queries/layout";
-import { findRevision, insertOrder, insertRevision, lockNewestOrderOfFace, setOrderState } from "@/db/queries/order";
+import { findLayout, listLayoutBoards, lockLayout } from "@/db/queries/layout";
+import { findNewestOrderOfFace, findRevision, insertOrder, insertRevision, lockOrder, setOrderState } from "@/db/queries/order";
 import { findSaw, readShop, takeNumber } from "@/db/queries/shop";
 import { listKeepClear } from "@/db/queries/straightening";
+import type { ShopId } from "@/db/shop-id";
 import { type CutLoss, um } from "@/lib/layout";
 import type { OrderRow } from "@/lib/schemas/order";
 import type { OrderSnapshot, OrderSummary } from "@/lib/schemas/order-snapshot";
@@ -15,7 +16,8 @@ import type { ShopAccess } from "../access";
 import { database } from "../database";
 import { conflict, notFound } from "../faults";
 import { fingerprintOf } from "./fingerprint";
-import { freeze } from "./freeze";
+import { freeze, type LayoutBoard, type ToFreeze } from "./freeze";
+import { planInThread } from "./plan-pool";
 import { orderRow } from "./read-orders";
 import { markSuperseded } from "./supersede";
 
@@ -24,46 +26,79 @@ import { markSuperseded } from "./supersede";
  * order whose steps are all ticked is done; what is issued for its face afterwards gets a number of its own.
  */
 export async function issueOrder(access: ShopAccess, faceId: string, layoutRevision: number): Promise<OrderRow> {
-  const orderId = await database().transaction(async (tx) => {
+  const db = database();
+  const seen = await findLayout(db, access.shopId, faceId);
+  if (!seen) throw notFound("face");
+  refuseOther(seen.layout.revision, layoutRevision);
+  const there = await issuedAlready(db, access.shopId, faceId, layoutRevision);
+  if (there) return orderRow(access.shopId, there);
+
+  // Planning may take seconds: nothing is locked meanwhile, and what it was made from is looked at again under the lock.
+  const given = await toFreeze(db, access, faceId, seen.layout);
+  const snapshot = await freeze(given, planInThread);
+  const orderId = await db.transaction(async (tx) => {
     const layout = await lockLayout(tx, access.shopId, faceId);
     if (!layout) throw notFound("face");
-    if (layout.revision !== layoutRevision) {
-      throw conflict("The layout was changed meanwhile. Look at it as it is now and issue it again.", {
-        revision: layout.revision,
-      });
-    }
-    const before = await lockNewestOrderOfFace(tx, access.shopId, faceId);
-    const newest = before && (await findRevision(tx, access.shopId, before.id, undefined));
-    if (before && newest?.supersededAt === null && layoutRevisionIn(newest.snapshot, faceId) === layoutRevision) return before.id;
-
-    const at = new Date();
-    const snapshot = await snapshotOf(tx, access, faceId, layout);
-    const revised =
-      before?.state === "issued" && newest ? { id: before.id, number: before.number, revision: newest.revision + 1 } : null;
-    const order = revised ?? (await newOrder(tx, access, snapshot, at));
-    // After the number: history rows hold on to the shop's row, and two that both do could never take its counter.
-    await markSuperseded(tx, access.shopId, faceId, at);
-    await setOrderState(tx, access.shopId, order.id, "issued", at);
-    const fingerprint = fingerprintOf(snapshot);
-    await insertRevision(tx, access.shopId, {
-      orderId: order.id,
-      revision: order.revision,
-      snapshot,
-      summary: summaryOf(snapshot),
-      fingerprint,
-      issuedBy: access.userId,
-      issuedAt: at,
-    });
-    const detail = { number: order.number, revision: order.revision, faceId, layoutRevision, fingerprint };
-    await recordHistory(
-      tx,
-      access.shopId,
-      { userId: access.userId, noun: "order", nounId: order.id, verb: "issued", detail },
-      at,
-    );
-    return order.id;
+    refuseOther(layout.revision, layoutRevision);
+    await refuseOtherTable(tx, access.shopId, layout.id, given);
+    return (await issuedAlready(tx, access.shopId, faceId, layoutRevision)) ?? (await insertIssued(tx, access, snapshot));
   });
   return orderRow(access.shopId, orderId);
+}
+
+function refuseOther(present: number, asked: number): void {
+  if (present === asked) return;
+  throw conflict("The layout was changed meanwhile. Look at it as it is now and issue it again.", { revision: present });
+}
+
+/** The layout was moved to another version of a board's picture while the cuts were planned. */
+async function refuseOtherTable(tx: Connection, shopId: ShopId, layoutId: string, { boards, face }: ToFreeze): Promise<void> {
+  const key = (rows: readonly Pick<LayoutBoard, "straightening">[]) => rows.map(({ straightening }) => straightening.id).join();
+  if (key(await listLayoutBoards(tx, shopId, layoutId)) === key(boards)) return;
+  throw conflict("A board of the layout was changed meanwhile. Look at it and issue it again.", {
+    revision: face.layoutRevision,
+  });
+}
+
+/** The order that still holds for this revision of the layout. */
+async function issuedAlready(db: Connection, shopId: ShopId, faceId: string, layoutRevision: number): Promise<string | null> {
+  const order = await findNewestOrderOfFace(db, shopId, faceId);
+  const newest = order && (await findRevision(db, shopId, order.id, undefined));
+  const holds = newest?.supersededAt === null && layoutRevisionIn(newest.snapshot, faceId) === layoutRevision;
+  return holds ? newest.orderId : null;
+}
+
+/** Call it with the layout locked: that keeps two from issuing one face at once. */
+async function insertIssued(tx: Connection, access: ShopAccess, snapshot: OrderSnapshot): Promise<string> {
+  const { shopId, userId } = access;
+  const [{ faceId, layoutRevision } = { faceId: "", layoutRevision: 0 }] = snapshot.faces;
+  const at = new Date();
+  const order = (await nextRevision(tx, shopId, faceId)) ?? (await newOrder(tx, access, snapshot, at));
+  // After the number: history rows hold on to the shop's row, and two that both do could never take its counter.
+  await markSuperseded(tx, shopId, faceId, at);
+  await setOrderState(tx, shopId, order.id, "issued", at);
+  const fingerprint = fingerprintOf(snapshot);
+  await insertRevision(tx, shopId, {
+    orderId: order.id,
+    revision: order.revision,
+    snapshot,
+    summary: summaryOf(snapshot),
+    fingerprint,
+    issuedBy: userId,
+    issuedAt: at,
+  });
+  const detail = { number: order.number, revision: order.revision, faceId, layoutRevision, fingerprint };
+  await recordHistory(tx, shopId, { userId, noun: "order", nounId: order.id, verb: "issued", detail }, at);
+  return order.id;
+}
+
+/** Of the face's newest order, unless there is none or it is cut. The order is locked, as ticking locks it. */
+async function nextRevision(tx: Connection, shopId: ShopId, faceId: string) {
+  const found = await findNewestOrderOfFace(tx, shopId, faceId);
+  const order = found && (await lockOrder(tx, shopId, found.id));
+  const newest = order && (await findRevision(tx, shopId, order.id, undefined));
+  if (!newest || order.state === "cut") return null;
+  return { id: order.id, number: order.number, revision: newest.revision + 1 };
 }
 
 const layoutRevisionIn = (snapshot: OrderSnapshot, faceId: string) =>
@@ -78,29 +113,28 @@ async function newOrder(tx: Connection, access: ShopAccess, snapshot: OrderSnaps
 
 type LayoutRow = NonNullable<Awaited<ReturnType<typeof lockLayout>>>;
 
-async function snapshotOf(tx: Connection, access: ShopAccess, faceId: string, layout: LayoutRow): Promise<OrderSnapshot> {
-  const shop = await readShop(tx, access.shopId);
-  const found = await findFace(tx, access.shopId, faceId);
-  const job = found && (await findJob(tx, access.shopId, found.face.jobId));
+async function toFreeze(db: Connection, access: ShopAccess, faceId: string, layout: LayoutRow): Promise<ToFreeze> {
+  const { shopId } = access;
+  const shop = await readShop(db, shopId);
+  const found = await findFace(db, shopId, faceId);
+  const job = found && (await findJob(db, shopId, found.face.jobId));
   if (!shop || !found || !job) throw notFound("face");
   const { id, number, title, client } = job;
-  const rows = await listLayoutBoards(tx, access.shopId, layout.id);
-  const boards = await Promise.all(
-    rows.map(async (row) => ({ ...row, keepClear: await listKeepClear(tx, access.shopId, row.straightening.id) })),
-  );
-  return freeze({
+  const rows = await listLayoutBoards(db, shopId, layout.id);
+  const boards = rows.map(async (row) => ({ ...row, keepClear: await listKeepClear(db, shopId, row.straightening.id) }));
+  return {
     shop,
     job: { id, number, title, client },
     face: { faceId, title: found.face.title, layoutRevision: layout.revision, layout: layout.document },
-    crosscutSaw: await sawOf(tx, access, layout.crosscutSawId, "Crosscut saw", layout.document.crosscut),
-    ripSaw: await sawOf(tx, access, layout.ripSawId, "Rip saw", layout.document.rip),
-    boards,
-  });
+    crosscutSaw: await sawOf(db, shopId, layout.crosscutSawId, "Crosscut saw", layout.document.crosscut),
+    ripSaw: await sawOf(db, shopId, layout.ripSawId, "Rip saw", layout.document.rip),
+    boards: await Promise.all(boards),
+  };
 }
 
 /** The saw by the name it has now; what it takes is what the layout was made with. */
-async function sawOf(tx: Connection, access: ShopAccess, sawId: string | null, unnamed: string, loss: CutLoss) {
-  const saw = sawId === null ? undefined : await findSaw(tx, access.shopId, sawId);
+async function sawOf(db: Connection, shopId: ShopId, sawId: string | null, unnamed: string, loss: CutLoss) {
+  const saw = sawId === null ? undefined : await findSaw(db, shopId, sawId);
   const cleanUp = um(Math.max(loss.cleanUpBefore, loss.cleanUpAfter));
   return { name: saw?.name ?? unnamed, kerf: loss.kerf, cleanUp };
 }

@@ -16,7 +16,7 @@ const numberRoom = 18;
 const numberStyle = { face: "measure", size: 7.5 } as const;
 /** Two rows of numbers above the board, so that two close crosscuts can both have theirs. */
 const numberRows = [0, 8] as const;
-const numberHeight = 20;
+const numberHeight = 22;
 
 /** Where the board lies on the page. */
 interface Drawing {
@@ -118,7 +118,7 @@ function closeTogether(
 ): readonly { readonly at: PagePoint; readonly numbers: readonly string[] }[] {
   const across = cuts
     .filter(({ cut }) => isAcross(cut))
-    .map(({ cut, number }) => ({ at: pageFrom(drawing, middleOf(cut)[0]), number }))
+    .map(({ cut, number }) => ({ at: { x: pageFrom(drawing, middleOf(cut)[0]).x, y: drawing.y }, number }))
     .sort((a, b) => a.at.x - b.at.x || a.number - b.number);
   const groups: { at: PagePoint; numbers: number[] }[] = [];
   for (const { at, number } of across) {
@@ -129,7 +129,7 @@ function closeTogether(
   return groups.map(({ at, numbers }) => ({ at, numbers: numbers.sort((a, b) => a - b).map(String) }));
 }
 
-/** `at` on the page, at the upper edge of what is cut; left out where both rows are taken there. */
+/** `at` on the page, at the upper edge of the board; left out where both rows are taken there. */
 function putAbove({ doc }: Drawing, at: PagePoint, number: string, ends: number[]): void {
   const width = widthOfText(doc, number, numberStyle);
   const row = ends.findIndex((end) => at.x - width / 2 > end + 1.5);
@@ -141,7 +141,7 @@ function putAbove({ doc }: Drawing, at: PagePoint, number: string, ends: number[
     .moveTo(at.x, at.y - up - 3.5)
     .lineTo(at.x, at.y)
     .stroke(black);
-  putText(doc, number, numberStyle, { x: at.x - width / 2, y: at.y - up - 12, width: width + 1 });
+  putText(doc, number, numberStyle, { x: at.x - width / 2, y: at.y - up - 13.5, width: width + 1 });
 }
 
 /** Runs across the board: a crosscut, or an end that is squared. */

@@ -10,7 +10,7 @@ import { drawFetchBlock } from "./fetch-block";
 import { drawFrames, drawHeading, drawRunningHead } from "./page-frame";
 import type { Paper } from "./paper";
 import type { BoardPicture, PrintOrder } from "./print-order";
-import { closeDocument, makeRoom, openSheet, type Sheet } from "./sheet";
+import { breathe, closeDocument, makeRoom, openSheet, type Sheet } from "./sheet";
 import { drawStepTable, tableStartHeight } from "./step-table";
 import { grey, heightOfText, putText } from "./typeface";
 
@@ -28,22 +28,23 @@ export async function orderPdf(print: PrintOrder, paper: Paper): Promise<Uint8Ar
   sheet.headPage = () => drawRunningHead(sheet, print);
   drawHeading(sheet, print);
   drawFetchBlock(sheet, order.snapshot);
+  await breathe();
   const steps = orderSteps(order.snapshot);
   for (const board of order.snapshot.boards) {
     const own = steps.filter((step) => step.board === board);
-    drawBoard(sheet, order.snapshot, board, own, print.pictures.get(board.straighteningId));
+    await drawBoard(sheet, order.snapshot, board, own, print.pictures.get(board.straighteningId));
   }
   drawFrames(sheet, print);
   return closeDocument(sheet.doc);
 }
 
-function drawBoard(
+async function drawBoard(
   sheet: Sheet,
   snapshot: OrderSnapshot,
   board: SnapshotBoard,
   steps: readonly OrderStep[],
   picture: BoardPicture | undefined,
-): void {
+): Promise<void> {
   const style = styleOf(snapshot);
   const several = snapshot.boards.length > 1;
   const title = several ? 22 : 0;
@@ -51,7 +52,7 @@ function drawBoard(
   if (several) putText(sheet.doc, `Board ${board.tag}`, boardStyle, { x: sheet.left, y: sheet.y, width: sheet.width });
   sheet.y += title;
   drawBoardPicture(sheet, snapshot, board, steps, picture);
-  drawStepTable(sheet, steps, style);
+  await drawStepTable(sheet, steps, style);
   drawCheck(sheet, woodCheck(board, style));
 }
 

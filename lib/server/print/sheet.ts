@@ -59,6 +59,11 @@ export function makeRoom(sheet: Sheet, height: number): boolean {
   return true;
 }
 
+/** Lets other requests in between: drawing is work for the one thread that answers them all. */
+export function breathe(): Promise<void> {
+  return new Promise((resolve) => setImmediate(resolve));
+}
+
 /** The whole file. */
 export async function closeDocument(doc: PDFKit.PDFDocument): Promise<Uint8Array> {
   const chunks: Buffer[] = [];

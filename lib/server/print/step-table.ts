@@ -4,7 +4,7 @@ import { type LengthStyle, printedLength } from "@/lib/layout";
 import type { OrderStep } from "@/lib/schemas/order-steps";
 import { type Gives, type StepWords, stepWords } from "@/lib/words/order-step";
 import { drawTickBox, drawWarning } from "./marks";
-import { makeRoom, type Sheet } from "./sheet";
+import { breathe, makeRoom, type Sheet } from "./sheet";
 import { black, grey, hairline, heightOfText, putText, widthOfText } from "./typeface";
 
 const titleStyle = { face: "strong", size: 10.5 } as const;
@@ -22,6 +22,8 @@ const padding = 5.5;
 const givesHeight = 17.5;
 const tickSide = 15;
 const headHeight = 17;
+/** Some 10 ms of work. */
+const rowsAtATime = 8;
 
 interface Columns {
   readonly number: number;
@@ -62,7 +64,7 @@ export function tableStartHeight(sheet: Sheet, steps: readonly OrderStep[], styl
   return headHeight + (first ? rowHeight(sheet, columnsOf(sheet), stepWords(first, style)) : 0);
 }
 
-export function drawStepTable(sheet: Sheet, steps: readonly OrderStep[], style: LengthStyle): void {
+export async function drawStepTable(sheet: Sheet, steps: readonly OrderStep[], style: LengthStyle): Promise<void> {
   const columns = columnsOf(sheet);
   const headed = sheet.headPage;
   drawTableHead(sheet, columns, style);
@@ -77,6 +79,7 @@ export function drawStepTable(sheet: Sheet, steps: readonly OrderStep[], style: 
     makeRoom(sheet, height);
     drawRow(sheet, columns, step.number, words, height, style);
     sheet.y += height;
+    if (i % rowsAtATime === rowsAtATime - 1) await breathe();
   }
   sheet.headPage = headed;
 }

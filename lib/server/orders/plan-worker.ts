@@ -1,0 +1,5 @@
+/** The program of a planning thread. Bundled on its own, because threads load plain JavaScript. */
+import "server-only";
+import { planAndVerify } from "./plan-cuts";
+
+export default planAndVerify;
