@@ -95,13 +95,17 @@ async function install(store) {
   const draft = `${dataFolder}.new`;
   const log = `${dataFolder}.install.log`;
   fs.rmSync(draft, { recursive: true, force: true });
+  // mariadb-install-db is a shell script that trips over a space in the path; it is shown the folder by a link without one.
+  const link = path.join(path.dirname(socketPath(store)), "data");
+  fs.rmSync(link, { force: true });
+  fs.symlinkSync(inData(), link);
   const out = fs.openSync(log, "w");
   const code = await run(
     program("mariadb-install-db"),
     [
       "--no-defaults",
       ...asUser(),
-      `--datadir=${draft}`,
+      `--datadir=${path.join(link, path.basename(draft))}`,
       "--auth-root-authentication-method=normal",
       "--skip-test-db",
       "--skip-name-resolve",
@@ -109,6 +113,7 @@ async function install(store) {
     { stdio: ["ignore", out, out] },
   );
   fs.closeSync(out);
+  fs.rmSync(link);
   if (code !== 0) {
     throw new Refusal(
       `The database folder could not be made. The end of ${log}:\n${tail(log)}`,
