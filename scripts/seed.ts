@@ -4,6 +4,7 @@ import type { RowDataPacket } from "mysql2";
 import type { Database } from "@/db/client";
 import { shop, user } from "@/db/schema";
 import { openPool } from "@/lib/server/database";
+import { closePlanPool } from "@/lib/server/orders/plan-pool";
 import { closePixelPool } from "@/lib/server/pictures/pixel-pool";
 import { makeDemo } from "./demo/make-demo";
 import { demoPassword, demoPeople } from "./demo/people";
@@ -29,6 +30,7 @@ try {
 } finally {
   guard.destroy();
   await closePixelPool();
+  await closePlanPool();
   await pool.end();
 }
 

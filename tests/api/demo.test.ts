@@ -17,6 +17,7 @@ import { readBoardPage } from "@/lib/server/boards/list-boards";
 import { database, openPool } from "@/lib/server/database";
 import { readJob, readJobs } from "@/lib/server/jobs/jobs";
 import { readLayout } from "@/lib/server/layouts/read-layout";
+import { closePlanPool } from "@/lib/server/orders/plan-pool";
 import { orderPage, readOrder } from "@/lib/server/orders/read-orders";
 import { readLoosePhotos } from "@/lib/server/photos/photos";
 import { closePixelPool } from "@/lib/server/pictures/pixel-pool";
@@ -29,6 +30,7 @@ import { photograph } from "@/scripts/demo/photograph";
 import type { TakePhoto } from "@/scripts/demo/photographers";
 import { removeUnfinished, tablesOfShops } from "@/scripts/demo/unfinished";
 import { bundlePixelWorker } from "../support/bundle-pixel-worker";
+import { bundlePlanWorker } from "../support/bundle-worker";
 
 const shared = process.env.DATABASE_URL ?? "";
 const name = "grainwright_demo_test";
@@ -50,9 +52,11 @@ beforeAll(async () => {
   process.env.LOG_LEVEL = "error";
   await migrate(database(), { migrationsFolder: "migrations" });
   await bundlePixelWorker();
+  await bundlePlanWorker();
 }, 60_000);
 afterAll(async () => {
   await closePixelPool();
+  await closePlanPool();
   await openPool().pool.end();
   await onSharedServer(`drop database ${name}`);
   fs.rmSync(uploads, { recursive: true });
