@@ -12,7 +12,7 @@ const waiting = <span className="bg-sheet px-1.5 text-xs text-pencil">no picture
 export function BoardStrip({ board, lazy = true }: { board: Shown; lazy?: boolean }) {
   const { length, width, picture } = board;
   if (length === 0 || width === 0) {
-    return <span className={`${hatched} h-14 w-44 max-w-full`}>{waiting}</span>;
+    return <span className={`${hatched} h-14 w-44 max-w-full border-dashed`}>{waiting}</span>;
   }
   const shape = { aspectRatio: `${length} / ${width}` };
   if (picture === null) {

@@ -131,10 +131,10 @@ function SizeFields({ size, errors, onChange }: SizeFieldsProps) {
     { from: "sheet", text: "A sheet of known size lies on it: measure the board by that" },
   ] as const;
   return (
-    <fieldset className="grid gap-3 rounded-md border border-rule bg-sheet p-4 sm:col-span-2 sm:grid-cols-2">
+    <fieldset className="grid grid-cols-2 items-start gap-3 rounded-md border border-rule bg-sheet p-4 sm:col-span-2">
       <legend className="px-1 font-measure text-lg font-semibold">Size</legend>
       {choices.map(({ from, text }) => (
-        <label key={from} className="flex min-h-8 items-center gap-2 sm:col-span-2">
+        <label key={from} className="col-span-2 flex min-h-8 items-center gap-2">
           <input
             type="radio"
             name="size"

@@ -7,6 +7,8 @@ const sayings: Readonly<Record<string, string>> = {
   "board changed": "changed board",
   "board marked": "marked a photograph of",
   "board straightened": "got to scale the picture of",
+  "board straightening failed": "could not get to scale the picture of",
+  "board straightening cancelled": "stopped straightening the picture of",
   "board areas drawn": "drew areas on",
   "board moisture read": "read the moisture of",
   "photo taken in": "took in the photograph",
