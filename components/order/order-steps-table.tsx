@@ -49,7 +49,7 @@ export function OrderStepsTable({ order, steps, ticks }: Props) {
               <th className="hidden py-1.5 pr-3 font-normal md:table-cell" scope="col">
                 Gives
               </th>
-              <th className="py-1.5 font-normal" scope="col">
+              <th className="hidden py-1.5 font-normal sm:table-cell" scope="col">
                 Done
               </th>
             </tr>
@@ -69,6 +69,11 @@ export function OrderStepsTable({ order, steps, ticks }: Props) {
                         {note}
                       </span>
                     ))}
+                    {tick && (
+                      <span className="block text-moss sm:hidden">
+                        Done: <WhoAndWhen tick={tick} />
+                      </span>
+                    )}
                   </td>
                   <td className="hidden py-2 pr-3 sm:table-cell">{words.from}</td>
                   <td className="measure py-2 pr-3 text-right text-lg leading-5 whitespace-nowrap">
@@ -77,7 +82,7 @@ export function OrderStepsTable({ order, steps, ticks }: Props) {
                   <td className="hidden py-2 pr-3 md:table-cell">
                     <GivesList gives={words.gives} />
                   </td>
-                  <td className="py-2 pr-1 text-moss">{tick && <WhoAndWhen tick={tick} />}</td>
+                  <td className="hidden py-2 pr-1 text-moss sm:table-cell">{tick && <WhoAndWhen tick={tick} />}</td>
                 </tr>
               );
             })}
