@@ -29,20 +29,20 @@ export class Sketch extends FabricObject {
     this.#mayCache = mayCache;
   }
 
-  /** Puts the box somewhere and has it painted afresh. */
+  /** Puts the box somewhere and has it painted afresh: straight on the canvas, since what changes now may change again with the next frame. */
   put(box: Box, paint: Paint): this {
     this.#box = box;
     this.#paint = paint;
-    const objectCaching = this.#mayCache && box.width * box.height < LARGEST_CACHE_PX;
-    this.set({ ...box, objectCaching, dirty: true });
+    this.set({ ...box, objectCaching: false, dirty: true });
     this.setCoords();
     return this;
   }
 
-  /** Moves the box as it is painted. */
+  /** Moves the box as it is painted. What has stayed the same for a frame is kept as a picture, where that was asked for. */
   shift(left: number, top: number): void {
     this.#box = { ...this.#box, left, top };
-    this.set({ left, top });
+    const objectCaching = this.#mayCache && this.#box.width * this.#box.height < LARGEST_CACHE_PX;
+    this.set({ left, top, objectCaching });
     this.setCoords();
   }
 

@@ -60,10 +60,10 @@ export function mountTableView({ hosts, editor, viewState, style }: TableViewOpt
   let drawn: Drawn | null = null;
   let picturesChanged = false;
 
-  const clock = createFrameClock(() => {
-    takeLastMove();
-    draw();
-  });
+  const clock = createFrameClock(
+    () => takeLastMove(),
+    () => draw(),
+  );
   const pictures = new Pictures(() => {
     picturesChanged = true;
     clock.ask();

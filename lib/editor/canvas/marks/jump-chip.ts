@@ -16,7 +16,7 @@ export function paintJump(lines: readonly string[], jumps: boolean, palette: Pal
     context.textBaseline = "middle";
     context.fillStyle = jumps ? palette.graphite : palette.pencil;
     lines.forEach((line, index) => {
-      context.fillText(line, width / 2, (height * (index + 0.5)) / lines.length + 1);
+      context.fillText(line, width / 2, (height * (index + 0.5)) / lines.length + 1, width - 8);
     });
     context.textAlign = "start";
   };
