@@ -25,6 +25,6 @@ export const faultSchema = z.object({
   /** Messages by field name, for forms. */
   fields: z.record(z.string(), z.array(z.string())).optional(),
   /** Machine-readable particulars, such as the present revision in a conflict. */
-  detail: z.json().optional(),
+  detail: z.unknown().optional(),
 });
 export type Fault = z.output<typeof faultSchema>;

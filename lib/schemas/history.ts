@@ -14,7 +14,7 @@ export const historyRowSchema = z.object({
   /** Where to see it. */
   path: z.string().nullable(),
   verb: z.string(),
-  detail: z.record(z.string(), z.json()),
+  detail: z.record(z.string(), z.unknown()),
 });
 export type HistoryRow = z.output<typeof historyRowSchema>;
 

@@ -17,5 +17,5 @@ export const getOpenApi = defineEndpoint({
   summary: "This description",
   tag: "service",
   access: "public",
-  response: z.record(z.string(), z.json()),
+  response: z.record(z.string(), z.unknown()),
 });
