@@ -1,6 +1,6 @@
 "use client";
 import { useUnits } from "@/components/shell/units";
-import { printedLength } from "@/lib/layout";
+import { type LengthStyle, printedLength } from "@/lib/layout";
 import type { BoardRow } from "@/lib/schemas/board";
 import { cutNames, quartersText, stateNames } from "./board-words";
 
@@ -28,11 +28,15 @@ export function BoardFacts({ board }: { board: BoardRow }) {
         )}
         {board.place && <span>{board.place}</span>}
       </span>
-      <span className="measure text-pencil">
-        {measured ? `${printedLength(board.length, style).figure} × ${print(board.width)}` : "not measured yet"}
-      </span>
+      <span className="measure text-pencil">{measured ? sizeText(board, style) : "not measured yet"}</span>
     </span>
   );
+}
+
+/** In mm the unit is said once; an inch mark belongs to every figure. */
+function sizeText({ length, width }: Pick<BoardRow, "length" | "width">, style: LengthStyle): string {
+  const first = printedLength(length, style);
+  return `${style.unit === "mm" ? first.figure : first.text} × ${printedLength(width, style).text}`;
 }
 
 const badge = "rounded-sm border px-1.5 text-xs leading-5";
