@@ -1,9 +1,9 @@
 "use client";
 import { Check } from "lucide-react";
 import { Button } from "../ui/button";
+import { PanelSection } from "../ui/panel-section";
 import { cornerNames } from "./mark-words";
 import { type MarkId, sameMark, turnCorners } from "./marks";
-import { PanelSection } from "./panel-section";
 import type { MarkingState } from "./use-marking";
 
 interface Props {

@@ -2,9 +2,9 @@
 import { X } from "lucide-react";
 import { useUnits } from "../shell/units";
 import { Button } from "../ui/button";
+import { PanelSection } from "../ui/panel-section";
 import { edgeNames, lensWords, printFine } from "./mark-words";
 import { type MarkId, marksOf } from "./marks";
-import { PanelSection } from "./panel-section";
 import type { MarkingState } from "./use-marking";
 
 /** Points along the straight edges, and whether they took out the bending of the lens. */

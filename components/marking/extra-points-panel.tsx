@@ -4,10 +4,10 @@ import type { MarkResidual } from "@/lib/layout";
 import { useUnits } from "../shell/units";
 import { Button } from "../ui/button";
 import { LengthField } from "../ui/length-field";
+import { PanelSection } from "../ui/panel-section";
 import type { DraftPoint } from "./draft";
 import { printFine } from "./mark-words";
 import { type MarkId, marksOf } from "./marks";
-import { PanelSection } from "./panel-section";
 import type { MarkingState } from "./use-marking";
 
 /** More points than the four corners need: each shows how far it disagrees with the rest. */

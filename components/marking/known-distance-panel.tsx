@@ -3,9 +3,9 @@ import { measureMm, umFromMm } from "@/lib/layout";
 import { useUnits } from "../shell/units";
 import { Button } from "../ui/button";
 import { LengthField } from "../ui/length-field";
+import { PanelSection } from "../ui/panel-section";
 import { printFine } from "./mark-words";
 import { differenceFrom } from "./marking-of";
-import { PanelSection } from "./panel-section";
 import type { MarkingState } from "./use-marking";
 
 /** A distance known from the real board, held against the picture. */

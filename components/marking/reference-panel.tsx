@@ -2,8 +2,8 @@
 import { Choice } from "../ui/choice";
 import { LengthField } from "../ui/length-field";
 import { Notice } from "../ui/notice";
+import { PanelSection } from "../ui/panel-section";
 import type { Draft } from "./draft";
-import { PanelSection } from "./panel-section";
 import type { MarkingState } from "./use-marking";
 
 /** What in the photograph has a known size. */

@@ -73,7 +73,7 @@ export function PictureStage(props: Props) {
       <button
         type="button"
         aria-label={`${label}. Arrow keys move it, plus and minus zoom, 0 shows all of it.`}
-        className={`absolute inset-0 touch-none focus-visible:-outline-offset-2 ${props.onStroke || onTap ? "cursor-crosshair" : "cursor-grab"}`}
+        className={`absolute inset-0 touch-none focus-visible:-outline-offset-2 ${props.onStroke || crossHair ? "cursor-crosshair" : "cursor-grab"}`}
         onKeyDown={onKeyDown}
         {...pointers}
       />

@@ -2,7 +2,18 @@
 /** The view of one picture on the screen: whole until somebody zooms or pans, kept in its frame, and as sharp as the picture is deep. */
 import { type RefObject, useCallback, useRef, useState } from "react";
 import { useSize } from "./use-size";
-import { keptInFrame, type Place, pannedBy, pinched, type Size, type View, viewAround, wholeView, zoomedAt } from "./view";
+import {
+  keptInFrame,
+  MARGIN_PX,
+  type Place,
+  pannedBy,
+  pinched,
+  type Size,
+  type View,
+  viewAround,
+  wholeView,
+  zoomedAt,
+} from "./view";
 
 export interface StageView {
   readonly frameRef: RefObject<HTMLDivElement | null>;
@@ -20,12 +31,12 @@ export interface StageView {
 /** Zooming further out than this share of the whole shows nothing new. */
 const SMALLEST_SHARE = 0.8;
 
-/** `mostScale`: CSS pixels per unit of the picture at the nearest zoom. */
-export function useStageView(picture: Size, mostScale: number): StageView {
+/** `mostScale`: CSS pixels per unit of the picture at the nearest zoom; `marginPx`: kept free around the whole of it. */
+export function useStageView(picture: Size, mostScale: number, marginPx = MARGIN_PX): StageView {
   const frameRef = useRef<HTMLDivElement>(null);
   const frame = useSize(frameRef);
   const [moved, setMoved] = useState<View | null>(null);
-  const whole = wholeView(picture, frame);
+  const whole = wholeView(picture, frame, marginPx);
   const view = moved === null ? whole : keptInFrame(moved, picture, frame);
   const limits = { least: whole.scale * SMALLEST_SHARE, most: Math.max(mostScale, whole.scale) };
 

@@ -1,5 +1,5 @@
 import type { Metadata } from "next";
-import { redirect } from "next/navigation";
+import { forbidden, redirect } from "next/navigation";
 import { ZonesScreen } from "@/components/zones/zones-screen";
 import { pageAccess } from "@/lib/server/access";
 import { readBoard } from "@/lib/server/boards/read-board";
@@ -11,9 +11,10 @@ export const metadata: Metadata = { title: "Outline and keep-clear areas" };
 export default async function ZonesPage({ params }: { params: Promise<{ boardId: string }> }) {
   const { boardId } = await params;
   const access = await pageAccess(`/rack/${boardId}/zones`);
+  if (access.role === "assistant") forbidden();
   const board = await orNotFound(readBoard(access, boardId));
-  // Areas are drawn on a picture; without one the photograph comes first.
-  if (board.straighteningId === null) redirect(`/rack/${boardId}/mark`);
+  // Areas are drawn on a picture; the board's page offers the way to one.
+  if (board.straighteningId === null) redirect(`/rack/${boardId}`);
   const straightening = await orNotFound(readStraightening(access, board.straighteningId));
   return <ZonesScreen key={straightening.id} board={board} straightening={straightening} />;
 }
