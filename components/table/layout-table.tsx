@@ -5,8 +5,10 @@ import Link from "next/link";
 import { useCallback, useEffect, useRef, useState } from "react";
 import { buttonClass } from "@/components/ui/button";
 import { PageTitle } from "@/components/ui/page-title";
+import { useUnsavedWarning } from "@/components/ui/use-unsaved-warning";
 import { showSideAddress } from "@/lib/client/layout";
 import type { TableView } from "@/lib/editor/canvas/table-view";
+import { isStuck } from "@/lib/editor/sync/status";
 import type { Layout } from "@/lib/schemas/layout";
 import type { Shop } from "@/lib/schemas/shop";
 import { BoardsSection } from "./boards-section";
@@ -48,6 +50,8 @@ function TableScreen({ initial }: Pick<Props, "initial">) {
   const help = useCallback(() => setHelping(true), []);
   const problems = useProblems();
   useUndoKeys();
+  // What is on its way goes out when a link leads away; what is stuck would be lost.
+  useUnsavedWarning(useEditorState(({ sync }) => isStuck(sync)));
   return (
     <div className="flex flex-col lg:h-[calc(100dvh-3.25rem)]">
       <PageTitle

@@ -28,7 +28,7 @@ function Heading({ title, told, children }: { title: string; told: string; child
   return (
     <div className="flex min-h-10 flex-wrap items-center justify-between gap-x-4 border-t border-rule bg-sheet px-4 py-1 first:border-t-0">
       <p className="flex items-baseline gap-2">
-        <span className="font-measure text-base font-semibold">{title}</span>
+        <span className="font-measure text-base font-semibold whitespace-nowrap">{title}</span>
         <span className="text-sm text-pencil">{told}</span>
       </p>
       {children}
@@ -50,5 +50,5 @@ function useScale(side: "show" | "stock"): string {
   const ratio = PX_PER_MM / pxPerMm;
   const about = ratio >= 1 ? `about 1 : ${ratio.toFixed(1)}` : `about ${(1 / ratio).toFixed(1)} : 1`;
   if (side === "stock" || boards.length === 0) return about;
-  return geometry.oneScale ? `${about}, as the stock side` : `${about}, larger than the stock side to fill the space`;
+  return geometry.oneScale ? `${about}, as the stock side` : `${about}, larger than the stock side`;
 }

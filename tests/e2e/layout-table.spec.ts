@@ -1,7 +1,7 @@
 /** The layout table: laying a row of fronts on a photographed board, sliding it, and everything saved. */
 import type { BrowserContext } from "@playwright/test";
 import { LayoutTablePage } from "./support/layout-table";
-import { makeBoard, makeFace, markKnot } from "./support/stock";
+import { makeBoard, makeFace, markKnot, straighten } from "./support/stock";
 import { accessibilityFaults, expect, type Person, signIn, test } from "./support/test";
 
 const board = { lengthMm: 1400, widthMm: 200 };
@@ -145,4 +145,69 @@ test("an assistant sees the layout and changes nothing", async ({ makerPage: pag
   await expect(looking.page.getByRole("button", { name: "Issue cut order" })).toBeHidden();
   expect(await looking.leftOf("1")).toBe(0.2);
   await context.close();
+});
+
+test("fronts move to a second board, an empty one is taken off, a newer picture is moved over to", async ({
+  makerPage: page,
+  shop,
+}) => {
+  const first = await makeBoard(page.request, board);
+  const second = await makeBoard(page.request, { lengthMm: 600, widthMm: 180 });
+  const table = new LayoutTablePage(page);
+  const address = await makeFace(page.request, shop.sawId, { columnsMm: [200, 200], rowsMm: [120] });
+  await table.open(address);
+  await table.addBoard(first.tag);
+  await table.addBoard(second.tag);
+  const onTable = (tag: string) => page.getByRole("complementary").getByRole("listitem").filter({ hasText: tag });
+  await expect(onTable(first.tag).getByRole("button", { name: "Take off the table" })).toBeDisabled();
+
+  await table.front("2").focus();
+  await page.keyboard.press("l");
+  await onTable(second.tag).getByRole("button", { name: "Lay fronts here" }).click();
+  await expect(table.said(`Front 2 moved to board ${second.tag}.`)).toBeVisible();
+  expect(await table.seam("1 and 2")).toEqual(["1 and 2", "3.0", "other wood", "–"]);
+  await table.front("1").focus();
+  await onTable(second.tag).getByRole("button", { name: "Lay fronts here" }).click();
+  await onTable(first.tag).getByRole("button", { name: "Take off the table" }).click();
+  await expect(onTable(first.tag)).toBeHidden();
+  await table.saved();
+
+  await straighten(page.request, second.id, { lengthMm: 600, widthMm: 180 });
+  await page.reload();
+  await expect(page.getByText("This layout lies on picture 1; the board was marked again since.")).toBeVisible();
+  await page.getByRole("button", { name: "Move over to the newest picture" }).click();
+  await expect(page.getByText("This layout lies on picture 1")).toBeHidden();
+});
+
+test("sizes, saws and the anchor are changed beside the table", async ({ makerPage: page, shop }) => {
+  const { tag } = await makeBoard(page.request, board);
+  const table = new LayoutTablePage(page);
+  await table.open(await makeFace(page.request, shop.sawId, row));
+  await table.addBoard(tag);
+  const left = await table.leftOf("1");
+  await page.getByLabel("Anchor, sideways").selectOption("left");
+  await page.getByRole("heading", { name: "Sizes" }).click();
+  await page.getByLabel("Width 2").fill("200");
+  await page.getByLabel("Width 2").press("Enter");
+  await expect(table.said("Sizes changed.")).toBeVisible();
+  expect(await table.leftOf("1")).toBe(left);
+  expect(await table.leftOf("3")).toBeCloseTo(left + 240 + 3 + 200 + 3, 6);
+
+  // A kerf wider than the gap: the figure jumps by what is missing.
+  await page.getByLabel("Kerf").first().fill("4");
+  await page.getByLabel("Kerf").first().press("Enter");
+  expect(await table.seam("1 and 2")).toEqual(["1 and 2", "3.0", "1.4", "0.0", "1.4"]);
+  await page.getByLabel("Crosscuts: saw").selectOption({ label: "Saw of the tests" });
+  expect(await table.seam("1 and 2")).toEqual(["1 and 2", "3.0", "0.0", "0.0", "0.0"]);
+  await page.getByLabel("Spacing").selectOption("tight");
+  expect(await table.seam("1 and 2")).toEqual(["1 and 2", "3.0", "−0.2", "0.0", "−0.2"]);
+
+  await page.getByRole("button", { name: "Work out from an opening…" }).click();
+  const widths = page.getByRole("dialog").getByRole("group", { name: "Widths" });
+  await widths.getByLabel("Opening, width").fill("700");
+  await widths.getByLabel("Opening, width").blur();
+  await page.getByRole("button", { name: "Use these sizes" }).click();
+  await expect(page.getByLabel("Width 1")).toHaveValue("229.3 mm");
+  await page.keyboard.press("Control+z");
+  await table.saved();
 });

@@ -21,3 +21,8 @@ export type SyncStatus =
 export function hasUnsavedWork(status: SyncStatus): boolean {
   return status.kind !== "saved";
 }
+
+/** Whether the work cannot be saved without something happening first: a connection, a choice, another change. */
+export function isStuck(status: SyncStatus): boolean {
+  return status.kind !== "saved" && status.kind !== "saving";
+}

@@ -47,13 +47,20 @@ export async function makeBoard(request: APIRequestContext, size: SizeMm): Promi
   const entered = await request.post("/api/boards", { data: { ...fields, ...blank }, headers: { origin } });
   const board = boardSchema.parse(await entered.json());
 
+  await straighten(request, board.id, size);
+  return board;
+}
+
+/** Photographs a board and has the picture straightened: its first version, or a newer one. */
+export async function straighten(request: APIRequestContext, boardId: string, size: SizeMm): Promise<void> {
+  const { lengthMm, widthMm } = size;
   const query = `uploadKey=${crypto.randomUUID()}&fileName=board.jpg`;
   const upload = await request.post(`/api/photos?${query}`, { data: await photograph(size), headers: { origin } });
   const { id: photoId } = photoSchema.parse(await upload.json());
   const [left, top] = [MARGIN_PX, MARGIN_PX];
   const [right, bottom] = [left + Math.round(lengthMm * PHOTO_PX_PER_MM), top + Math.round(widthMm * PHOTO_PX_PER_MM)];
   const marking = {
-    reference: { kind: "board", length, width },
+    reference: { kind: "board", length: lengthMm * 1000, width: widthMm * 1000 },
     corners: [
       { x: left, y: top },
       { x: right, y: top },
@@ -63,14 +70,13 @@ export async function makeBoard(request: APIRequestContext, size: SizeMm): Promi
     extraPoints: [],
     edgePoints: [],
   };
-  const started = await request.post(`/api/boards/${board.id}/straightenings`, {
+  const started = await request.post(`/api/boards/${boardId}/straightenings`, {
     data: { photoId, marking },
     headers: { origin },
   });
   const { id } = straighteningSchema.parse(await started.json());
   const state = async () => straighteningSchema.parse(await (await request.get(`/api/straightenings/${id}`)).json()).state;
   await expect.poll(state, { timeout: 40_000 }).toBe("done");
-  return board;
 }
 
 /** Marks a knot on a board's picture. */

@@ -34,7 +34,7 @@ export function paintPatch(
     context.beginPath();
     context.rect(0, 0, width, height);
     context.clip();
-    hatch(context, { left: 0, top: 0, width, height }, palette.rule, 6);
+    if (reachesOver(stockRect, picture.wood)) hatch(context, { left: 0, top: 0, width, height }, palette.rule, 6);
     const faceFromStock = inverted(stockFromFace);
     const boxFromFace: Isometry = { a: 1, b: 0, c: 0, d: 1, tx: -faceRect.x, ty: -faceRect.y };
     const { a, b, c, d, tx, ty } = composed(boxFromFace, faceFromStock);
@@ -42,6 +42,11 @@ export function paintPatch(
     drawStockRect(context, picture.wood, stockRect);
     context.restore();
   };
+}
+
+/** Whether the photograph ends before the piece does. */
+function reachesOver({ x, y, width, height }: Rect<"stock">, { bitmap, perUmX, perUmY }: WoodBitmap): boolean {
+  return x < 0 || y < 0 || x + width > bitmap.width / perUmX || y + height > bitmap.height / perUmY;
 }
 
 /** Draws one rectangle of the stock in a context whose unit is a µm of the stock frame. */
