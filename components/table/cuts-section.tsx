@@ -86,7 +86,7 @@ function CutFields({ direction }: { direction: CutDirection }) {
           </option>
         ))}
       </SelectField>
-      <div className="grid grid-cols-3 gap-2">
+      <div className="grid grid-cols-3 items-end gap-2">
         <LengthField label="Kerf" value={cut.kerf} onChange={(kerf) => kerf !== null && change({ kerf: atLeastNothing(kerf) })} />
         <LengthField
           label={direction === "crosscut" ? "Clean-up, right" : "Clean-up, below"}
