@@ -2,7 +2,7 @@
 /** Bringing a photograph of a board to scale: corners, what has a known size, the checks, and the straightening. */
 import { useMutation } from "@tanstack/react-query";
 import Link from "next/link";
-import { useMemo, useState } from "react";
+import { useEffect, useMemo, useState } from "react";
 import { messageOf } from "@/lib/client/fault-from-server";
 import { startStraightening } from "@/lib/client/straightening";
 import type { Board } from "@/lib/schemas/board";
@@ -52,6 +52,12 @@ export function MarkingScreen({ board, photo, previous }: Props) {
   const [started, setStarted] = useState<Straightening | null>(null);
   useUnsavedWarning(marking.dirty && started === null);
   const fit = marking.fit?.ok ? marking.fit : null;
+  const { reveal } = stage;
+  const { adding } = marking;
+  // Tapping follows, on a phone far above the button that asked for it.
+  useEffect(() => {
+    if (adding) reveal();
+  }, [adding, reveal]);
 
   const show = (mark: MarkId) => {
     const at = markAt(marking.draft, mark);
@@ -74,7 +80,7 @@ export function MarkingScreen({ board, photo, previous }: Props) {
           {state === "failed" && (
             <Notice kind="stop">The photograph could not be loaded. Check the connection and load the page again.</Notice>
           )}
-          <AddingNotice adding={marking.adding} onDone={() => marking.add(null)} />
+          <AddingNotice adding={adding} onDone={() => marking.add(null)} />
           <div className="px-4 py-3">
             {started === null && <MarksNotice marking={marking} />}
             {fit && started === null && (

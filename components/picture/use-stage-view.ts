@@ -24,6 +24,8 @@ export interface StageView {
   pan: (by: Place) => void;
   pinch: (before: readonly [Place, Place], after: readonly [Place, Place]) => void;
   showWhole: () => void;
+  /** Scrolls the page so that the picture is in sight: on a phone what belongs to it lies far below. */
+  reveal: () => void;
   /** Brings a point of the picture to the middle, at this scale or nearer if it is nearer already. */
   lookAt: (at: Place, leastScale: number) => void;
 }
@@ -44,6 +46,8 @@ export function useStageView(picture: Size, mostScale: number, marginPx = MARGIN
   const change = (next: (from: View) => View) =>
     setMoved((from) => keptInFrame(next(from === null ? whole : keptInFrame(from, picture, frame)), picture, frame));
 
+  const reveal = useCallback(() => frameRef.current?.scrollIntoView({ block: "nearest" }), []);
+
   return {
     frameRef,
     frame,
@@ -53,6 +57,10 @@ export function useStageView(picture: Size, mostScale: number, marginPx = MARGIN
     pan: (by) => change((from) => pannedBy(from, by)),
     pinch: (before, after) => change((from) => pinched(from, before, after, limits)),
     showWhole: useCallback(() => setMoved(null), []),
-    lookAt: (at, leastScale) => change((from) => viewAround(at, Math.min(limits.most, Math.max(from.scale, leastScale)), frame)),
+    reveal,
+    lookAt: (at, leastScale) => {
+      reveal();
+      change((from) => viewAround(at, Math.min(limits.most, Math.max(from.scale, leastScale)), frame));
+    },
   };
 }

@@ -2,10 +2,10 @@
 import { Button } from "../ui/button";
 import { PanelSection } from "../ui/panel-section";
 import { wholeBoard } from "./polygon-edit";
-import type { ZonesState } from "./use-zones";
+import type { Tool, ZonesState } from "./use-zones";
 
 /** The usable outline: the whole rectangle, or what is left of it inside sap, wane and splits. */
-export function OutlinePanel({ zones }: { zones: ZonesState }) {
+export function OutlinePanel({ zones, onTool }: { zones: ZonesState; onTool: (tool: Tool) => void }) {
   const { doc, selection, size } = zones;
   const editing = selection?.what === "outline";
   return (
@@ -22,21 +22,14 @@ export function OutlinePanel({ zones }: { zones: ZonesState }) {
           size="small"
           aria-pressed={editing}
           onClick={() => {
-            zones.take("select");
+            onTool("select");
             if (!doc.outline) zones.change({ ...doc, outline: wholeBoard(size) });
             zones.select(editing ? null : { what: "outline" });
           }}
         >
           {editing ? "Done with corners" : doc.outline ? "Change its corners" : "Start from the whole board"}
         </Button>
-        <Button
-          size="small"
-          aria-pressed={zones.tool === "outline"}
-          onClick={() => {
-            zones.select(null);
-            zones.take("outline");
-          }}
-        >
+        <Button size="small" aria-pressed={zones.tool === "outline"} onClick={() => onTool("outline")}>
           Trace by tapping
         </Button>
         {doc.outline && (

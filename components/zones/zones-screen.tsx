@@ -23,7 +23,7 @@ import { OutlinePanel } from "./outline-panel";
 import { Rulers, TAPE_PX } from "./rulers";
 import { ToolNotice } from "./tool-notice";
 import { useSaveZones } from "./use-save-zones";
-import { useUndoKeys, useZones } from "./use-zones";
+import { type Tool, useUndoKeys, useZones } from "./use-zones";
 import { ZoneHandles } from "./zone-handles";
 import { faultWords, middleOf } from "./zone-words";
 import { docFault } from "./zones-doc";
@@ -51,6 +51,11 @@ export function ZonesScreen({ board, straightening }: { board: Board; straighten
 
   const onStroke = ({ phase, from, to }: Stroke) =>
     phase === "dropped" ? zones.preview(null) : zones.drawBox(toUm(from), toUm(to), phase === "end");
+  const take = (tool: Tool) => {
+    zones.select(null);
+    zones.take(tool);
+    stage.reveal();
+  };
   const show = (area: KeepClearArea) => {
     const { x, y } = middleOf(area);
     stage.lookAt({ x: x / 1000, y: y / 1000 }, SCALE_AT_AREA);
@@ -104,13 +109,13 @@ export function ZonesScreen({ board, straightening }: { board: Board; straighten
           </div>
         </div>
         <div className="border-rule bg-sheet lg:border-l">
-          <OutlinePanel zones={zones} />
+          <OutlinePanel zones={zones} onTool={take} />
           <PanelSection title="Keep clear" lead="No show piece may touch these. Anything else on the board may be used.">
             <div className="flex flex-wrap gap-2">
-              <Button size="small" aria-pressed={zones.tool === "ellipse"} onClick={() => zones.take("ellipse")}>
+              <Button size="small" aria-pressed={zones.tool === "ellipse"} onClick={() => take("ellipse")}>
                 Add an ellipse
               </Button>
-              <Button size="small" aria-pressed={zones.tool === "polygon"} onClick={() => zones.take("polygon")}>
+              <Button size="small" aria-pressed={zones.tool === "polygon"} onClick={() => take("polygon")}>
                 Add a polygon
               </Button>
             </div>
