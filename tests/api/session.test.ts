@@ -1,10 +1,8 @@
 /** Signing in and out, and what the session gate lets through. */
+import "../support/cookie-jar";
 import { eq } from "drizzle-orm";
 import { v7 as newId } from "uuid";
 import { beforeAll, beforeEach, describe, expect, it } from "vitest";
-import { emptyJar, fillJar, jarContent } from "../support/cookie-jar";
-import { ask } from "../support/ask";
-import { makeShop, type TestShop, testPassword } from "../support/shop";
 import * as sessionRoute from "@/app/api/session/route";
 import * as sessionsRoute from "@/app/api/sessions/route";
 import * as shopRoute from "@/app/api/shop/route";
@@ -14,6 +12,9 @@ import * as endpoint from "@/lib/schemas/session";
 import * as shopEndpoint from "@/lib/schemas/shop";
 import { database } from "@/lib/server/database";
 import { env } from "@/lib/server/env";
+import { ask } from "../support/ask";
+import { emptyJar, fillJar, jarContent } from "../support/cookie-jar";
+import { makeShop, type TestShop, testPassword } from "../support/shop";
 
 let shop: TestShop;
 beforeAll(async () => {
@@ -22,7 +23,12 @@ beforeAll(async () => {
 beforeEach(emptyJar);
 
 const signIn = (email: string, password: string, headers?: Record<string, string>) =>
-  ask(sessionRoute.POST, endpoint.signIn, { body: { email, password } }, headers ?? { origin: env().APP_URL, "x-forwarded-for": newId() });
+  ask(
+    sessionRoute.POST,
+    endpoint.signIn,
+    { body: { email, password } },
+    headers ?? { origin: env().APP_URL, "x-forwarded-for": newId() },
+  );
 const whoAmI = () => ask(sessionRoute.GET, endpoint.getSession, {});
 const saw = { name: "Frame saw", kind: "hand", kerf: 800, cleanUp: 300 } as const;
 
