@@ -6,7 +6,7 @@ const baseURL = process.env.BASE_URL;
 if (!baseURL) throw new Error("BASE_URL is not set. Run the browser tests with: node scripts/run.mjs test --only e2e");
 
 export default defineConfig({
-  testDir: "tests/e2e",
+  testDir: "tests",
   testMatch: "**/*.spec.ts",
   globalSetup: "./tests/e2e/support/bundle-make-shop.ts",
   outputDir: ".data/reports/e2e",
