@@ -55,6 +55,7 @@ export function PhotoWithMarks({ photo, stage, marking, image }: Props) {
       ))}
       {movingAt && (
         <div
+          data-testid="loupe"
           className={`absolute top-2 z-20 overflow-hidden rounded-md border-2 border-sheet outline outline-line ${loupeCorner(toScreen(stage.view, movingAt), stage.frame) === "left" ? "left-2" : "right-2"}`}
         >
           <Loupe

@@ -23,7 +23,10 @@ export function ellipseInBox(a: Place, b: Place): Ellipse | null {
   return { shape: "ellipse", centre, radiusX: um(Math.round(radiusX)), radiusY: um(Math.round(radiusY)), turnDeg: 0 };
 }
 
-/** Where a handle stands. The one that turns lies beyond the end of the first radius by `clear`. */
+/**
+ * Where a handle stands: off the rim by `clear`, so that a finger covers neither the rim nor another handle of a small knot. The one that turns stands opposite
+ * to the first radius.
+ */
 export function handlePlace({ centre, radiusX, radiusY, turnDeg }: Ellipse, handle: EllipseHandle, clear: number): StockPoint {
   const turn = (turnDeg * Math.PI) / 180;
   const from = (along: number, across: number): StockPoint => ({
@@ -31,22 +34,22 @@ export function handlePlace({ centre, radiusX, radiusY, turnDeg }: Ellipse, hand
     y: um(Math.round(centre.y + along * Math.sin(turn) + across * Math.cos(turn))),
   });
   if (handle === "centre") return centre;
-  if (handle === "along") return from(radiusX, 0);
-  if (handle === "across") return from(0, radiusY);
-  return from(radiusX + clear, 0);
+  if (handle === "along") return from(radiusX + clear, 0);
+  if (handle === "across") return from(0, radiusY + clear);
+  return from(-radiusX - clear, 0);
 }
 
 /** The ellipse with a handle moved to a place; whole degrees, and whole tenths of a millimetre for the radii. */
-export function moveEllipseHandle(ellipse: Ellipse, handle: EllipseHandle, to: Place): Ellipse {
+export function moveEllipseHandle(ellipse: Ellipse, handle: EllipseHandle, to: Place, clear: number): Ellipse {
   const { centre, turnDeg } = ellipse;
   if (handle === "centre") return { ...ellipse, centre: { x: um(Math.round(to.x)), y: um(Math.round(to.y)) } };
   const [dx, dy] = [to.x - centre.x, to.y - centre.y];
   if (handle === "turn") {
-    const turned = Math.round((Math.atan2(dy, dx) * 180) / Math.PI);
+    const turned = Math.round((Math.atan2(-dy, -dx) * 180) / Math.PI);
     return { ...ellipse, turnDeg: turned === 180 ? -180 : turned === 0 ? 0 : turned };
   }
   const turn = (turnDeg * Math.PI) / 180;
   const reach = handle === "along" ? dx * Math.cos(turn) + dy * Math.sin(turn) : dy * Math.cos(turn) - dx * Math.sin(turn);
-  const radius = um(Math.max(LEAST_RADIUS, Math.round(Math.abs(reach) / 100) * 100));
+  const radius = um(Math.max(LEAST_RADIUS, Math.round((reach - clear) / 100) * 100));
   return handle === "along" ? { ...ellipse, radiusX: radius } : { ...ellipse, radiusY: radius };
 }

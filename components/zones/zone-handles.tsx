@@ -6,7 +6,7 @@ import type { KeepClearArea } from "@/lib/schemas/zones";
 import { Handle, type MovePhase } from "../picture/handle";
 import { type Place, toScreen, type View } from "../picture/view";
 import { useUnits } from "../shell/units";
-import { ellipseHandles, handlePlace, moveEllipseHandle } from "./ellipse-edit";
+import { type Ellipse, type EllipseHandle, ellipseHandles, handlePlace, moveEllipseHandle } from "./ellipse-edit";
 import { HandleLook } from "./handle-look";
 import { insertCorner, middleOfEdge, moveCorner, removeCorner, snapped } from "./polygon-edit";
 import type { ZonesState } from "./use-zones";
@@ -15,8 +15,8 @@ import { withArea, type ZonesDoc } from "./zones-doc";
 
 /** Snaps from this near, CSS px. */
 const SNAP_PX = 8;
-/** The handle that turns stands off the ellipse by this, CSS px: a finger must not take the wrong one. */
-const TURN_CLEAR_PX = 40;
+/** Handles of an ellipse stand off its rim by this, CSS px: half of what a fingertip covers, and more than the 24 px that targets need. */
+const CLEAR_PX = 30;
 /** Movement by an arrow key with Alt, mm. */
 const FINE_STEP_MM = 0.1;
 /** Closer corners have no room for a new one between them, CSS px. */
@@ -144,8 +144,8 @@ function EllipseHandles({ area, zones, view }: Props & { area: KeepClearArea }) 
   const { style } = useUnits();
   if (area.area.shape !== "ellipse") return null;
   const ellipse = area.area;
-  const clear = (TURN_CLEAR_PX / view.scale) * 1000;
-  return ellipseHandles.map((handle) => {
+  const clear = (CLEAR_PX / view.scale) * 1000;
+  const handles = ellipseHandles.map((handle) => {
     const at = handlePlace(ellipse, handle, clear);
     return (
       <Handle
@@ -158,7 +158,7 @@ function EllipseHandles({ area, zones, view }: Props & { area: KeepClearArea }) 
         selected={false}
         onSelect={() => undefined}
         onMove={(to, phase) => {
-          const moved = moveEllipseHandle(ellipse, handle, toUm(to));
+          const moved = moveEllipseHandle(ellipse, handle, toUm(to), clear);
           settle(zones, withArea(zones.doc, { ...area, area: moved }), phase, `${area.id} ${handle}`);
         }}
         onRemove={handle === "centre" ? zones.removeSelected : undefined}
@@ -167,4 +167,25 @@ function EllipseHandles({ area, zones, view }: Props & { area: KeepClearArea }) 
       </Handle>
     );
   });
+  return (
+    <>
+      <Stems ellipse={ellipse} view={view} clear={clear} />
+      {handles}
+    </>
+  );
+}
+
+/** From the middle to the handles, so that it is seen what they belong to. */
+function Stems({ ellipse, view, clear }: { ellipse: Ellipse; view: View; clear: number }) {
+  const place = (handle: EllipseHandle) => {
+    const { x, y } = toScreen(view, toMm(handlePlace(ellipse, handle, clear)));
+    return `${x} ${y}`;
+  };
+  const d = `M${place("turn")}L${place("along")}M${place("centre")}L${place("across")}`;
+  return (
+    <svg className="absolute inset-0 size-full" aria-hidden="true">
+      <path d={d} stroke="#fff" strokeWidth="3.5" />
+      <path d={d} className="stroke-chalk" strokeWidth="1.5" />
+    </svg>
+  );
 }

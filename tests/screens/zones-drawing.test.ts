@@ -78,7 +78,7 @@ describe("keep-clear areas", () => {
       fc.property(tenths, tenths, fc.integer({ min: -179, max: 179 }), (radiusX, radiusY, turnDeg) => {
         const drawn = ellipse(500_000, 100_000, radiusX, radiusY, turnDeg);
         for (const handle of ["centre", "along", "across", "turn"] as const) {
-          expect(moveEllipseHandle(drawn, handle, handlePlace(drawn, handle, 100_000))).toEqual(drawn);
+          expect(moveEllipseHandle(drawn, handle, handlePlace(drawn, handle, 100_000), 100_000)).toEqual(drawn);
         }
       }),
     );
