@@ -17,7 +17,7 @@ export function EdgePointsPanel({ marking, onShow }: { marking: MarkingState; on
       lead="Optional. A phone's lens bends edges a little. Tap along an edge that you know to be straight, well spread out."
     >
       {draft.edgePoints.length > 0 && (
-        <ul className="flex flex-wrap gap-2">
+        <ul className="flex flex-wrap gap-1">
           {marksOf(draft, "edge").map((mark) => {
             const { index } = mark;
             const edge = draft.edgePoints[index]?.edge ?? "top";

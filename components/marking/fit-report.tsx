@@ -23,19 +23,19 @@ export function FitReport({ marking }: { marking: MarkingState }) {
   return (
     <dl className="grid grid-cols-[auto_1fr] gap-x-4 gap-y-1 text-sm">
       <dt>Board</dt>
-      <dd className="measure text-right text-base">
+      <dd className="measure text-right text-base whitespace-nowrap">
         {print(fit.length)} × {print(fit.width)}
       </dd>
       <dt>Picture</dt>
-      <dd className="measure text-right text-base">{scale.pxPerMm.toFixed(2)} px/mm</dd>
-      <dt>A mark one pixel off moves a corner by</dt>
-      <dd className="measure text-right text-base">
+      <dd className="measure text-right text-base whitespace-nowrap">{scale.pxPerMm.toFixed(2)} px/mm</dd>
+      <dt>One pixel off moves a corner by</dt>
+      <dd className="measure text-right text-base whitespace-nowrap">
         {Number.isFinite(fit.mmPerPixelOfMark) ? print(umFromMm(fit.mmPerPixelOfMark)) : "more than can be told"}
       </dd>
       {fit.residuals.some(({ mark }) => mark === "extra") && (
         <>
           <dt>Marks agree within</dt>
-          <dd className="measure text-right text-base">{printFine(fit.rmsMm, style)}</dd>
+          <dd className="measure text-right text-base whitespace-nowrap">{printFine(fit.rmsMm, style)}</dd>
         </>
       )}
     </dl>

@@ -1,10 +1,10 @@
 /** Lines between the corners and what each side of the board is, drawn over the photograph. Takes no pointer. */
 import type { FourCorners } from "@/lib/layout";
-import { type Place, toScreen, type View } from "../picture/view";
+import { type Place, type Size, toScreen, type View } from "../picture/view";
 import type { Draft } from "./draft";
 import { cornerNames, edgeNames } from "./mark-words";
 
-export function MarkedLines({ draft, view }: { draft: Draft; view: View }) {
+export function MarkedLines({ draft, view, frame }: { draft: Draft; view: View; frame: Size }) {
   const board = onScreen(draft.corners, view);
   return (
     <svg className="absolute inset-0 size-full" aria-hidden="true">
@@ -15,7 +15,7 @@ export function MarkedLines({ draft, view }: { draft: Draft; view: View }) {
       <SideName corners={board} side={2} text={edgeNames.bottom} />
       <SideName corners={board} side={3} text={edgeNames.left} />
       {board.map((corner, index) => (
-        <CornerNumber key={cornerNames[index]} at={corner} away={middle(board)} text={String(index + 1)} />
+        <CornerNumber key={cornerNames[index]} at={corner} away={middle(board)} frame={frame} text={String(index + 1)} />
       ))}
       {draft.known && <Distance from={toScreen(view, draft.known.from)} to={toScreen(view, draft.known.to)} />}
     </svg>
@@ -75,10 +75,13 @@ function SideName({ corners, side, text }: { corners: readonly Place[]; side: nu
   );
 }
 
-function CornerNumber({ at, away, text }: { at: Place; away: Place; text: string }) {
+/** Outside of its corner, and still in the frame when the corner is at its rim. */
+function CornerNumber({ at, away, frame, text }: { at: Place; away: Place; frame: Size; text: string }) {
   const distance = Math.hypot(at.x - away.x, at.y - away.y) || 1;
-  const x = at.x + ((at.x - away.x) / distance) * 24;
-  const y = at.y + ((at.y - away.y) / distance) * 24;
+  const inFrame = (value: number, corner: number, room: number) =>
+    corner >= 0 && corner <= room ? Math.min(Math.max(value, 11), room - 11) : value;
+  const x = inFrame(at.x + ((at.x - away.x) / distance) * 24, at.x, frame.width);
+  const y = inFrame(at.y + ((at.y - away.y) / distance) * 24, at.y, frame.height);
   return (
     <>
       <rect x={x - 9} y={y - 10} width="18" height="20" rx="3" fill="var(--color-chalk)" stroke="#fff" />

@@ -1,26 +1,23 @@
 "use client";
 /** Bringing a photograph of a board to scale: corners, what has a known size, the checks, and the straightening. */
-import { useMutation } from "@tanstack/react-query";
 import Link from "next/link";
 import { useEffect, useMemo, useState } from "react";
-import { messageOf } from "@/lib/client/fault-from-server";
-import { startStraightening } from "@/lib/client/straightening";
 import type { Board } from "@/lib/schemas/board";
 import type { Photo } from "@/lib/schemas/photo";
 import type { Straightening } from "@/lib/schemas/straightening";
 import { useImage } from "../picture/use-image";
 import { useStageView } from "../picture/use-stage-view";
-import { Button } from "../ui/button";
 import { Notice } from "../ui/notice";
 import { PageTitle } from "../ui/page-title";
 import { PanelSection } from "../ui/panel-section";
 import { useUnsavedWarning } from "../ui/use-unsaved-warning";
 import { CornersPanel } from "./corners-panel";
-import { draftFrom, freshDraft } from "./draft";
+import { type Draft, draftFrom, freshDraft } from "./draft";
 import { EdgePointsPanel } from "./edge-points-panel";
 import { ExtraPointsPanel } from "./extra-points-panel";
 import { FineAdjust } from "./fine-adjust";
-import { FitReport, MarksNotice } from "./fit-report";
+import { FinishPanel } from "./finish-panel";
+import { MarksNotice } from "./fit-report";
 import { KnownDistancePanel } from "./known-distance-panel";
 import { markName, positionWords } from "./mark-words";
 import { type MarkId, markAt } from "./marks";
@@ -32,6 +29,8 @@ import { type Adding, type MarkingState, useMarking } from "./use-marking";
 
 /** CSS pixels per photo pixel at the nearest zoom: a pixel is then a square one can point at. */
 const MOST_SCALE = 12;
+/** Around the whole photograph, for names beside a board that fills it. */
+const MARGIN_PX = 34;
 /** Choosing a corner from the list zooms in at least this far. */
 const SCALE_AT_CORNER = 0.5;
 
@@ -47,10 +46,12 @@ export function MarkingScreen({ board, photo, previous }: Props) {
   const marking = useMarking(size, () =>
     previous?.photoId === photo.id ? draftFrom(previous.marking, size, board) : freshDraft(size, board),
   );
-  const stage = useStageView(size, MOST_SCALE);
+  const stage = useStageView(size, MOST_SCALE, MARGIN_PX);
   const { image, state } = useImage(photo.levels[0]?.url ?? null);
   const [started, setStarted] = useState<Straightening | null>(null);
-  useUnsavedWarning(marking.dirty && started === null);
+  // Marks once sent are kept with their version, whatever becomes of its picture.
+  const [sent, setSent] = useState<Draft | null>(null);
+  useUnsavedWarning(marking.dirty && marking.draft !== sent);
   const fit = marking.fit?.ok ? marking.fit : null;
   const { reveal } = stage;
   const { adding } = marking;
@@ -74,7 +75,13 @@ export function MarkingScreen({ board, photo, previous }: Props) {
           </Link>
         }
       />
-      <div className="lg:grid lg:grid-cols-[minmax(0,1fr)_25rem]">
+      {started && (
+        <PanelSection title="Straighten">
+          <StraightenRun started={started} onAgain={() => setStarted(null)} />
+        </PanelSection>
+      )}
+      {/* Only hidden meanwhile: the view of the photograph is found again as it was left. */}
+      <div hidden={started !== null} className="lg:grid lg:grid-cols-[minmax(0,1fr)_25rem]">
         <div className="min-w-0 lg:sticky lg:top-0 lg:self-start">
           <PhotoWithMarks photo={photo} stage={stage} marking={marking} image={image} />
           {state === "failed" && (
@@ -82,8 +89,8 @@ export function MarkingScreen({ board, photo, previous }: Props) {
           )}
           <AddingNotice adding={adding} onDone={() => marking.add(null)} />
           <div className="px-4 py-3">
-            {started === null && <MarksNotice marking={marking} />}
-            {fit && started === null && (
+            <MarksNotice marking={marking} />
+            {fit && (
               <>
                 <h2 className="pb-2 text-lg">As it will come out</h2>
                 <Preview photo={photo} fit={fit} />
@@ -92,21 +99,21 @@ export function MarkingScreen({ board, photo, previous }: Props) {
           </div>
         </div>
         <div className="border-rule bg-sheet lg:border-l">
-          {started ? (
-            <PanelSection title="Straighten">
-              <StraightenRun started={started} onAgain={() => setStarted(null)} />
-            </PanelSection>
-          ) : (
-            <>
-              <SelectedMark marking={marking} image={image} />
-              <ReferencePanel marking={marking} />
-              <CornersPanel marking={marking} onShow={show} />
-              <EdgePointsPanel marking={marking} onShow={show} />
-              <ExtraPointsPanel marking={marking} onShow={show} />
-              <KnownDistancePanel marking={marking} />
-              <Finish board={board} photo={photo} marking={marking} onStarted={setStarted} />
-            </>
-          )}
+          <SelectedMark marking={marking} image={image} />
+          <ReferencePanel marking={marking} />
+          <CornersPanel marking={marking} onShow={show} />
+          <EdgePointsPanel marking={marking} onShow={show} />
+          <ExtraPointsPanel marking={marking} onShow={show} />
+          <KnownDistancePanel marking={marking} />
+          <FinishPanel
+            board={board}
+            photo={photo}
+            marking={marking}
+            onStarted={(version) => {
+              setSent(marking.draft);
+              setStarted(version);
+            }}
+          />
         </div>
       </div>
       <Spoken marking={marking} />
@@ -150,45 +157,6 @@ function AddingNotice({ adding, onDone }: { adding: Adding | null; onDone: () =>
       </Notice>
     </div>
   );
-}
-
-interface FinishProps {
-  board: Board;
-  photo: Photo;
-  marking: MarkingState;
-  onStarted: (started: Straightening) => void;
-}
-
-function Finish({ board, photo, marking, onStarted }: FinishProps) {
-  const { outcome, fit } = marking;
-  const start = useMutation({
-    mutationFn: async () => {
-      if (!outcome.complete) throw new Error("Put the marks in their place first.");
-      return startStraightening(board.id, { photoId: photo.id, marking: wireOf(outcome.marking) });
-    },
-    onSuccess: onStarted,
-  });
-  return (
-    <PanelSection title="Straighten" lead="Makes the picture true to scale. It becomes a new version; layouts keep theirs.">
-      <FitReport marking={marking} />
-      {start.error && <Notice kind="stop">{messageOf(start.error)}</Notice>}
-      <Button kind="primary" disabled={!fit?.ok || start.isPending} onClick={() => start.mutate()}>
-        Straighten
-      </Button>
-    </PanelSection>
-  );
-}
-
-/** The wire's lists may be written to, the core's may not. */
-function wireOf(marking: Extract<MarkingState["outcome"], { complete: true }>["marking"]) {
-  const { reference, corners, extraPoints, edgePoints } = marking;
-  const copied = ([a, b, c, d]: typeof corners): [typeof a, typeof b, typeof c, typeof d] => [a, b, c, d];
-  return {
-    reference: reference.kind === "sheet" ? { ...reference, corners: copied(reference.corners) } : reference,
-    corners: copied(corners),
-    extraPoints: [...extraPoints],
-    edgePoints: [...edgePoints],
-  };
 }
 
 /** Says where the selected mark is, once it rests: a screen reader would talk over itself while it moves. */

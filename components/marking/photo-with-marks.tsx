@@ -43,7 +43,7 @@ export function PhotoWithMarks({ photo, stage, marking, image }: Props) {
       crossHair={adding !== null}
       className="h-[54dvh] min-h-72 lg:h-[calc(100dvh-19rem)]"
     >
-      <MarkedLines draft={draft} view={stage.view} />
+      <MarkedLines draft={draft} view={stage.view} frame={stage.frame} />
       {marksOf(draft).map((mark) => (
         <OneHandle
           key={`${mark.of}-${mark.index}`}

@@ -47,12 +47,15 @@ export function StraightenRun({ started, onAgain }: Props) {
   }
   return (
     <div className="flex flex-col gap-3">
-      <p role="status">{task?.state === "running" ? "Straightening the photograph." : "Waiting for its turn."}</p>
+      <p>
+        <span role="status">{task?.state === "running" ? "Straightening the photograph." : "Waiting for its turn."}</span>{" "}
+        <span className="measure">{Math.round((task?.progress ?? 0) * 100)} %</span>
+      </p>
       <ProgressTape label="Straightening" done={Math.round((task?.progress ?? 0) * 100)} of={100} />
       {error && <Notice kind="care">{messageOf(error)} It is being worked on all the same.</Notice>}
       {cancel.error && <Notice kind="stop">{messageOf(cancel.error)}</Notice>}
       <Button className="self-start" disabled={cancel.isPending || cancel.isSuccess} onClick={() => cancel.mutate()}>
-        {cancel.isSuccess ? "Stopping" : "Cancel"}
+        {cancel.isPending || cancel.isSuccess ? "Stopping" : "Cancel"}
       </Button>
     </div>
   );

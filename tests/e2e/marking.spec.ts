@@ -44,7 +44,16 @@ test("marked by mouse: told what is missing, refused when folded, shown at once,
   const difference = (await page.getByText(/^\+[\d.]+ mm \(\+0\.\d\d %\)$/).textContent()) ?? "";
   // The points lie on the two ends of the board, so 1200 mm apart along it; a pixel of the screen is 1.4 mm here.
   expect(Math.abs(Number.parseFloat(difference.slice(1)) - 10)).toBeLessThan(4);
+
+  // A further point said to be where it is not contradicts the corners; without it they stand.
+  await page.getByRole("button", { name: "Add a point" }).click();
+  await marking.tap({ x: 1200, y: 440 });
+  await page.getByLabel("Along").fill("100");
+  await page.getByLabel("Across").fill("100");
+  await page.getByLabel("Across").blur();
+  await expect(page.getByRole("alert").filter({ hasText: "The marks contradict each other" })).toBeVisible();
   expect(await accessibilityFaults(page)).toEqual([]);
+  await page.getByRole("button", { name: "Remove point 1" }).click();
 
   await marking.straighten.click();
   await expect(page.getByText("Version 1 of the picture is done.")).toBeVisible({ timeout: 40_000 });
