@@ -16,11 +16,18 @@ export interface OpenDatabase {
   readonly databaseName: string;
 }
 
+/**
+ * Requests that may wait for a connection at once. Beyond it the database is not keeping up, or something holds its connections: an
+ * error that says so beats a server that hangs.
+ */
+const longestQueue = 200;
+
 /** Opens a pool. Times are UTC on the wire; `planetscale` mode because MariaDB has no LATERAL joins. */
 export function openDatabase(url: string, connectionLimit = 10): OpenDatabase {
   const pool = mysql.createPool({
     uri: url,
     connectionLimit,
+    queueLimit: longestQueue,
     timezone: "Z",
     charset: "utf8mb4",
     supportBigNumbers: true,

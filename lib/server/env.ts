@@ -17,6 +17,8 @@ const envSchema = z
     /** Where this process' workers work off tasks: 0 leaves them to `npm run worker`. */
     TASKS_IN_WEB: flag.default(true),
     LOG_LEVEL: z.enum(["trace", "debug", "info", "warn", "error", "silent"]).default("info"),
+    /** How many proxies of our own stand in front, each adding an entry to X-Forwarded-For. 0: no entry can be believed. */
+    TRUSTED_PROXIES: z.coerce.number().int().min(0).max(9).default(0),
     /** The number of pixel threads of one process. */
     PIXEL_THREADS: z.coerce.number().int().min(1).max(16).default(2),
   })

@@ -1,6 +1,7 @@
 /** The shop's settings and saws. */
 import "server-only";
 import type { z } from "zod";
+import { isDuplicateKey } from "@/db/duplicate-key";
 import { recordHistory } from "@/db/queries/history";
 import { findSaw, insertSaw, listSaws, readShop, updateSaw, updateShop } from "@/db/queries/shop";
 import type { ShopId } from "@/db/shop-id";
@@ -54,37 +55,37 @@ function isTimeZone(name: string): boolean {
 }
 
 export async function addSaw(access: ShopAccess, fields: z.output<typeof saveSawSchema>): Promise<Saw> {
-  return database().transaction(async (tx) => {
-    await refuseTakenName(access.shopId, fields.name, null);
-    const id = await insertSaw(tx, access.shopId, fields);
-    await recordHistory(
-      tx,
-      access.shopId,
-      { userId: access.userId, noun: "saw", nounId: id, verb: "added", detail: fields },
-      new Date(),
-    );
-    return { id, ...fields };
-  });
+  const id = await unlessNameTaken(fields.name, () =>
+    database().transaction(async (tx) => {
+      const sawId = await insertSaw(tx, access.shopId, fields);
+      const entry = { userId: access.userId, noun: "saw", nounId: sawId, verb: "added", detail: fields } as const;
+      await recordHistory(tx, access.shopId, entry, new Date());
+      return sawId;
+    }),
+  );
+  return { id, ...fields };
 }
 
 export async function changeSaw(access: ShopAccess, sawId: string, fields: z.output<typeof saveSawSchema>): Promise<Saw> {
-  return database().transaction(async (tx) => {
-    const before = await findSaw(tx, access.shopId, sawId);
-    if (!before) throw notFound("saw");
-    await refuseTakenName(access.shopId, fields.name, sawId);
-    await updateSaw(tx, access.shopId, sawId, fields);
-    const detail = { before: { name: before.name, kerf: before.kerf, cleanUp: before.cleanUp }, after: fields };
-    await recordHistory(
-      tx,
-      access.shopId,
-      { userId: access.userId, noun: "saw", nounId: sawId, verb: "changed", detail },
-      new Date(),
-    );
-    return { id: sawId, ...fields };
-  });
+  await unlessNameTaken(fields.name, () =>
+    database().transaction(async (tx) => {
+      const before = await findSaw(tx, access.shopId, sawId);
+      if (!before) throw notFound("saw");
+      await updateSaw(tx, access.shopId, sawId, fields);
+      const detail = { before: { name: before.name, kerf: before.kerf, cleanUp: before.cleanUp }, after: fields };
+      const entry = { userId: access.userId, noun: "saw", nounId: sawId, verb: "changed", detail } as const;
+      await recordHistory(tx, access.shopId, entry, new Date());
+    }),
+  );
+  return { id: sawId, ...fields };
 }
 
-async function refuseTakenName(shopId: ShopId, name: string, exceptId: string | null): Promise<void> {
-  const taken = (await listSaws(database(), shopId)).some((saw) => saw.name === name && saw.id !== exceptId);
-  if (taken) throw refused(`There is a saw called ${name} already.`, { name: ["Taken already"] });
+/** The unique key decides, so that two people who choose the same name at once get one saw and one refusal. */
+async function unlessNameTaken<T>(name: string, write: () => Promise<T>): Promise<T> {
+  try {
+    return await write();
+  } catch (error) {
+    if (isDuplicateKey(error)) throw refused(`There is a saw called ${name} already.`, { name: ["Taken already"] });
+    throw error;
+  }
 }

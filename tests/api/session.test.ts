@@ -76,6 +76,17 @@ describe("signing in", () => {
   });
 });
 
+describe("ended sessions", () => {
+  it("are swept out by the next person who signs in", async () => {
+    const id = newId();
+    const { userId, shopId } = shop.maker;
+    const long = new Date(Date.now() - 60_000);
+    await database().insert(session).values({ id, userId, shopId, device: "old tablet", createdAt: long, expiresAt: long });
+    await signIn((await makeShop()).owner.email, testPassword);
+    expect(await database().select().from(session).where(eq(session.id, id))).toEqual([]);
+  });
+});
+
 describe("signing out", () => {
   it("ends this session on the server, so the old cookie opens nothing", async () => {
     await signIn(shop.maker.email, testPassword);
@@ -126,6 +137,23 @@ describe("the gate", () => {
     await signIn(shop.maker.email, testPassword);
     const answer = await ask(sawsRoute.POST, shopEndpoint.createSaw, { body: { ...saw, kerf: -1 } });
     expect(answer).toMatchObject({ status: 400, body: { code: "bad-request", fields: { kerf: [expect.any(String)] } } });
+  });
+
+  it("refuses a body that is larger than any request of ours, whether it says so or not", async () => {
+    const body = JSON.stringify({ email: shop.maker.email, password: "x".repeat(3 * 1024 * 1024) });
+    const post = (headers: Record<string, string>) =>
+      sessionRoute.POST(
+        new Request(`${env().APP_URL}/api/session`, { method: "POST", body, headers: { origin: env().APP_URL, ...headers } }),
+        { params: Promise.resolve({}) },
+      );
+    expect((await post({})).status).toBe(413);
+    expect((await post({ "content-length": String(body.length) })).status).toBe(413);
+  });
+
+  it("tells browsers to take its answers for JSON and nothing else", async () => {
+    const { headers } = await whoAmI();
+    expect(headers.get("x-content-type-options")).toBe("nosniff");
+    expect(headers.get("content-security-policy")).toContain("default-src 'none'");
   });
 
   it("gives every answer a request id", async () => {

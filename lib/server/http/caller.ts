@@ -1,11 +1,16 @@
 /** Who is calling, as far as the connection tells. */
 import "server-only";
 
-/** The address for limits on tries: the last one the nearest proxy added, which is the connection's own where there is none. */
-export function callerAddress(request: Request): string {
-  return request.headers.get("x-forwarded-for")?.split(",").at(-1)?.trim() ?? "unknown";
+/**
+ * The caller's address: the entry that the outermost of our own proxies added to X-Forwarded-For. null where no proxy of ours stands
+ * in front, since then anybody may write whatever they like into that header and the server has nothing else to go by.
+ */
+export function callerAddress(headers: Headers, trustedProxies: number): string | null {
+  if (trustedProxies === 0) return null;
+  const entries = headers.get("x-forwarded-for")?.split(",") ?? [];
+  return entries.at(-trustedProxies)?.trim() || null;
 }
 
-export function callerDevice(request: Request): string {
-  return request.headers.get("user-agent") ?? "unknown device";
+export function callerDevice(headers: Headers): string {
+  return headers.get("user-agent") ?? "unknown device";
 }

@@ -32,6 +32,7 @@ export async function runTask(db: Database, kind: TaskKind, row: TaskRow, ending
   ending.addEventListener("abort", onEnding);
 
   try {
+    if (ending.aborted) throw new Error("the process is ending");
     if (row.attempts > maxAttempts) throw new Error(`given up after ${maxAttempts} starts that did not come to an end`);
     const context = {
       shopId: row.shopId,
