@@ -5,8 +5,8 @@
 import "server-only";
 import sharp from "sharp";
 import { findLayout, listLayoutBoards } from "@/db/queries/layout";
-import type { StraighteningRow } from "@/db/queries/straightening";
 import {
+  type FaceLayout,
   facePieces,
   faceSize,
   groupOf,
@@ -21,7 +21,7 @@ import {
 import type { ShopAccess } from "../access";
 import { database } from "../database";
 import { notFound, refused } from "../faults";
-import { storage } from "../storage";
+import { type BoxPx, type Pixels, pieceFromWood, woodPixels } from "./piece-picture";
 
 /** Gaps and pieces not laid on wood yet. */
 const ground = { r: 21, g: 23, b: 24 };
@@ -35,91 +35,84 @@ export async function showSidePng(access: ShopAccess, faceId: string, pxPerMm: n
   if (!found) throw notFound("face");
   const { document } = found.layout;
   const boards = await listLayoutBoards(db, access.shopId, found.layout.id);
-  const toPx = (length: Um) => Math.round(mmFromUm(length) * pxPerMm);
 
   const { width, height } = faceSize(document.face);
-  const size = { width: Math.max(1, toPx(width)), height: Math.max(1, toPx(height)) };
+  const size = { width: Math.max(1, toPx(width, pxPerMm)), height: Math.max(1, toPx(height, pxPerMm)) };
   if (Math.max(size.width, size.height) > maxSidePx || size.width * size.height > maxPixels) {
     throw refused(
       `At ${pxPerMm} pixels a millimetre the picture would have ${size.width} × ${size.height} pixels. Ask for fewer.`,
     );
   }
+  return inTurn(() => draw(size, piecesToDraw(document, pxPerMm), boards, pxPerMm));
+}
 
+let lastDrawn: Promise<unknown> = Promise.resolve();
+
+/** One after another in this process: a picture of 180 MB and the pixels of a board, 120 MB at most, lie in memory while it is drawn. */
+function inTurn<T>(work: () => Promise<T>): Promise<T> {
+  const mine = lastDrawn.then(work, work);
+  lastDrawn = mine;
+  return mine;
+}
+
+interface ToDraw {
+  readonly stockId: string;
+  /** Of the board's frame. */
+  readonly rect: StockRect;
+  readonly turns: QuarterTurns;
+  readonly box: BoxPx & { readonly left: number; readonly top: number };
+}
+
+function piecesToDraw(document: FaceLayout, pxPerMm: number): ToDraw[] {
   const rects = new Map(facePieces(document).map(({ id, rect }) => [id, rect]));
-  const layers = layOut(document).map(async (piece) => {
-    const straightening = boards.find(({ board }) => board.id === piece.stockId)?.straightening;
-    const rect = rects.get(piece.id);
-    if (!straightening || !rect) throw new Error(`piece ${piece.id} lies on a board that is not on the table`);
+  return layOut(document).flatMap(({ id, stockId, stockFromFace }) => {
+    const rect = rects.get(id);
+    const placement = groupOf(document, id)?.placement;
+    if (!rect || !placement) return [];
     // Both edges are rounded, not the size: neighbours keep their gap to the pixel.
-    const left = toPx(rect.x);
-    const top = toPx(rect.y);
+    const [left, top] = [toPx(rect.x, pxPerMm), toPx(rect.y, pxPerMm)];
     const box = {
-      width: Math.max(1, toPx(um(rect.x + rect.width)) - left),
-      height: Math.max(1, toPx(um(rect.y + rect.height)) - top),
+      left,
+      top,
+      width: Math.max(1, toPx(um(rect.x + rect.width), pxPerMm) - left),
+      height: Math.max(1, toPx(um(rect.y + rect.height), pxPerMm) - top),
     };
-    const turns = groupOf(document, piece.id)?.placement?.turns ?? 0;
-    return { input: await cutOut(straightening, rectToStock(piece.stockFromFace, rect), turns, box, pxPerMm), left, top };
+    return [{ stockId, rect: rectToStock(stockFromFace, rect), turns: placement.turns, box }];
   });
-  return sharp({ create: { ...size, channels: 3, background: ground } })
-    .composite(await Promise.all(layers))
+}
+
+/** One board at a time, so that no more than one is held decoded. */
+async function draw(
+  size: BoxPx,
+  pieces: readonly ToDraw[],
+  boards: Awaited<ReturnType<typeof listLayoutBoards>>,
+  pxPerMm: number,
+): Promise<Uint8Array> {
+  const canvas: Pixels = {
+    ...size,
+    data: Buffer.alloc(size.width * size.height * 3, Buffer.from([ground.r, ground.g, ground.b])),
+  };
+  for (const stockId of new Set(pieces.map((piece) => piece.stockId))) {
+    const straightening = boards.find(({ board }) => board.id === stockId)?.straightening;
+    if (!straightening) throw new Error(`pieces lie on board ${stockId}, which is not on the table`);
+    const wood = await woodPixels(straightening, pxPerMm);
+    for (const { rect, turns, box } of pieces.filter((piece) => piece.stockId === stockId)) {
+      putInto(canvas, await pieceFromWood(wood, rect, turns, box, ground), box);
+    }
+  }
+  return sharp(canvas.data, { raw: { ...size, channels: 3 } })
     .png({ compressionLevel: 6 })
     .toBuffer();
 }
 
-interface Box {
-  readonly width: number;
-  readonly height: number;
-}
-
-/** The wood under a piece, turned to stand as on the face, in pixels of the face. Where the piece hangs over the picture: ground. */
-async function cutOut(
-  straightening: StraighteningRow,
-  rect: StockRect,
-  turns: QuarterTurns,
-  box: Box,
-  pxPerMm: number,
-): Promise<Buffer> {
-  const level = levelFor(straightening, pxPerMm);
-  const bytes = await storage().get(level.key);
-  if (!bytes) throw new Error(`the picture ${level.key} is gone from the storage`);
-  const scale = level.widthPx / mmFromUm(straightening.length);
-  const edge = (length: number) => Math.round(mmFromUm(um(length)) * scale);
-  const wanted = { left: edge(rect.x), top: edge(rect.y), right: edge(rect.x + rect.width), bottom: edge(rect.y + rect.height) };
-  const there = {
-    left: Math.max(0, wanted.left),
-    top: Math.max(0, wanted.top),
-    right: Math.min(level.widthPx, wanted.right),
-    bottom: Math.min(level.heightPx, wanted.bottom),
-  };
-  if (there.right <= there.left || there.bottom <= there.top) {
-    return sharp({ create: { ...box, channels: 3, background: ground } })
-      .png()
-      .toBuffer();
+/** Row by row. What rounding puts beyond the picture's edge is left out. */
+function putInto({ data, width, height }: Pixels, piece: Buffer, box: ToDraw["box"]): void {
+  const columns = Math.min(box.width, width - box.left);
+  const rows = Math.min(box.height, height - box.top);
+  for (let row = 0; row < rows; row++) {
+    const from = row * box.width * 3;
+    piece.copy(data, ((box.top + row) * width + box.left) * 3, from, from + columns * 3);
   }
-  const { data, info } = await sharp(bytes)
-    .extract({ left: there.left, top: there.top, width: there.right - there.left, height: there.bottom - there.top })
-    .extend({
-      left: there.left - wanted.left,
-      top: there.top - wanted.top,
-      right: wanted.right - there.right,
-      bottom: wanted.bottom - there.bottom,
-      background: ground,
-    })
-    .raw()
-    .toBuffer({ resolveWithObject: true });
-  const raw = { width: info.width, height: info.height, channels: info.channels };
-  // The turns lead from the face to the stock, so the picture turns back by as many.
-  return sharp(data, { raw })
-    .rotate(((4 - turns) % 4) * 90)
-    .resize({ ...box, fit: "fill" })
-    .png({ compressionLevel: 1 })
-    .toBuffer();
 }
 
-/** The smallest level that still has the resolution asked for. Level 0 is the largest. */
-function levelFor({ levels, length }: StraighteningRow, pxPerMm: number): StraighteningRow["levels"][number] {
-  const fine = levels.filter(({ widthPx }) => widthPx / mmFromUm(length) >= pxPerMm);
-  const level = fine.at(-1) ?? levels[0];
-  if (!level) throw new Error("a finished straightening has no levels");
-  return level;
-}
+const toPx = (length: Um, pxPerMm: number) => Math.round(mmFromUm(length) * pxPerMm);
