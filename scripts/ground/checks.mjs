@@ -6,7 +6,9 @@ import { countOfCheck, countOfVitest, countReport } from "./summary.mjs";
 import { runTool, toolScript } from "./tools.mjs";
 
 /** Folders of tests that need no database. */
-const unitFolders = ["layout", "reference", "sawmill", "pictures", "editor"].map((name) => `tests/${name}/`);
+const unitFolders = ["layout", "reference", "sawmill", "pictures", "editor", "screens", "words", "server", "doors"].map(
+  (name) => `tests/${name}/`,
+);
 
 /** @typedef {"unit" | "api"} VitestPart unit: without a database; api: all others */
 

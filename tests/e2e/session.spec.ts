@@ -1,5 +1,5 @@
 /** Getting in, getting out, and where wrong turns lead. */
-import { accessibilityFaults, expect, signIn, test } from "./support/test";
+import { accessibilityFaults, expect, makeShop, signIn, test } from "./support/test";
 
 test("signing in leads to the page that was asked for", async ({ page, shop }) => {
   await page.goto("/jobs?state=open");
@@ -37,12 +37,41 @@ test("signing out everywhere ends the other window at its next step", async ({ b
   await other.close();
 });
 
-test("what is not there, and what is not for the role, have a page each that leads back", async ({ context, page, shop }) => {
-  await signIn(context, shop.assistant);
+test("what is not there has a page that leads back", async ({ makerPage: page }) => {
   const missing = await page.goto("/jobs/01a2308e-5a61-738a-9730-8eb00ca41ccf");
   expect(missing?.status()).toBe(404);
   await expect(page.getByRole("heading", { name: "There is nothing here" })).toBeVisible();
   expect(await accessibilityFaults(page)).toEqual([]);
+  await page.getByRole("link", { name: "Go to Today" }).click();
+  await expect(page).toHaveURL(/\/today$/);
+});
+
+test("what is not for the role has a page that says who decides", async ({ browser, makerPage, shop }) => {
+  const origin = process.env.BASE_URL ?? "";
+  const data = { title: "Linen press", client: "", note: "", dueOn: null };
+  const job = await (await makerPage.request.post("/api/jobs", { data, headers: { origin } })).json();
+
+  const context = await browser.newContext();
+  await signIn(context, shop.assistant);
+  const page = await context.newPage();
+  const refused = await page.goto(`/jobs/${job.id}/faces/new`);
+  expect(refused?.status()).toBe(403);
+  await expect(page.getByRole("heading", { name: "Not for your role" })).toBeVisible();
+  expect(await accessibilityFaults(page)).toEqual([]);
+  await context.close();
+});
+
+test("another shop's job is not there, whoever asks", async ({ browser, makerPage }) => {
+  const origin = process.env.BASE_URL ?? "";
+  const data = { title: "Linen press", client: "", note: "", dueOn: null };
+  const job = await (await makerPage.request.post("/api/jobs", { data, headers: { origin } })).json();
+
+  const context = await browser.newContext();
+  await signIn(context, (await makeShop("Another shop")).owner);
+  const page = await context.newPage();
+  expect((await page.goto(`/jobs/${job.id}`))?.status()).toBe(404);
+  expect((await context.request.get(`/api/jobs/${job.id}`)).status()).toBe(404);
+  await context.close();
 });
 
 test("every page carries the security headers, and its scripts run under them", async ({ makerPage }) => {

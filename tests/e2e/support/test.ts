@@ -14,7 +14,8 @@ const shopSchema = z.object({ owner: personSchema, maker: personSchema, assistan
 export type Person = z.output<typeof personSchema>;
 export type Shop = z.output<typeof shopSchema>;
 
-async function makeShop(name: string): Promise<Shop> {
+/** A shop with an owner, a maker and an assistant, and nothing in it. */
+export async function makeShop(name: string): Promise<Shop> {
   const { stdout } = await run(process.execPath, [path.join(root, ".data/build/make-shop.mjs"), name]);
   return shopSchema.parse(JSON.parse(stdout.trim().split("\n").at(-1) ?? ""));
 }
