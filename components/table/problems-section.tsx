@@ -22,7 +22,7 @@ export function ProblemsSection({ problems: { found, working } }: { problems: Pr
       ) : (
         <ul className="flex flex-col gap-2">
           {found.map((problem) => (
-            <ProblemItem key={keyOf(problem)} problem={problem} />
+            <ProblemItem key={JSON.stringify(problem)} problem={problem} />
           ))}
         </ul>
       )}
@@ -53,7 +53,7 @@ function Mend({ problem }: { problem: Problem }) {
   const { print } = useUnits();
   const { slideOf, layOn } = useTableActions();
   const boards = useEditorState((state) => state.boards);
-  if (problem.kind === "keep-clear" && problem.slide !== null && problem.slide !== 0) {
+  if ("slide" in problem && problem.slide !== null && problem.slide !== 0) {
     const { slide, piece } = problem;
     return (
       <Button size="small" className="self-start" onClick={() => slideOf(piece, slide)}>
@@ -89,8 +89,3 @@ function LayButton({ tag, pieces, onLay }: { tag: string; pieces: readonly strin
 }
 
 const magnitude = (length: Um) => um(Math.abs(length));
-
-function keyOf(problem: Problem): string {
-  const about = "areaId" in problem ? problem.areaId : "stockId" in problem ? problem.stockId : "";
-  return [problem.kind, ...piecesOfProblem(problem), about].join(" ");
-}

@@ -12,7 +12,7 @@ export interface SidePointer {
   readonly px: Pan;
   readonly shift: boolean;
   readonly alt: boolean;
-  /** Fingers are broader than the tip of an arrow. */
+  /** A finger. */
   readonly coarse: boolean;
 }
 

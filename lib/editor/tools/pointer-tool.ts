@@ -40,7 +40,8 @@ export type ToolEffect =
       readonly straight: boolean;
       readonly snap: boolean;
     }
-  | { readonly do: "commit-preview" | "drop-preview" }
+  | { readonly do: "commit-preview" }
+  | { readonly do: "drop-preview" }
   | { readonly do: "pan"; readonly side: Side; readonly by: Pan };
 
 export interface ToolStep {
