@@ -5,8 +5,8 @@ const shapes = {
   turn: "M28 17a8 8 0 1 0 2 6M29 11v6h-6",
 };
 
-export function HandleLook({ shape }: { shape: keyof typeof shapes }) {
-  const fill = shape === "corner" ? "#fff" : "none";
+export function HandleLook({ shape, selected = false }: { shape: keyof typeof shapes; selected?: boolean }) {
+  const fill = shape !== "corner" ? "none" : selected ? "var(--color-chalk)" : "#fff";
   return (
     <svg width="44" height="44" aria-hidden="true">
       <path d={shapes[shape]} fill="none" stroke="#fff" strokeWidth="6" strokeLinejoin="round" />

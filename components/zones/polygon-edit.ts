@@ -45,7 +45,3 @@ function snappedTo(value: number, most: Um, reach: number, bound: boolean): Um {
   const kept = bound ? Math.min(Math.max(value, 0), most) : value;
   return um(Math.round(kept));
 }
-
-/** A polygon moved as a whole. */
-export const movePolygon = (points: readonly StockPoint[], by: { x: number; y: number }): readonly StockPoint[] =>
-  points.map(({ x, y }) => ({ x: um(Math.round(x + by.x)), y: um(Math.round(y + by.y)) }));

@@ -29,12 +29,15 @@ export interface ZonesState {
   readonly traced: readonly StockPoint[];
   readonly selection: Selection;
   readonly selectedArea: KeepClearArea | null;
+  /** The corner last taken hold of, of the selected outline or polygon. */
+  readonly corner: number | null;
   readonly revision: number;
   readonly dirty: boolean;
   readonly canUndo: boolean;
   readonly canRedo: boolean;
   take: (tool: Tool) => void;
   select: (selection: Selection) => void;
+  selectCorner: (corner: number | null) => void;
   /** Shows a change that is not made yet; null drops it. */
   preview: (doc: ZonesDoc | null) => void;
   /** Makes a change; presses in a row with the same key are undone as one. */
@@ -60,6 +63,7 @@ export function useZones(start: Zones, size: PictureSize): ZonesState {
   const [tool, setTool] = useState<Tool>("select");
   const [traced, setTraced] = useState<readonly StockPoint[]>([]);
   const [selection, setSelection] = useState<Selection>(null);
+  const [corner, selectCorner] = useState<number | null>(null);
   const doc = shown ?? history.now;
   const selectedArea = (selection?.what === "area" && doc.keepClear.find(({ id }) => id === selection.id)) || null;
 
@@ -67,7 +71,12 @@ export function useZones(start: Zones, size: PictureSize): ZonesState {
     setShown(null);
     setHistory((from) => commit(from, next, key ?? null));
   };
+  const select = (next: Selection) => {
+    setSelection(next);
+    selectCorner(null);
+  };
   const take = (next: Tool) => {
+    selectCorner(null);
     setTool(next);
     setTraced([]);
     setShown(null);
@@ -75,20 +84,20 @@ export function useZones(start: Zones, size: PictureSize): ZonesState {
   const add = (area: KeepClearArea["area"]) => {
     const made: KeepClearArea = { id: newId(), kind: "knot", area, note: "" };
     change(withArea(history.now, made));
-    setSelection({ what: "area", id: made.id });
+    select({ what: "area", id: made.id });
     take("select");
   };
   const closeTrace = () => {
     if (traced.length < FEWEST_CORNERS) return;
     if (tool === "polygon") return add({ shape: "polygon", points: [...traced] });
     change({ ...history.now, outline: traced });
-    setSelection({ what: "outline" });
+    select({ what: "outline" });
     take("select");
   };
   const tap = (at: Place, reach: number) => {
     if (tool === "select") {
       const area = areaAt(history.now.keepClear, at, reach);
-      setSelection(area ? { what: "area", id: area.id } : null);
+      select(area ? { what: "area", id: area.id } : null);
     } else if (tool === "ellipse") {
       // A tap, or Enter, cannot draw a box: it puts down an ellipse of the size of a middling knot, to be sized by its handles.
       add({ shape: "ellipse", centre: snapped(at, size, 0, false), radiusX: um(20_000), radiusY: um(12_000), turnDeg: 0 });
@@ -110,7 +119,9 @@ export function useZones(start: Zones, size: PictureSize): ZonesState {
     canUndo: history.past.length > 0,
     canRedo: history.future.length > 0,
     take,
-    select: setSelection,
+    corner,
+    select,
+    selectCorner,
     preview: setShown,
     change,
     tap,
@@ -125,7 +136,7 @@ export function useZones(start: Zones, size: PictureSize): ZonesState {
     removeSelected: () => {
       if (!selectedArea) return;
       change(withoutArea(history.now, selectedArea.id));
-      setSelection(null);
+      select(null);
     },
     undo: () => setHistory(undo),
     redo: () => setHistory(redo),
@@ -134,7 +145,7 @@ export function useZones(start: Zones, size: PictureSize): ZonesState {
       const taken = docOf(theirs);
       change(taken);
       setKept({ doc: taken, revision: theirs.revision });
-      setSelection(null);
+      select(null);
     },
   };
 }

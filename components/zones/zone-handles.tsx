@@ -9,6 +9,7 @@ import { useUnits } from "../shell/units";
 import { type Ellipse, type EllipseHandle, ellipseHandles, handlePlace, moveEllipseHandle } from "./ellipse-edit";
 import { HandleLook } from "./handle-look";
 import { insertCorner, middleOfEdge, moveCorner, removeCorner, snapped } from "./polygon-edit";
+import { selectedPolygon } from "./selected-polygon";
 import type { ZonesState } from "./use-zones";
 import { handleNames, kindNames, placeWords } from "./zone-words";
 import { withArea, type ZonesDoc } from "./zones-doc";
@@ -29,26 +30,12 @@ interface Props {
 }
 
 export function ZoneHandles({ zones, view }: Props) {
-  const { doc, selection, selectedArea, tool } = zones;
-  if (tool !== "select") return null;
-  if (selection?.what === "outline" && doc.outline) {
-    return (
-      <Corners name="Outline" points={doc.outline} zones={zones} view={view} bound docWith={(outline) => ({ ...doc, outline })} />
-    );
-  }
-  if (!selectedArea) return null;
-  const { area } = selectedArea;
-  if (area.shape === "ellipse") return <EllipseHandles area={selectedArea} zones={zones} view={view} />;
-  return (
-    <Corners
-      name={kindNames[selectedArea.kind]}
-      points={area.points}
-      zones={zones}
-      view={view}
-      bound={false}
-      docWith={(points) => withArea(doc, { ...selectedArea, area: { shape: "polygon", points: [...points] } })}
-    />
-  );
+  if (zones.tool !== "select") return null;
+  const polygon = selectedPolygon(zones);
+  // Only the outline must stay on the board; a knot may hang over its edge.
+  if (polygon) return <Corners {...polygon} bound={zones.selection?.what === "outline"} zones={zones} view={view} />;
+  const { selectedArea } = zones;
+  return selectedArea && <EllipseHandles area={selectedArea} zones={zones} view={view} />;
 }
 
 /** Shows while it moves, makes the change when it rests. */
@@ -92,8 +79,8 @@ function Corners({ name, points, zones, view, bound, docWith }: CornersProps) {
           at={toMm(at)}
           view={view}
           fineStep={FINE_STEP_MM}
-          selected={false}
-          onSelect={() => undefined}
+          selected={zones.corner === index}
+          onSelect={() => zones.selectCorner(index)}
           onMove={(to, phase) => {
             // A key goes exactly as far as it says; a hand is helped to the edge.
             const reach = phase === "key" ? 0 : (SNAP_PX / view.scale) * 1000;
@@ -104,9 +91,12 @@ function Corners({ name, points, zones, view, bound, docWith }: CornersProps) {
               `${name} ${key}`,
             );
           }}
-          onRemove={() => zones.change(docWith(removeCorner(points, index)))}
+          onRemove={() => {
+            zones.change(docWith(removeCorner(points, index)));
+            zones.selectCorner(null);
+          }}
         >
-          <HandleLook shape="corner" />
+          <HandleLook shape="corner" selected={zones.corner === index} />
         </Handle>
       ))}
     </>

@@ -19,6 +19,7 @@ import { PanelSection } from "../ui/panel-section";
 import { useUnsavedWarning } from "../ui/use-unsaved-warning";
 import { AreaList } from "./area-list";
 import { ConflictDialog } from "./conflict-dialog";
+import { CornerBar } from "./corner-bar";
 import { OutlinePanel } from "./outline-panel";
 import { Rulers, TAPE_PX } from "./rulers";
 import { ToolNotice } from "./tool-notice";
@@ -104,6 +105,7 @@ export function ZonesScreen({ board, straightening }: { board: Board; straighten
           </PictureStage>
           <div className="flex flex-col gap-3 px-4 py-3 empty:hidden">
             <ToolNotice zones={zones} />
+            <CornerBar zones={zones} />
             {fault && <Notice kind="stop">{faultWords(fault, style)}</Notice>}
             {saving.error && <Notice kind="stop">{messageOf(saving.error)}</Notice>}
           </div>

@@ -185,6 +185,12 @@ test("outline and areas: drawn, refused where they cross, undone, saved, and kep
   const corner = page.getByRole("button", { name: /^Outline, corner 2,/ });
   await corner.focus();
   await page.keyboard.press("Alt+ArrowLeft");
+  // A corner put in and taken out again, without a key.
+  await page.getByRole("button", { name: "Outline: new corner after 1" }).click();
+  const put = page.getByRole("button", { name: /^Outline, corner 2, 5/ });
+  await put.click();
+  await page.getByRole("button", { name: "Remove corner" }).click();
+  await expect(page.getByText("Drawn with 4 corners.")).toBeVisible();
   await page.getByRole("button", { name: "Save" }).click();
   await expect(page.getByText("Saved", { exact: true })).toBeVisible();
 
