@@ -24,3 +24,12 @@ export const orderNames: Readonly<Record<Sort, { readonly up: string; readonly d
 
 /** "4/4" for a board sold by quarters. */
 export const quartersText = (nominalQuarters: number | null): string => (nominalQuarters === null ? "" : `${nominalQuarters}/4`);
+
+/** A whole surface measure times a thickness sold by quarters has two decimals at most: `8`, `6.25`. */
+export const boardFeetText = (boardFeet: number): string => String(Number(boardFeet.toFixed(2)));
+
+const M3_PER_BOARD_FOOT = 0.0254 ** 3 * 144;
+
+/** `7.81 board feet, 0.0184 m³` */
+export const volumeText = (boardFeet: number): string =>
+  `${boardFeet.toFixed(2)} board feet, ${(boardFeet * M3_PER_BOARD_FOOT).toFixed(4)} m³`;

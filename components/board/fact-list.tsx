@@ -2,13 +2,14 @@
 import type { ReactNode } from "react";
 import { useUnits } from "@/components/shell/units";
 import type { Board } from "@/lib/schemas/board";
-import { cutNames, quartersText, stateNames } from "./board-words";
+import { boardFeetText, cutNames, quartersText, stateNames, volumeText } from "./board-words";
 import { moneyText } from "./money";
 
 /** Everything written about a board, to read. */
 export function FactList({ board }: { board: Board }) {
   const { print, currency } = useUnits();
-  const size = board.length > 0 && board.width > 0 ? `${print(board.length)} × ${print(board.width)}` : "not measured yet";
+  const measured = board.length > 0 && board.width > 0;
+  const size = measured ? `${print(board.length)} × ${print(board.width)}` : "not measured yet";
   return (
     <dl className="grid grid-cols-[auto_minmax(0,1fr)] gap-x-6 gap-y-1.5">
       <Fact name="Species">
@@ -22,10 +23,15 @@ export function FactList({ board }: { board: Board }) {
           .filter(Boolean)
           .join(", ")}
       </Fact>
-      {board.boardFeet > 0 && (
-        <Fact name="Board feet" measure>
-          {board.boardFeet.toFixed(2)}
-        </Fact>
+      {measured && (
+        <>
+          <Fact name="Board feet, by the lumber rule" measure>
+            {boardFeetText(board.boardFeet)}
+          </Fact>
+          <Fact name="Exact volume" measure>
+            {volumeText(board.volumeBoardFeet)}
+          </Fact>
+        </>
       )}
       {board.place && <Fact name="Place">{board.place}</Fact>}
       {board.source && <Fact name="Source">{board.source}</Fact>}

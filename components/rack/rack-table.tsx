@@ -3,7 +3,7 @@
 import Link from "next/link";
 import type { ReactNode } from "react";
 import { BoardBadges } from "@/components/board/board-facts";
-import { cutNames, quartersText } from "@/components/board/board-words";
+import { boardFeetText, cutNames, quartersText } from "@/components/board/board-words";
 import { moneyText } from "@/components/board/money";
 import { useUnits } from "@/components/shell/units";
 import { printedLength, type Um } from "@/lib/layout";
@@ -40,7 +40,7 @@ export function RackTable({ boards, state, onChange }: Props) {
             <Heading state={state} onChange={onChange} sort="length" name={`Length, ${unit}`} right />
             <Heading state={state} onChange={onChange} sort="width" name={`Width, ${unit}`} right />
             <th scope="col" className={`${plainHead} text-right`}>
-              Board feet
+              Board feet, by rule
             </th>
             <Heading state={state} onChange={onChange} sort="moisture" name="Moisture, %" right />
             <Heading state={state} onChange={onChange} sort="place" name="Place" />
@@ -69,7 +69,7 @@ export function RackTable({ boards, state, onChange }: Props) {
               <Figure>{figure(board.thickness)}</Figure>
               <Figure>{figure(board.length)}</Figure>
               <Figure>{figure(board.width)}</Figure>
-              <Figure>{board.boardFeet > 0 ? board.boardFeet.toFixed(1) : "–"}</Figure>
+              <Figure>{board.length > 0 && board.width > 0 ? boardFeetText(board.boardFeet) : "–"}</Figure>
               <Figure>{board.moisturePercent?.toFixed(1) ?? "–"}</Figure>
               <td className="pr-4">{board.place}</td>
               <td className="pr-4">{board.source}</td>

@@ -99,7 +99,7 @@ export {
   triangleCorners,
 } from "./triangle/carpenters-triangle";
 export type { InchDenominator, LengthStyle } from "./units/length-style";
-export { boardFeet, boardFeetByRule, type HalfGoes, surfaceMeasure, tallyLength, tallyWidth } from "./units/lumber";
+export { boardFeet, boardFeetByRule } from "./units/lumber";
 export { type NominalThickness, nominalThicknesses, nominalThicknessOf } from "./units/nominal-thickness";
 export { type BareUnit, LONGEST_UM, type ParsedLength, parseLength } from "./units/parse-length";
 export { type PrintedLength, printedLength, printLength } from "./units/print-length";

@@ -34,8 +34,10 @@ export const boardRowSchema = z.object({
   width: umSchema,
   /** Percent, one decimal. */
   moisturePercent: z.number().nullable(),
-  /** By the rule: thickness in inches, nominal where sold by quarters, at least 1, × width in inches × length in feet ÷ 12. */
+  /** By the lumber rule: whole inches × whole feet ÷ 12 to a whole number, × the thickness sold in inches, at least 1; 0 while not measured. */
   boardFeet: z.number(),
+  /** The volume by plain measures in board feet, not rounded; 0 while not measured. */
+  volumeBoardFeet: z.number(),
   straighteningId: idSchema.nullable(),
   /** Level small enough for the rack, or null when there is no picture. */
   picture: servedLevelSchema.nullable(),

@@ -10,7 +10,7 @@ import * as boardsRoute from "@/app/api/boards/route";
 import { boardPageOf } from "@/db/queries/board";
 import { listHistory } from "@/db/queries/history";
 import { board, history, job } from "@/db/schema";
-import { umFromMm } from "@/lib/layout";
+import { um, umFromMm } from "@/lib/layout";
 import * as endpoint from "@/lib/schemas/board";
 import type { Role } from "@/lib/schemas/endpoint";
 import type { ShopAccess } from "@/lib/server/access";
@@ -63,15 +63,34 @@ describe("entering a board", () => {
       },
     });
     const entered = endpoint.boardSchema.parse(answer.body);
-    // 2 in × 6 in × 10 ft ÷ 12.
-    expect(entered.boardFeet).toBeCloseTo(10, 9);
+    // 6 in × 10 ft ÷ 12 × 2 in as sold; 47 mm as measured.
+    expect(entered.boardFeet).toBe(10);
+    expect(entered.volumeBoardFeet).toBeCloseTo((5 * 47) / 25.4, 9);
     expect(entered.moisturePercent).toBe(8.1);
     expect(entered.readings).toMatchObject([{ percent: 8.1, takenOn: "2026-03-02", takenBy: shop.maker.userName }]);
   });
 
   test("takes a board that nobody has measured yet", async () => {
     const entered = await enter(shop.maker, { length: null, width: null });
-    expect(entered).toMatchObject({ length: 0, width: 0, boardFeet: 0 });
+    expect(entered).toMatchObject({ length: 0, width: 0, boardFeet: 0, volumeBoardFeet: 0 });
+  });
+
+  test("counts board feet by the rule's published example: 2 in × 6 1⁄4 in × 8 ft is 4 1⁄6 square feet, counted 4, so 8", async () => {
+    const [inch, foot] = [25_400, 304_800];
+    const size = { nominalQuarters: 8, thickness: um(2 * inch), width: um(6.25 * inch), length: um(8 * foot) };
+    const access = (await makeShop()).maker;
+    await enter(access, size);
+    const [row] = (await page(access)).items;
+    expect(row?.boardFeet).toBe(8);
+    expect(row?.volumeBoardFeet).toBeCloseTo(8 + 1 / 3, 9);
+  });
+
+  test("turns exact halves up and down by turns of the tags, and keeps a board's count", async () => {
+    const size = { nominalQuarters: 4, width: um(5.5 * 25_400), length: um(12 * 304_800) };
+    const access = (await makeShop()).maker;
+    const [one, two] = [await enter(access, size), await enter(access, size)];
+    expect([one.boardFeet, two.boardFeet].sort()).toEqual([5, 6]);
+    expect((await readBoard(access, one.id)).boardFeet).toBe(one.boardFeet);
   });
 
   test.each([

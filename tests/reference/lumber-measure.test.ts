@@ -13,12 +13,10 @@ import {
   nominalThicknessOf,
   parseLength,
   printLength,
-  surfaceMeasure,
-  tallyLength,
-  tallyWidth,
   type Um,
   um,
 } from "@/lib/layout";
+import { surfaceMeasure, tallyLength, tallyWidth } from "@/lib/layout/units/lumber";
 
 function length(text: string): Um {
   const parsed = parseLength(text, "inch");
@@ -52,11 +50,19 @@ describe("board feet", () => {
     expect([tallyWidth(um(length("5 1/2") - 1), "up"), tallyWidth(um(length("5 1/2") + 1), "down")]).toEqual([5, 6]);
   });
 
-  test("stock under 1 in counts as 1 in", () => {
-    expect(boardFeet(length("6"), length("10 ft"), length("3/4"))).toBeCloseTo(
-      boardFeet(length("6"), length("10 ft"), length("1")),
-      12,
-    );
+  test("a board is counted by its tallied measures: 5¼ in × 8½ ft as 5 in × 8 ft, 3 1⁄3 square feet, surface measure 3", () => {
+    expect(boardFeetByRule(length("5 1/4"), length("8' 6\""), length("1"), "up")).toBe(3);
+    expect(boardFeet(length("5 1/4"), length("8' 6\""), length("1"))).toBeCloseTo(3.71875, 12);
+  });
+
+  test("stock under 1 in counts as 1 in, though its volume is less", () => {
+    const [width, long] = [length("6"), length("10 ft")];
+    expect(boardFeetByRule(width, long, length("3/4"), "up")).toBe(5);
+    expect(boardFeet(width, long, length("3/4"))).toBeCloseTo(3.75, 12);
+  });
+
+  test("less than a foot long counts as nothing", () => {
+    expect(boardFeetByRule(length("6"), length("11 3/4"), length("1"), "up")).toBe(0);
   });
 });
 

@@ -5,26 +5,33 @@
  * down to the whole foot.
  */
 import { INCHES_PER_FOOT, UM_PER_INCH } from "./length-style";
-import type { Um } from "./um";
+import { type Um, um } from "./um";
 
 /** Which way an exact half goes. The rule takes turns within a tally, so the caller keeps count. */
 export type HalfGoes = "up" | "down";
 
 const UM_PER_FOOT = UM_PER_INCH * INCHES_PER_FOOT;
 
-/** Board feet of a board by its plain measures, not rounded; under 1 in thick counts as 1 in. */
+/** The volume in board feet by plain measures: nothing is rounded, and thin stock counts as thick as it is. */
 export function boardFeet(width: Um, length: Um, thickness: Um): number {
-  return ((width / UM_PER_INCH) * (length / UM_PER_FOOT) * countedThickness(thickness)) / INCHES_PER_FOOT;
+  return ((width / UM_PER_INCH) * (length / UM_PER_FOOT) * (thickness / UM_PER_INCH)) / INCHES_PER_FOOT;
 }
 
-/** Surface measure: whole square feet of one face. */
+/** Surface measure: square feet of one face to the nearest whole one. */
 export function surfaceMeasure(width: Um, length: Um, halfGoes: HalfGoes): number {
   return wholeOf((width / UM_PER_INCH) * (length / UM_PER_FOOT), INCHES_PER_FOOT, halfGoes);
 }
 
-/** Board feet by the rule: surface measure times thickness in inches, under 1 in counted as 1 in. */
+/**
+ * Board feet by the rule, as a board is bought and counted: the surface measure of the tallied width and length, times the thickness in
+ * inches, under 1 in counted as 1 in. 0 for a board shorter than a foot.
+ */
 export function boardFeetByRule(width: Um, length: Um, thickness: Um, halfGoes: HalfGoes): number {
-  return surfaceMeasure(width, length, halfGoes) * countedThickness(thickness);
+  const tallied = {
+    width: um(tallyWidth(width, halfGoes) * UM_PER_INCH),
+    length: um(tallyLength(length) * UM_PER_FOOT),
+  };
+  return surfaceMeasure(tallied.width, tallied.length, halfGoes) * Math.max(1, thickness / UM_PER_INCH);
 }
 
 /** A width as it is tallied: whole inches. */
@@ -35,10 +42,6 @@ export function tallyWidth(width: Um, halfGoes: HalfGoes): number {
 /** A length as it is tallied: whole feet, never rounded up. */
 export function tallyLength(length: Um): number {
   return Math.floor(length / UM_PER_FOOT);
-}
-
-function countedThickness(thickness: Um): number {
-  return Math.max(1, thickness / UM_PER_INCH);
 }
 
 /** `amount / unit` to the nearest whole number; exact halves as told. */

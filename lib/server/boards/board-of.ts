@@ -1,7 +1,7 @@
 /** A board as the browser sees it, from its row. */
 import "server-only";
 import type { BoardWithPicture, listBoardHolds } from "@/db/queries/board";
-import { boardFeet, type Um, um } from "@/lib/layout";
+import { boardFeet, boardFeetByRule, type Um, um } from "@/lib/layout";
 import type { BoardRow } from "@/lib/schemas/board";
 import { printTag } from "@/lib/schemas/tag";
 import { servedLevel } from "../straightenings/straightening-of";
@@ -29,7 +29,8 @@ export function boardRowOf({ board, straighteningId, levels }: BoardWithPicture,
     costMinor,
     note,
     moisturePercent: board.moistureTenths === null ? null : board.moistureTenths / 10,
-    boardFeet: boardFeet(width, length, tradeThickness(nominalQuarters, thickness)),
+    boardFeet: boardFeetByRule(width, length, tradeThickness(nominalQuarters, thickness), halfGoesOf(board.tagNumber)),
+    volumeBoardFeet: boardFeet(width, length, thickness),
     straighteningId,
     picture: straighteningId === null ? null : rackPicture(straighteningId, levels ?? []),
     held: holds
@@ -39,6 +40,9 @@ export function boardRowOf({ board, straighteningId, levels }: BoardWithPicture,
     createdAt: board.createdAt.toISOString(),
   };
 }
+
+/** Exact halves go up and down by turns. Tags count the shop's boards, so the turns go by tag and a board keeps its count. */
+const halfGoesOf = (tagNumber: number) => (tagNumber % 2 === 1 ? "up" : "down");
 
 /** Lumber is bought by its nominal thickness, however much planing has taken since. */
 function tradeThickness(nominalQuarters: number | null, thickness: Um): Um {
