@@ -8,8 +8,10 @@ import { messageOf } from "@/lib/client/fault-from-server";
 import { issueOrder } from "@/lib/client/layout";
 import type { EditorState } from "@/lib/editor/editor";
 import type { Layout } from "@/lib/schemas/layout";
+import { standsInTheWay } from "@/lib/schemas/spoken-for";
 import { revisionLetter } from "@/lib/words/revision-letter";
 import { useEditorState, useTableContext } from "./table-context";
+import { useNamed } from "./use-named";
 import type { Problems } from "./use-problems";
 
 interface Props {
@@ -23,6 +25,8 @@ export function IssueButton({ problems: { found, working }, order, openedAt }: P
   const { editor, sync, faceId } = useTableContext();
   const status = useEditorState((state) => state.sync);
   const document = useEditorState((state) => state.document);
+  const { woodOf } = useNamed();
+  const inTheWay = found.filter((problem) => standsInTheWay(problem, woodOf)).length;
   const reasonId = useId();
   const pictures = useEditorState(picturesUsed);
   const [openedOn] = useState(pictures);
@@ -38,8 +42,7 @@ export function IssueButton({ problems: { found, working }, order, openedAt }: P
   const outOfDate = issued
     ? issued.document !== document || issued.pictures !== pictures
     : order !== null && (order.superseded || sync.revision() !== openedAt || openedOn !== pictures);
-  const reason =
-    reasonAgainst(found.length, working, status.kind) ?? (current && !outOfDate ? "It is issued as it stands" : null);
+  const reason = reasonAgainst(inTheWay, working, status.kind) ?? (current && !outOfDate ? "It is issued as it stands" : null);
   return (
     <div className="flex flex-wrap items-center justify-end gap-x-3 gap-y-1">
       <p className="text-sm" role="status">

@@ -3,12 +3,13 @@ import { useUnits } from "@/components/shell/units";
 import { Button } from "@/components/ui/button";
 import { piecesOfProblem } from "@/lib/editor/selectors/facts";
 import { type Problem, type Um, um } from "@/lib/layout";
+import { standsInTheWay } from "@/lib/schemas/spoken-for";
 import { problemSentence } from "@/lib/words/layout-problem";
 import { PanelSection } from "./panel-section";
 import { useTableActions } from "./table-actions";
 import { useEditorState, useTableContext } from "./table-context";
+import { useNamed } from "./use-named";
 import type { Problems } from "./use-problems";
-import { useTagOf } from "./use-tag-of";
 
 export function ProblemsSection({ problems: { found, working } }: { problems: Problems }) {
   return (
@@ -33,16 +34,20 @@ export function ProblemsSection({ problems: { found, working } }: { problems: Pr
 function ProblemItem({ problem }: { problem: Problem }) {
   const { editor } = useTableContext();
   const { style } = useUnits();
-  const tagOf = useTagOf();
+  const named = useNamed();
+  const firm = standsInTheWay(problem, named.woodOf);
   return (
-    <li className="flex flex-col gap-1.5 rounded-sm border-l-4 border-crayon bg-crayon-wash px-3 py-2 text-sm">
+    <li
+      className={`flex flex-col gap-1.5 rounded-sm border-l-4 px-3 py-2 text-sm ${firm ? "border-crayon bg-crayon-wash" : "border-tape bg-tape-wash"}`}
+    >
       <button
         type="button"
         onClick={() => editor.select(piecesOfProblem(problem))}
         className="min-h-8 text-left underline-offset-2 hover:underline"
       >
-        {problemSentence(problem, style, tagOf)}
+        {problemSentence(problem, style, named)}
       </button>
+      {!firm && <p>That face is laid out but not issued. Whichever of the two is issued first has the wood.</p>}
       {editor.mayChange && <Mend problem={problem} />}
     </li>
   );

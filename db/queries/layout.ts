@@ -120,17 +120,31 @@ export async function deleteLayoutBoard(tx: Connection, shopId: ShopId, layoutId
     .where(and(eq(layoutBoard.shopId, shopId), eq(layoutBoard.layoutId, layoutId), eq(layoutBoard.boardId, boardId)));
 }
 
-/** Other faces whose layouts have one of these boards on the table. */
+/** Other layouts of open jobs with one of these boards on their table, and the version of its picture they lie on. */
 export async function listHolds(db: Connection, shopId: ShopId, boardIds: readonly string[], exceptLayoutId: string) {
   if (boardIds.length === 0) return [];
   return db
-    .select({ boardId: layoutBoard.boardId, faceId: face.id, faceTitle: face.title, jobTitle: job.title })
+    .select({
+      boardId: layoutBoard.boardId,
+      straighteningId: layoutBoard.straighteningId,
+      document: layout.document,
+      faceId: face.id,
+      faceTitle: face.title,
+      jobTitle: job.title,
+    })
     .from(layoutBoard)
     .innerJoin(layout, eq(layout.id, layoutBoard.layoutId))
     .innerJoin(face, eq(face.id, layout.faceId))
     .innerJoin(job, eq(job.id, face.jobId))
-    .where(and(eq(layoutBoard.shopId, shopId), inArray(layoutBoard.boardId, [...boardIds]), ne(layout.id, exceptLayoutId)))
-    .orderBy(asc(job.number), asc(face.position));
+    .where(
+      and(
+        eq(layoutBoard.shopId, shopId),
+        inArray(layoutBoard.boardId, [...boardIds]),
+        ne(layout.id, exceptLayoutId),
+        eq(job.state, "open"),
+      ),
+    )
+    .orderBy(asc(job.number), asc(face.position), asc(face.id));
 }
 
 /** Layouts of several faces with the tags of their boards, for the page of a job. */

@@ -72,6 +72,17 @@ export async function lockLiveRevisionsOfFace(tx: Connection, shopId: ShopId, fa
     .for("update");
 }
 
+/** Those of the faces that a revision which still holds has cut. */
+export async function listIssuedFaces(db: Connection, shopId: ShopId, faceIds: readonly string[]): Promise<ReadonlySet<string>> {
+  if (faceIds.length === 0) return new Set();
+  const rows = await db
+    .selectDistinct({ faceId: cutOrderFace.faceId })
+    .from(cutOrderFace)
+    .innerJoin(orderRevision, eq(orderRevision.orderId, cutOrderFace.orderId))
+    .where(and(eq(cutOrderFace.shopId, shopId), inArray(cutOrderFace.faceId, [...faceIds]), isNull(orderRevision.supersededAt)));
+  return new Set(rows.map(({ faceId }) => faceId));
+}
+
 export async function setSuperseded(tx: Connection, shopId: ShopId, revisionIds: readonly string[], at: Date) {
   if (revisionIds.length === 0) return;
   await tx

@@ -21,6 +21,8 @@ export interface TableBoard {
   readonly version: number;
   readonly newerStraighteningId: string | null;
   readonly heldBy: LayoutBoard["heldBy"];
+  /** The same wood as in `face`, with whose it is. */
+  readonly spokenFor: LayoutBoard["spokenFor"];
   /** Largest first. All cover the whole board. */
   readonly levels: readonly PictureLevel[];
 }
@@ -36,6 +38,7 @@ export function tableBoard(board: LayoutBoard): TableBoard {
       thickness: board.thickness,
       outline: straightening.zones.outline,
       keepClear: straightening.zones.keepClear,
+      spokenFor: board.spokenFor,
     },
     tag: board.tag,
     species: board.species,
@@ -44,6 +47,7 @@ export function tableBoard(board: LayoutBoard): TableBoard {
     version: straightening.version,
     newerStraighteningId: board.newerStraighteningId,
     heldBy: board.heldBy,
+    spokenFor: board.spokenFor,
     levels,
   };
 }

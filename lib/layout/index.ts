@@ -9,6 +9,7 @@ export { problems } from "./fit/problems";
 export { leastSlide } from "./fit/slide";
 export { type Snap, type SnappedSlide, type SnapTarget, snapSlide } from "./fit/snap";
 export { type Spans, spansOf } from "./fit/span";
+export { type WoodTaken, woodTaken } from "./fit/spoken-for";
 export { boundsOf, polygonToStock, rectToStock, toFace, toStock } from "./frame/apply-isometry";
 export { composed, inverted, quarterTurn, turnedVector } from "./frame/combine-isometries";
 export type { Isometry } from "./frame/isometry";
@@ -86,7 +87,7 @@ export { type Verdict, verifyProgram } from "./program/verify-program";
 export { type Drift, drifts } from "./seam/drift";
 export type { Seam, UmRange } from "./seam/seam";
 export { seams } from "./seam/seams";
-export type { BoardFace, KeepClear, KeepClearKind, KeepClearShape } from "./stock/board";
+export type { BoardFace, KeepClear, KeepClearKind, KeepClearShape, SpokenFor } from "./stock/board";
 export { type CarriedOutline, carryOutline, liesOnBoard } from "./stock/carry-zones";
 export { type BoardSize, outsideFault, type PolygonFault, polygonFault } from "./stock/polygon-fault";
 export {

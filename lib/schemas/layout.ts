@@ -4,6 +4,7 @@ import type { FaceLayout } from "@/lib/layout";
 import { defineEndpoint } from "./endpoint";
 import { idSchema } from "./ids";
 import { allowanceUmSchema, pointSchema, sizeUmSchema } from "./length";
+import { spokenForSchema } from "./spoken-for";
 import { straighteningSchema } from "./straightening";
 
 const pieceIdSchema = z.string().regex(/^p[1-9]\d{0,3}$/);
@@ -64,8 +65,12 @@ export const layoutBoardSchema = z.object({
   straightening: straighteningSchema,
   /** A newer version than the one this layout was made on, if there is one. */
   newerStraighteningId: idSchema.nullable(),
-  /** Other faces that lie on this board. */
-  heldBy: z.array(z.object({ faceId: idSchema, faceTitle: z.string(), jobTitle: z.string() })),
+  /** Other faces of open jobs with this board on their table. On another picture of it there is no saying whether the two overlap. */
+  heldBy: z.array(
+    z.object({ faceId: idSchema, faceTitle: z.string(), jobTitle: z.string(), issued: z.boolean(), samePicture: z.boolean() }),
+  ),
+  /** What those on the same picture take of it. */
+  spokenFor: z.array(spokenForSchema),
 });
 
 export const layoutSchema = z.object({

@@ -1,5 +1,6 @@
 /** What is wrong with a layout, in plain words: what, by how much, and what would mend it. */
 import { type CutProgramOutcome, type LengthStyle, type PieceId, type Problem, printLength, type Um, um } from "@/lib/layout";
+import type { WoodOf } from "@/lib/schemas/spoken-for";
 import { labelRanges } from "./part-name";
 
 type CutRefusal = Extract<CutProgramOutcome, { ok: false }>;
@@ -7,7 +8,13 @@ type CutRefusal = Extract<CutProgramOutcome, { ok: false }>;
 /** Boards by id, for the problems that name one. */
 export type TagOf = (stockId: string) => string;
 
-export function problemSentence(problem: Problem, style: LengthStyle, tagOf: TagOf): string {
+/** What problems only have the id of. */
+export interface Named {
+  readonly tagOf: TagOf;
+  readonly woodOf: WoodOf;
+}
+
+export function problemSentence(problem: Problem, style: LengthStyle, { tagOf, woodOf }: Named): string {
   const print = (length: Um) => printLength(length, style);
   switch (problem.kind) {
     case "not-placed":
@@ -20,6 +27,8 @@ export function problemSentence(problem: Problem, style: LengthStyle, tagOf: Tag
       return `${fronts([problem.piece])} reaches ${print(problem.by)} into the ${problem.area} at ${print(problem.atX)}. ${slideSentence(problem.slide, print)}`;
     case "too-close":
       return tooCloseSentence(problem.pieces, print(problem.missing));
+    case "spoken-for":
+      return `${spokenForSentence(problem, woodOf, print)} ${slideSentence(problem.slide, print)}`;
     case "blocked":
       return blockedSentence(problem.pieces, tagOf(problem.stockId));
     case "grain":
@@ -55,6 +64,18 @@ const outsideSentence = (piece: PieceId, by: string) =>
 
 const tooCloseSentence = (pieces: readonly [PieceId, PieceId], missing: string) =>
   `${fronts(pieces)} lie ${missing} too close for the saw. Move them apart by that much.`;
+
+function spokenForSentence(
+  { piece, spokenForId, over, missing }: Extract<Problem, { kind: "spoken-for" }>,
+  woodOf: WoodOf,
+  print: (length: Um) => string,
+): string {
+  const wood = woodOf(spokenForId);
+  const whose = wood ? `front ${wood.label} of ${wood.faceTitle}, ${wood.jobTitle}` : "the wood of another face";
+  const given = wood?.issued ? ", which is issued for cutting" : "";
+  if (over > 0) return `${fronts([piece])} lies ${print(over)} over ${whose}${given}.`;
+  return `${fronts([piece])} lies ${print(missing)} too close for the saw to ${whose}${given}.`;
+}
 
 const blockedSentence = (pieces: readonly PieceId[], tag: string) =>
   `${fronts(pieces)} block one another: no straight cut from edge to edge of board ${tag} parts them. Line them up or move one to another board.`;

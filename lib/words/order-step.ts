@@ -28,7 +28,7 @@ export interface StepWords extends Title {
 }
 
 /** The shop's way to write lengths, as frozen with the order. */
-export function styleOf({ units, inchFraction }: OrderSnapshot): LengthStyle {
+export function styleOf({ units, inchFraction }: Pick<OrderSnapshot, "units" | "inchFraction">): LengthStyle {
   return units === "mm" ? { unit: "mm" } : { unit: "inch", denominator: inchFraction };
 }
 

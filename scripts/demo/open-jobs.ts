@@ -115,7 +115,8 @@ function boardFaceOf({ boards }: Layout): BoardFace {
   if (!board) throw new Error("a layout of the demo has no board on its table");
   const { length, width, zones } = board.straightening;
   const { outline, keepClear } = zones;
-  return { id: board.boardId, length, width, thickness: board.thickness, outline, keepClear };
+  const { spokenFor } = board;
+  return { id: board.boardId, length, width, thickness: board.thickness, outline, keepClear, spokenFor };
 }
 
 function idOf(boardIds: ReadonlyMap<string, string>, key: string): string {

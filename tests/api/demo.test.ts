@@ -201,7 +201,7 @@ describe("made to the end", () => {
   });
 });
 
-function boardFaceOf({ boardId, thickness, straightening }: Layout["boards"][number]): BoardFace {
+function boardFaceOf({ boardId, thickness, straightening, spokenFor }: Layout["boards"][number]): BoardFace {
   const { length, width, zones } = straightening;
-  return { id: boardId, length, width, thickness, outline: zones.outline, keepClear: zones.keepClear };
+  return { id: boardId, length, width, thickness, outline: zones.outline, keepClear: zones.keepClear, spokenFor };
 }

@@ -22,6 +22,7 @@ export const longBoard: BoardFace = {
       },
     },
   ],
+  spokenFor: [],
 };
 
 export const shortBoard: BoardFace = {
@@ -31,6 +32,7 @@ export const shortBoard: BoardFace = {
   thickness: umFromMm(25),
   outline: null,
   keepClear: [],
+  spokenFor: [],
 };
 
 export const boards = [longBoard, shortBoard] as const;
@@ -62,6 +64,7 @@ export function tableBoardOf(face: BoardFace): TableBoard {
     version: 1,
     newerStraighteningId: null,
     heldBy: [],
+    spokenFor: [],
     levels: [],
   };
 }

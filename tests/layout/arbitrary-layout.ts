@@ -142,7 +142,16 @@ export function starPolygon(centre: { readonly x: number; readonly y: number }, 
 }
 
 export function boardOf(id: string, length: number, width: number, more: Partial<BoardFace> = {}): BoardFace {
-  return { id, length: um(length), width: um(width), thickness: um(27_000), outline: null, keepClear: [], ...more };
+  return {
+    id,
+    length: um(length),
+    width: um(width),
+    thickness: um(27_000),
+    outline: null,
+    keepClear: [],
+    spokenFor: [],
+    ...more,
+  };
 }
 
 /** Long and wide beside what `arbitraryLayout` makes, with a few knots among it: sliding usually helps. */

@@ -94,6 +94,7 @@ function boardOf({ boardMm, place, keepClear }: OrderWanted, index: number) {
     board: { id, tagNumber: 41 + index, species: "black walnut", cut: "flat" as const, place, thickness: umFromMm(26) },
     straightening: { id: newId(), ...size, outline: null },
     keepClear,
+    spokenFor: [],
   };
 }
 

@@ -21,6 +21,16 @@ export type Problem =
     }
   /** Overlap, or closer than the loss between them. */
   | { readonly kind: "too-close"; readonly pieces: readonly [PieceId, PieceId]; readonly missing: Um }
+  /** Lies on wood that is spoken for, or too near it for the saw; `missing` is how far it would have to move for the cut between,
+   *  `over` how much of that is wood that would be cut twice, `slide` as above. */
+  | {
+      readonly kind: "spoken-for";
+      readonly piece: PieceId;
+      readonly spokenForId: string;
+      readonly over: Um;
+      readonly missing: Um;
+      readonly slide: Um | null;
+    }
   /** The pieces on this board cannot be parted by straight cuts from edge to edge. */
   | { readonly kind: "blocked"; readonly stockId: StockId; readonly pieces: readonly PieceId[] }
   /** Runs with the grain the wrong way: the placement's turns do not fit the grain of the face. */

@@ -16,19 +16,22 @@ import { wholeDepth } from "./noise";
 import { overBoardBy } from "./on-board";
 import type { Problem } from "./problem";
 import { leastSlide } from "./slide";
+import { missingToSpokenFor, overSpokenFor } from "./spoken-for";
 
-/** Problems by kind, then by piece in reading order, then by area in the order of the board or by the second piece. */
+/** Problems by kind, then by piece in reading order, then by area or wood spoken for in the order of the board, or by the second piece. */
 export function problems(layout: FaceLayout, boards: readonly BoardFace[]): Problem[] {
   const boardById = new Map(boards.map((board) => [board.id, board]));
   const lying = lyingPieces(layout, layOut(layout));
   const known = lying.filter(({ stockId }) => boardById.has(stockId));
+  const slideOf = slidesByGroup(layout, lying);
   return [
     ...notPlaced(layout),
     ...unknownStock(lying, boardById),
     ...againstGrain(layout),
     ...known.flatMap((piece) => outside(piece, boardById)),
-    ...inKeepClear(layout, known, boardById),
+    ...inKeepClear(known, boardById, slideOf),
     ...tooClose(layout, lying),
+    ...onSpokenFor(layout, known, boardById, slideOf),
   ];
 }
 
@@ -66,8 +69,9 @@ function outside(piece: LyingPiece, boards: BoardsById): Problem[] {
   return by === 0 ? [] : [{ kind: "outside", piece: piece.id, by: um(by) }];
 }
 
-function inKeepClear(layout: FaceLayout, lying: readonly LyingPiece[], boards: BoardsById): Problem[] {
-  const slideOf = slidesByGroup(layout, lying);
+type SlideOf = (groupId: string, board: BoardFace) => Um | null;
+
+function inKeepClear(lying: readonly LyingPiece[], boards: BoardsById, slideOf: SlideOf): Problem[] {
   return lying.flatMap((piece) => {
     const board = boards.get(piece.stockId);
     if (board === undefined) return [];
@@ -83,7 +87,7 @@ function inKeepClear(layout: FaceLayout, lying: readonly LyingPiece[], boards: B
 }
 
 /** The least slide of a group, found once and only when something asks for it. */
-function slidesByGroup(layout: FaceLayout, lying: readonly LyingPiece[]): (groupId: string, board: BoardFace) => Um | null {
+function slidesByGroup(layout: FaceLayout, lying: readonly LyingPiece[]): SlideOf {
   const kerfs = kerfsOf(layout);
   const found = new Map<string, Um | null>();
   return (groupId, board) => {
@@ -106,4 +110,19 @@ function tooClose(layout: FaceLayout, lying: readonly LyingPiece[]): Problem[] {
       return missing === 0 ? [] : [{ kind: "too-close", pieces: [a.id, b.id], missing: um(missing) }];
     }),
   );
+}
+
+function onSpokenFor(layout: FaceLayout, lying: readonly LyingPiece[], boards: BoardsById, slideOf: SlideOf): Problem[] {
+  const kerfs = kerfsOf(layout);
+  return lying.flatMap((piece) => {
+    const board = boards.get(piece.stockId);
+    if (board === undefined) return [];
+    return board.spokenFor.flatMap((taken): Problem[] => {
+      const missing = wholeDepth(missingToSpokenFor(piece, taken, kerfs));
+      if (missing === 0) return [];
+      const over = um(wholeDepth(overSpokenFor(piece, taken)));
+      const slide = slideOf(piece.groupId, board);
+      return [{ kind: "spoken-for", piece: piece.id, spokenForId: taken.id, over, missing: um(missing), slide }];
+    });
+  });
 }

@@ -1,6 +1,6 @@
 /**
  * The least slide along the board that mends a group: clear of every keep-clear area, on its board, the saw's loss from other
- * groups.
+ * groups and from wood that is spoken for.
  */
 import type { BoardFace } from "../stock/board";
 import { type Um, um } from "../units/um";
@@ -10,6 +10,7 @@ import { movesIntoArea } from "./keep-clear";
 import type { LyingPiece } from "./lying-piece";
 import { movesOverBoard } from "./on-board";
 import type { Span, StockAxis } from "./span";
+import { movesIntoSpokenFor } from "./spoken-for";
 
 /** What the group moves among: the pieces of other groups that lie on the same board, and the board. */
 export interface Surroundings {
@@ -25,6 +26,7 @@ export function troubledMoves(group: readonly LyingPiece[], { board, others, ker
       ...movesOverBoard(piece, board, axis),
       ...board.keepClear.flatMap(({ area }) => movesIntoArea(piece.spans, area, axis)),
       ...others.flatMap((other) => movesTooClose(piece, other, axis, kerfs) ?? []),
+      ...board.spokenFor.flatMap((taken) => movesIntoSpokenFor(piece, taken, axis, kerfs) ?? []),
     ]),
   );
 }

@@ -1,6 +1,6 @@
 /**
  * Snapping while groups are slid on a board: the raw slide of the pointer becomes the nearest slide, within a tolerance, at
- * which a piece comes to lie the saw's loss from another, along the outline, just clear of a keep-clear area, or flush with
+ * which a piece comes to lie the saw's loss from another or from wood that is spoken for, along the outline, just clear of a keep-clear area, or flush with
  * another piece. Along the board first, then across it from there. Snapping helps the hand; whether the place is sound is for
  * `problems.ts` to say.
  */
@@ -16,10 +16,13 @@ import { NOISE_UM } from "./noise";
 import { movesOverBoard } from "./on-board";
 import type { Surroundings } from "./slide";
 import { movedSpans, type Span, type StockAxis } from "./span";
+import { movesIntoSpokenFor } from "./spoken-for";
 
 export type SnapTarget =
   /** The saw's loss away from that piece. */
   | { readonly kind: "loss"; readonly piece: PieceId }
+  /** The cut's kerf away from that wood of something else. */
+  | { readonly kind: "spoken-for"; readonly spokenForId: string }
   /** As far as the usable outline or the board goes; clean-up keeps a finished edge that much from the board's own. */
   | { readonly kind: "outline" }
   /** Just clear of that area. */
@@ -64,7 +67,13 @@ interface Candidate {
   readonly target: SnapTarget;
 }
 
-const rank: Readonly<Record<SnapTarget["kind"], number>> = { loss: 0, outline: 1, "keep-clear": 2, flush: 3 };
+const rank: Readonly<Record<SnapTarget["kind"], number>> = {
+  loss: 0,
+  "spoken-for": 1,
+  outline: 2,
+  "keep-clear": 3,
+  flush: 4,
+};
 
 function nearest(found: readonly Candidate[], raw: number, tolerance: number): Candidate | null {
   const near = found.filter(({ move }) => Math.abs(move - raw) <= tolerance);
@@ -90,6 +99,12 @@ function candidates(moving: readonly LyingPiece[], { board, others, kerfs }: Sur
       return forbidden === null ? [] : [{ piece, forbidden, target: { kind: "loss", piece: other.id } as const }];
     }),
   );
+  const atSpokenFor = moving.flatMap((piece) =>
+    board.spokenFor.flatMap((taken) => {
+      const forbidden = movesIntoSpokenFor(piece, taken, axis, kerfs);
+      return forbidden === null ? [] : [{ piece, forbidden, target: { kind: "spoken-for", spokenForId: taken.id } as const }];
+    }),
+  );
   const atOutline = moving.flatMap((piece) =>
     movesOverBoard(piece, board, axis).map((forbidden) => ({ piece, forbidden, target: { kind: "outline" } as const })),
   );
@@ -102,7 +117,7 @@ function candidates(moving: readonly LyingPiece[], { board, others, kerfs }: Sur
       })),
     ),
   );
-  return [...[atLoss, atOutline, atAreas].flatMap((kind) => endsOf(kind, axis)), ...flush(moving, others, axis)];
+  return [...[atLoss, atSpokenFor, atOutline, atAreas].flatMap((kind) => endsOf(kind, axis)), ...flush(moving, others, axis)];
 }
 
 interface Forbidding {
@@ -146,8 +161,17 @@ function moved(pieces: readonly LyingPiece[], axis: StockAxis, by: number): Lyin
 }
 
 function nameOf(target: SnapTarget): string {
-  if (target.kind === "outline") return "";
-  return target.kind === "keep-clear" ? target.areaId : target.piece;
+  switch (target.kind) {
+    case "outline":
+      return "";
+    case "keep-clear":
+      return target.areaId;
+    case "spoken-for":
+      return target.spokenForId;
+    case "loss":
+    case "flush":
+      return target.piece;
+  }
 }
 
 function compareNames(p: string, q: string): number {

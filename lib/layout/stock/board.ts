@@ -1,5 +1,5 @@
 /** A board face as the core sees it: its rectangle, what of it is usable, and what must be kept clear. */
-import type { StockPoint } from "../frame/point";
+import type { StockPoint, StockRect } from "../frame/point";
 import type { StockId } from "../piece";
 import type { Um } from "../units/um";
 
@@ -22,6 +22,15 @@ export interface KeepClear {
   readonly area: KeepClearShape;
 }
 
+/** Wood of a board that something else is to be cut from. */
+export interface SpokenFor {
+  readonly id: string;
+  /** As it must leave the saw: finished size and clean-up. */
+  readonly rect: StockRect;
+  /** What its own cuts take around it. */
+  readonly kerfs: { readonly along: Um; readonly across: Um };
+}
+
 export interface BoardFace {
   readonly id: StockId;
   /** Along the grain: x from 0 to length. */
@@ -32,4 +41,5 @@ export interface BoardFace {
   /** Usable outline, a simple polygon inside the rectangle; null when the whole rectangle is usable. */
   readonly outline: readonly StockPoint[] | null;
   readonly keepClear: readonly KeepClear[];
+  readonly spokenFor: readonly SpokenFor[];
 }

@@ -2,7 +2,7 @@
 import "server-only";
 import type { z } from "zod";
 import type { Connection } from "@/db/client";
-import { findLayout, listHolds, listLayoutBoards, listNewestOrders } from "@/db/queries/layout";
+import { findLayout, listLayoutBoards, listNewestOrders } from "@/db/queries/layout";
 import type { ShopId } from "@/db/shop-id";
 import type { Layout, layoutBoardSchema } from "@/lib/schemas/layout";
 import { printTag } from "@/lib/schemas/tag";
@@ -10,6 +10,7 @@ import type { ShopAccess } from "../access";
 import { database } from "../database";
 import { notFound } from "../faults";
 import { straighteningOf } from "../straightenings/straightening-of";
+import { holdersOf, spokenForOn } from "./spoken-for";
 
 export type LayoutBoard = z.output<typeof layoutBoardSchema>;
 
@@ -38,7 +39,7 @@ export async function readLayout(access: ShopAccess, faceId: string): Promise<La
 /** Every board on the table, with the version of its picture used and who else counts on it. */
 export async function layoutBoards(db: Connection, shopId: ShopId, layoutId: string): Promise<LayoutBoard[]> {
   const rows = await listLayoutBoards(db, shopId, layoutId);
-  const holds = await listHolds(
+  const holders = await holdersOf(
     db,
     shopId,
     rows.map(({ board }) => board.id),
@@ -53,9 +54,16 @@ export async function layoutBoards(db: Connection, shopId: ShopId, layoutId: str
       thickness: board.thickness,
       straightening: await straighteningOf(db, shopId, straightening),
       newerStraighteningId: currentStraighteningId === straightening.id ? null : currentStraighteningId,
-      heldBy: holds
+      heldBy: holders
         .filter(({ boardId }) => boardId === board.id)
-        .map(({ faceId, faceTitle, jobTitle }) => ({ faceId, faceTitle, jobTitle })),
+        .map(({ faceId, faceTitle, jobTitle, issued, straighteningId }) => ({
+          faceId,
+          faceTitle,
+          jobTitle,
+          issued,
+          samePicture: straighteningId === straightening.id,
+        })),
+      spokenFor: spokenForOn(holders, board.id, straightening.id),
     })),
   );
 }

@@ -25,6 +25,7 @@ import {
 } from "@/lib/layout";
 import { cutProgramSchema } from "@/lib/schemas/cut-program";
 import type { OrderSnapshot, SnapshotBoard } from "@/lib/schemas/order-snapshot";
+import { type SpokenForPiece, standsInTheWay } from "@/lib/schemas/spoken-for";
 import { printTag } from "@/lib/schemas/tag";
 import type { KeepClearArea } from "@/lib/schemas/zones";
 import { cutRefusalSentence, problemSentence } from "@/lib/words/layout-problem";
@@ -47,40 +48,52 @@ export interface LayoutBoard {
   readonly board: Pick<BoardRow["board"], "id" | "tagNumber" | "species" | "cut" | "place" | "thickness">;
   readonly straightening: Pick<BoardRow["straightening"], "id" | "length" | "width" | "outline">;
   readonly keepClear: readonly KeepClearArea[];
+  readonly spokenFor: readonly SpokenForPiece[];
 }
 
 /** The snapshot, or a refusal that names everything in the way. */
 export async function freeze(given: ToFreeze, plan: Planner): Promise<OrderSnapshot> {
+  refuseProblems(given);
   const { shop, face } = given;
   const heading = {
     format: 1,
     shop: { name: shop.name },
-    units: shop.units,
-    inchFraction: shop.inchFraction === 32 ? 32 : 64,
+    ...unitsOf(shop),
     job: given.job,
     faces: [face],
     crosscutSaw: given.crosscutSaw,
     ripSaw: given.ripSaw,
   } as const;
-  const style = styleOf({ ...heading, faces: [face], boards: [] });
-  const tagOf = (stockId: string) => {
-    const found = given.boards.find(({ board }) => board.id === stockId);
-    return found ? printTag(found.board.tagNumber) : stockId;
-  };
-  const wrong = problems(face.layout, given.boards.map(boardFaceOf));
-  if (wrong.length > 0) throw refusedFor(wrong.map((problem) => problemSentence(problem, style, tagOf)));
-
+  const style = styleOf(heading);
   const used = given.boards.filter(({ board }) => piecesOnBoard(face.layout, board.id).length > 0);
   const planned = used.map(async (one): Promise<SnapshotBoard | string> => {
     const request = cutRequestOf(given, one);
     const outcome = await plan(request);
-    if (!outcome.ok) return cutRefusalSentence(outcome, style, tagOf(one.board.id));
+    if (!outcome.ok) return cutRefusalSentence(outcome, style, printTag(one.board.tagNumber));
     return snapshotBoard(face.layout, one, request, outcome.program);
   });
   const boards = await Promise.all(planned);
   const refusals = boards.filter((board) => typeof board === "string");
   if (refusals.length > 0) throw refusedFor(refusals);
   return { ...heading, faces: [face], boards: boards.filter((board) => typeof board !== "string") };
+}
+
+/** Throws a refusal in words for what can be seen without planning the cuts. Quick enough to be asked again under a lock. */
+export function refuseProblems({ shop, face, boards }: ToFreeze): void {
+  const tagOf = (stockId: string) => {
+    const found = boards.find(({ board }) => board.id === stockId);
+    return found ? printTag(found.board.tagNumber) : stockId;
+  };
+  const spokenFor = new Map(boards.flatMap((board) => board.spokenFor.map((wood) => [wood.id, wood] as const)));
+  const woodOf = (id: string) => spokenFor.get(id);
+  const found = problems(face.layout, boards.map(boardFaceOf));
+  const wrong = found.filter((problem) => standsInTheWay(problem, woodOf));
+  if (wrong.length === 0) return;
+  throw refusedFor(wrong.map((problem) => problemSentence(problem, styleOf(unitsOf(shop)), { tagOf, woodOf })));
+}
+
+function unitsOf({ units, inchFraction }: ToFreeze["shop"]): Pick<OrderSnapshot, "units" | "inchFraction"> {
+  return { units, inchFraction: inchFraction === 32 ? 32 : 64 };
 }
 
 /** The first few in full; a long list is worked off at the layout table, where each problem can be seen. */
@@ -91,9 +104,9 @@ function refusedFor(sentences: readonly string[]) {
 }
 
 /** The board as its picture of that version shows it: size, outline and keep-clear areas are in the picture's frame. */
-function boardFaceOf({ board, straightening, keepClear }: LayoutBoard): BoardFace {
+function boardFaceOf({ board, straightening, keepClear, spokenFor }: LayoutBoard): BoardFace {
   const { length, width, outline } = straightening;
-  return { id: board.id, length, width, thickness: board.thickness, outline, keepClear };
+  return { id: board.id, length, width, thickness: board.thickness, outline, keepClear, spokenFor };
 }
 
 function cutRequestOf({ shop, face }: ToFreeze, one: LayoutBoard): CutRequest {

@@ -1,6 +1,7 @@
 /** Issuing: freezes a face's layout as a numbered cut order, or as the next revision of the order it has. */
 import "server-only";
 import type { Connection } from "@/db/client";
+import { lockBoard } from "@/db/queries/board";
 import { recordHistory } from "@/db/queries/history";
 import { findFace, findJob } from "@/db/queries/job";
 import { findLayout, listLayoutBoards, lockLayout } from "@/db/queries/layout";
@@ -15,8 +16,9 @@ import { orderSteps } from "@/lib/schemas/order-steps";
 import type { ShopAccess } from "../access";
 import { database } from "../database";
 import { conflict, notFound } from "../faults";
+import { holdersOf, spokenForOn } from "../layouts/spoken-for";
 import { fingerprintOf } from "./fingerprint";
-import { freeze, type LayoutBoard, type ToFreeze } from "./freeze";
+import { freeze, type LayoutBoard, refuseProblems, type ToFreeze } from "./freeze";
 import { planInThread } from "./plan-pool";
 import { orderRow } from "./read-orders";
 import { markSuperseded } from "./supersede";
@@ -40,8 +42,13 @@ export async function issueOrder(access: ShopAccess, faceId: string, layoutRevis
     const layout = await lockLayout(tx, access.shopId, faceId);
     if (!layout) throw notFound("face");
     refuseOther(layout.revision, layoutRevision);
+    await lockInOrder(tx, access.shopId, given.boards);
     await refuseOtherTable(tx, access.shopId, layout.id, given);
-    return (await issuedAlready(tx, access.shopId, faceId, layoutRevision)) ?? (await insertIssued(tx, access, snapshot));
+    const already = await issuedAlready(tx, access.shopId, faceId, layoutRevision);
+    if (already) return already;
+    // Another face may have been issued from the same wood while the cuts were planned.
+    refuseProblems({ ...given, boards: await withSpokenFor(tx, access.shopId, layout.id, given.boards) });
+    return insertIssued(tx, access, snapshot);
   });
   return orderRow(access.shopId, orderId);
 }
@@ -58,6 +65,27 @@ async function refuseOtherTable(tx: Connection, shopId: ShopId, layoutId: string
   throw conflict("A board of the layout was changed meanwhile. Look at it and issue it again.", {
     revision: face.layoutRevision,
   });
+}
+
+/**
+ * Two that issue from one board follow one another: the second sees what the first was given. In the order of ids, so that they do
+ * not wait for each other crosswise.
+ */
+async function lockInOrder(tx: Connection, shopId: ShopId, boards: readonly LayoutBoard[]): Promise<void> {
+  const ids = boards.map(({ board }) => board.id).sort();
+  for (const id of ids) await lockBoard(tx, shopId, id);
+}
+
+/** The boards with what other faces take of them now. */
+async function withSpokenFor<B extends Pick<LayoutBoard, "board" | "straightening">>(
+  db: Connection,
+  shopId: ShopId,
+  layoutId: string,
+  boards: readonly B[],
+) {
+  const boardIds = boards.map(({ board }) => board.id);
+  const holders = await holdersOf(db, shopId, boardIds, layoutId);
+  return boards.map((one) => ({ ...one, spokenFor: spokenForOn(holders, one.board.id, one.straightening.id) }));
 }
 
 /** The order that still holds for this revision of the layout. */
@@ -120,7 +148,7 @@ async function toFreeze(db: Connection, access: ShopAccess, faceId: string, layo
   const job = found && (await findJob(db, shopId, found.face.jobId));
   if (!shop || !found || !job) throw notFound("face");
   const { id, number, title, client } = job;
-  const rows = await listLayoutBoards(db, shopId, layout.id);
+  const rows = await withSpokenFor(db, shopId, layout.id, await listLayoutBoards(db, shopId, layout.id));
   const boards = rows.map(async (row) => ({ ...row, keepClear: await listKeepClear(db, shopId, row.straightening.id) }));
   return {
     shop,

@@ -1,0 +1,29 @@
+/** Wood of a board that another face lies on, as the layout table is told of it. */
+import { z } from "zod";
+import type { Problem } from "@/lib/layout";
+import { idSchema } from "./ids";
+import { allowanceUmSchema, rectSchema } from "./length";
+
+export const spokenForSchema = z.object({
+  /** Of the face and its piece. */
+  id: z.string(),
+  /** What is sawn for the piece, clean-up included, in the frame of the picture that both layouts lie on. */
+  rect: rectSchema,
+  kerfs: z.object({ along: allowanceUmSchema, across: allowanceUmSchema }),
+  /** What is written on the piece. */
+  label: z.string(),
+  faceId: idSchema,
+  faceTitle: z.string(),
+  jobTitle: z.string(),
+  /** A cut order that still holds has it cut: the wood is given away. Else it is a plan, and whoever is issued first has the wood. */
+  issued: z.boolean(),
+});
+export type SpokenForPiece = z.output<typeof spokenForSchema>;
+
+/** Wood spoken for by its id; undefined where it no longer is. */
+export type WoodOf = (spokenForId: string) => Pick<SpokenForPiece, "label" | "faceTitle" | "jobTitle" | "issued"> | undefined;
+
+/** Whether a layout with this problem may not be issued: all but lying on wood that is only planned for elsewhere. */
+export function standsInTheWay(problem: Problem, woodOf: WoodOf): boolean {
+  return problem.kind !== "spoken-for" || woodOf(problem.spokenForId)?.issued !== false;
+}
