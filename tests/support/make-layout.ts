@@ -30,6 +30,8 @@ export interface LayoutWanted {
   readonly jobTitle: string;
   readonly species: string;
   readonly place: string;
+  /** The board and picture of another layout to lie on; null: a board of its own. */
+  readonly stock: { readonly boardId: string; readonly straighteningId: string } | null;
 }
 
 const fourFronts: LayoutWanted = {
@@ -42,6 +44,7 @@ const fourFronts: LayoutWanted = {
   jobTitle: "Map chest for the reading room",
   species: "black walnut",
   place: "rack 2 left",
+  stock: null,
 };
 
 export interface MadeLayout {
@@ -56,7 +59,8 @@ export interface MadeLayout {
 /** Layout revision 1. */
 export async function makeLayout(access: ShopAccess, change: Partial<LayoutWanted> = {}): Promise<MadeLayout> {
   const wanted = { ...fourFronts, ...change };
-  const stock = await makeBoard(access, wanted);
+  const { boardId, straighteningId } = wanted.stock ?? (await makeBoard(access, wanted));
+  const stock = { boardId, straighteningId };
   const { jobId, faceId } = await makeFace(access, wanted);
   const document = placed(wanted, stock.boardId);
   const db = database();
