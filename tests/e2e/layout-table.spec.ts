@@ -112,7 +112,8 @@ test("two windows: other fronts come together, the same fronts are asked about",
   const loose = await mine.leftOf("3");
   await mine.front("3").focus();
   await page.keyboard.press("Shift+ArrowRight");
-  await expect(mine.said("Test owner changed this layout in another window. The table shows it.")).toBeVisible();
+  const merged = mine.said("Test owner changed this layout in another window. The table shows it.");
+  await expect(merged).toBeVisible({ timeout: 20_000 });
   await mine.saved();
   expect(await mine.leftOf("1")).toBe(5.2);
   expect(await mine.leftOf("3")).toBeCloseTo(loose + 5, 6);
@@ -121,7 +122,7 @@ test("two windows: other fronts come together, the same fronts are asked about",
   await theirs.front("3").focus();
   await theirs.page.keyboard.press("ArrowRight");
   const asked = theirs.page.getByRole("dialog", { name: "Changed in another window" });
-  await expect(asked).toBeVisible();
+  await expect(asked).toBeVisible({ timeout: 20_000 });
   expect(await accessibilityFaults(theirs.page)).toEqual([]);
   await asked.getByRole("button", { name: "Take theirs" }).click();
   await theirs.saved();

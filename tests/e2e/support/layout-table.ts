@@ -34,8 +34,9 @@ export class LayoutTablePage {
     return this.page.getByRole("status").filter({ hasText: text });
   }
 
+  /** A save may wait for a retry, on a busy machine also for its answer. */
   async saved(): Promise<void> {
-    await expect(this.page.getByText("Saved", { exact: true })).toBeVisible();
+    await expect(this.page.getByText("Saved", { exact: true })).toBeVisible({ timeout: 20_000 });
   }
 
   /** The distance of a front from the left end of its board as the list of fronts tells it, mm. */
