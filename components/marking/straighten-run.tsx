@@ -29,7 +29,6 @@ export function StraightenRun({ started, onAgain }: Props) {
   useEffect(() => {
     if (!ended) return;
     void client.invalidateQueries({ queryKey: boardKeys.all });
-    void client.invalidateQueries({ queryKey: straighteningKeys.ofBoard(started.boardId) });
   }, [ended, client, started.boardId]);
 
   if (version?.state === "done") return <Finished version={version} onAgain={onAgain} />;

@@ -38,7 +38,6 @@ export function useSaveZones(straightening: Straightening, zones: ZonesState): Z
       setTheirs(null);
       void client.invalidateQueries({ queryKey: boardKeys.all });
       void client.invalidateQueries({ queryKey: straighteningKeys.one(straightening.id) });
-      void client.invalidateQueries({ queryKey: straighteningKeys.ofBoard(straightening.boardId) });
     },
     onError: async (error) => {
       if (!(error instanceof FaultFromServer) || error.fault.code !== "conflict") return;

@@ -1,8 +1,7 @@
 import { date, index, int, mysqlTable, smallint, text, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
 import { boardStates, cuts } from "@/lib/schemas/board";
 import { idColumn, minorUnitsColumn, umColumn, utcColumn } from "../columns";
-import type { ShopId } from "../shop-id";
-import { shop } from "./shop";
+import { shopIdColumn } from "./shop";
 import { user } from "./user";
 
 /** A board in the rack. Its size is that of its current straightened picture (`boardPicture`), or was entered by hand. */
@@ -10,10 +9,7 @@ export const board = mysqlTable(
   "board",
   {
     id: idColumn("id").primaryKey(),
-    shopId: idColumn("shop_id")
-      .$type<ShopId>()
-      .notNull()
-      .references(() => shop.id),
+    shopId: shopIdColumn(),
     /** Tag "B-041" is number 41. */
     tagNumber: int("tag_number").notNull(),
     state: varchar("state", { length: 8, enum: boardStates }).notNull(),
@@ -52,10 +48,7 @@ export const moistureReading = mysqlTable(
   "moisture_reading",
   {
     id: idColumn("id").primaryKey(),
-    shopId: idColumn("shop_id")
-      .$type<ShopId>()
-      .notNull()
-      .references(() => shop.id),
+    shopId: shopIdColumn(),
     boardId: idColumn("board_id")
       .notNull()
       .references(() => board.id),

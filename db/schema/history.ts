@@ -1,8 +1,7 @@
 import { index, mysqlTable, varchar } from "drizzle-orm/mysql-core";
 import { z } from "zod";
 import { idColumn, jsonOf, utcColumn } from "../columns";
-import type { ShopId } from "../shop-id";
-import { shop } from "./shop";
+import { shopIdColumn } from "./shop";
 import { user } from "./user";
 
 /** Who did what to which thing, when. Written in the transaction that makes the change; never updated. */
@@ -10,10 +9,7 @@ export const history = mysqlTable(
   "history",
   {
     id: idColumn("id").primaryKey(),
-    shopId: idColumn("shop_id")
-      .$type<ShopId>()
-      .notNull()
-      .references(() => shop.id),
+    shopId: shopIdColumn(),
     at: utcColumn("at").notNull(),
     /** null: done by the system (a task). */
     userId: idColumn("user_id").references(() => user.id),

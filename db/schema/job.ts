@@ -1,17 +1,13 @@
 import { date, index, int, mysqlTable, text, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
 import { idColumn, utcColumn } from "../columns";
-import type { ShopId } from "../shop-id";
-import { shop } from "./shop";
+import { shopIdColumn } from "./shop";
 
 /** A piece of furniture or a commission: what the faces belong to. */
 export const job = mysqlTable(
   "job",
   {
     id: idColumn("id").primaryKey(),
-    shopId: idColumn("shop_id")
-      .$type<ShopId>()
-      .notNull()
-      .references(() => shop.id),
+    shopId: shopIdColumn(),
     number: int("number").notNull(),
     title: varchar("title", { length: 120 }).notNull(),
     client: varchar("client", { length: 120 }).notNull(),
@@ -34,10 +30,7 @@ export const face = mysqlTable(
   "face",
   {
     id: idColumn("id").primaryKey(),
-    shopId: idColumn("shop_id")
-      .$type<ShopId>()
-      .notNull()
-      .references(() => shop.id),
+    shopId: shopIdColumn(),
     jobId: idColumn("job_id")
       .notNull()
       .references(() => job.id),

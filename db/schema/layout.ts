@@ -1,10 +1,9 @@
 import { index, int, mysqlTable, primaryKey, uniqueIndex } from "drizzle-orm/mysql-core";
 import { faceLayoutSchema } from "@/lib/schemas/layout";
 import { idColumn, jsonOf, utcColumn } from "../columns";
-import type { ShopId } from "../shop-id";
 import { board } from "./board";
 import { face } from "./job";
-import { saw, shop } from "./shop";
+import { saw, shopIdColumn } from "./shop";
 import { straightening } from "./straightening";
 import { user } from "./user";
 
@@ -13,10 +12,7 @@ export const layout = mysqlTable(
   "layout",
   {
     id: idColumn("id").primaryKey(),
-    shopId: idColumn("shop_id")
-      .$type<ShopId>()
-      .notNull()
-      .references(() => shop.id),
+    shopId: shopIdColumn(),
     faceId: idColumn("face_id")
       .notNull()
       .references(() => face.id),
@@ -46,10 +42,7 @@ export const layoutBoard = mysqlTable(
     straighteningId: idColumn("straightening_id")
       .notNull()
       .references(() => straightening.id),
-    shopId: idColumn("shop_id")
-      .$type<ShopId>()
-      .notNull()
-      .references(() => shop.id),
+    shopId: shopIdColumn(),
   },
   (table) => [
     primaryKey({ columns: [table.layoutId, table.boardId] }),

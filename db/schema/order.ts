@@ -1,9 +1,8 @@
 import { char, index, int, mysqlTable, primaryKey, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
 import { orderSnapshotSchema, orderSummarySchema } from "@/lib/schemas/order-snapshot";
 import { idColumn, jsonOf, utcColumn } from "../columns";
-import type { ShopId } from "../shop-id";
 import { face, job } from "./job";
-import { shop } from "./shop";
+import { shopIdColumn } from "./shop";
 import { user } from "./user";
 
 /** A numbered cut order. What is cut is in its revisions. */
@@ -11,10 +10,7 @@ export const cutOrder = mysqlTable(
   "cut_order",
   {
     id: idColumn("id").primaryKey(),
-    shopId: idColumn("shop_id")
-      .$type<ShopId>()
-      .notNull()
-      .references(() => shop.id),
+    shopId: shopIdColumn(),
     number: int("number").notNull(),
     jobId: idColumn("job_id")
       .notNull()
@@ -40,10 +36,7 @@ export const cutOrderFace = mysqlTable(
     faceId: idColumn("face_id")
       .notNull()
       .references(() => face.id),
-    shopId: idColumn("shop_id")
-      .$type<ShopId>()
-      .notNull()
-      .references(() => shop.id),
+    shopId: shopIdColumn(),
   },
   (table) => [primaryKey({ columns: [table.orderId, table.faceId] }), index("cut_order_face_face").on(table.faceId)],
 );
@@ -53,10 +46,7 @@ export const orderRevision = mysqlTable(
   "order_revision",
   {
     id: idColumn("id").primaryKey(),
-    shopId: idColumn("shop_id")
-      .$type<ShopId>()
-      .notNull()
-      .references(() => shop.id),
+    shopId: shopIdColumn(),
     orderId: idColumn("order_id")
       .notNull()
       .references(() => cutOrder.id),
@@ -87,10 +77,7 @@ export const stepTick = mysqlTable(
       .notNull()
       .references(() => orderRevision.id),
     stepId: varchar("step_id", { length: 40 }).notNull(),
-    shopId: idColumn("shop_id")
-      .$type<ShopId>()
-      .notNull()
-      .references(() => shop.id),
+    shopId: shopIdColumn(),
     tickedBy: idColumn("ticked_by")
       .notNull()
       .references(() => user.id),

@@ -1,8 +1,7 @@
 import { char, index, int, mysqlTable, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
 import { pictureLevelsSchema } from "@/lib/schemas/photo";
 import { idColumn, jsonOf, utcColumn } from "../columns";
-import type { ShopId } from "../shop-id";
-import { shop } from "./shop";
+import { shopIdColumn } from "./shop";
 import { user } from "./user";
 
 /** A photograph as it was taken in. The original is private; only the upright picture without private tags is served. */
@@ -10,10 +9,7 @@ export const photo = mysqlTable(
   "photo",
   {
     id: idColumn("id").primaryKey(),
-    shopId: idColumn("shop_id")
-      .$type<ShopId>()
-      .notNull()
-      .references(() => shop.id),
+    shopId: shopIdColumn(),
     /** Made by the sender, once a file: a retried upload finds its first try. */
     uploadKey: varchar("upload_key", { length: 64 }).notNull(),
     fileName: varchar("file_name", { length: 255 }).notNull(),

@@ -1,7 +1,6 @@
 import { index, mysqlTable, varchar } from "drizzle-orm/mysql-core";
 import { idColumn, utcColumn } from "../columns";
-import type { ShopId } from "../shop-id";
-import { shop } from "./shop";
+import { shopIdColumn } from "./shop";
 import { user } from "./user";
 
 /** A signed-in device. The cookie carries the id only; a row that is gone or past its end signs the device out. */
@@ -12,10 +11,7 @@ export const session = mysqlTable(
     userId: idColumn("user_id")
       .notNull()
       .references(() => user.id),
-    shopId: idColumn("shop_id")
-      .$type<ShopId>()
-      .notNull()
-      .references(() => shop.id),
+    shopId: shopIdColumn(),
     device: varchar("device", { length: 200 }).notNull(),
     createdAt: utcColumn("created_at").notNull(),
     expiresAt: utcColumn("expires_at").notNull(),

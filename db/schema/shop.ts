@@ -24,15 +24,19 @@ export const shop = mysqlTable("shop", {
   createdAt: utcColumn("created_at").notNull(),
 });
 
+/** Whose row it is: on every table of a shop's own. */
+export const shopIdColumn = () =>
+  idColumn("shop_id")
+    .$type<ShopId>()
+    .notNull()
+    .references(() => shop.id);
+
 /** A saw of the shop with what it takes from the wood. */
 export const saw = mysqlTable(
   "saw",
   {
     id: idColumn("id").primaryKey(),
-    shopId: idColumn("shop_id")
-      .$type<ShopId>()
-      .notNull()
-      .references(() => shop.id),
+    shopId: shopIdColumn(),
     name: varchar("name", { length: 80 }).notNull(),
     kind: varchar("kind", { length: 8, enum: ["table", "track", "band", "hand"] }).notNull(),
     kerf: umColumn("kerf_um").notNull(),

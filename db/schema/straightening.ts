@@ -4,10 +4,9 @@ import { pictureLevelsSchema } from "@/lib/schemas/photo";
 import { straighteningStates } from "@/lib/schemas/straightening";
 import { keepClearKinds, keepClearShapeSchema, outlineSchema } from "@/lib/schemas/zones";
 import { idColumn, jsonOf, umColumn, utcColumn } from "../columns";
-import type { ShopId } from "../shop-id";
 import { board } from "./board";
 import { photo } from "./photo";
-import { shop } from "./shop";
+import { shopIdColumn } from "./shop";
 import { task } from "./task";
 import { user } from "./user";
 
@@ -19,10 +18,7 @@ export const straightening = mysqlTable(
   "straightening",
   {
     id: idColumn("id").primaryKey(),
-    shopId: idColumn("shop_id")
-      .$type<ShopId>()
-      .notNull()
-      .references(() => shop.id),
+    shopId: shopIdColumn(),
     boardId: idColumn("board_id")
       .notNull()
       .references(() => board.id),
@@ -65,10 +61,7 @@ export const boardPicture = mysqlTable("board_picture", {
   straighteningId: idColumn("straightening_id")
     .notNull()
     .references(() => straightening.id),
-  shopId: idColumn("shop_id")
-    .$type<ShopId>()
-    .notNull()
-    .references(() => shop.id),
+  shopId: shopIdColumn(),
 });
 
 /** An area of a board that no show piece may touch. */
@@ -76,10 +69,7 @@ export const keepClear = mysqlTable(
   "keep_clear",
   {
     id: idColumn("id").primaryKey(),
-    shopId: idColumn("shop_id")
-      .$type<ShopId>()
-      .notNull()
-      .references(() => shop.id),
+    shopId: shopIdColumn(),
     straighteningId: idColumn("straightening_id")
       .notNull()
       .references(() => straightening.id),

@@ -2,8 +2,7 @@ import { double, index, int, mysqlTable, text, varchar } from "drizzle-orm/mysql
 import { z } from "zod";
 import { taskKinds, taskStates } from "@/lib/schemas/task";
 import { idColumn, jsonOf, utcColumn } from "../columns";
-import type { ShopId } from "../shop-id";
-import { shop } from "./shop";
+import { shopIdColumn } from "./shop";
 import { user } from "./user";
 
 /**
@@ -14,10 +13,7 @@ export const task = mysqlTable(
   "task",
   {
     id: idColumn("id").primaryKey(),
-    shopId: idColumn("shop_id")
-      .$type<ShopId>()
-      .notNull()
-      .references(() => shop.id),
+    shopId: shopIdColumn(),
     kind: varchar("kind", { length: 24, enum: taskKinds }).notNull(),
     /** What it works on, in the shape its kind asks for; the worker parses it. */
     payload: jsonOf(z.json())("payload").notNull(),

@@ -1,7 +1,6 @@
 import { index, mysqlTable, primaryKey, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
 import { idColumn, utcColumn } from "../columns";
-import type { ShopId } from "../shop-id";
-import { shop } from "./shop";
+import { shopIdColumn } from "./shop";
 
 /** A person who can sign in. */
 export const user = mysqlTable(
@@ -21,10 +20,7 @@ export const user = mysqlTable(
 export const membership = mysqlTable(
   "membership",
   {
-    shopId: idColumn("shop_id")
-      .$type<ShopId>()
-      .notNull()
-      .references(() => shop.id),
+    shopId: shopIdColumn(),
     userId: idColumn("user_id")
       .notNull()
       .references(() => user.id),

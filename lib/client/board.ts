@@ -7,7 +7,6 @@ import { call } from "./call";
 export const boardKeys = {
   all: ["boards"] as const,
   page: (query: QuerySent<typeof endpoint.listBoards>) => ["boards", "page", query] as const,
-  one: (boardId: string) => ["boards", boardId] as const,
 };
 
 /** One page of the rack; while the next one loads, the last one stays in view. */
@@ -16,12 +15,6 @@ export const boardPageQuery = (query: QuerySent<typeof endpoint.listBoards>) =>
     queryKey: boardKeys.page(query),
     queryFn: ({ signal }) => call(endpoint.listBoards, { query }, signal),
     placeholderData: keepPreviousData,
-  });
-
-export const boardQuery = (boardId: string) =>
-  queryOptions({
-    queryKey: boardKeys.one(boardId),
-    queryFn: ({ signal }) => call(endpoint.getBoard, { params: { boardId } }, signal),
   });
 
 export const createBoard = (body: BodySent<typeof endpoint.createBoard>) => call(endpoint.createBoard, { body });

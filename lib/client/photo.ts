@@ -5,16 +5,9 @@ import { call } from "./call";
 
 export const photoKeys = {
   loose: ["photos", "loose"] as const,
-  one: (photoId: string) => ["photos", photoId] as const,
 };
 
 export const loosePhotosQuery = () =>
   queryOptions({ queryKey: photoKeys.loose, queryFn: ({ signal }) => call(endpoint.listLoosePhotos, {}, signal) });
-
-export const photoQuery = (photoId: string) =>
-  queryOptions({
-    queryKey: photoKeys.one(photoId),
-    queryFn: ({ signal }) => call(endpoint.getPhoto, { params: { photoId } }, signal),
-  });
 
 export const deletePhoto = (photoId: string) => call(endpoint.deletePhoto, { params: { photoId } });

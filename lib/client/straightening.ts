@@ -6,19 +6,12 @@ import { call } from "./call";
 
 export const straighteningKeys = {
   one: (straighteningId: string) => ["straightenings", straighteningId] as const,
-  ofBoard: (boardId: string) => ["straightenings", "of-board", boardId] as const,
 };
 
 export const straighteningQuery = (straighteningId: string) =>
   queryOptions({
     queryKey: straighteningKeys.one(straighteningId),
     queryFn: ({ signal }) => call(endpoint.getStraightening, { params: { straighteningId } }, signal),
-  });
-
-export const straighteningsQuery = (boardId: string) =>
-  queryOptions({
-    queryKey: straighteningKeys.ofBoard(boardId),
-    queryFn: ({ signal }) => call(endpoint.listStraightenings, { params: { boardId } }, signal),
   });
 
 export const startStraightening = (boardId: string, body: BodySent<typeof endpoint.startStraightening>) =>

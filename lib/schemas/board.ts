@@ -1,6 +1,6 @@
 /** Boards in the rack. */
 import { z } from "zod";
-import { defineEndpoint } from "./endpoint";
+import { defineEndpoint, everyone, makers } from "./endpoint";
 import { idSchema } from "./ids";
 import { sizeUmSchema, umSchema } from "./length";
 import { servedLevelSchema } from "./photo";
@@ -88,8 +88,6 @@ export const boardPageSchema = z.object({
   species: z.array(z.string()),
 });
 
-const makers = ["owner", "maker"] as const;
-const everyone = ["owner", "maker", "assistant"] as const;
 const params = z.object({ boardId: idSchema });
 
 export const listBoards = defineEndpoint({

@@ -7,6 +7,11 @@ import type { z } from "zod";
 export const roles = ["owner", "maker", "assistant"] as const;
 export type Role = (typeof roles)[number];
 
+/** Who may read the shop's things. */
+export const everyone = roles;
+/** Who may change stock, jobs, layouts and orders. */
+export const makers = ["owner", "maker"] as const;
+
 /** Who may call: anybody, or members of the shop with one of these roles. */
 export type EndpointAccess = "public" | readonly Role[];
 export type Method = "GET" | "POST" | "PUT" | "PATCH" | "DELETE";

@@ -1,6 +1,6 @@
 /** Jobs and their faces. */
 import { z } from "zod";
-import { defineEndpoint } from "./endpoint";
+import { defineEndpoint, everyone, makers } from "./endpoint";
 import { idSchema } from "./ids";
 import { cutLossSchema, gridFaceSchema } from "./layout";
 
@@ -38,8 +38,6 @@ export type JobRow = z.output<typeof jobRowSchema>;
 export const jobSchema = jobRowSchema.extend({ faceList: z.array(faceRowSchema) });
 export type Job = z.output<typeof jobSchema>;
 
-const makers = ["owner", "maker"] as const;
-const everyone = ["owner", "maker", "assistant"] as const;
 const params = z.object({ jobId: idSchema });
 
 export const listJobs = defineEndpoint({

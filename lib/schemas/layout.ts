@@ -1,7 +1,7 @@
 /** The layout document on the wire: the core's FaceLayout, checked. */
 import { z } from "zod";
 import type { FaceLayout } from "@/lib/layout";
-import { defineEndpoint } from "./endpoint";
+import { defineEndpoint, everyone, makers } from "./endpoint";
 import { idSchema } from "./ids";
 import { allowanceUmSchema, pointSchema, sizeUmSchema } from "./length";
 import { spokenForSchema } from "./spoken-for";
@@ -91,8 +91,6 @@ export const layoutSchema = z.object({
 });
 export type Layout = z.output<typeof layoutSchema>;
 
-const makers = ["owner", "maker"] as const;
-const everyone = ["owner", "maker", "assistant"] as const;
 const faceParams = z.object({ faceId: idSchema });
 
 export const getLayout = defineEndpoint({

@@ -1,6 +1,6 @@
 /** Cut orders: issue, read, print, tick. */
 import { z } from "zod";
-import { defineEndpoint } from "./endpoint";
+import { defineEndpoint, everyone, makers } from "./endpoint";
 import { idSchema } from "./ids";
 import { orderSnapshotSchema } from "./order-snapshot";
 
@@ -41,8 +41,6 @@ export const orderSchema = orderRowSchema.extend({
 });
 export type Order = z.output<typeof orderSchema>;
 
-const makers = ["owner", "maker"] as const;
-const everyone = ["owner", "maker", "assistant"] as const;
 const params = z.object({ orderId: idSchema });
 const revisionQuery = z.object({ revision: z.coerce.number().int().min(1).optional() });
 

@@ -1,6 +1,6 @@
 /** Photographs taken in. */
 import { z } from "zod";
-import { defineEndpoint } from "./endpoint";
+import { defineEndpoint, everyone, makers } from "./endpoint";
 import { idSchema } from "./ids";
 
 /** One stored size of a picture. Level 0 is the largest; each next one half of it. */
@@ -37,7 +37,7 @@ export const uploadPhoto = defineEndpoint({
   path: "/api/photos",
   summary: "Take in a photograph; sent again with the same upload key it answers with the first one",
   tag: "photos",
-  access: ["owner", "maker", "assistant"],
+  access: everyone,
   query: z.object({ uploadKey: z.string().regex(/^[\w-]{8,64}$/), fileName: z.string().min(1).max(255) }),
   bodyKind: "bytes",
   response: photoSchema,
@@ -48,7 +48,7 @@ export const getPhoto = defineEndpoint({
   path: "/api/photos/{photoId}",
   summary: "One photograph",
   tag: "photos",
-  access: ["owner", "maker", "assistant"],
+  access: everyone,
   params: z.object({ photoId: idSchema }),
   response: photoSchema,
 });
@@ -58,7 +58,7 @@ export const listLoosePhotos = defineEndpoint({
   path: "/api/photos",
   summary: "Photographs taken in and not yet used for a board, newest first",
   tag: "photos",
-  access: ["owner", "maker", "assistant"],
+  access: everyone,
   query: z.object({ limit: z.coerce.number().int().min(1).max(100).default(50) }),
   response: z.object({ items: z.array(photoSchema) }),
 });
@@ -68,7 +68,7 @@ export const deletePhoto = defineEndpoint({
   path: "/api/photos/{photoId}",
   summary: "Remove a photograph that no board uses, with its files",
   tag: "photos",
-  access: ["owner", "maker"],
+  access: makers,
   params: z.object({ photoId: idSchema }),
   response: null,
 });
@@ -78,7 +78,7 @@ export const getPhotoLevel = defineEndpoint({
   path: "/api/photos/{photoId}/levels/{level}",
   summary: "The upright picture at one size",
   tag: "photos",
-  access: ["owner", "maker", "assistant"],
+  access: everyone,
   params: z.object({ photoId: idSchema, level: z.coerce.number().int().min(0).max(11) }),
   responseKind: "image/jpeg",
 });

@@ -1,6 +1,6 @@
 /** The shop's settings and saws. */
 import { z } from "zod";
-import { defineEndpoint, roles } from "./endpoint";
+import { defineEndpoint, makers, roles } from "./endpoint";
 import { idSchema } from "./ids";
 import { allowanceUmSchema, sizeUmSchema } from "./length";
 
@@ -58,7 +58,7 @@ export const createSaw = defineEndpoint({
   path: "/api/shop/saws",
   summary: "Add a saw",
   tag: "shop",
-  access: ["owner", "maker"],
+  access: makers,
   body: saveSawSchema,
   response: sawSchema,
 });
@@ -68,7 +68,7 @@ export const updateSaw = defineEndpoint({
   path: "/api/shop/saws/{sawId}",
   summary: "Change a saw; layouts keep the loss they were given",
   tag: "shop",
-  access: ["owner", "maker"],
+  access: makers,
   params: z.object({ sawId: idSchema }),
   body: saveSawSchema,
   response: sawSchema,

@@ -1,6 +1,6 @@
 /** Versions of a board's straightened picture. */
 import { z } from "zod";
-import { defineEndpoint } from "./endpoint";
+import { defineEndpoint, everyone, makers } from "./endpoint";
 import { idSchema } from "./ids";
 import { sizeUmSchema, umSchema } from "./length";
 import { markingSchema } from "./marking";
@@ -29,15 +29,12 @@ export const straighteningSchema = z.object({
 });
 export type Straightening = z.output<typeof straighteningSchema>;
 
-const ownAndMaker = ["owner", "maker"] as const;
-const everyone = ["owner", "maker", "assistant"] as const;
-
 export const startStraightening = defineEndpoint({
   method: "POST",
   path: "/api/boards/{boardId}/straightenings",
   summary: "Mark a photograph and have it straightened; makes a new version, earlier layouts keep theirs",
   tag: "straightenings",
-  access: ownAndMaker,
+  access: makers,
   params: z.object({ boardId: idSchema }),
   body: z.object({ photoId: idSchema, marking: markingSchema }),
   response: straighteningSchema,
@@ -68,7 +65,7 @@ export const saveZones = defineEndpoint({
   path: "/api/straightenings/{straighteningId}/zones",
   summary: "Save outline and keep-clear areas as one; a conflict names the present revision",
   tag: "straightenings",
-  access: ownAndMaker,
+  access: makers,
   params: z.object({ straighteningId: idSchema }),
   body: zonesSaveSchema,
   response: zonesSchema,
@@ -83,6 +80,3 @@ export const getStraighteningLevel = defineEndpoint({
   params: z.object({ straighteningId: idSchema, level: z.coerce.number().int().min(0).max(11) }),
   responseKind: "image/jpeg",
 });
-
-/** A distance the user has measured on the real board, checked against the straightened picture. */
-export const knownDistanceSchema = z.object({ measured: sizeUmSchema });

@@ -1,6 +1,6 @@
 /** Long work that runs off the request thread. */
 import { z } from "zod";
-import { defineEndpoint } from "./endpoint";
+import { defineEndpoint, everyone, makers } from "./endpoint";
 import { idSchema } from "./ids";
 
 export const taskKinds = ["straighten"] as const;
@@ -21,7 +21,7 @@ export const getTask = defineEndpoint({
   path: "/api/tasks/{taskId}",
   summary: "How far a task is",
   tag: "tasks",
-  access: ["owner", "maker", "assistant"],
+  access: everyone,
   params: z.object({ taskId: idSchema }),
   response: taskSchema,
 });
@@ -31,7 +31,7 @@ export const cancelTask = defineEndpoint({
   path: "/api/tasks/{taskId}/cancel",
   summary: "Ask a task to stop; it leaves nothing half done",
   tag: "tasks",
-  access: ["owner", "maker"],
+  access: makers,
   params: z.object({ taskId: idSchema }),
   response: taskSchema,
 });
