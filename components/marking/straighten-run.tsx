@@ -6,7 +6,7 @@ import Link from "next/link";
 import { useEffect } from "react";
 import { boardKeys } from "@/lib/client/board";
 import { messageOf } from "@/lib/client/fault-from-server";
-import { straighteningKeys, straighteningQuery } from "@/lib/client/straightening";
+import { straighteningQuery } from "@/lib/client/straightening";
 import { cancelTask, taskEnded, taskQuery } from "@/lib/client/task";
 import type { Straightening } from "@/lib/schemas/straightening";
 import { WoodStrip } from "../picture/wood-strip";
@@ -29,7 +29,7 @@ export function StraightenRun({ started, onAgain }: Props) {
   useEffect(() => {
     if (!ended) return;
     void client.invalidateQueries({ queryKey: boardKeys.all });
-  }, [ended, client, started.boardId]);
+  }, [ended, client]);
 
   if (version?.state === "done") return <Finished version={version} onAgain={onAgain} />;
   if (version?.state === "failed" || version?.state === "cancelled") {
