@@ -7,6 +7,7 @@ import { FaceDrawing } from "@/components/face/face-drawing";
 import { Button, buttonClass } from "@/components/ui/button";
 import { Empty } from "@/components/ui/empty";
 import { Modal } from "@/components/ui/modal";
+import { Notice } from "@/components/ui/notice";
 import { PageTitle } from "@/components/ui/page-title";
 import { messageOf } from "@/lib/client/fault-from-server";
 import { deleteFace, jobKeys, jobQuery, updateJob } from "@/lib/client/job";
@@ -15,16 +16,17 @@ import { revisionLetter } from "@/lib/words/revision-letter";
 import { JobForm } from "./job-form";
 
 export function JobPage({ initial, mayEdit }: { initial: Job; mayEdit: boolean }) {
-  const { data: job = initial } = useQuery({ ...jobQuery(initial.id), initialData: initial });
+  const { data: job = initial, refetch } = useQuery({ ...jobQuery(initial.id), initialData: initial });
   const [editing, setEditing] = useState(false);
-  const client = useQueryClient();
-  const change = useMutation({
-    mutationFn: (body: Parameters<typeof updateJob>[1]) => updateJob(job.id, body),
-    onSuccess: (saved) => {
-      client.setQueryData(jobKeys.one(job.id), saved);
-      setEditing(false);
-    },
-  });
+  // Each says in its own place what went wrong: the dialog, and the page under its heading.
+  const change = useChangeJob(job.id);
+  const openOrClose = useChangeJob(job.id);
+  const closeDialog = () => {
+    setEditing(false);
+    // What others changed meanwhile is read only now: under an open dialog it would be overwritten unseen.
+    if (change.error) refetch();
+    change.reset();
+  };
   const addFace = mayEdit && (
     <Link href={`/jobs/${job.id}/faces/new`} className={buttonClass("primary")}>
       Add a face
@@ -37,8 +39,13 @@ export function JobPage({ initial, mayEdit }: { initial: Job; mayEdit: boolean }
           <>
             <Button onClick={() => setEditing(true)}>Change</Button>
             <Button
-              disabled={change.isPending}
-              onClick={() => change.mutate({ baseRevision: job.revision, state: job.state === "open" ? "closed" : "open" })}
+              disabled={openOrClose.isPending}
+              onClick={() =>
+                openOrClose.mutate(
+                  { baseRevision: job.revision, state: job.state === "open" ? "closed" : "open" },
+                  { onError: () => refetch() },
+                )
+              }
             >
               {job.state === "open" ? "Close job" : "Open again"}
             </Button>
@@ -46,6 +53,13 @@ export function JobPage({ initial, mayEdit }: { initial: Job; mayEdit: boolean }
         )}
         {addFace}
       </PageTitle>
+      {openOrClose.error && (
+        <div className="px-4 pt-4 md:px-5">
+          <Notice kind="stop">
+            The job is not {openOrClose.variables.state === "closed" ? "closed" : "opened again"}. {messageOf(openOrClose.error)}
+          </Notice>
+        </div>
+      )}
       {job.note && <p className="max-w-prose px-4 pt-4 whitespace-pre-line md:px-5">{job.note}</p>}
       {job.faceList.length === 0 ? (
         <Empty title="No faces yet" action={addFace}>
@@ -58,17 +72,25 @@ export function JobPage({ initial, mayEdit }: { initial: Job; mayEdit: boolean }
           ))}
         </ul>
       )}
-      <Modal open={editing} onOpenChange={setEditing} title="Change job">
+      <Modal open={editing} onOpenChange={(open) => (open ? setEditing(true) : closeDialog())} title="Change job">
         <JobForm
           values={job}
           submit="Save"
           pending={change.isPending}
           error={change.error}
-          onSubmit={(values) => change.mutate({ baseRevision: job.revision, ...values })}
+          onSubmit={(values) => change.mutate({ baseRevision: job.revision, ...values }, { onSuccess: () => setEditing(false) })}
         />
       </Modal>
     </>
   );
+}
+
+function useChangeJob(jobId: string) {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: (body: Parameters<typeof updateJob>[1]) => updateJob(jobId, body),
+    onSuccess: (saved) => client.setQueryData(jobKeys.one(jobId), saved),
+  });
 }
 
 function JobFacts({ job }: { job: Job }) {

@@ -3,6 +3,7 @@
 import { useQuery } from "@tanstack/react-query";
 import Link from "next/link";
 import { useEffect } from "react";
+import { messageOf } from "@/lib/client/fault-from-server";
 import { orderPdfUrl, orderQuery, progressQuery } from "@/lib/client/order";
 import type { Order } from "@/lib/schemas/order";
 import { orderSteps } from "@/lib/schemas/order-steps";
@@ -28,8 +29,8 @@ interface Props {
 }
 
 export function OrderPage({ initial, revision, paper, qr }: Props) {
-  const { data: order, refetch } = useQuery({ ...orderQuery(initial.id, revision), initialData: initial });
-  const { data: progress } = useQuery({
+  const { data: order, error: orderError, refetch } = useQuery({ ...orderQuery(initial.id, revision), initialData: initial });
+  const { data: progress, error: progressError } = useQuery({
     ...progressQuery(order.id, order.revisionId),
     initialData: {
       ticks: order.ticks,
@@ -48,6 +49,7 @@ export function OrderPage({ initial, revision, paper, qr }: Props) {
   const done = steps.map(({ id }) => ticks.has(id));
   const next = done.indexOf(false);
   const letter = revisionLetter(order.revision);
+  const connectionError = progressError ?? orderError;
   const pdf = (size: "a4" | "letter") => orderPdfUrl(order.id, { paper: size, revision: order.revision });
   return (
     <>
@@ -72,6 +74,11 @@ export function OrderPage({ initial, revision, paper, qr }: Props) {
       <ProgressTape steps={steps.length} done={done} at={next < 0 || progress.superseded ? null : next} />
       <div className="grid items-start gap-5 p-4 md:p-5 lg:grid-cols-[minmax(0,1fr)_20rem]">
         <div className="flex min-w-0 flex-col gap-4">
+          {connectionError && (
+            <Notice kind="care">
+              {messageOf(connectionError)} What you see may be old: what others do is not shown until then.
+            </Notice>
+          )}
           {progress.superseded && <Superseded order={order} newest={progress.newestRevision} />}
           {next < 0 && <Notice kind="sound">Every step is ticked.</Notice>}
           <OrderStepsTable order={order} steps={steps} ticks={ticks} />
