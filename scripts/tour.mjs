@@ -23,13 +23,16 @@ try {
   const answer = await context.request.post("/api/session", { data: maker, headers: { origin: address } });
   if (!answer.ok()) throw new Error(`${address} does not let the demo's maker in: ${answer.status()}`);
   const page = await context.newPage();
+  /** @param {string} where @returns {Promise<any>} as the API answers */
   const get = async (where) => (await context.request.get(where)).json();
 
-  const boards = (await get("/api/boards?pageSize=100")).items.filter(({ straighteningId }) => straighteningId !== null);
+  const boards = (await get("/api/boards?pageSize=100")).items.filter(
+    (/** @type {{ straighteningId: string | null }} */ board) => board.straighteningId !== null,
+  );
   const [straightened] = (await get(`/api/boards/${boards[0].id}/straightenings`)).items;
   const job = await jobCalled("Map chest");
   const orders = (await get("/api/orders?state=issued")).items;
-  const atBench = orders.find(({ ticked }) => ticked > 0) ?? orders[0];
+  const atBench = orders.find((/** @type {{ ticked: number }} */ order) => order.ticked > 0) ?? orders[0];
 
   await shoot("rack", "/rack");
   await shoot("marking", `/rack/${boards[0].id}/mark?photo=${straightened.photoId}`);
@@ -38,12 +41,14 @@ try {
   await shoot("bench", `/bench/${atBench.id}`);
   await paper("cut-order", `/api/orders/${atBench.id}/pdf?paper=a4`);
 
+  /** @param {string} title */
   async function jobCalled(title) {
     const { items } = await get(`/api/jobs?search=${encodeURIComponent(title)}`);
     if (!items[0]) throw new Error(`the demo has no job called ${title}`);
     return get(`/api/jobs/${items[0].id}`);
   }
 
+  /** @param {string} name @param {string} where */
   async function shoot(name, where) {
     await page.goto(where, { waitUntil: "networkidle" });
     // Pictures fade in from smaller levels.
@@ -52,6 +57,7 @@ try {
     say(`docs/tour/${name}.png`);
   }
 
+  /** @param {string} name @param {string} where */
   async function paper(name, where) {
     const scratch = fs.mkdtempSync(path.join(os.tmpdir(), "tour-"));
     fs.writeFileSync(path.join(scratch, "order.pdf"), await (await context.request.get(where)).body());
