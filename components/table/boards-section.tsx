@@ -9,6 +9,7 @@ import { Notice } from "@/components/ui/notice";
 import { messageOf } from "@/lib/client/fault-from-server";
 import { moveToVersion, takeBoardOffTable } from "@/lib/client/layout";
 import { type TableBoard, tableBoard } from "@/lib/editor/table-board";
+import { heldBySentence } from "@/lib/words/held-by";
 import { AddBoardDialog } from "./add-board-dialog";
 import { PanelSection } from "./panel-section";
 import { useTableActions } from "./table-actions";
@@ -76,9 +77,12 @@ function BoardOnTable({ board }: { board: TableBoard }) {
           {board.place && `, ${board.place}`}
         </span>
       </p>
-      {board.heldBy.map(({ faceId: holder, faceTitle, jobTitle }) => (
-        <Notice key={holder} kind="care">
-          Also laid out for {faceTitle} ({jobTitle}).
+      {board.heldBy.map((holder) => (
+        <Notice key={holder.faceId} kind="care">
+          {heldBySentence(
+            holder,
+            board.spokenFor.flatMap((wood) => (wood.faceId === holder.faceId ? wood.label : [])),
+          )}
         </Notice>
       ))}
       {newer !== null && (

@@ -11,6 +11,7 @@ import type { Layout } from "@/lib/schemas/layout";
 import { standsInTheWay } from "@/lib/schemas/spoken-for";
 import { revisionLetter } from "@/lib/words/revision-letter";
 import { useEditorState, useTableContext } from "./table-context";
+import { useFreshBoards } from "./use-fresh-boards";
 import { useNamed } from "./use-named";
 import type { Problems } from "./use-problems";
 
@@ -27,6 +28,7 @@ export function IssueButton({ problems: { found, working }, order, openedAt }: P
   const document = useEditorState((state) => state.document);
   const { woodOf } = useNamed();
   const inTheWay = found.filter((problem) => standsInTheWay(problem, woodOf)).length;
+  const refreshBoards = useFreshBoards();
   const reasonId = useId();
   const pictures = useEditorState(picturesUsed);
   const [openedOn] = useState(pictures);
@@ -36,6 +38,8 @@ export function IssueButton({ problems: { found, working }, order, openedAt }: P
       const issued = await issueOrder(faceId, sync.revision());
       return { ...issued, document: editor.get().document, pictures: picturesUsed(editor.get()) };
     },
+    // It may have been refused for what another face was given meanwhile.
+    onError: refreshBoards,
   });
   const issued = issue.data;
   const current = issued ?? order;

@@ -2,7 +2,9 @@
 /** The fronts as a list that is not seen: what is drawn on the canvases, for the keyboard and for those who hear the page. */
 import { useUnits } from "@/components/shell/units";
 import { factsOf, piecesOfProblem, problemsOf } from "@/lib/editor/selectors/facts";
-import { boundsOf, groupOf, polygonToStock, SET_ID } from "@/lib/layout";
+import type { TableBoard } from "@/lib/editor/table-board";
+import { boundsOf, groupOf, polygonToStock, SET_ID, type StockRect } from "@/lib/layout";
+import { spokenForWords } from "@/lib/words/held-by";
 import { useEditorState, useTableContext } from "./table-context";
 
 export function PieceList() {
@@ -16,12 +18,13 @@ export function PieceList() {
   const trouble = new Set(problemsOf(layout, faces).flatMap(piecesOfProblem));
   const lying = new Map(pieces.map((piece) => [piece.id, piece]));
 
+  const placeOn = ({ tag }: TableBoard, { x, y }: StockRect) =>
+    `on board ${tag}, ${print(x)} from the left end, ${print(y)} from the edge`;
   const described = facePieces.map(({ id, label, rect }) => {
     const piece = lying.get(id);
     const board = piece && boards.find(({ face }) => face.id === piece.stockId);
     const at = piece && boundsOf(polygonToStock(piece.stockFromFace, piece.outline));
-    const where =
-      at && board ? `on board ${board.tag}, ${print(at.x)} from the left end, ${print(at.y)} from the edge` : "no wood yet";
+    const where = at && board ? placeOn(board, at) : "no wood yet";
     const loose = groupOf(layout, id)?.id === SET_ID ? "" : ", loose";
     return {
       id,
@@ -29,21 +32,28 @@ export function PieceList() {
     };
   });
   return (
-    <ul aria-label="Fronts" className="sr-only">
-      {described.map(({ id, text }) => (
-        <li key={id}>
-          <button
-            type="button"
-            aria-pressed={selection.includes(id)}
-            onFocus={() => {
-              if (!editor.get().selection.includes(id)) editor.select([id]);
-            }}
-            onClick={() => editor.toggle(id)}
-          >
-            {text}
-          </button>
-        </li>
-      ))}
-    </ul>
+    <div className="sr-only">
+      <ul aria-label="Fronts">
+        {described.map(({ id, text }) => (
+          <li key={id}>
+            <button
+              type="button"
+              aria-pressed={selection.includes(id)}
+              onFocus={() => {
+                if (!editor.get().selection.includes(id)) editor.select([id]);
+              }}
+              onClick={() => editor.toggle(id)}
+            >
+              {text}
+            </button>
+          </li>
+        ))}
+      </ul>
+      <ul aria-label="Fronts of other faces on these boards">
+        {boards.flatMap((board) =>
+          board.spokenFor.map((wood) => <li key={wood.id}>{spokenForWords(wood, placeOn(board, wood.rect))}</li>),
+        )}
+      </ul>
+    </div>
   );
 }

@@ -1,9 +1,10 @@
-/** The lowest layer of the stock side: boards as photographed, their tapes, names, outlines and keep-clear areas. Still while pieces are dragged. */
+/** The lowest layer of the stock side: boards as photographed, their tapes, names, outlines, keep-clear areas and what other faces take. Still while pieces are dragged. */
 import type { StaticCanvas } from "fabric";
 import { type LengthStyle, printLength } from "@/lib/layout";
 import { tapeMarks } from "@/lib/words/tape-marks";
 import type { TableBoard } from "../table-board";
 import { BOARD_SPACE_PX, TAPE_PX, type TableGeometry } from "../view/geometry";
+import { paintSpokenFor } from "./marks/spoken-for";
 import { paintTape } from "./marks/tape-strip";
 import { paintBoard } from "./marks/wood";
 import { paintZones } from "./marks/zones";
@@ -39,6 +40,7 @@ export class BoardsLayer {
       const picture = pictures.at(board, scale * window.devicePixelRatio);
       this.#sketches.named(`${id} wood`).put(box, paintBoard(picture, visible, palette));
       this.#sketches.named(`${id} zones`).put(box, paintZones(board.face, scale, palette));
+      this.#sketches.named(`${id} spoken for`).put(box, paintSpokenFor(board.spokenFor, scale, palette));
       const marks = tapeMarks(length, scale, style.unit);
       const tape = { left: originX, top: top - TAPE_PX, width: box.width, height: TAPE_PX };
       this.#sketches.named(`${id} tape`).put(tape, paintTape(marks, scale, style.unit === "mm" ? "mm" : "in", palette));
