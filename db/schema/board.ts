@@ -1,7 +1,7 @@
 import { date, index, int, mysqlTable, smallint, text, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
 import { boardStates, cuts } from "@/lib/schemas/board";
 import { idColumn, minorUnitsColumn, umColumn, utcColumn } from "../columns";
-import { shopIdColumn } from "./shop";
+import { shopIdColumn } from "../shop-id-column";
 import { user } from "./user";
 
 /** A board in the rack. Its size is that of its current straightened picture (`boardPicture`), or was entered by hand. */

@@ -1,7 +1,7 @@
 import { index, mysqlTable, varchar } from "drizzle-orm/mysql-core";
 import { z } from "zod";
 import { idColumn, jsonOf, utcColumn } from "../columns";
-import { shopIdColumn } from "./shop";
+import { shopIdColumn } from "../shop-id-column";
 import { user } from "./user";
 
 /** Who did what to which thing, when. Written in the transaction that makes the change; never updated. */

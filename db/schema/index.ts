@@ -6,6 +6,7 @@ export * from "./layout";
 export * from "./order";
 export * from "./photo";
 export * from "./rate-limit";
+export * from "./saw";
 export * from "./session";
 export * from "./shop";
 export * from "./straightening";

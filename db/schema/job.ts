@@ -1,6 +1,6 @@
 import { date, index, int, mysqlTable, text, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
 import { idColumn, utcColumn } from "../columns";
-import { shopIdColumn } from "./shop";
+import { shopIdColumn } from "../shop-id-column";
 
 /** A piece of furniture or a commission: what the faces belong to. */
 export const job = mysqlTable(

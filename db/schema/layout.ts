@@ -1,9 +1,10 @@
 import { index, int, mysqlTable, primaryKey, uniqueIndex } from "drizzle-orm/mysql-core";
 import { faceLayoutSchema } from "@/lib/schemas/layout";
 import { idColumn, jsonOf, utcColumn } from "../columns";
+import { shopIdColumn } from "../shop-id-column";
 import { board } from "./board";
 import { face } from "./job";
-import { saw, shopIdColumn } from "./shop";
+import { saw } from "./saw";
 import { straightening } from "./straightening";
 import { user } from "./user";
 

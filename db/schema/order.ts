@@ -1,8 +1,8 @@
 import { char, index, int, mysqlTable, primaryKey, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
 import { orderSnapshotSchema, orderSummarySchema } from "@/lib/schemas/order-snapshot";
 import { idColumn, jsonOf, utcColumn } from "../columns";
+import { shopIdColumn } from "../shop-id-column";
 import { face, job } from "./job";
-import { shopIdColumn } from "./shop";
 import { user } from "./user";
 
 /** A numbered cut order. What is cut is in its revisions. */

@@ -1,7 +1,7 @@
 import { char, index, int, mysqlTable, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
 import { pictureLevelsSchema } from "@/lib/schemas/photo";
 import { idColumn, jsonOf, utcColumn } from "../columns";
-import { shopIdColumn } from "./shop";
+import { shopIdColumn } from "../shop-id-column";
 import { user } from "./user";
 
 /** A photograph as it was taken in. The original is private; only the upright picture without private tags is served. */

@@ -1,6 +1,6 @@
 import { index, mysqlTable, varchar } from "drizzle-orm/mysql-core";
 import { idColumn, utcColumn } from "../columns";
-import { shopIdColumn } from "./shop";
+import { shopIdColumn } from "../shop-id-column";
 import { user } from "./user";
 
 /** A signed-in device. The cookie carries the id only; a row that is gone or past its end signs the device out. */

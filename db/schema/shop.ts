@@ -1,4 +1,4 @@
-import { char, index, int, mysqlTable, smallint, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
+import { char, int, mysqlTable, smallint, varchar } from "drizzle-orm/mysql-core";
 import { idColumn, umColumn, utcColumn } from "../columns";
 import type { ShopId } from "../shop-id";
 
@@ -23,26 +23,3 @@ export const shop = mysqlTable("shop", {
   revision: int("revision").notNull(),
   createdAt: utcColumn("created_at").notNull(),
 });
-
-/** Whose row it is: on every table of a shop's own. */
-export const shopIdColumn = () =>
-  idColumn("shop_id")
-    .$type<ShopId>()
-    .notNull()
-    .references(() => shop.id);
-
-/** A saw of the shop with what it takes from the wood. */
-export const saw = mysqlTable(
-  "saw",
-  {
-    id: idColumn("id").primaryKey(),
-    shopId: shopIdColumn(),
-    name: varchar("name", { length: 80 }).notNull(),
-    kind: varchar("kind", { length: 8, enum: ["table", "track", "band", "hand"] }).notNull(),
-    kerf: umColumn("kerf_um").notNull(),
-    /** Taken off each sawn edge afterwards; 0 for an edge left from the saw. */
-    cleanUp: umColumn("clean_up_um").notNull(),
-  },
-  // Saws of a shop by name: the settings page and every saw picker.
-  (table) => [uniqueIndex("saw_shop_name").on(table.shopId, table.name), index("saw_shop").on(table.shopId)],
-);

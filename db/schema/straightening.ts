@@ -4,9 +4,9 @@ import { pictureLevelsSchema } from "@/lib/schemas/photo";
 import { straighteningStates } from "@/lib/schemas/straightening";
 import { keepClearKinds, keepClearShapeSchema, outlineSchema } from "@/lib/schemas/zones";
 import { idColumn, jsonOf, umColumn, utcColumn } from "../columns";
+import { shopIdColumn } from "../shop-id-column";
 import { board } from "./board";
 import { photo } from "./photo";
-import { shopIdColumn } from "./shop";
 import { task } from "./task";
 import { user } from "./user";
 

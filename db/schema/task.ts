@@ -2,7 +2,7 @@ import { double, index, int, mysqlTable, text, varchar } from "drizzle-orm/mysql
 import { z } from "zod";
 import { taskKinds, taskStates } from "@/lib/schemas/task";
 import { idColumn, jsonOf, utcColumn } from "../columns";
-import { shopIdColumn } from "./shop";
+import { shopIdColumn } from "../shop-id-column";
 import { user } from "./user";
 
 /**
