@@ -4,7 +4,7 @@
  */
 import { layoutFaults } from "@/lib/layout";
 import { applyDiff, diffBetween, touchedBy } from "./diff";
-import type { TableDocument } from "./document";
+import { sameBytes, type TableDocument } from "./document";
 
 export type Merge =
   | { readonly ok: true; readonly document: TableDocument }
@@ -13,6 +13,7 @@ export type Merge =
 
 /** `base` is what both started from. Symmetric in content: merging mine into theirs keeps the same changes as theirs into mine. */
 export function mergeDocuments(base: TableDocument, mine: TableDocument, theirs: TableDocument): Merge {
+  if (sameBytes(mine, theirs)) return { ok: true, document: theirs };
   const ours = diffBetween(base, mine);
   const touchedByThem = touchedBy(diffBetween(base, theirs));
   const both = [...touchedBy(ours)].filter((name) => touchedByThem.has(name)).sort();

@@ -183,6 +183,27 @@ describe("a second window", () => {
     }
   });
 
+  it("is not seen in our own save whose answer was lost, nor in what was changed after it", async () => {
+    const w = world();
+    const first = slid(rowDocument(), 1);
+    const second = slid(rowDocument(), 2);
+    w.sync.changed(first);
+    w.runTimers();
+    await w.answer({ kind: "unreachable" });
+    w.sync.changed(second);
+    w.sync.retryNow();
+    await w.answer({ kind: "conflict", theirs: { revision: 8, updatedBy: "me", document: first } });
+    expect(w.statuses).not.toContain("conflict");
+    expect(w.merged).toEqual([]);
+    expect(w.requests.at(-1)?.request).toEqual({ baseRevision: 8, document: second });
+    await w.answer({ kind: "saved", revision: 9 });
+    expect(w.statuses.at(-1)).toBe("saved");
+  });
+
+  it("that made the very same change leaves nothing to ask", () => {
+    expect(mergeDocuments(base, mine, slid(base, 5, loose))).toEqual({ ok: true, document: mine });
+  });
+
   it("merging keeps both sides' changes, from whichever side it is seen", () => {
     fc.assert(
       fc.property(fc.integer({ min: 1, max: 300 }), fc.integer({ min: 1, max: 300 }), (a, b) => {

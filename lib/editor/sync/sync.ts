@@ -58,6 +58,8 @@ export function createSync(world: SyncWorld, saved: TableDocument, revision: num
   let status: SyncStatus = { kind: "saved" };
   let callOff: (() => void) | null = null;
   let waiting: ((done: boolean) => void)[] = [];
+  /** Sent from the present base without an answer: any of them may have been saved all the same. */
+  let unanswered: TableDocument[] = [];
 
   const isSaving = () => status.kind === "saving";
 
@@ -94,21 +96,27 @@ export function createSync(world: SyncWorld, saved: TableDocument, revision: num
   const take = (outcome: SaveOutcome, sent: TableDocument) => {
     if (outcome.kind === "unreachable") {
       failures += 1;
+      unanswered.push(sent);
       show({ kind: "offline" });
       return later(retryDelay(failures), send);
     }
     failures = 0;
     if (outcome.kind === "refused") return show({ kind: "refused", message: outcome.message });
-    if (outcome.kind === "conflict") return takeConflict(outcome.theirs);
+    if (outcome.kind === "conflict") return takeConflict(outcome.theirs, sent);
     base = { document: sent, revision: outcome.revision };
+    unanswered = [];
     show({ kind: sameBytes(present, sent) ? "saved" : "saving" });
     if (isSaving()) void send();
   };
 
-  const takeConflict = (theirs: SavedElsewhere) => {
+  const takeConflict = (theirs: SavedElsewhere, sent: TableDocument) => {
+    // What stands there was sent from here and its answer was lost on the way: nobody else changed anything.
+    const own = [...unanswered, sent].find((document) => sameBytes(document, theirs.document));
+    if (own) return take({ kind: "saved", revision: theirs.revision }, own);
     const merge = mergeDocuments(base.document, present, theirs.document);
     if (!merge.ok) return show({ kind: "conflict", theirs });
     base = theirs;
+    unanswered = [];
     present = merge.document;
     show({ kind: "saving" });
     world.onMerged(merge.document, theirs.updatedBy, true);
@@ -127,6 +135,7 @@ export function createSync(world: SyncWorld, saved: TableDocument, revision: num
       if (status.kind !== "conflict") return;
       const { theirs } = status;
       base = theirs;
+      unanswered = [];
       if (keep === "theirs") {
         present = theirs.document;
         show({ kind: "saved" });
