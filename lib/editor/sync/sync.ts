@@ -93,7 +93,7 @@ export function createSync(world: SyncWorld, saved: TableDocument, revision: num
     take(outcome, sent);
   };
 
-  const take = (outcome: SaveOutcome, sent: TableDocument) => {
+  const take = (outcome: SaveOutcome, sent: TableDocument): void => {
     if (outcome.kind === "unreachable") {
       failures += 1;
       unanswered.push(sent);
@@ -109,7 +109,7 @@ export function createSync(world: SyncWorld, saved: TableDocument, revision: num
     if (isSaving()) void send();
   };
 
-  const takeConflict = (theirs: SavedElsewhere, sent: TableDocument) => {
+  const takeConflict = (theirs: SavedElsewhere, sent: TableDocument): void => {
     // What stands there was sent from here and its answer was lost on the way: nobody else changed anything.
     const own = [...unanswered, sent].find((document) => sameBytes(document, theirs.document));
     if (own) return take({ kind: "saved", revision: theirs.revision }, own);
