@@ -93,7 +93,14 @@ export function createSync(world: SyncWorld, saved: TableDocument, revision: num
     take(outcome, sent);
   };
 
-  const take = (outcome: SaveOutcome, sent: TableDocument): void => {
+  const takeSaved = (sent: TableDocument, savedAs: number) => {
+    base = { document: sent, revision: savedAs };
+    unanswered = [];
+    show({ kind: sameBytes(present, sent) ? "saved" : "saving" });
+    if (isSaving()) void send();
+  };
+
+  const take = (outcome: SaveOutcome, sent: TableDocument) => {
     if (outcome.kind === "unreachable") {
       failures += 1;
       unanswered.push(sent);
@@ -102,17 +109,14 @@ export function createSync(world: SyncWorld, saved: TableDocument, revision: num
     }
     failures = 0;
     if (outcome.kind === "refused") return show({ kind: "refused", message: outcome.message });
-    if (outcome.kind === "conflict") return takeConflict(outcome.theirs, sent);
-    base = { document: sent, revision: outcome.revision };
-    unanswered = [];
-    show({ kind: sameBytes(present, sent) ? "saved" : "saving" });
-    if (isSaving()) void send();
+    if (outcome.kind === "saved") return takeSaved(sent, outcome.revision);
+    // What stands there may have been sent from here, its answer lost on the way: then nobody else changed anything.
+    const { theirs } = outcome;
+    const own = [...unanswered, sent].find((document) => sameBytes(document, theirs.document));
+    return own ? takeSaved(own, theirs.revision) : takeConflict(theirs);
   };
 
-  const takeConflict = (theirs: SavedElsewhere, sent: TableDocument): void => {
-    // What stands there was sent from here and its answer was lost on the way: nobody else changed anything.
-    const own = [...unanswered, sent].find((document) => sameBytes(document, theirs.document));
-    if (own) return take({ kind: "saved", revision: theirs.revision }, own);
+  const takeConflict = (theirs: SavedElsewhere) => {
     const merge = mergeDocuments(base.document, present, theirs.document);
     if (!merge.ok) return show({ kind: "conflict", theirs });
     base = theirs;
