@@ -12,6 +12,7 @@ import { Pager } from "@/components/ui/pager";
 import { messageOf } from "@/lib/client/fault-from-server";
 import { createJob, jobsQuery } from "@/lib/client/job";
 import type { JobRow } from "@/lib/schemas/job";
+import { dayText } from "@/lib/words/day";
 import { JobForm } from "./job-form";
 
 export function JobList({ mayEdit }: { mayEdit: boolean }) {
@@ -80,7 +81,7 @@ function JobRows({ jobs }: { jobs: readonly JobRow[] }) {
             <span className="measure">
               {job.faces} {job.faces === 1 ? "face" : "faces"}
             </span>
-            <span className="measure text-pencil">{job.dueOn && `due ${job.dueOn}`}</span>
+            <span className="measure text-pencil">{job.dueOn && `due ${dayText(job.dueOn)}`}</span>
           </Link>
         </li>
       ))}

@@ -12,6 +12,7 @@ import { PageTitle } from "@/components/ui/page-title";
 import { messageOf } from "@/lib/client/fault-from-server";
 import { deleteFace, jobKeys, jobQuery, updateJob } from "@/lib/client/job";
 import type { FaceRow, Job } from "@/lib/schemas/job";
+import { dayText } from "@/lib/words/day";
 import { revisionLetter } from "@/lib/words/revision-letter";
 import { JobForm } from "./job-form";
 
@@ -94,9 +95,12 @@ function useChangeJob(jobId: string) {
 }
 
 function JobFacts({ job }: { job: Job }) {
-  const facts = [`Job ${job.number}`, job.client, job.dueOn && `due ${job.dueOn}`, job.state === "closed" && "closed"].filter(
-    Boolean,
-  );
+  const facts = [
+    `Job ${job.number}`,
+    job.client,
+    job.dueOn && `due ${dayText(job.dueOn)}`,
+    job.state === "closed" && "closed",
+  ].filter(Boolean);
   return <>{facts.join(" · ")}</>;
 }
 

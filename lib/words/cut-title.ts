@@ -29,13 +29,14 @@ function whatComesOff(cut: CutStep, board: SnapshotBoard): string {
   const [one, two] = fresh;
   if (one && two) return `${partName(cut.part)} into ${partName(one)} and ${partName(two)}`;
   if (one)
-    return cut.part.kind === "board" && kept.length === 1 ? clearOf(one, cut) : `${partName(one)} from ${partName(cut.part)}`;
+    return cut.part.kind === "board" && kept.length === 1 ? whatStays(one, cut) : `${partName(one)} from ${partName(cut.part)}`;
   const offcut = cut.yields.find(({ kind }) => kind === "offcut");
   if (offcut) return `${partName(offcut)} off ${partName(cut.part)}`;
   return trimmed(cut, board);
 }
 
-const clearOf = (part: Part, cut: CutStep) => `${partName(part)} clear of the ${edgeNames[trimmedEdge(cut)]}`;
+/** Only waste comes off: said by the edge that falls away and what is kept. */
+const whatStays = (part: Part, cut: CutStep) => `the ${edgeNames[trimmedEdge(cut)]} off, ${partName(part)} stays`;
 
 function trimmed(cut: CutStep, board: SnapshotBoard): string {
   const edge = trimmedEdge(cut);

@@ -32,7 +32,7 @@ export function problemSentence(problem: Problem, style: LengthStyle, { tagOf, w
     case "blocked":
       return blockedSentence(problem.pieces, tagOf(problem.stockId));
     case "grain":
-      return `${fronts(problem.pieces)} ${liesOrLie(problem.pieces)} across the grain that the face asks for. Turn the set by a quarter.`;
+      return `${fronts(problem.pieces)} ${liesOrLie(problem.pieces)} across the grain that the face asks for. Turn the grain, and they lie along it.`;
   }
 }
 

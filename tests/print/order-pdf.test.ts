@@ -70,7 +70,7 @@ test("says what, from where, which setting and what it gives", async () => {
   expect(text).toContain("issued 14 Mar 2026 by Mats Lind");
   expect(text).toContain("Board B-041, black walnut, 2350.0 × 210.0 × 26.0, rack 2 left");
   expect(text).toContain("Panel saw, thin blade, kerf 2.4; true kerf:");
-  expect(text).toMatch(/Rip strip A clear of the (lower|upper) edge/);
+  expect(text).toMatch(/Rip the (lower|upper) edge off, strip A stays/);
   expect(text).toMatch(/Crosscut front 2 from strip A.* 243\.6/);
   expect(text).toContain("finished 243.2 × 184.0");
   expect(text).toContain("Label and rack what is left offcut C1");

@@ -40,6 +40,7 @@ describe("the steps of an order", () => {
     expect(said[0]).toBe("Fetch board B-041 from rack 2 left");
     expect(said).toContain("Test cut in scrap with Panel saw, thin blade");
     for (const front of [1, 2, 3, 4]) expect(said).toContain(`Crosscut front ${front} from strip A`);
+    expect(said).toContain("Rip the lower edge off, strip A stays");
     expect(said).toContain("Crosscut the left end of strip A square");
     expect(said).toContain("Clean up fronts 1–4");
   });

@@ -10,6 +10,7 @@ import { readHistory } from "@/lib/server/history";
 import { readJobs } from "@/lib/server/jobs/jobs";
 import { orderPage } from "@/lib/server/orders/read-orders";
 import { readLoosePhotos } from "@/lib/server/photos/photos";
+import { dayText } from "@/lib/words/day";
 
 export const metadata: Metadata = { title: "Today" };
 
@@ -51,7 +52,7 @@ export default async function TodayPage() {
                     {job.title}
                   </Link>
                   <span className="text-sm text-pencil">
-                    {[job.client, job.dueOn && `due ${job.dueOn}`].filter(Boolean).join(" · ")}
+                    {[job.client, job.dueOn && `due ${dayText(job.dueOn)}`].filter(Boolean).join(" · ")}
                   </span>
                 </li>
               ))}
