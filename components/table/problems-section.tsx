@@ -12,6 +12,10 @@ import { useNamed } from "./use-named";
 import type { Problems } from "./use-problems";
 
 export function ProblemsSection({ problems: { found, working } }: { problems: Problems }) {
+  const { woodOf } = useNamed();
+  const firm = found.filter((problem) => standsInTheWay(problem, woodOf));
+  // What keeps the layout from being issued comes first.
+  const inOrder = [...firm, ...found.filter((problem) => !firm.includes(problem))];
   return (
     <PanelSection title="Problems" beside={found.length > 0 ? found.length : working ? "looking…" : "none"}>
       {found.length === 0 ? (
@@ -22,7 +26,7 @@ export function ProblemsSection({ problems: { found, working } }: { problems: Pr
         </p>
       ) : (
         <ul className="flex flex-col gap-2">
-          {found.map((problem) => (
+          {inOrder.map((problem) => (
             <ProblemItem key={JSON.stringify(problem)} problem={problem} />
           ))}
         </ul>

@@ -1,4 +1,4 @@
-/** Paints what other faces take of a board: quiet pencil outlines with label and face, paled where the wood is given away. Origin: the board's corner. */
+/** Paints what other faces take of a board: quiet pencil outlines with their labels and the face's name, paled where the wood is given away. Origin: the board's corner. */
 import type { SpokenForPiece } from "@/lib/schemas/spoken-for";
 import type { Palette } from "../palette";
 import type { Box, Paint } from "../sketch";
@@ -10,15 +10,28 @@ const AROUND_PX = 4;
 
 export function paintSpokenFor(woods: readonly SpokenForPiece[], pxPerMm: number, palette: Palette): Paint {
   const px = (length: number) => (length / 1000) * pxPerMm;
+  const boxed = woods.map((wood) => {
+    const { x, y, width, height } = wood.rect;
+    return { wood, box: { left: px(x), top: px(y), width: px(width), height: px(height) } };
+  });
+  const faceIds = [...new Set(woods.map(({ faceId }) => faceId))];
   return (context) => {
-    for (const { rect, label, faceTitle, issued } of woods) {
-      const box = { left: px(rect.x), top: px(rect.y), width: px(rect.width), height: px(rect.height) };
-      if (issued) {
+    for (const { wood, box } of boxed) {
+      if (wood.issued) {
         context.fillStyle = "rgb(238 240 238 / 0.45)";
         context.fillRect(box.left, box.top, box.width, box.height);
       }
       outline(context, box, palette);
-      name(context, box, [`${label}, ${faceTitle}`, label], palette);
+      if (box.height >= LINE_PX + 2) write(context, box, wood.label, "bottom", palette);
+    }
+    for (const id of faceIds) {
+      const ofFace = boxed.filter(({ wood }) => wood.faceId === id);
+      const [first] = ofFace;
+      const box = around(ofFace.map((one) => one.box));
+      // Above the labels, where there is room for both.
+      if (first && box.height >= 2 * LINE_PX + 3 * AROUND_PX) {
+        write(context, box, `${first.wood.faceTitle}${first.wood.issued ? ", issued" : ""}`, "top", palette);
+      }
     }
   };
 }
@@ -34,16 +47,24 @@ function outline(context: CanvasRenderingContext2D, { left, top, width, height }
   context.setLineDash([]);
 }
 
-/** The longest of the names that the outline has room for, at the bottom left: own labels stand at the top. */
-function name(context: CanvasRenderingContext2D, box: Box, names: readonly string[], palette: Palette): void {
-  if (box.height < LINE_PX + 2) return;
+/** In a corner of the box on its left, unless it is too narrow. */
+function write(context: CanvasRenderingContext2D, box: Box, text: string, at: "top" | "bottom", palette: Palette): void {
   context.font = `500 ${LETTERS_PX}px ${palette.measure}`;
-  const fitting = names.find((text) => context.measureText(text).width + 4 * AROUND_PX <= box.width);
-  if (fitting === undefined) return;
-  const [left, bottom] = [box.left + AROUND_PX, box.top + box.height - Math.min(AROUND_PX, (box.height - LINE_PX) / 2)];
+  const width = context.measureText(text).width + 2 * AROUND_PX;
+  if (width + 2 * AROUND_PX > box.width) return;
+  const inside = Math.min(AROUND_PX, (box.height - LINE_PX) / 2);
+  const [left, top] = [box.left + AROUND_PX, at === "top" ? box.top + inside : box.top + box.height - inside - LINE_PX];
   context.fillStyle = palette.sheet;
-  context.fillRect(left, bottom - LINE_PX, context.measureText(fitting).width + 2 * AROUND_PX, LINE_PX);
+  context.fillRect(left, top, width, LINE_PX);
   context.fillStyle = palette.pencil;
   context.textBaseline = "middle";
-  context.fillText(fitting, left + AROUND_PX, bottom - LINE_PX / 2 + 1);
+  context.fillText(text, left + AROUND_PX, top + LINE_PX / 2 + 1);
+}
+
+function around(boxes: readonly Box[]): Box {
+  const left = Math.min(...boxes.map((box) => box.left));
+  const top = Math.min(...boxes.map((box) => box.top));
+  const right = Math.max(...boxes.map((box) => box.left + box.width));
+  const bottom = Math.max(...boxes.map((box) => box.top + box.height));
+  return { left, top, width: right - left, height: bottom - top };
 }
