@@ -8,7 +8,7 @@ import { Button } from "@/components/ui/button";
 import { SelectField } from "@/components/ui/field";
 import { LengthField } from "@/components/ui/length-field";
 import { Notice } from "@/components/ui/notice";
-import { useFocusFirstError } from "@/components/ui/use-focus-first-error";
+import { focusUnreadField, useFocusFirstError } from "@/components/ui/use-focus-first-error";
 import { updateBoard } from "@/lib/client/board";
 import { FaultFromServer, messageOf } from "@/lib/client/fault-from-server";
 import type { Um } from "@/lib/layout";
@@ -40,8 +40,9 @@ export function ChangeBoardForm({ board, species, onDone }: Props) {
       onDone();
     },
   });
-  const submit = (event: FormEvent) => {
+  const submit = (event: FormEvent<HTMLFormElement>) => {
     event.preventDefault();
+    if (focusUnreadField(event.currentTarget)) return;
     const checked = checkDraft(draft, currency);
     setErrors(checked.ok ? {} : checked.errors);
     if (!checked.ok) return;

@@ -11,7 +11,7 @@ import { TextField } from "@/components/ui/field";
 import { LengthField } from "@/components/ui/length-field";
 import { Notice } from "@/components/ui/notice";
 import { PageTitle } from "@/components/ui/page-title";
-import { useFocusFirstError } from "@/components/ui/use-focus-first-error";
+import { focusUnreadField, useFocusFirstError } from "@/components/ui/use-focus-first-error";
 import { createBoard } from "@/lib/client/board";
 import { messageOf } from "@/lib/client/fault-from-server";
 import type { Um } from "@/lib/layout";
@@ -41,8 +41,9 @@ export function NewBoardScreen({ photo, species }: { photo: Photo; species: read
     onSuccess: ({ id }) => router.push(`/rack/${id}/mark?photo=${photo.id}`),
   });
 
-  const submit = (event: FormEvent) => {
+  const submit = (event: FormEvent<HTMLFormElement>) => {
     event.preventDefault();
+    if (focusUnreadField(event.currentTarget)) return;
     const checked = checkDraft(draft, currency);
     const moisture = readPercent(percent);
     const found = {

@@ -35,11 +35,23 @@ export function Saws({ initial, mayEdit }: { initial: Shop; mayEdit: boolean }) 
         <table className="w-full text-left">
           <thead className="text-sm text-pencil">
             <tr className="border-b border-rule">
-              <th className="py-2 pr-4 font-normal">Saw</th>
-              <th className="py-2 pr-4 font-normal">Kind</th>
-              <th className="py-2 pr-4 text-right font-normal">Kerf</th>
-              <th className="py-2 pr-4 text-right font-normal">Clean-up each edge</th>
-              {mayEdit && <th className="sr-only">Change</th>}
+              <th scope="col" className="py-2 pr-4 font-normal">
+                Saw
+              </th>
+              <th scope="col" className="py-2 pr-4 font-normal">
+                Kind
+              </th>
+              <th scope="col" className="py-2 pr-4 text-right font-normal">
+                Kerf
+              </th>
+              <th scope="col" className="py-2 pr-4 text-right font-normal">
+                Clean-up each edge
+              </th>
+              {mayEdit && (
+                <th scope="col">
+                  <span className="sr-only">Change</span>
+                </th>
+              )}
             </tr>
           </thead>
           <tbody>
@@ -47,8 +59,8 @@ export function Saws({ initial, mayEdit }: { initial: Shop; mayEdit: boolean }) 
               <tr key={saw.id} className="border-b border-rule">
                 <td className="py-2 pr-4">{saw.name}</td>
                 <td className="py-2 pr-4 text-pencil">{kinds[saw.kind]}</td>
-                <td className="measure py-2 pr-4 text-right">{print(saw.kerf)}</td>
-                <td className="measure py-2 pr-4 text-right">{print(saw.cleanUp)}</td>
+                <td className="measure py-2 pr-4 text-right whitespace-nowrap">{print(saw.kerf)}</td>
+                <td className="measure py-2 pr-4 text-right whitespace-nowrap">{print(saw.cleanUp)}</td>
                 {mayEdit && (
                   <td className="py-1 text-right">
                     <Button kind="quiet" size="small" aria-label={`Change ${saw.name}`} onClick={() => setDraft(saw)}>
@@ -110,12 +122,14 @@ function SawForm({ draft, onChange, onDone }: { draft: Draft; onChange: (draft: 
       </SelectField>
       <LengthField
         label="Kerf"
+        required
         hint="What the blade takes out"
         value={draft.kerf}
         onChange={(kerf) => kerf !== null && onChange({ ...draft, kerf })}
       />
       <LengthField
         label="Clean-up of each edge"
+        required
         hint="What jointing, planing or shooting takes afterwards; 0 for edges left from the saw"
         value={draft.cleanUp}
         onChange={(cleanUp) => cleanUp !== null && onChange({ ...draft, cleanUp })}

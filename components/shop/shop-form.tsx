@@ -105,6 +105,7 @@ export function ShopForm({ shop, mayEdit }: { shop: Shop; mayEdit: boolean }) {
             key={name}
             label={label}
             hint={hint}
+            required
             value={settings[name]}
             disabled={!mayEdit}
             onChange={(length) => length !== null && set({ [name]: length })}

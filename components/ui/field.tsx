@@ -1,4 +1,4 @@
-import { type InputHTMLAttributes, type ReactNode, type SelectHTMLAttributes, type TextareaHTMLAttributes, useId } from "react";
+import { type ComponentProps, type ReactNode, type SelectHTMLAttributes, type TextareaHTMLAttributes, useId } from "react";
 
 const box = "w-full min-h-11 md:min-h-10 rounded-md border border-line bg-sheet px-3 text-base aria-invalid:border-crayon";
 
@@ -39,7 +39,7 @@ function Labelled({ label, hint, error, children }: FieldProps & { children: (wi
   );
 }
 
-export function TextField({ label, hint, error, className = "", ...rest }: FieldProps & InputHTMLAttributes<HTMLInputElement>) {
+export function TextField({ label, hint, error, className = "", ...rest }: FieldProps & ComponentProps<"input">) {
   return (
     <Labelled label={label} hint={hint} error={error}>
       {(wiring) => <input {...wiring} {...rest} className={`${box} ${className}`} />}

@@ -1,5 +1,5 @@
 "use client";
-import { useEffect, useState } from "react";
+import { useCallback, useEffect, useRef, useState } from "react";
 import { type ParsedLength, printLength, type Um } from "@/lib/layout";
 import { useUnits } from "../shell/units";
 import { TextField } from "./field";
@@ -12,6 +12,8 @@ interface Props {
   onChange: (value: Um | null) => void;
   error?: string | undefined;
   disabled?: boolean;
+  /** May not be left empty. */
+  required?: boolean;
 }
 
 const sayings: Record<Exclude<ParsedLength, { ok: true }>["reason"], string> = {
@@ -22,30 +24,44 @@ const sayings: Record<Exclude<ParsedLength, { ok: true }>["reason"], string> = {
   "out-of-range": "That is longer than any board",
 };
 
-/** A length typed in the shop's units or any other it can be written in; reported when the field is left or Enter is pressed. */
-export function LengthField({ label, hint, value, onChange, error, disabled }: Props) {
+/**
+ * A length typed in the shop's units or any other it can be written in; reported when the field is left or Enter is pressed.
+ * What cannot be read makes the field invalid to the browser: a form around it is not sent with the length that stood there before.
+ */
+export function LengthField({ label, hint, value, onChange, error, disabled, required = false }: Props) {
   const { style, parse } = useUnits();
   const printed = value === null ? "" : printLength(value, style);
   const [text, setText] = useState(printed);
   const [refusal, setRefusal] = useState<string>();
+  const input = useRef<HTMLInputElement>(null);
+  // At once, not with the next drawing: the Enter that is refused here would send the form in the same moment.
+  const refuse = useCallback((why: string | undefined) => {
+    input.current?.setCustomValidity(why ?? "");
+    setRefusal(why);
+  }, []);
 
   useEffect(() => {
     setText(printed);
-    setRefusal(undefined);
-  }, [printed]);
+    refuse(undefined);
+  }, [printed, refuse]);
 
   const take = () => {
-    if (text === printed) return;
-    if (text.trim() === "") return onChange(null);
+    if (text === printed) return refuse(undefined);
+    if (text.trim() === "") {
+      if (required) return refuse(sayings.empty);
+      refuse(undefined);
+      return onChange(null);
+    }
     const parsed = parse(text);
-    if (!parsed.ok) return setRefusal(sayings[parsed.reason]);
-    setRefusal(undefined);
+    if (!parsed.ok) return refuse(sayings[parsed.reason]);
+    refuse(undefined);
     setText(printLength(parsed.value, style));
     onChange(parsed.value);
   };
 
   return (
     <TextField
+      ref={input}
       label={label}
       hint={hint}
       error={refusal ?? error}

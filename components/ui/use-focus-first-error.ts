@@ -10,3 +10,10 @@ export function useFocusFirstError(errors: object): RefObject<HTMLFormElement | 
   }, [errors]);
   return form;
 }
+
+/** Leads to the first length that cannot be read and tells that there is one: what stood there before must not be sent in its place. */
+export function focusUnreadField(form: HTMLFormElement): boolean {
+  const unread = form.querySelector<HTMLInputElement>("input:invalid");
+  unread?.focus();
+  return unread !== null;
+}
