@@ -1,32 +1,53 @@
+"use client";
+import { useRef } from "react";
+import { useSize } from "@/components/picture/use-size";
 import { facePieces, faceSize, type GridFace } from "@/lib/layout";
 
-/** The fronts of a face as outlines, to scale, with their numbers. A drawing only: the wood is on the layout table. */
+/** A number is read at arm's length at this size, CSS px, and never fills more than this share of its front. */
+const labelPx = 18;
+const labelShare = 0.8;
+/** Half the line and a little air around the outermost fronts, CSS px. */
+const marginPx = 2;
+
+/**
+ * The fronts of a face as outlines, to scale, with their numbers. A drawing only: the wood is on the layout table.
+ * As high as its width asks for, unless `className` sets a height.
+ */
 export function FaceDrawing({ face, className = "" }: { face: GridFace; className?: string }) {
+  const box = useRef<HTMLDivElement>(null);
+  const room = useSize(box);
   const { width, height } = faceSize(face);
   const pieces = facePieces({ face });
-  const label = Math.max(Math.min(width, height * 2) / 8, 1);
+  const pxPerUm = Math.min((room.width - 2 * marginPx) / width, (room.height - 2 * marginPx) / height);
+  const left = (room.width - width * pxPerUm) / 2;
+  const top = (room.height - height * pxPerUm) / 2;
   return (
-    <svg
-      viewBox={`${-width / 200} ${-width / 200} ${width * 1.01} ${height + width / 100}`}
-      className={className}
-      role="img"
-      aria-label={`${pieces.length} fronts`}
-    >
-      {pieces.map(({ id, label: name, rect }) => (
-        <g key={id}>
-          <rect {...rect} className="fill-sheet stroke-graphite" strokeWidth={1.5} vectorEffect="non-scaling-stroke" />
-          <text
-            x={rect.x + rect.width / 2}
-            y={rect.y + rect.height / 2}
-            fontSize={Math.min(label, rect.height * 0.7, rect.width * 0.7)}
-            textAnchor="middle"
-            dominantBaseline="central"
-            className="fill-graphite font-measure font-semibold"
-          >
-            {name}
-          </text>
-        </g>
-      ))}
-    </svg>
+    <div ref={box} className={className} style={{ aspectRatio: `${width} / ${height}` }}>
+      {pxPerUm > 0 && (
+        <svg width={room.width} height={room.height} role="img" aria-label={`${pieces.length} fronts`} className="block">
+          {pieces.map(({ id, label, rect }) => {
+            const w = rect.width * pxPerUm;
+            const h = rect.height * pxPerUm;
+            const x = left + rect.x * pxPerUm;
+            const y = top + rect.y * pxPerUm;
+            return (
+              <g key={id}>
+                <rect x={x} y={y} width={w} height={h} className="fill-sheet stroke-graphite" strokeWidth={1.5} />
+                <text
+                  x={x + w / 2}
+                  y={y + h / 2}
+                  fontSize={Math.min(labelPx, w * labelShare, h * labelShare)}
+                  textAnchor="middle"
+                  dominantBaseline="central"
+                  className="fill-graphite font-measure font-semibold"
+                >
+                  {label}
+                </text>
+              </g>
+            );
+          })}
+        </svg>
+      )}
+    </div>
   );
 }

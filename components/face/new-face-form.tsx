@@ -24,8 +24,8 @@ export function NewFaceForm({ job, saws }: { job: Job; saws: readonly Saw[] }) {
   const [grain, setGrain] = useState<GridFace["grain"]>("horizontal");
   const [columns, setColumns] = useState<AxisDraft>(() => startingDraft("columns", units));
   const [rows, setRows] = useState<AxisDraft>(() => startingDraft("rows", units));
-  const [crosscutSawId, setCrosscutSawId] = useState(saws[0]?.id ?? "");
-  const [ripSawId, setRipSawId] = useState(saws[0]?.id ?? "");
+  const [crosscutSawId, setCrosscutSawId] = useState(() => usualSaw(saws));
+  const [ripSawId, setRipSawId] = useState(() => usualSaw(saws));
   const create = useMutation({
     mutationFn: (body: Parameters<typeof createFace>[1]) => createFace(job.id, body),
     onSuccess: (face) => router.push(`/jobs/${job.id}/faces/${face.id}`),
@@ -76,7 +76,7 @@ export function NewFaceForm({ job, saws }: { job: Job; saws: readonly Saw[] }) {
         <SawSelect label="Crosscuts made with" saws={saws} value={crosscutSawId} onChange={setCrosscutSawId} />
         <SawSelect label="Rips made with" saws={saws} value={ripSawId} onChange={setRipSawId} />
         {create.isError && <Notice kind="stop">{messageOf(create.error)}</Notice>}
-        <Button type="submit" kind="primary" disabled={!face || title.trim() === "" || create.isPending || create.isSuccess}>
+        <Button type="submit" kind="primary" disabled={!face || create.isPending || create.isSuccess}>
           Add face
         </Button>
       </div>
@@ -91,6 +91,9 @@ export function NewFaceForm({ job, saws }: { job: Job; saws: readonly Saw[] }) {
     </form>
   );
 }
+
+/** Most fronts are parted at the table saw; a shop without one begins with the first of its saws. */
+const usualSaw = (saws: readonly Saw[]): string => (saws.find(({ kind }) => kind === "table") ?? saws[0])?.id ?? "";
 
 function SawSelect({
   label,

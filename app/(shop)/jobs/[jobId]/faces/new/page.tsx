@@ -8,7 +8,7 @@ import { orNotFound } from "@/lib/server/http/or-not-found";
 import { readJob } from "@/lib/server/jobs/jobs";
 import { shopSettings } from "@/lib/server/shops";
 
-export const metadata: Metadata = { title: "New face" };
+export const metadata: Metadata = { title: "Add a face" };
 
 export default async function NewFacePage({ params }: { params: Promise<{ jobId: string }> }) {
   const { jobId } = await params;
@@ -18,7 +18,14 @@ export default async function NewFacePage({ params }: { params: Promise<{ jobId:
   const { saws } = await shopSettings(access.shopId);
   return (
     <>
-      <PageTitle title="Add a face" above={<Link href={`/jobs/${jobId}`}>{job.title}</Link>} />
+      <PageTitle
+        title="Add a face"
+        above={
+          <Link href={`/jobs/${jobId}`} className="underline">
+            {job.title}
+          </Link>
+        }
+      />
       <NewFaceForm job={job} saws={saws} />
     </>
   );
