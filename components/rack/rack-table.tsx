@@ -25,7 +25,7 @@ export function RackTable({ boards, state, onChange }: Props) {
   return (
     // A table wider than a phone scrolls in its own box; what can be reached in it brings it along for the keyboard.
     <section className="overflow-x-auto px-4 md:px-5" aria-label="Boards as a table">
-      <table className="w-full min-w-[60rem] border-collapse text-sm">
+      <table className="w-full min-w-[76rem] border-collapse text-sm">
         <thead>
           <tr className="border-b border-line text-left align-bottom">
             <Heading state={state} onChange={onChange} sort="tag" name="Tag" />
@@ -59,11 +59,14 @@ export function RackTable({ boards, state, onChange }: Props) {
           {boards.map((board) => (
             <tr key={board.id} className="border-b border-rule hover:bg-sheet">
               <th scope="row" className="py-1.5 pr-4 text-left">
-                <Link href={`/rack/${board.id}`} className="measure text-chalk underline-offset-4 hover:underline">
+                <Link
+                  href={`/rack/${board.id}`}
+                  className="measure inline-flex min-h-6 items-center text-chalk underline-offset-4 hover:underline pointer-coarse:min-h-11"
+                >
                   {board.tag}
                 </Link>
               </th>
-              <td className="pr-4">{board.species}</td>
+              <td className="pr-4 whitespace-nowrap">{board.species}</td>
               <td className="pr-4">{cutNames[board.cut]}</td>
               <Figure>{quartersText(board.nominalQuarters)}</Figure>
               <Figure>{figure(board.thickness)}</Figure>
@@ -108,7 +111,7 @@ function Heading({ state, onChange, sort, name, right = false }: HeadingProps) {
     <th scope="col" aria-sort={here ? sorted : undefined} className={`${plainHead} ${right ? "text-right" : ""}`}>
       <button
         type="button"
-        className="font-semibold whitespace-nowrap hover:underline"
+        className="min-h-6 font-semibold whitespace-nowrap hover:underline pointer-coarse:min-h-11"
         onClick={() => onChange({ sort, direction })}
       >
         {name}

@@ -1,27 +1,43 @@
+"use client";
 import Link from "next/link";
+import { useState } from "react";
 import { Moment } from "@/components/shell/moment";
+import { Button } from "@/components/ui/button";
 import type { HistoryRow } from "@/lib/schemas/history";
 import { historyLines, historyWords } from "@/lib/words/history-line";
 
-/** What was done in the shop, newest first. */
+/** As many as stand beside the orders and jobs of a usual day. */
+const shownAtFirst = 12;
+
+/** What was done in the shop, newest first; the rest at a click. */
 export function Lately({ rows }: { rows: readonly HistoryRow[] }) {
+  const [all, setAll] = useState(false);
+  const lines = historyLines(rows);
+  if (lines.length === 0) return <p className="text-pencil">Nothing yet. What people in the shop do is listed here.</p>;
   return (
-    <ol className="divide-y divide-rule">
-      {historyLines(rows).map(({ row, times }) => (
-        <li key={row.id} className="flex flex-wrap items-baseline gap-x-2 py-2.5 text-sm">
-          <span className="font-semibold">{row.by ?? "The system"}</span>
-          <span>{historyWords(row)}</span>
-          {row.label !== null && row.path !== null && (
-            <Link href={row.path} className="text-chalk underline-offset-4 hover:underline">
-              {row.label}
-            </Link>
-          )}
-          {times > 1 && <span className="text-pencil">{times} times</span>}
-          <span className="measure ml-auto text-pencil">
-            <Moment at={row.at} />
-          </span>
-        </li>
-      ))}
-    </ol>
+    <>
+      <ol className="divide-y divide-rule">
+        {lines.slice(0, all ? undefined : shownAtFirst).map(({ row, times }) => (
+          <li key={row.id} className="flex flex-wrap items-baseline gap-x-2 py-2.5 text-sm">
+            <span className="font-semibold">{row.by ?? "The system"}</span>
+            <span>{historyWords(row)}</span>
+            {row.label !== null && row.path !== null && (
+              <Link href={row.path} className="text-chalk underline-offset-4 hover:underline">
+                {row.label}
+              </Link>
+            )}
+            {times > 1 && <span className="text-pencil">{times} times</span>}
+            <span className="measure ml-auto text-pencil">
+              <Moment at={row.at} />
+            </span>
+          </li>
+        ))}
+      </ol>
+      {!all && lines.length > shownAtFirst && (
+        <Button size="small" className="mt-2" onClick={() => setAll(true)}>
+          Show earlier
+        </Button>
+      )}
+    </>
   );
 }
