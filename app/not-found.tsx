@@ -1,4 +1,7 @@
+import type { Metadata } from "next";
 import { WrongTurn } from "@/components/shell/wrong-turn";
+
+export const metadata: Metadata = { title: "There is nothing here" };
 
 export default function NotFound() {
   return (

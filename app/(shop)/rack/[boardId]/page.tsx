@@ -1,4 +1,5 @@
 import type { Metadata } from "next";
+import { cache } from "react";
 import { BoardScreen } from "@/components/board/board-screen";
 import { pageAccess } from "@/lib/server/access";
 import { readSpecies } from "@/lib/server/boards/list-boards";
@@ -7,12 +8,23 @@ import { readHistory } from "@/lib/server/history";
 import { orNotFound } from "@/lib/server/http/or-not-found";
 import { readStraightenings } from "@/lib/server/straightenings/straightenings";
 
-export const metadata: Metadata = { title: "Board" };
+interface Props {
+  params: Promise<{ boardId: string }>;
+}
 
-export default async function BoardPage({ params }: { params: Promise<{ boardId: string }> }) {
-  const { boardId } = await params;
+const boardFor = cache(async (boardId: string) => {
   const access = await pageAccess(`/rack/${boardId}`);
-  const board = await orNotFound(readBoard(access, boardId));
+  return { access, board: await orNotFound(readBoard(access, boardId)) };
+});
+
+export async function generateMetadata({ params }: Props): Promise<Metadata> {
+  const { board } = await boardFor((await params).boardId);
+  return { title: `${board.tag}, ${board.species}` };
+}
+
+export default async function BoardPage({ params }: Props) {
+  const { boardId } = await params;
+  const { access, board } = await boardFor(boardId);
   const [versions, story, species] = await Promise.all([
     readStraightenings(access, boardId),
     readHistory(access.shopId, { noun: "board", nounId: boardId, limit: 50 }),
