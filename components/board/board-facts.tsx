@@ -4,16 +4,13 @@ import { type LengthStyle, printedLength } from "@/lib/layout";
 import type { BoardRow } from "@/lib/schemas/board";
 import { cutNames, quartersText, stateNames } from "./board-words";
 
-/** Tag, what holds it, and the facts one looks for on a rack, in three lines. */
+/** Tag, the facts one looks for on a rack, and what holds it. */
 export function BoardFacts({ board }: { board: BoardRow }) {
   const { print, style } = useUnits();
   const measured = board.length > 0 && board.width > 0;
   return (
     <span className="flex flex-col gap-0.5 text-sm">
-      <span className="flex flex-wrap items-center gap-x-2 gap-y-1">
-        <span className="font-measure text-lg leading-tight font-semibold">{board.tag}</span>
-        <BoardBadges board={board} />
-      </span>
+      <span className="font-measure text-lg leading-tight font-semibold">{board.tag}</span>
       <span>
         {board.species}, {cutNames[board.cut]}
       </span>
@@ -29,6 +26,9 @@ export function BoardFacts({ board }: { board: BoardRow }) {
         {board.place && <span>{board.place}</span>}
       </span>
       <span className="measure text-pencil">{measured ? sizeText(board, style) : "not measured yet"}</span>
+      <span className="flex flex-wrap gap-1 empty:hidden">
+        <BoardBadges board={board} />
+      </span>
     </span>
   );
 }

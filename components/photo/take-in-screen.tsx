@@ -17,7 +17,7 @@ export function TakeInScreen({ photos, mayEdit }: { photos: readonly Photo[]; ma
   return (
     <>
       <PageTitle
-        title="Take in wood"
+        title={mayEdit ? "Take in wood" : "Add photographs"}
         above={
           <Link href="/rack" className="underline">
             Rack

@@ -1,6 +1,7 @@
 import { type ComponentProps, type ReactNode, type SelectHTMLAttributes, type TextareaHTMLAttributes, useId } from "react";
 
-const box = "w-full min-h-11 md:min-h-10 rounded-md border border-line bg-sheet px-3 text-base aria-invalid:border-crayon";
+const box =
+  "w-full min-h-11 md:min-h-10 rounded-md border border-line bg-sheet px-3 text-base aria-invalid:border-crayon disabled:border-rule disabled:bg-paper disabled:text-pencil";
 
 interface FieldProps {
   label: string;

@@ -26,11 +26,9 @@ export default async function TodayPage() {
   return (
     <>
       <PageTitle title="Today">
-        {access.role !== "assistant" && (
-          <Link href="/rack/take-in" className={buttonClass("primary")}>
-            Take in wood
-          </Link>
-        )}
+        <Link href="/rack/take-in" className={buttonClass("primary")}>
+          {access.role === "assistant" ? "Add photographs" : "Take in wood"}
+        </Link>
       </PageTitle>
       <div className="grid gap-8 p-4 md:p-5 lg:grid-cols-[minmax(0,1fr)_minmax(0,26rem)]">
         <div className="flex flex-col gap-8">
