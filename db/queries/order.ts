@@ -1,9 +1,9 @@
 /** Cut orders and their frozen revisions. */
 import "server-only";
-import { and, count, desc, eq, inArray, isNull, max } from "drizzle-orm";
+import { and, asc, count, desc, eq, inArray, isNotNull, isNull, max, ne } from "drizzle-orm";
 import { v7 as newId } from "uuid";
 import type { Connection } from "../client";
-import { cutOrder, cutOrderFace, job, orderRevision, stepTick, user } from "../schema";
+import { cutOrder, cutOrderFace, job, layout, orderRevision, stepTick, user } from "../schema";
 import type { ShopId } from "../shop-id";
 
 export type CutOrderRow = typeof cutOrder.$inferSelect;
@@ -70,6 +70,32 @@ export async function lockLiveRevisionsOfFace(tx: Connection, shopId: ShopId, fa
     .where(and(eq(orderRevision.shopId, shopId), eq(cutOrderFace.faceId, faceId), isNull(orderRevision.supersededAt)))
     .orderBy(orderRevision.id)
     .for("update");
+}
+
+/**
+ * What was cut for faces of open jobs, but for one layout's, though the order has since been superseded: no order that holds tells of
+ * this wood any more, and it is gone.
+ */
+export async function listCutAndSuperseded(db: Connection, shopId: ShopId, exceptLayoutId: string) {
+  const newest = newestRevisions(db, shopId);
+  return db
+    .select({ orderId: cutOrder.id, faceId: layout.faceId, snapshot: orderRevision.snapshot, jobTitle: job.title })
+    .from(cutOrder)
+    .innerJoin(job, eq(job.id, cutOrder.jobId))
+    .innerJoin(cutOrderFace, eq(cutOrderFace.orderId, cutOrder.id))
+    .innerJoin(layout, eq(layout.faceId, cutOrderFace.faceId))
+    .innerJoin(newest, eq(newest.orderId, cutOrder.id))
+    .innerJoin(orderRevision, and(eq(orderRevision.orderId, cutOrder.id), eq(orderRevision.revision, newest.revision)))
+    .where(
+      and(
+        eq(cutOrder.shopId, shopId),
+        eq(cutOrder.state, "cut"),
+        eq(job.state, "open"),
+        ne(layout.id, exceptLayoutId),
+        isNotNull(orderRevision.supersededAt),
+      ),
+    )
+    .orderBy(asc(cutOrder.number), asc(layout.faceId));
 }
 
 /** Those of the faces that a revision which still holds has cut. */
@@ -164,13 +190,17 @@ export async function countOrders(db: Connection, shopId: ShopId, state: OrderSt
 
 const ofState = (state: OrderState | "all") => (state === "all" ? undefined : eq(cutOrder.state, state));
 
-function orderRows(db: Connection, shopId: ShopId) {
-  const newest = db
+function newestRevisions(db: Connection, shopId: ShopId) {
+  return db
     .select({ orderId: orderRevision.orderId, revision: max(orderRevision.revision).as("newest_revision") })
     .from(orderRevision)
     .where(eq(orderRevision.shopId, shopId))
     .groupBy(orderRevision.orderId)
     .as("newest");
+}
+
+function orderRows(db: Connection, shopId: ShopId) {
+  const newest = newestRevisions(db, shopId);
   const ticks = db
     .select({ revisionId: stepTick.revisionId, ticked: count().as("ticked") })
     .from(stepTick)

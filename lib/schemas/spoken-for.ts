@@ -15,7 +15,7 @@ export const spokenForSchema = z.object({
   faceId: idSchema,
   faceTitle: z.string(),
   jobTitle: z.string(),
-  /** A cut order that still holds has it cut: the wood is given away. Else it is a plan, and whoever is issued first has the wood. */
+  /** Given away: a cut order that holds has it cut, or it is cut already. Else it is a plan, and whoever is issued first has the wood. */
   issued: z.boolean(),
 });
 export type SpokenForPiece = z.output<typeof spokenForSchema>;

@@ -2,8 +2,9 @@
 import { and, eq } from "drizzle-orm";
 import { afterAll, beforeAll, describe, expect, test, vi } from "vitest";
 import { boardPicture, cutOrder, job, layout, layoutBoard, straightening } from "@/db/schema";
-import { umFromMm } from "@/lib/layout";
+import { type FaceLayout, umFromMm } from "@/lib/layout";
 import { faceLayoutSchema } from "@/lib/schemas/layout";
+import { orderSteps } from "@/lib/schemas/order-steps";
 import type { ShopAccess } from "@/lib/server/access";
 import { database, openPool } from "@/lib/server/database";
 import { moveToVersion } from "@/lib/server/layouts/boards-on-table";
@@ -11,6 +12,8 @@ import { readLayout } from "@/lib/server/layouts/read-layout";
 import { saveLayout } from "@/lib/server/layouts/save-layout";
 import { issueOrder } from "@/lib/server/orders/issue";
 import { closePlanPool } from "@/lib/server/orders/plan-pool";
+import { readOrder } from "@/lib/server/orders/read-orders";
+import { tickStep } from "@/lib/server/orders/ticks";
 import { bundlePlanWorker } from "../support/bundle-worker";
 import { type LayoutWanted, type MadeLayout, makeLayout } from "../support/make-layout";
 import { makeShop } from "../support/make-shop";
@@ -39,6 +42,8 @@ async function boardOnTable(made: MadeLayout) {
 
 const ordersOf = async ({ jobId }: MadeLayout) =>
   (await database().select({ id: cutOrder.id }).from(cutOrder).where(eq(cutOrder.jobId, jobId))).length;
+
+const offTheWood = (group: FaceLayout["groups"][number]) => ({ ...group, placement: null });
 
 const overlapping = 1000;
 const clear = 1300;
@@ -75,6 +80,28 @@ describe("the layout of a face", () => {
     const document = faceLayoutSchema.parse(one.document);
     await saveLayout(maker, one.faceId, { baseRevision: 1, document, crosscutSawId: null, ripSawId: null });
     expect((await boardOnTable(two)).spokenFor.map(({ issued }) => issued)).toEqual([false, false, false, false]);
+  });
+
+  test("that is cut keeps its wood from others, though it was changed afterwards", async () => {
+    const one = await makeLayout(maker, first);
+    const two = await besides(one, overlapping);
+    const { id } = await issueOrder(maker, one.faceId, 1);
+    const { revisionId, snapshot } = await readOrder(maker.shopId, id);
+    for (const { id: stepId } of orderSteps(snapshot)) await tickStep(maker, { orderId: id, revisionId, stepId });
+    const document = faceLayoutSchema.parse({ ...one.document, groups: one.document.groups.map(offTheWood) });
+    await saveLayout(maker, one.faceId, { baseRevision: 1, document, crosscutSawId: null, ripSawId: null });
+    const { heldBy, spokenFor } = await boardOnTable(two);
+    expect(heldBy).toMatchObject([{ faceId: one.faceId, issued: false }]);
+    expect(spokenFor.map((wood) => [wood.label, wood.rect.x, wood.issued])).toEqual([
+      ["1", 96_000, true],
+      ["2", 342_200, true],
+      ["3", 588_400, true],
+      ["4", 834_600, true],
+    ]);
+    await expect(issueOrder(maker, two.faceId, 1)).rejects.toMatchObject({
+      code: "refused",
+      message: expect.stringContaining("Front 1 lies 77.8 mm over front 4 of Top row"),
+    });
   });
 
   test("of a closed job counts no more", async () => {

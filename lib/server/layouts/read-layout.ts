@@ -55,12 +55,12 @@ export async function layoutBoards(db: Connection, shopId: ShopId, layoutId: str
       straightening: await straighteningOf(db, shopId, straightening),
       newerStraighteningId: currentStraighteningId === straightening.id ? null : currentStraighteningId,
       heldBy: holders
-        .filter(({ boardId }) => boardId === board.id)
-        .map(({ faceId, faceTitle, jobTitle, issued, straighteningId }) => ({
+        .filter(({ boardId, standing }) => boardId === board.id && standing !== "gone")
+        .map(({ faceId, faceTitle, jobTitle, standing, straighteningId }) => ({
           faceId,
           faceTitle,
           jobTitle,
-          issued,
+          issued: standing === "issued",
           samePicture: straighteningId === straightening.id,
         })),
       spokenFor: spokenForOn(holders, board.id, straightening.id),
