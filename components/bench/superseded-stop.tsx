@@ -2,6 +2,7 @@
 import Link from "next/link";
 import type { Order } from "@/lib/schemas/order";
 import { revisionLetter } from "@/lib/words/revision-letter";
+import { supersededWhy } from "@/lib/words/superseded";
 import { buttonClass } from "../ui/button";
 
 export function SupersededStop({ order, newestRevision }: { order: Order; newestRevision: number }) {
@@ -10,9 +11,7 @@ export function SupersededStop({ order, newestRevision }: { order: Order; newest
     <main className="mx-auto flex w-full max-w-3xl grow flex-col gap-4 p-4" role="alert">
       <div className="rounded-sm border-l-8 border-crayon bg-crayon-wash p-4">
         <h1 className="text-2xl text-crayon">Stop: revision {revisionLetter(order.revision)} is superseded</h1>
-        <p className="mt-2 text-lg">
-          The layout was changed after it was issued. Cut nothing more from this revision, on screen or on paper.
-        </p>
+        <p className="mt-2 text-lg">Cut nothing more from this revision, on screen or on paper: {supersededWhy}.</p>
       </div>
       {newer ? (
         // A whole new page: everything of the old revision is gone from the screen.

@@ -9,6 +9,7 @@ import { Notice } from "@/components/ui/notice";
 import { addMoistureReading } from "@/lib/client/board";
 import { messageOf } from "@/lib/client/fault-from-server";
 import type { Board } from "@/lib/schemas/board";
+import { dayText } from "@/lib/words/day";
 import { readPercent } from "./read-percent";
 import { todayIn } from "./today";
 
@@ -29,7 +30,7 @@ export function Readings({ board }: { board: Board }) {
             {board.readings.map(({ id, percent, takenOn, takenBy }) => (
               <tr key={id} className="border-b border-rule">
                 <td className="measure py-1.5 pr-4 text-base">{percent.toFixed(1)} %</td>
-                <td className="measure pr-4">{takenOn}</td>
+                <td className="measure pr-4">{dayText(takenOn)}</td>
                 <td className="text-pencil">{takenBy}</td>
               </tr>
             ))}

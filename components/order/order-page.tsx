@@ -8,6 +8,7 @@ import { orderPdfUrl, orderQuery, progressQuery } from "@/lib/client/order";
 import type { Order } from "@/lib/schemas/order";
 import { orderSteps } from "@/lib/schemas/order-steps";
 import { revisionLetter } from "@/lib/words/revision-letter";
+import { supersededWhy } from "@/lib/words/superseded";
 import { buttonClass } from "../ui/button";
 import { Notice } from "../ui/notice";
 import { PageTitle } from "../ui/page-title";
@@ -110,7 +111,7 @@ export function OrderPage({ initial, revision, paper, qr }: Props) {
 function Superseded({ order, newest }: { order: Order; newest: number }) {
   return (
     <Notice kind="stop">
-      Revision {revisionLetter(order.revision)} is superseded: the layout was changed after it was issued.{" "}
+      Revision {revisionLetter(order.revision)} is superseded: {supersededWhy}.{" "}
       {newest > order.revision ? (
         <Link href={`/orders/${order.id}`} className="text-chalk underline">
           Go to revision {revisionLetter(newest)}

@@ -3,6 +3,7 @@ import { buttonClass } from "@/components/ui/button";
 import { ProgressTape } from "@/components/ui/progress-tape";
 import type { OrderRow } from "@/lib/schemas/order";
 import { revisionLetter } from "@/lib/words/revision-letter";
+import { supersededWhy } from "@/lib/words/superseded";
 
 /** Issued orders with how far the bench is. */
 export function OrdersAtBench({ orders }: { orders: readonly OrderRow[] }) {
@@ -22,7 +23,7 @@ export function OrdersAtBench({ orders }: { orders: readonly OrderRow[] }) {
           <p className="text-sm">
             {order.jobTitle}: {order.faceTitles.join(", ")}
           </p>
-          {order.superseded && <p className="text-sm text-crayon">Superseded: the layout has changed since. Issue it again.</p>}
+          {order.superseded && <p className="text-sm text-crayon">Superseded: {supersededWhy}. Issue it again.</p>}
           <ProgressTape done={order.ticked} of={order.steps} label={`Cut order ${order.number}`} />
           <div className="flex items-center justify-between gap-2">
             <span className="measure text-sm">

@@ -147,6 +147,16 @@ export async function listHolds(db: Connection, shopId: ShopId, boardIds: readon
     .orderBy(asc(job.number), asc(face.position), asc(face.id));
 }
 
+/** Every layout that has this version of a board's picture on its table. */
+export async function listLayoutsOnVersion(db: Connection, shopId: ShopId, straighteningId: string) {
+  return db
+    .select({ faceId: layout.faceId, document: layout.document })
+    .from(layoutBoard)
+    .innerJoin(layout, eq(layout.id, layoutBoard.layoutId))
+    .where(and(eq(layoutBoard.shopId, shopId), eq(layoutBoard.straighteningId, straighteningId)))
+    .orderBy(asc(layout.faceId));
+}
+
 /** Layouts of several faces with the tags of their boards, for the page of a job. */
 export async function listLayoutsOfFaces(db: Connection, shopId: ShopId, faceIds: readonly string[]) {
   if (faceIds.length === 0) return [];

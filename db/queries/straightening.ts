@@ -1,6 +1,6 @@
 /** Versions of boards' straightened pictures with their zones. */
 import "server-only";
-import { and, asc, desc, eq, max } from "drizzle-orm";
+import { and, asc, desc, eq, inArray, max } from "drizzle-orm";
 import { v7 as newId } from "uuid";
 import type { Connection } from "../client";
 import { board, boardPicture, keepClear, straightening } from "../schema";
@@ -14,6 +14,27 @@ export async function findStraightening(db: Connection, shopId: ShopId, straight
     .from(straightening)
     .where(and(eq(straightening.shopId, shopId), eq(straightening.id, straighteningId)));
   return row;
+}
+
+/** The version, locked until the transaction ends: whoever saves its outline and areas, or issues from them, follows one another. */
+export async function lockStraightening(tx: Connection, shopId: ShopId, straighteningId: string) {
+  const [row] = await tx
+    .select()
+    .from(straightening)
+    .where(and(eq(straightening.shopId, shopId), eq(straightening.id, straighteningId)))
+    .for("update");
+  return row;
+}
+
+/** Keeps the outlines and areas of these versions as they are until the transaction ends. In the order of ids. */
+export async function lockZones(tx: Connection, shopId: ShopId, straighteningIds: readonly string[]) {
+  if (straighteningIds.length === 0) return;
+  await tx
+    .select({ id: straightening.id })
+    .from(straightening)
+    .where(and(eq(straightening.shopId, shopId), inArray(straightening.id, [...straighteningIds])))
+    .orderBy(asc(straightening.id))
+    .for("update");
 }
 
 export async function listKeepClear(db: Connection, shopId: ShopId, straighteningId: string) {

@@ -6,8 +6,8 @@ const sayings: Readonly<Record<string, string>> = {
   "board entered": "entered board",
   "board changed": "changed board",
   "board marked": "marked a photograph of",
-  "board straightened": "got to scale the picture of",
-  "board straightening failed": "could not get to scale the picture of",
+  "board straightened": "straightened the picture of",
+  "board straightening failed": "could not straighten the picture of",
   "board straightening cancelled": "stopped straightening the picture of",
   "board areas drawn": "drew areas on",
   "board moisture read": "read the moisture of",
@@ -23,7 +23,6 @@ const sayings: Readonly<Record<string, string>> = {
   "layout board taken off": "took a board off the table of",
   "layout moved to version": "moved to a newer picture",
   "order issued": "issued",
-  "order superseded": "made out of date",
   "order ticked": "ticked a step of",
   "order unticked": "took back a tick of",
   "saw added": "added the saw",
@@ -31,8 +30,37 @@ const sayings: Readonly<Record<string, string>> = {
   "shop changed": "changed the settings",
 };
 
-export function historyWords({ noun, verb }: Pick<HistoryRow, "noun" | "verb">): string {
-  return sayings[`${noun} ${verb}`] ?? `${verb} ${noun}`;
+/** The words around the name of the thing. */
+export interface HistoryWords {
+  /** Who begins the line; null where the thing itself does. */
+  readonly by: string | null;
+  readonly before: string;
+  readonly after: string;
+}
+
+type Row = Pick<HistoryRow, "noun" | "verb" | "by" | "detail">;
+
+export function historyWords({ noun, verb, by, detail }: Row): HistoryWords {
+  if (noun === "order" && verb === "superseded") {
+    return { by: null, before: "", after: `was superseded: ${supersededBy(by, detail.reason)}` };
+  }
+  return { by: by ?? "The system", before: sayings[`${noun} ${verb}`] ?? `${verb} ${noun}`, after: "" };
+}
+
+/** What people do that makes an issued order out of date, as it stands in history rows. */
+const reasons = {
+  "layout changed": "changed the layout",
+  "picture changed": "moved the layout to another picture",
+  "areas drawn": "changed what is marked on its board",
+  "issued again": "issued the layout again",
+} as const;
+export type SupersedeReason = keyof typeof reasons;
+
+const isReason = (value: unknown): value is SupersedeReason => typeof value === "string" && Object.hasOwn(reasons, value);
+
+/** Rows of earlier versions tell neither who nor what. */
+function supersededBy(by: string | null, reason: unknown): string {
+  return by !== null && isReason(reason) ? `${by} ${reasons[reason]}` : "the layout was changed";
 }
 
 export interface HistoryLine {

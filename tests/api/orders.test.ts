@@ -39,7 +39,7 @@ async function moveLayoutOn(made: MadeLayout, access: ShopAccess, revision: numb
   await database().transaction(async (tx) => {
     const document = faceLayoutSchema.parse(moved.layout);
     await tx.update(layout).set({ document, revision }).where(eq(layout.id, made.layoutId));
-    await markSuperseded(tx, access.shopId, made.faceId, new Date());
+    await markSuperseded(tx, access.shopId, made.faceId, { userId: access.userId, reason: "layout changed" }, new Date());
   });
 }
 
@@ -297,7 +297,9 @@ describe("another shop", () => {
     await expect(tickStep(stranger, { orderId, revisionId, stepId })).rejects.toMatchObject(notFound);
     await expect(untickStep(stranger, { orderId, revisionId, stepId })).rejects.toMatchObject(notFound);
     expect(await orderPage(stranger.shopId, { state: "all", page: 1, pageSize: 25 })).toMatchObject({ items: [], total: 0 });
-    await database().transaction((tx) => markSuperseded(tx, stranger.shopId, made.faceId, new Date()));
+    await database().transaction((tx) =>
+      markSuperseded(tx, stranger.shopId, made.faceId, { userId: stranger.userId, reason: "layout changed" }, new Date()),
+    );
     expect((await readOrder(maker.shopId, orderId)).superseded).toBe(false);
   });
 });

@@ -92,7 +92,7 @@ function boardOf({ boardMm, place, keepClear }: OrderWanted, index: number) {
   const id = newId();
   return {
     board: { id, tagNumber: 41 + index, species: "black walnut", cut: "flat" as const, place, thickness: umFromMm(26) },
-    straightening: { id: newId(), ...size, outline: null },
+    straightening: { id: newId(), ...size, outline: null, zonesRevision: 0 },
     keepClear,
     spokenFor: [],
   };

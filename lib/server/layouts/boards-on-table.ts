@@ -67,7 +67,7 @@ export async function moveToVersion(
     const version = await findDoneStraightening(tx, access.shopId, boardId, straighteningId);
     if (!version) throw notFound("version of this board's picture");
     await updateLayoutBoard(tx, access.shopId, layoutId, boardId, straighteningId);
-    await markSuperseded(tx, access.shopId, faceId, at);
+    await markSuperseded(tx, access.shopId, faceId, { userId: access.userId, reason: "picture changed" }, at);
     const detail = { boardId, straighteningId };
     await recordHistory(
       tx,

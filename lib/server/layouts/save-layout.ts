@@ -35,7 +35,7 @@ export async function saveLayout(access: ShopAccess, faceId: string, body: BodyO
     await requireOnTable(tx, access, layout.id, document);
     const revision = baseRevision + 1;
     await updateLayout(tx, access.shopId, layout.id, { document, crosscutSawId, ripSawId, revision }, access.userId, at);
-    await markSuperseded(tx, access.shopId, faceId, at);
+    await markSuperseded(tx, access.shopId, faceId, { userId: access.userId, reason: "layout changed" }, at);
     await touchJob(tx, access.shopId, found.face.jobId, at);
     await recordHistory(
       tx,

@@ -46,7 +46,7 @@ type BoardRow = Awaited<ReturnType<typeof listLayoutBoards>>[number];
 
 export interface LayoutBoard {
   readonly board: Pick<BoardRow["board"], "id" | "tagNumber" | "species" | "cut" | "place" | "thickness">;
-  readonly straightening: Pick<BoardRow["straightening"], "id" | "length" | "width" | "outline">;
+  readonly straightening: Pick<BoardRow["straightening"], "id" | "length" | "width" | "outline" | "zonesRevision">;
   readonly keepClear: readonly KeepClearArea[];
   readonly spokenFor: readonly SpokenForPiece[];
 }

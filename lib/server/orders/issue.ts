@@ -7,7 +7,7 @@ import { findFace, findJob } from "@/db/queries/job";
 import { findLayout, listLayoutBoards, lockLayout } from "@/db/queries/layout";
 import { findNewestOrderOfFace, findRevision, insertOrder, insertRevision, lockOrder, setOrderState } from "@/db/queries/order";
 import { findSaw, readShop, takeNumber } from "@/db/queries/shop";
-import { listKeepClear } from "@/db/queries/straightening";
+import { listKeepClear, lockZones } from "@/db/queries/straightening";
 import type { ShopId } from "@/db/shop-id";
 import { type CutLoss, um } from "@/lib/layout";
 import type { OrderRow } from "@/lib/schemas/order";
@@ -43,6 +43,11 @@ export async function issueOrder(access: ShopAccess, faceId: string, layoutRevis
     if (!layout) throw notFound("face");
     refuseOther(layout.revision, layoutRevision);
     await lockInOrder(tx, access.shopId, given.boards);
+    await lockZones(
+      tx,
+      access.shopId,
+      given.boards.map(({ straightening }) => straightening.id),
+    );
     await refuseOtherTable(tx, access.shopId, layout.id, given);
     const already = await issuedAlready(tx, access.shopId, faceId, layoutRevision);
     if (already) return already;
@@ -58,9 +63,10 @@ function refuseOther(present: number, asked: number): void {
   throw conflict("The layout was changed meanwhile. Look at it as it is now and issue it again.", { revision: present });
 }
 
-/** The layout was moved to another version of a board's picture while the cuts were planned. */
+/** While the cuts were planned the layout was moved to another version of a board's picture, or the areas on it were drawn anew. */
 async function refuseOtherTable(tx: Connection, shopId: ShopId, layoutId: string, { boards, face }: ToFreeze): Promise<void> {
-  const key = (rows: readonly Pick<LayoutBoard, "straightening">[]) => rows.map(({ straightening }) => straightening.id).join();
+  const key = (rows: readonly Pick<LayoutBoard, "straightening">[]) =>
+    rows.map(({ straightening: { id, zonesRevision } }) => `${id} ${zonesRevision}`).join();
   if (key(await listLayoutBoards(tx, shopId, layoutId)) === key(boards)) return;
   throw conflict("A board of the layout was changed meanwhile. Look at it and issue it again.", {
     revision: face.layoutRevision,
@@ -103,7 +109,7 @@ async function insertIssued(tx: Connection, access: ShopAccess, snapshot: OrderS
   const at = new Date();
   const order = (await nextRevision(tx, shopId, faceId)) ?? (await newOrder(tx, access, snapshot, at));
   // After the number: history rows hold on to the shop's row, and two that both do could never take its counter.
-  await markSuperseded(tx, shopId, faceId, at);
+  await markSuperseded(tx, shopId, faceId, { userId, reason: "issued again" }, at);
   await setOrderState(tx, shopId, order.id, "issued", at);
   const fingerprint = fingerprintOf(snapshot);
   await insertRevision(tx, shopId, {

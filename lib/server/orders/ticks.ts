@@ -6,6 +6,7 @@ import { findOrder, lockOrder, lockRevision, setOrderState } from "@/db/queries/
 import { deleteTick, insertTick, listTicks } from "@/db/queries/step-tick";
 import { orderSteps } from "@/lib/schemas/order-steps";
 import { revisionLetter } from "@/lib/words/revision-letter";
+import { supersededWhy } from "@/lib/words/superseded";
 import type { ShopAccess } from "../access";
 import { database } from "../database";
 import { conflict, notFound } from "../faults";
@@ -69,6 +70,6 @@ async function supersededConflict(tx: Connection, access: ShopAccess, orderId: s
   const way = newer
     ? `Go on with revision ${revisionLetter(order.revision)}.`
     : "Ask the maker to issue the layout again before anything more is cut.";
-  const message = `Revision ${revisionLetter(revision)} is superseded: the layout was changed after it was issued. ${way}`;
+  const message = `Revision ${revisionLetter(revision)} is superseded: ${supersededWhy}. ${way}`;
   return conflict(message, { newestRevision: order?.revision ?? revision });
 }
