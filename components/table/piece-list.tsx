@@ -31,6 +31,9 @@ export function PieceList() {
       text: `Front ${label}, ${print(rect.width)} × ${print(rect.height)}, ${where}${loose}${trouble.has(id) ? ", see problems" : ""}`,
     };
   });
+  const others = boards.flatMap((board) =>
+    board.spokenFor.map((wood) => ({ id: wood.id, text: spokenForWords(wood, placeOn(board, wood.rect)) })),
+  );
   return (
     <div className="sr-only">
       <ul aria-label="Fronts">
@@ -49,11 +52,13 @@ export function PieceList() {
           </li>
         ))}
       </ul>
-      <ul aria-label="Fronts of other faces on these boards">
-        {boards.flatMap((board) =>
-          board.spokenFor.map((wood) => <li key={wood.id}>{spokenForWords(wood, placeOn(board, wood.rect))}</li>),
-        )}
-      </ul>
+      {others.length > 0 && (
+        <ul aria-label="Wood of other faces">
+          {others.map(({ id, text }) => (
+            <li key={id}>{text}</li>
+          ))}
+        </ul>
+      )}
     </div>
   );
 }
