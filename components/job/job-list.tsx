@@ -14,13 +14,13 @@ import { createJob, jobsQuery } from "@/lib/client/job";
 import type { JobRow } from "@/lib/schemas/job";
 import { dayText } from "@/lib/words/day";
 import { JobForm } from "./job-form";
+import { useJobListState } from "./use-job-list-state";
 
 export function JobList({ mayEdit }: { mayEdit: boolean }) {
-  const [state, setState] = useState<"open" | "closed">("open");
-  const [search, setSearch] = useState("");
-  const [page, setPage] = useState(1);
+  const [list, change] = useJobListState();
+  const { state, search } = list;
   const [opening, setOpening] = useState(false);
-  const jobs = useQuery(jobsQuery({ state, search, page }));
+  const jobs = useQuery(jobsQuery(list));
   const openJob = mayEdit ? (
     <Button kind="primary" onClick={() => setOpening(true)}>
       Open a job
@@ -34,22 +34,22 @@ export function JobList({ mayEdit }: { mayEdit: boolean }) {
           type="search"
           aria-label="Search jobs"
           placeholder="Title, client or number"
-          className="min-h-11 w-full rounded-md border border-line bg-sheet px-3 md:min-h-10 md:w-60"
+          className="min-h-11 w-full rounded-md border border-line bg-sheet px-3 placeholder:text-pencil md:min-h-10 md:w-60"
           value={search}
-          onChange={(event) => {
-            setSearch(event.target.value);
-            setPage(1);
-          }}
+          onChange={(event) => change({ search: event.target.value })}
         />
-        <Button aria-pressed={state === "closed"} onClick={() => setState(state === "open" ? "closed" : "open")}>
+        <Button onClick={() => change({ state: state === "open" ? "closed" : "open" })}>
           {state === "open" ? "Show closed jobs" : "Show open jobs"}
         </Button>
         {openJob}
       </PageTitle>
       <div className="px-4 md:px-5">
         {jobs.isError && (
-          <div className="py-4">
+          <div className="flex flex-col items-start gap-3 py-4">
             <Notice kind="stop">{messageOf(jobs.error)}</Notice>
+            <Button disabled={jobs.isFetching} onClick={() => void jobs.refetch()}>
+              Try again
+            </Button>
           </div>
         )}
         {jobs.data?.total === 0 && search === "" && state === "open" && (
@@ -57,9 +57,11 @@ export function JobList({ mayEdit }: { mayEdit: boolean }) {
             A job is a piece of furniture. It holds the faces you lay out on boards, and the cut orders made from them.
           </Empty>
         )}
-        {jobs.data?.total === 0 && (search !== "" || state === "closed") && <p className="py-8 text-pencil">No job fits this.</p>}
+        {jobs.data?.total === 0 && (search !== "" || state === "closed") && (
+          <p className="py-8 text-pencil">{search === "" ? "No job is closed yet." : `No ${state} job fits “${search}”.`}</p>
+        )}
         {jobs.data && jobs.data.total > 0 && <JobRows jobs={jobs.data.items} />}
-        {jobs.data && <Pager {...jobs.data} onPage={setPage} />}
+        {jobs.data && <Pager {...jobs.data} onPage={(page) => change({ page })} />}
       </div>
       <OpenJobDialog open={opening} onOpenChange={setOpening} />
     </>
