@@ -29,23 +29,22 @@ export function useUploads(): Uploads {
       const stop = new AbortController();
       sending.current.set(key, stop);
       move(key, { is: "sending", share: 0 });
-      try {
-        const onProgress = (share: number) => move(key, { is: "sending", share });
-        const photo = await uploadPhoto({
-          file,
-          fileName: file.name || "photograph",
-          uploadKey: key,
-          onProgress,
-          signal: stop.signal,
-        });
-        move(key, { is: "done", photo });
-        await client.invalidateQueries({ queryKey: photoKeys.loose });
-      } catch (error) {
-        const mayRetry = !(error instanceof FaultFromServer) || error.fault.status >= 500 || error.fault.status === 400;
-        move(key, stop.signal.aborted ? { is: "cancelled" } : { is: "failed", message: messageOf(error), mayRetry });
-      } finally {
-        sending.current.delete(key);
-      }
+      const onProgress = (share: number) => move(key, { is: "sending", share });
+      const sent = uploadPhoto({
+        file,
+        fileName: file.name || "photograph",
+        uploadKey: key,
+        onProgress,
+        signal: stop.signal,
+      });
+      const ended = await sent.then(
+        (photo): UploadProgress => ({ is: "done", photo }),
+        (error: unknown): UploadProgress => (stop.signal.aborted ? { is: "cancelled" } : failed(error)),
+      );
+      // Free before it is told: the next file is sent when the list changes.
+      sending.current.delete(key);
+      move(key, ended);
+      if (ended.is === "done") await client.invalidateQueries({ queryKey: photoKeys.loose });
     },
     [client, move],
   );
@@ -77,6 +76,12 @@ export function useUploads(): Uploads {
     retry: useCallback((key) => move(key, { is: "waiting" }), [move]),
     forget: useCallback((key) => dispatch({ event: "removed", key }), []),
   };
+}
+
+/** What the file itself is refused for does not get better by sending it again. */
+function failed(error: unknown): UploadProgress {
+  const mayRetry = !(error instanceof FaultFromServer) || error.fault.status >= 500 || error.fault.status === 400;
+  return { is: "failed", message: messageOf(error), mayRetry };
 }
 
 /** The browser asks before a page with files on their way is left. */
