@@ -169,3 +169,35 @@ test("a board's page shows its picture under the tape; facts and readings are ch
   await page.getByRole("button", { name: "Add reading" }).click();
   await expect(page.getByRole("cell", { name: "9.1 %" })).toBeVisible();
 });
+
+/** A file as the browser's own drag or clipboard would hand it over. */
+const handedOver = async (page: Page, name: string) => {
+  const base64 = (await photograph()).toString("base64");
+  return page.evaluateHandle(
+    async ([text, fileName]) => {
+      const bytes = Uint8Array.from(atob(text), (letter) => letter.charCodeAt(0));
+      const data = new DataTransfer();
+      data.items.add(new File([bytes], fileName, { type: "image/jpeg" }));
+      return data;
+    },
+    [base64, name] as const,
+  );
+};
+
+test("photographs are dropped on the page and pasted into it", async ({ makerPage: page }) => {
+  await page.goto("/rack/take-in");
+  const uploads = page.getByRole("region", { name: "Uploads" });
+  const zone = page.getByText("drop them here");
+  await expect(zone).toBeVisible();
+  await zone.dispatchEvent("dragover", { dataTransfer: await handedOver(page, "dropped.jpg") });
+  await zone.dispatchEvent("drop", { dataTransfer: await handedOver(page, "dropped.jpg") });
+  await expect(page.getByRole("img", { name: "Photograph dropped.jpg" })).toBeVisible({ timeout: 20_000 });
+
+  const clipboardData = await handedOver(page, "pasted.jpg");
+  await page.evaluate(
+    (data) => document.body.dispatchEvent(new ClipboardEvent("paste", { clipboardData: data, bubbles: true })),
+    clipboardData,
+  );
+  await expect(uploads.getByText("taken in")).toHaveCount(2, { timeout: 20_000 });
+  await expect(page.getByRole("img", { name: /^Photograph / })).toHaveCount(2);
+});
