@@ -81,7 +81,7 @@ export function FineAdjust({ name, image, picture, at, onMove }: Props) {
             >
               {steps.map((px) => (
                 <option key={px} value={px}>
-                  {px}
+                  {px} px
                 </option>
               ))}
             </select>

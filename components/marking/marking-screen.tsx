@@ -102,9 +102,7 @@ export function MarkingScreen({ board, photo, previous }: Props) {
           <SelectedMark marking={marking} image={image} />
           <ReferencePanel marking={marking} />
           <CornersPanel marking={marking} onShow={show} />
-          <EdgePointsPanel marking={marking} onShow={show} />
-          <ExtraPointsPanel marking={marking} onShow={show} />
-          <KnownDistancePanel marking={marking} />
+          {/* Before what is optional: four corners are enough for most boards. */}
           <FinishPanel
             board={board}
             photo={photo}
@@ -114,6 +112,9 @@ export function MarkingScreen({ board, photo, previous }: Props) {
               setStarted(version);
             }}
           />
+          <EdgePointsPanel marking={marking} onShow={show} />
+          <ExtraPointsPanel marking={marking} onShow={show} />
+          <KnownDistancePanel marking={marking} />
         </div>
       </div>
       <Spoken marking={marking} />

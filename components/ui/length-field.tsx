@@ -70,11 +70,22 @@ export function LengthField({ label, hint, value, onChange, error, disabled, req
       className="measure"
       autoComplete="off"
       value={text}
-      onChange={(event) => setText(event.target.value)}
+      onChange={(event) => {
+        setText(event.target.value);
+        // Taken back while typing, not on leaving: the button being pressed would move away as the line below the field goes.
+        if (refusal && parse(event.target.value).ok) refuse(undefined);
+      }}
       onBlur={take}
+      onInvalid={(event) => {
+        // The reason stands below the field already: the browser's own note would cover it.
+        event.preventDefault();
+        if (isFirstInvalid(event.currentTarget)) event.currentTarget.focus();
+      }}
       onKeyDown={(event) => {
         if (event.key === "Enter") take();
       }}
     />
   );
 }
+
+const isFirstInvalid = (input: HTMLInputElement): boolean => input.form?.querySelector("input:invalid") === input;
