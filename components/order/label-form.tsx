@@ -1,7 +1,7 @@
 "use client";
 import { useState } from "react";
 import { orderLabelsUrl } from "@/lib/client/order";
-import { buttonClass } from "../ui/button";
+import { Button, buttonClass } from "../ui/button";
 import { SelectField, TextField } from "../ui/field";
 
 const sheets = {
@@ -50,9 +50,7 @@ export function LabelForm({ orderId, revision, paper }: Props) {
           Print labels
         </a>
       ) : (
-        <span className={`${buttonClass("plain")} opacity-50`} aria-hidden="true">
-          Print labels
-        </span>
+        <Button disabled>Print labels</Button>
       )}
       <p className="text-sm text-pencil">Print at 100 %, without “fit to page”.</p>
     </section>

@@ -9,6 +9,7 @@ test("signing in leads to the page that was asked for", async ({ page, shop }) =
   await page.getByLabel("Password").fill("not it");
   await page.getByRole("button", { name: "Sign in" }).click();
   await expect(page.getByRole("alert").filter({ hasText: "do not go together" })).toBeVisible();
+  expect(await accessibilityFaults(page)).toEqual([]);
   await page.getByLabel("Password").fill(shop.maker.password);
   await page.getByRole("button", { name: "Sign in" }).click();
   await expect(page).toHaveURL(/\/jobs\?state=open$/);
