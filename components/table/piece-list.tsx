@@ -1,14 +1,15 @@
 "use client";
 /** The fronts as a list that is not seen: what is drawn on the canvases, for the keyboard and for those who hear the page. */
+import { useRef } from "react";
 import { useUnits } from "@/components/shell/units";
 import { factsOf, piecesOfProblem, problemsOf } from "@/lib/editor/selectors/facts";
 import type { TableBoard } from "@/lib/editor/table-board";
-import { boundsOf, groupOf, polygonToStock, SET_ID, type StockRect } from "@/lib/layout";
+import { boundsOf, groupOf, type PieceId, polygonToStock, SET_ID, type StockRect } from "@/lib/layout";
 import { spokenForWords } from "@/lib/words/held-by";
 import { useEditorState, useTableContext } from "./table-context";
 
 export function PieceList() {
-  const { editor } = useTableContext();
+  const choosing = useChoosing();
   const { print } = useUnits();
   const layout = useEditorState((state) => state.document.layout);
   const boards = useEditorState((state) => state.boards);
@@ -42,10 +43,8 @@ export function PieceList() {
             <button
               type="button"
               aria-pressed={selection.includes(id)}
-              onFocus={() => {
-                if (!editor.get().selection.includes(id)) editor.select([id]);
-              }}
-              onClick={() => editor.toggle(id)}
+              onFocus={() => choosing.reach(id)}
+              onClick={() => choosing.press(id)}
             >
               {text}
             </button>
@@ -61,4 +60,26 @@ export function PieceList() {
       )}
     </div>
   );
+}
+
+/**
+ * Choosing by keyboard: the front in focus is the one chosen, until Space keeps it. From then on Tab only moves the focus and Space adds
+ * or takes out, until nothing is chosen or something else has changed what is.
+ */
+function useChoosing() {
+  const { editor } = useTableContext();
+  const kept = useRef<readonly PieceId[] | null>(null);
+  const isKept = () => kept.current === editor.get().selection;
+  return {
+    reach(id: PieceId) {
+      if (!isKept() && !editor.get().selection.includes(id)) editor.select([id]);
+    },
+    press(id: PieceId) {
+      const { selection } = editor.get();
+      const onlyReached = selection.length === 1 && selection[0] === id;
+      if (isKept() || !onlyReached) editor.toggle(id);
+      const now = editor.get().selection;
+      kept.current = now.length > 0 ? now : null;
+    },
+  };
 }

@@ -14,7 +14,7 @@ export interface KeyHelp {
 export const keyHelp: readonly KeyHelp[] = [
   { keys: "Tab", does: "the next front" },
   { keys: "← → ↑ ↓", does: "slide what is chosen by the smallest step, with Shift by ten of them" },
-  { keys: "Space", does: "add the front in focus to what is chosen, or take it out" },
+  { keys: "Space", does: "keep the front in focus chosen and go on to others; take it out again" },
   { keys: "A", does: "choose all fronts, or none" },
   { keys: "T", does: "turn end for end" },
   { keys: "S", does: "swap two chosen fronts" },

@@ -212,3 +212,45 @@ test("sizes, saws and the anchor are changed beside the table", async ({ makerPa
   await page.keyboard.press("Control+z");
   await table.saved();
 });
+
+test("by keyboard alone two fronts change places, one is turned end for end, and the grain is turned by a quarter", async ({
+  makerPage: page,
+  shop,
+}) => {
+  const { tag } = await makeBoard(page.request, board);
+  const table = new LayoutTablePage(page);
+  // Low enough to lie across the board as well: 150 mm of 200.
+  await table.open(await makeFace(page.request, shop.sawId, { columnsMm: [150, 150, 150], rowsMm: [120] }));
+  await table.addBoard(tag);
+  const [one, three] = [await table.leftOf("1"), await table.leftOf("3")];
+
+  await table.front("1").focus();
+  await page.keyboard.press("s");
+  await expect(table.said(/^Choose two fronts to swap/)).toBeVisible();
+  await page.keyboard.press("Space");
+  await table.front("3").focus();
+  await page.keyboard.press("Space");
+  await page.keyboard.press("s");
+  await expect(table.said("Fronts 1, 3 have changed places in the wood.")).toBeVisible();
+  expect([await table.leftOf("1"), await table.leftOf("3")]).toEqual([three, one]);
+  const along = async () => (await table.seam("1 and 2"))[2];
+  expect(await along()).toBe("−306.0");
+  await page.keyboard.press("Control+z");
+  expect([await table.leftOf("1"), await table.leftOf("3")]).toEqual([one, three]);
+  expect(await along()).toBe("0.0");
+
+  await page.keyboard.press("Escape");
+  await page.keyboard.press("t");
+  await expect(table.said(/^Fronts? .* turned end for end\.$/)).toBeVisible();
+  await page.keyboard.press("Control+z");
+
+  const quarter = page.getByRole("button", { name: "Turn the grain" });
+  await quarter.focus();
+  await page.keyboard.press("Enter");
+  await expect(table.said("Grain turned by a quarter, and every group laid along its board again.")).toBeVisible();
+  // A row with its grain upright lies across the board: 456 mm of fronts over 200 mm of wood.
+  await expect(page.getByText(/reaches? [\d.]+ mm over the usable outline/).first()).toBeVisible();
+  await page.keyboard.press("Control+z");
+  await expect(page.getByText("Every front lies on sound wood, and straight cuts part them.")).toBeVisible();
+  await table.saved();
+});
