@@ -14,18 +14,18 @@ export function BoardFacts({ board }: { board: BoardRow }) {
       <span>
         {board.species}, {cutNames[board.cut]}
       </span>
-      <span className="flex flex-wrap gap-x-3 text-pencil">
-        <span className="measure text-graphite">
+      <span className="flex flex-wrap items-baseline gap-x-3 text-pencil">
+        <span className="measure text-base text-graphite">
           {[quartersText(board.nominalQuarters), print(board.thickness)].filter(Boolean).join(", ")}
         </span>
         {board.moisturePercent !== null && (
           <span>
-            <span className="measure text-graphite">{board.moisturePercent.toFixed(1)}</span> %
+            <span className="measure text-base text-graphite">{board.moisturePercent.toFixed(1)}</span> %
           </span>
         )}
         {board.place && <span>{board.place}</span>}
       </span>
-      <span className="measure text-pencil">{measured ? sizeText(board, style) : "not measured yet"}</span>
+      <span className="measure text-base text-pencil">{measured ? sizeText(board, style) : "not measured yet"}</span>
       <span className="flex flex-wrap gap-1 empty:hidden">
         <BoardBadges board={board} />
       </span>

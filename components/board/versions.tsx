@@ -1,6 +1,7 @@
 "use client";
 import { Moment } from "@/components/shell/moment";
 import { useUnits } from "@/components/shell/units";
+import { resolutionText } from "@/components/ui/resolution-text";
 import type { Straightening } from "@/lib/schemas/straightening";
 
 interface Props {
@@ -12,7 +13,7 @@ const stateWords = { waiting: "in the making", done: "", failed: "failed", cance
 
 /** Every version of the picture. Layouts stay on the one they were made on. */
 export function Versions({ versions, currentId }: Props) {
-  const { print } = useUnits();
+  const { print, style } = useUnits();
   if (versions.length === 0) return <p className="text-pencil">None yet.</p>;
   return (
     <ol className="divide-y divide-rule text-sm">
@@ -23,7 +24,7 @@ export function Versions({ versions, currentId }: Props) {
           <span className="text-pencil">{stateWords[version.state]}</span>
           {version.state === "done" && (
             <span className="measure">
-              {print(version.length)} × {print(version.width)}, {version.pxPerMm.toFixed(1)} px/mm
+              {print(version.length)} × {print(version.width)}, {resolutionText(version.pxPerMm, style)}
               {version.residual !== null && version.residual > 0 && `, marks agree to ${print(version.residual)}`}
             </span>
           )}

@@ -27,6 +27,12 @@ export type AxisSizes =
 export const sizeStepOf = (units: "mm" | "inch"): SizeStep =>
   units === "mm" ? { um: 100, parts: 1 } : { um: 25_400, parts: 64 };
 
+/** Round figures of the shop's own units, to be overwritten. */
+const startingLengths = {
+  mm: { columns: umFromMm(1000), rows: umFromMm(180), step: umFromMm(10) },
+  inch: { columns: um(40 * 25_400), rows: um(7 * 25_400), step: um(12_700) },
+} as const;
+
 export function startingDraft(axis: Axis, units: "mm" | "inch"): AxisDraft {
   // 1/8 in (3 mm) between stacked fronts: general reveal, see the sources of the trade's figures in DEVELOPERS.md.
   const gap = units === "mm" ? umFromMm(3) : um(3175);
@@ -34,11 +40,11 @@ export function startingDraft(axis: Axis, units: "mm" | "inch"): AxisDraft {
     from: "opening",
     count: axis === "columns" ? 4 : 1,
     gap,
-    opening: axis === "columns" ? umFromMm(1000) : umFromMm(180),
+    opening: startingLengths[units][axis],
     outerBefore: gap,
     outerAfter: gap,
     graduation: "equal",
-    step: umFromMm(10),
+    step: startingLengths[units].step,
     ratio: 1.1,
     sizes: [],
     sizeStep: sizeStepOf(units),

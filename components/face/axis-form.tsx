@@ -79,7 +79,11 @@ export function AxisForm({ axis, draft, onChange }: Props) {
       {result.ok ? (
         <p className="text-sm text-pencil">
           {word.one}: <span className="measure text-graphite">{result.sizes.map((size) => print(size)).join(", ")}</span>
-          {result.remainder > 0 && <>. {print(result.remainder)} left over widens the last gap.</>}
+          {result.remainder > 0 && (
+            <>
+              . <span className="measure text-graphite">{print(result.remainder)}</span> left over widens the last gap.
+            </>
+          )}
         </p>
       ) : (
         <Notice kind="stop">{result.message}</Notice>

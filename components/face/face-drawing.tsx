@@ -22,7 +22,8 @@ export function FaceDrawing({ face, className = "" }: { face: GridFace; classNam
   const left = (room.width - width * pxPerUm) / 2;
   const top = (room.height - height * pxPerUm) / 2;
   return (
-    <div ref={box} className={className} style={{ aspectRatio: `${width} / ${height}` }}>
+    // Its width is given from outside alone: a low, long face must not widen the card it stands in.
+    <div ref={box} className={className} style={{ aspectRatio: `${width} / ${height}`, contain: "inline-size" }}>
       {pxPerUm > 0 && (
         <svg width={room.width} height={room.height} role="img" aria-label={`${pieces.length} fronts`} className="block">
           {pieces.map(({ id, label, rect }) => {

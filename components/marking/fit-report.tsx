@@ -3,6 +3,7 @@ import { umFromMm } from "@/lib/layout";
 import { marksRefusalWords } from "@/lib/words/marks-refusal";
 import { useUnits } from "../shell/units";
 import { Notice } from "../ui/notice";
+import { resolutionText } from "../ui/resolution-text";
 import { missingWords, printFine } from "./mark-words";
 import type { MarkingState } from "./use-marking";
 
@@ -32,7 +33,7 @@ export function FitReport({ marking }: { marking: MarkingState }) {
           {print(fit.length)} × {print(fit.width)}
         </dd>
         <dt>Picture</dt>
-        <dd className="measure text-right text-base whitespace-nowrap">{scale.pxPerMm.toFixed(2)} px/mm</dd>
+        <dd className="measure text-right text-base whitespace-nowrap">{resolutionText(scale.pxPerMm, style)}</dd>
         <dt>One pixel off moves a corner by</dt>
         <dd className="measure text-right text-base whitespace-nowrap">
           {Number.isFinite(fit.mmPerPixelOfMark) ? print(umFromMm(fit.mmPerPixelOfMark)) : "more than can be told"}
@@ -47,7 +48,10 @@ export function FitReport({ marking }: { marking: MarkingState }) {
       {doubtful && (
         <Notice kind="care">
           The size is a guess: a mark one pixel off moves a corner by{" "}
-          {Number.isFinite(fit.mmPerPixelOfMark) ? print(umFromMm(fit.mmPerPixelOfMark)) : "more than can be told"}.{" "}
+          <span className="measure">
+            {Number.isFinite(fit.mmPerPixelOfMark) ? print(umFromMm(fit.mmPerPixelOfMark)) : "more than can be told"}
+          </span>
+          .{" "}
           {marking.draft.reference === "sheet"
             ? "Measure the board and let the scale come from it, or photograph it again with the sheet near the middle."
             : "Photograph the board again from nearer, or less from the side."}

@@ -27,7 +27,7 @@ export function RackTable({ boards, state, onChange }: Props) {
     <section className="overflow-x-auto px-4 md:px-5" aria-label="Boards as a table">
       <table className="w-full min-w-[76rem] border-collapse text-sm">
         <thead>
-          <tr className="border-b border-line text-left align-bottom">
+          <tr className="border-b border-line text-left align-baseline">
             <Heading state={state} onChange={onChange} sort="tag" name="Tag" />
             <Heading state={state} onChange={onChange} sort="species" name="Species" />
             <th scope="col" className={plainHead}>
@@ -93,7 +93,7 @@ export function RackTable({ boards, state, onChange }: Props) {
 const plainHead = "py-2 pr-4 font-semibold";
 
 function Figure({ children }: { children: ReactNode }) {
-  return <td className="measure pr-4 text-right whitespace-nowrap">{children}</td>;
+  return <td className="measure pr-4 text-right text-base whitespace-nowrap">{children}</td>;
 }
 
 interface HeadingProps extends Pick<Props, "state" | "onChange"> {
