@@ -58,7 +58,7 @@ export function AxisForm({ axis, draft, onChange }: Props) {
           One by one
         </Button>
       </div>
-      <div className="grid grid-cols-2 gap-3">
+      <div className="grid grid-cols-2 items-end gap-3">
         <TextField
           label={word.count}
           type="number"

@@ -11,7 +11,7 @@ const marginPx = 2;
 
 /**
  * The fronts of a face as outlines, to scale, with their numbers. A drawing only: the wood is on the layout table.
- * As high as its width asks for, unless `className` sets a height.
+ * `className` gives it its room; the face lies in the middle of that.
  */
 export function FaceDrawing({ face, className = "" }: { face: GridFace; className?: string }) {
   const box = useRef<HTMLDivElement>(null);
@@ -22,8 +22,7 @@ export function FaceDrawing({ face, className = "" }: { face: GridFace; classNam
   const left = (room.width - width * pxPerUm) / 2;
   const top = (room.height - height * pxPerUm) / 2;
   return (
-    // Its width is given from outside alone: a low, long face must not widen the card it stands in.
-    <div ref={box} className={className} style={{ aspectRatio: `${width} / ${height}`, contain: "inline-size" }}>
+    <div ref={box} className={className}>
       {pxPerUm > 0 && (
         <svg width={room.width} height={room.height} role="img" aria-label={`${pieces.length} fronts`} className="block">
           {pieces.map(({ id, label, rect }) => {

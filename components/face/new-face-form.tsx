@@ -83,7 +83,7 @@ export function NewFaceForm({ job, saws }: { job: Job; saws: readonly Saw[] }) {
       <div className="lg:sticky lg:top-5 lg:self-start">
         <h2 className="mb-2 text-lg">As it will stand</h2>
         {face ? (
-          <FaceDrawing face={face} className="max-h-[60dvh] w-full" />
+          <FaceDrawing face={face} className="aspect-5/2 max-h-[60dvh] w-full" />
         ) : (
           <p className="text-pencil">Nothing to draw until the sizes fit.</p>
         )}
