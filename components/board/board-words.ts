@@ -25,7 +25,7 @@ export const orderNames: Readonly<Record<Sort, { readonly up: string; readonly d
 /** "4/4" for a board sold by quarters. */
 export const quartersText = (nominalQuarters: number | null): string => (nominalQuarters === null ? "" : `${nominalQuarters}/4`);
 
-/** A whole surface measure times a thickness sold by quarters has two decimals at most: `8`, `6.25`. */
+/** To two decimals at most, which a thickness sold by quarters never needs more of: `8`, `6.25`. */
 export const boardFeetText = (boardFeet: number): string => String(Number(boardFeet.toFixed(2)));
 
 const M3_PER_BOARD_FOOT = 0.0254 ** 3 * 144;

@@ -8,8 +8,10 @@ test("a job is opened and a row of fronts described from its opening", async ({ 
   await page.getByRole("button", { name: "Open a job" }).first().click();
   await page.getByLabel("Title").fill("Map chest for the reading room");
   await page.getByLabel("Client").fill("Harbour library");
+  await page.getByLabel("Due").fill("2027-03-14");
   await page.getByRole("button", { name: "Open job" }).click();
   await expect(page.getByRole("heading", { name: "Map chest for the reading room" })).toBeVisible();
+  await expect(page.getByText("due 14 Mar 2027")).toBeVisible();
   expect(await accessibilityFaults(page)).toEqual([]);
 
   await page.getByRole("link", { name: "Add a face" }).first().click();
@@ -25,6 +27,10 @@ test("a job is opened and a row of fronts described from its opening", async ({ 
   expect(await accessibilityFaults(page)).toEqual([]);
   await page.getByRole("button", { name: "Add face" }).click();
   await expect(page).toHaveURL(/\/faces\/[0-9a-f-]{36}$/);
+  for (const address of ["/jobs", "/today"]) {
+    await page.goto(address);
+    await expect(page.getByText("due 14 Mar 2027")).toBeVisible();
+  }
 });
 
 test("the shop's units change every length on the next page", async ({ context, page, shop }) => {
