@@ -1,13 +1,14 @@
 "use client";
 import { useMutation, useQueryClient } from "@tanstack/react-query";
 import { useRouter } from "next/navigation";
-import { useState } from "react";
+import { useMemo, useState } from "react";
 import { toast } from "sonner";
 import { Button } from "@/components/ui/button";
 import { SelectField, TextField } from "@/components/ui/field";
 import { LengthField } from "@/components/ui/length-field";
 import { Notice } from "@/components/ui/notice";
-import { messageOf } from "@/lib/client/fault-from-server";
+import { useFocusFirstError } from "@/components/ui/use-focus-first-error";
+import { FaultFromServer, messageOf } from "@/lib/client/fault-from-server";
 import { shopKey, updateShop } from "@/lib/client/shop";
 import type { Shop } from "@/lib/schemas/shop";
 
@@ -45,9 +46,12 @@ export function ShopForm({ shop, mayEdit }: { shop: Shop; mayEdit: boolean }) {
       toast.success("Settings saved");
     },
   });
+  const faults = useMemo(() => fieldFaults(save.error), [save.error]);
+  const form = useFocusFirstError(faults);
   const set = (change: Partial<Settings>) => setSettings((before) => ({ ...before, ...change }));
   return (
     <form
+      ref={form}
       className="flex max-w-2xl flex-col gap-4"
       onSubmit={(event) => {
         event.preventDefault();
@@ -57,6 +61,7 @@ export function ShopForm({ shop, mayEdit }: { shop: Shop; mayEdit: boolean }) {
       <fieldset disabled={!mayEdit} className="grid gap-4 sm:grid-cols-2">
         <TextField
           label="Name of the shop"
+          error={faults.name}
           required
           maxLength={120}
           value={settings.name}
@@ -64,6 +69,7 @@ export function ShopForm({ shop, mayEdit }: { shop: Shop; mayEdit: boolean }) {
         />
         <TextField
           label="Time zone"
+          error={faults.timeZone}
           hint="Such as Europe/Oslo. Times on screen and paper are in it."
           value={settings.timeZone}
           onChange={(event) => set({ timeZone: event.target.value })}
@@ -95,6 +101,7 @@ export function ShopForm({ shop, mayEdit }: { shop: Shop; mayEdit: boolean }) {
         </SelectField>
         <TextField
           label="Currency"
+          error={faults.currency}
           hint="Three letters, such as EUR"
           maxLength={3}
           value={settings.currency}
@@ -105,6 +112,7 @@ export function ShopForm({ shop, mayEdit }: { shop: Shop; mayEdit: boolean }) {
             key={name}
             label={label}
             hint={hint}
+            error={faults[name]}
             required
             value={settings[name]}
             disabled={!mayEdit}
@@ -112,7 +120,11 @@ export function ShopForm({ shop, mayEdit }: { shop: Shop; mayEdit: boolean }) {
           />
         ))}
       </fieldset>
-      {save.isError && <Notice kind="stop">{messageOf(save.error)}</Notice>}
+      {save.isError && (
+        <Notice kind="stop">
+          {Object.keys(faults).length > 0 ? "Nothing was saved. See what is said below the fields." : messageOf(save.error)}
+        </Notice>
+      )}
       {mayEdit ? (
         <Button type="submit" kind="primary" className="self-start" disabled={save.isPending}>
           Save settings
@@ -122,4 +134,10 @@ export function ShopForm({ shop, mayEdit }: { shop: Shop; mayEdit: boolean }) {
       )}
     </form>
   );
+}
+
+/** What the server said of single fields. */
+function fieldFaults(error: Error | null): Readonly<Partial<Record<string, string>>> {
+  const fields = error instanceof FaultFromServer ? (error.fault.fields ?? {}) : {};
+  return Object.fromEntries(Object.entries(fields).map(([name, says]) => [name, says[0]]));
 }
