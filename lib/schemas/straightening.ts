@@ -2,7 +2,7 @@
 import { z } from "zod";
 import { defineEndpoint, everyone, makers } from "./endpoint";
 import { idSchema } from "./ids";
-import { sizeUmSchema, umSchema } from "./length";
+import { umSchema } from "./length";
 import { markingSchema } from "./marking";
 import { servedLevelSchema } from "./photo";
 import { zonesSaveSchema, zonesSchema } from "./zones";
