@@ -89,8 +89,8 @@ export function FineAdjust({ name, image, picture, at, onMove }: Props) {
         </div>
       </div>
       <p className="w-full text-sm text-pencil">
-        Drag the picture under the cross-hair, or step by pixels of the photograph. On the photograph: arrow keys, Alt for 0.1 px,
-        Shift for ten times as much.
+        Drag the picture under the cross-hair, or step by pixels of the photograph.{" "}
+        <span className="pointer-coarse:hidden">On the photograph: arrow keys, Alt for 0.1 px, Shift for ten times as much.</span>
       </p>
     </section>
   );

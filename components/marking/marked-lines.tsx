@@ -75,13 +75,16 @@ function SideName({ corners, side, text }: { corners: readonly Place[]; side: nu
   );
 }
 
+/** From a corner to the middle of its number, CSS px: clear of the ring around a handle in focus, which is 44 px across and 4 px off. */
+const NUMBER_PX = 36;
+
 /** Outside of its corner, and still in the frame when the corner is at its rim. */
 function CornerNumber({ at, away, frame, text }: { at: Place; away: Place; frame: Size; text: string }) {
   const distance = Math.hypot(at.x - away.x, at.y - away.y) || 1;
   const inFrame = (value: number, corner: number, room: number) =>
     corner >= 0 && corner <= room ? Math.min(Math.max(value, 11), room - 11) : value;
-  const x = inFrame(at.x + ((at.x - away.x) / distance) * 24, at.x, frame.width);
-  const y = inFrame(at.y + ((at.y - away.y) / distance) * 24, at.y, frame.height);
+  const x = inFrame(at.x + ((at.x - away.x) / distance) * NUMBER_PX, at.x, frame.width);
+  const y = inFrame(at.y + ((at.y - away.y) / distance) * NUMBER_PX, at.y, frame.height);
   return (
     <>
       <rect x={x - 9} y={y - 10} width="18" height="20" rx="3" fill="var(--color-chalk)" stroke="#fff" />

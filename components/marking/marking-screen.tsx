@@ -151,8 +151,11 @@ function AddingNotice({ adding, onDone }: { adding: Adding | null; onDone: () =>
   return (
     <div className="px-4 pt-3">
       <Notice kind="care">
-        {addingWords[adding]} With the keyboard: move the photograph under the cross-hair and press Enter.{" "}
-        <button type="button" className="font-semibold text-chalk underline" onClick={onDone}>
+        {addingWords[adding]}{" "}
+        <span className="pointer-coarse:hidden">
+          With the keyboard: move the photograph under the cross-hair and press Enter.{" "}
+        </span>
+        <button type="button" className="min-h-6 font-semibold text-chalk underline pointer-coarse:min-h-11" onClick={onDone}>
           Done
         </button>
       </Notice>

@@ -69,25 +69,47 @@ function FileButton({
 }
 
 function DropArea({ onFiles, children }: Props & { children: ReactNode }) {
-  const [over, setOver] = useState(false);
+  const over = useDroppedFiles(onFiles);
   return (
     <section
       aria-label="Take in photographs"
       className={`flex flex-col items-center gap-3 rounded-md border-2 border-dashed px-4 py-8 text-center ${over ? "border-chalk bg-chalk-wash" : "border-line bg-sheet"}`}
-      onDragOver={(event) => {
-        event.preventDefault();
-        setOver(true);
-      }}
-      onDragLeave={() => setOver(false)}
-      onDrop={(event) => {
-        event.preventDefault();
-        setOver(false);
-        onFiles(event.dataTransfer.files);
-      }}
     >
       {children}
     </section>
   );
+}
+
+/** Files dropped anywhere on the page: beside the box the browser would leave the page to show the picture. Tells whether some hang over it. */
+function useDroppedFiles(onFiles: Props["onFiles"]): boolean {
+  const [over, setOver] = useState(false);
+  useEffect(() => {
+    const hasFiles = (event: DragEvent) => event.dataTransfer?.types.includes("Files") === true;
+    const hover = (event: DragEvent) => {
+      if (!hasFiles(event)) return;
+      event.preventDefault();
+      setOver(true);
+    };
+    const leave = (event: DragEvent) => {
+      // Going from one element of the page to the next is not leaving it.
+      if (event.relatedTarget === null) setOver(false);
+    };
+    const drop = (event: DragEvent) => {
+      if (!hasFiles(event)) return;
+      event.preventDefault();
+      setOver(false);
+      onFiles(event.dataTransfer?.files ?? []);
+    };
+    document.addEventListener("dragover", hover);
+    document.addEventListener("dragleave", leave);
+    document.addEventListener("drop", drop);
+    return () => {
+      document.removeEventListener("dragover", hover);
+      document.removeEventListener("dragleave", leave);
+      document.removeEventListener("drop", drop);
+    };
+  }, [onFiles]);
+  return over;
 }
 
 function usePastedFiles(onFiles: Props["onFiles"]): void {

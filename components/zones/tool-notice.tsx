@@ -16,7 +16,11 @@ export function ToolNotice({ zones }: { zones: ZonesState }) {
   if (tool === "select") return null;
   return (
     <Notice kind="care">
-      <p>{words[tool]} With the keyboard: move the picture under the cross-hair and press Enter. Two fingers move it too.</p>
+      <p>
+        {words[tool]}{" "}
+        <span className="pointer-coarse:hidden">With the keyboard: move the picture under the cross-hair and press Enter.</span>
+        <span className="pointer-fine:hidden">Two fingers move the picture.</span>
+      </p>
       <div className="mt-2 flex flex-wrap gap-2">
         {tool !== "ellipse" && (
           <>
