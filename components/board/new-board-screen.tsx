@@ -38,7 +38,8 @@ export function NewBoardScreen({ photo, species }: { photo: Photo; species: read
   const form = useFocusFirstError(errors);
   const create = useMutation({
     mutationFn: createBoard,
-    onSuccess: ({ id }) => router.push(`/rack/${id}/mark?photo=${photo.id}`),
+    // In place of the form: going back must not offer to enter the same board once more.
+    onSuccess: ({ id }) => router.replace(`/rack/${id}/mark?photo=${photo.id}`),
   });
 
   const submit = (event: FormEvent<HTMLFormElement>) => {

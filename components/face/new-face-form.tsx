@@ -28,7 +28,8 @@ export function NewFaceForm({ job, saws }: { job: Job; saws: readonly Saw[] }) {
   const [ripSawId, setRipSawId] = useState(() => usualSaw(saws));
   const create = useMutation({
     mutationFn: (body: Parameters<typeof createFace>[1]) => createFace(job.id, body),
-    onSuccess: (face) => router.push(`/jobs/${job.id}/faces/${face.id}`),
+    // In place of the form: going back from the layout table leads to the job.
+    onSuccess: (face) => router.replace(`/jobs/${job.id}/faces/${face.id}`),
   });
 
   const face = faceOf(columns, rows, grain);

@@ -52,6 +52,11 @@ export function JobList({ mayEdit }: { mayEdit: boolean }) {
             </Button>
           </div>
         )}
+        {jobs.isPending && (
+          <p role="status" className="py-8 text-pencil">
+            Looking up the jobs.
+          </p>
+        )}
         {jobs.data?.total === 0 && search === "" && state === "open" && (
           <Empty title="No jobs yet" action={openJob}>
             A job is a piece of furniture. It holds the faces you lay out on boards, and the cut orders made from them.
@@ -77,7 +82,10 @@ function JobRows({ jobs }: { jobs: readonly JobRow[] }) {
             href={`/jobs/${job.id}`}
             className="grid gap-x-6 gap-y-1 py-4 hover:bg-sheet md:grid-cols-[4rem_1fr_14rem_8rem_9rem] md:items-baseline md:px-2"
           >
-            <span className="measure text-pencil">{job.number}</span>
+            <span className="measure text-pencil">
+              <span className="md:sr-only">Job </span>
+              {job.number}
+            </span>
             <span className="text-lg font-semibold">{job.title}</span>
             <span className="text-pencil">{job.client}</span>
             <span className="measure">
