@@ -2,7 +2,9 @@ import { char, index, int, mysqlTable, primaryKey, uniqueIndex, varchar } from "
 import { orderSnapshotSchema, orderSummarySchema } from "@/lib/schemas/order-snapshot";
 import { idColumn, jsonOf, utcColumn } from "../columns";
 import { shopIdColumn } from "../shop-id-column";
+import { board } from "./board";
 import { face, job } from "./job";
+import { straightening } from "./straightening";
 import { user } from "./user";
 
 /** A numbered cut order. What is cut is in its revisions. */
@@ -66,6 +68,28 @@ export const orderRevision = mysqlTable(
   (table) => [
     uniqueIndex("order_revision_number").on(table.orderId, table.revision),
     index("order_revision_shop").on(table.shopId),
+  ],
+);
+
+/** The boards that a revision cuts and the version of each one's picture: of its snapshot, which is far too large to be searched for them. */
+export const orderRevisionBoard = mysqlTable(
+  "order_revision_board",
+  {
+    revisionId: idColumn("revision_id")
+      .notNull()
+      .references(() => orderRevision.id),
+    boardId: idColumn("board_id")
+      .notNull()
+      .references(() => board.id),
+    straighteningId: idColumn("straightening_id")
+      .notNull()
+      .references(() => straightening.id),
+    shopId: shopIdColumn(),
+  },
+  (table) => [
+    primaryKey({ columns: [table.revisionId, table.boardId] }),
+    // Which revisions cut from this board: whether its picture still belongs to nobody.
+    index("order_revision_board_board").on(table.boardId),
   ],
 );
 
