@@ -8,14 +8,18 @@ import { Button } from "@/components/ui/button";
 import { Notice } from "@/components/ui/notice";
 import { messageOf } from "@/lib/client/fault-from-server";
 import { moveToVersion, takeBoardOffTable } from "@/lib/client/layout";
+import { takerOf } from "@/lib/editor/selectors/taken-boards";
 import { type TableBoard, tableBoard } from "@/lib/editor/table-board";
+import type { TakenBy } from "@/lib/schemas/taken-by";
 import { heldBySentence } from "@/lib/words/held-by";
+import { takenBySentence } from "@/lib/words/taken-by";
 import { AddBoardDialog } from "./add-board-dialog";
 import { PanelSection } from "./panel-section";
 import { useTableActions } from "./table-actions";
 import { useEditorState, useTableContext } from "./table-context";
 
-export function BoardsSection() {
+/** `asItStands`: the face's own order holds for the layout. */
+export function BoardsSection({ asItStands }: { asItStands: boolean }) {
   const { editor } = useTableContext();
   const boards = useEditorState((state) => state.boards);
   const [adding, setAdding] = useState(false);
@@ -24,7 +28,7 @@ export function BoardsSection() {
       {boards.length === 0 && <p className="text-sm">No board yet. Add one from the rack, then lay the fronts on it.</p>}
       <ul className="flex flex-col gap-3">
         {boards.map((board) => (
-          <BoardOnTable key={board.face.id} board={board} />
+          <BoardOnTable key={board.face.id} board={board} taker={takerOf(board, asItStands)} />
         ))}
       </ul>
       {editor.mayChange && (
@@ -37,7 +41,7 @@ export function BoardsSection() {
   );
 }
 
-function BoardOnTable({ board }: { board: TableBoard }) {
+function BoardOnTable({ board, taker }: { board: TableBoard; taker: TakenBy | null }) {
   const { editor, sync, faceId } = useTableContext();
   const { print } = useUnits();
   const { layOn } = useTableActions();
@@ -77,6 +81,7 @@ function BoardOnTable({ board }: { board: TableBoard }) {
           {board.place && `, ${board.place}`}
         </span>
       </p>
+      {taker && <Notice kind="care">{takenBySentence(board.tag, taker)}</Notice>}
       {board.heldBy.map((holder) => (
         <Notice key={holder.faceId} kind="care">
           {heldBySentence(

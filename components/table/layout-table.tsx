@@ -8,6 +8,7 @@ import { PageTitle } from "@/components/ui/page-title";
 import { useUnsavedWarning } from "@/components/ui/use-unsaved-warning";
 import { showSideAddress } from "@/lib/client/layout";
 import type { TableView } from "@/lib/editor/canvas/table-view";
+import { takenBoards } from "@/lib/editor/selectors/taken-boards";
 import { isStuck } from "@/lib/editor/sync/status";
 import type { Layout } from "@/lib/schemas/layout";
 import type { Shop } from "@/lib/schemas/shop";
@@ -26,6 +27,7 @@ import { TableProvider, useEditorState } from "./table-context";
 import { pressUndoKey } from "./table-keys";
 import { TableSides } from "./table-sides";
 import { ToolBar } from "./tool-bar";
+import { useIssuing } from "./use-issuing";
 import { useProblems } from "./use-problems";
 import { useTable } from "./use-table";
 
@@ -49,6 +51,10 @@ function TableScreen({ initial }: Pick<Props, "initial">) {
   const [helping, setHelping] = useState(false);
   const help = useCallback(() => setHelping(true), []);
   const problems = useProblems();
+  const issuing = useIssuing(initial);
+  const boards = useEditorState((state) => state.boards);
+  const document = useEditorState((state) => state.document);
+  const taken = takenBoards(document, boards, issuing.asItStands);
   useUndoKeys();
   // What is on its way goes out when a link leads away; what is stuck would be lost.
   useUnsavedWarning(useEditorState(({ sync }) => isStuck(sync)));
@@ -67,7 +73,7 @@ function TableScreen({ initial }: Pick<Props, "initial">) {
         }
       >
         <ShowSideLink faceId={initial.faceId} title={initial.faceTitle} />
-        <IssueButton problems={problems} order={initial.order} openedAt={initial.revision} />
+        <IssueButton issuing={issuing} problems={problems} taken={taken} />
       </PageTitle>
       <ToolBar viewRef={viewRef} onHelp={help} />
       <div className="grid min-h-0 flex-1 lg:grid-cols-[minmax(0,1fr)_21rem]">
@@ -79,9 +85,9 @@ function TableScreen({ initial }: Pick<Props, "initial">) {
           aria-label="About this layout"
           className="min-h-0 border-rule bg-sheet md:columns-2 md:gap-0 lg:columns-auto lg:overflow-y-auto lg:border-l"
         >
-          <ProblemsSection problems={problems} />
+          <ProblemsSection problems={problems} taken={taken} />
           <SeamsSection />
-          <BoardsSection />
+          <BoardsSection asItStands={issuing.asItStands} />
           <CutsSection />
           <SizesSection />
         </aside>

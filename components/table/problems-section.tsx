@@ -2,23 +2,33 @@
 import { useUnits } from "@/components/shell/units";
 import { Button } from "@/components/ui/button";
 import { piecesOfProblem } from "@/lib/editor/selectors/facts";
+import type { TakenBoard } from "@/lib/editor/selectors/taken-boards";
 import { type Problem, type Um, um } from "@/lib/layout";
 import { standsInTheWay } from "@/lib/schemas/spoken-for";
 import { problemSentence } from "@/lib/words/layout-problem";
+import { takenBySentence } from "@/lib/words/taken-by";
 import { PanelSection } from "./panel-section";
 import { useTableActions } from "./table-actions";
 import { useEditorState, useTableContext } from "./table-context";
 import { useNamed } from "./use-named";
 import type { Problems } from "./use-problems";
 
-export function ProblemsSection({ problems: { found, working } }: { problems: Problems }) {
-  const { woodOf } = useNamed();
-  const firm = found.filter((problem) => standsInTheWay(problem, woodOf));
+interface Props {
+  problems: Problems;
+  taken: readonly TakenBoard[];
+}
+
+const looks = { firm: "border-crayon bg-crayon-wash", told: "border-tape bg-tape-wash" };
+const itemLook = "flex flex-col gap-1.5 rounded-sm border-l-4 px-3 py-2 text-sm";
+
+export function ProblemsSection({ problems: { found, working }, taken }: Props) {
+  const firm = found.filter(standsInTheWay);
+  const count = taken.length + found.length;
   // What keeps the layout from being issued comes first.
   const inOrder = [...firm, ...found.filter((problem) => !firm.includes(problem))];
   return (
-    <PanelSection title="Problems" beside={found.length > 0 ? found.length : working ? "looking…" : "none"}>
-      {found.length === 0 ? (
+    <PanelSection title="Problems" beside={count > 0 ? count : working ? "looking…" : "none"}>
+      {count === 0 ? (
         <p className="text-sm text-moss">
           {working
             ? "Working out whether straight cuts part the fronts…"
@@ -26,6 +36,11 @@ export function ProblemsSection({ problems: { found, working } }: { problems: Pr
         </p>
       ) : (
         <ul className="flex flex-col gap-2">
+          {taken.map(({ id, tag, takenBy }) => (
+            <li key={id} className={`${itemLook} ${looks.firm}`}>
+              {takenBySentence(tag, takenBy)}
+            </li>
+          ))}
           {inOrder.map((problem) => (
             <ProblemItem key={JSON.stringify(problem)} problem={problem} />
           ))}
@@ -39,11 +54,9 @@ function ProblemItem({ problem }: { problem: Problem }) {
   const { editor } = useTableContext();
   const { style } = useUnits();
   const named = useNamed();
-  const firm = standsInTheWay(problem, named.woodOf);
+  const planned = problem.kind === "spoken-for" && named.woodOf(problem.spokenForId)?.issued === false;
   return (
-    <li
-      className={`flex flex-col gap-1.5 rounded-sm border-l-4 px-3 py-2 text-sm ${firm ? "border-crayon bg-crayon-wash" : "border-tape bg-tape-wash"}`}
-    >
+    <li className={`${itemLook} ${standsInTheWay(problem) ? looks.firm : looks.told}`}>
       <button
         type="button"
         onClick={() => editor.select(piecesOfProblem(problem))}
@@ -51,7 +64,7 @@ function ProblemItem({ problem }: { problem: Problem }) {
       >
         {problemSentence(problem, style, named)}
       </button>
-      {!firm && <p>That face is laid out but not issued. Whichever of the two is issued first has the wood.</p>}
+      {planned && <p>That face is laid out but not issued. Whichever of the two is issued first has the board.</p>}
       {editor.mayChange && <Mend problem={problem} />}
     </li>
   );

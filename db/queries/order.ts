@@ -1,9 +1,9 @@
 /** Cut orders and their frozen revisions. */
 import "server-only";
-import { and, asc, count, desc, eq, inArray, isNotNull, isNull, max, ne } from "drizzle-orm";
+import { and, count, desc, eq, inArray, isNull, max } from "drizzle-orm";
 import { v7 as newId } from "uuid";
 import type { Connection } from "../client";
-import { cutOrder, cutOrderFace, job, layout, orderRevision, stepTick, user } from "../schema";
+import { cutOrder, cutOrderFace, job, orderRevision, orderRevisionBoard, stepTick, user } from "../schema";
 import type { ShopId } from "../shop-id";
 
 export type CutOrderRow = typeof cutOrder.$inferSelect;
@@ -51,6 +51,7 @@ export async function setOrderState(tx: Connection, shopId: ShopId, orderId: str
     .where(and(eq(cutOrder.shopId, shopId), eq(cutOrder.id, orderId)));
 }
 
+/** With the boards it cuts. */
 export async function insertRevision(
   tx: Connection,
   shopId: ShopId,
@@ -58,6 +59,8 @@ export async function insertRevision(
 ): Promise<string> {
   const id = newId();
   await tx.insert(orderRevision).values({ ...fields, id, shopId, supersededAt: null });
+  const boards = fields.snapshot.boards.map(({ boardId, straighteningId }) => ({ boardId, straighteningId }));
+  await tx.insert(orderRevisionBoard).values(boards.map((one) => ({ ...one, revisionId: id, shopId })));
   return id;
 }
 
@@ -72,33 +75,7 @@ export async function lockLiveRevisionsOfFace(tx: Connection, shopId: ShopId, fa
     .for("update");
 }
 
-/**
- * What was cut for faces of open jobs, but for one layout's, though the order has since been superseded: no order that holds tells of
- * this wood any more, and it is gone.
- */
-export async function listCutAndSuperseded(db: Connection, shopId: ShopId, exceptLayoutId: string) {
-  const newest = newestRevisions(db, shopId);
-  return db
-    .select({ orderId: cutOrder.id, faceId: layout.faceId, snapshot: orderRevision.snapshot, jobTitle: job.title })
-    .from(cutOrder)
-    .innerJoin(job, eq(job.id, cutOrder.jobId))
-    .innerJoin(cutOrderFace, eq(cutOrderFace.orderId, cutOrder.id))
-    .innerJoin(layout, eq(layout.faceId, cutOrderFace.faceId))
-    .innerJoin(newest, eq(newest.orderId, cutOrder.id))
-    .innerJoin(orderRevision, and(eq(orderRevision.orderId, cutOrder.id), eq(orderRevision.revision, newest.revision)))
-    .where(
-      and(
-        eq(cutOrder.shopId, shopId),
-        eq(cutOrder.state, "cut"),
-        eq(job.state, "open"),
-        ne(layout.id, exceptLayoutId),
-        isNotNull(orderRevision.supersededAt),
-      ),
-    )
-    .orderBy(asc(cutOrder.number), asc(layout.faceId));
-}
-
-/** Those of the faces that a revision which still holds has cut. */
+/** Those of the faces that have a revision which still holds. */
 export async function listIssuedFaces(db: Connection, shopId: ShopId, faceIds: readonly string[]): Promise<ReadonlySet<string>> {
   if (faceIds.length === 0) return new Set();
   const rows = await db

@@ -1,6 +1,6 @@
 /** Ticks of the bench: a row for every step that is done. */
 import "server-only";
-import { and, asc, eq } from "drizzle-orm";
+import { and, asc, eq, inArray } from "drizzle-orm";
 import type { Connection } from "../client";
 import { stepTick, user } from "../schema";
 import type { ShopId } from "../shop-id";
@@ -12,6 +12,15 @@ export async function listTicks(db: Connection, shopId: ShopId, revisionId: stri
     .innerJoin(user, eq(user.id, stepTick.tickedBy))
     .where(and(eq(stepTick.shopId, shopId), eq(stepTick.revisionId, revisionId)))
     .orderBy(asc(stepTick.tickedAt), asc(stepTick.stepId));
+}
+
+/** The ticked steps of several revisions. */
+export async function listTickedSteps(db: Connection, shopId: ShopId, revisionIds: readonly string[]) {
+  if (revisionIds.length === 0) return [];
+  return db
+    .select({ revisionId: stepTick.revisionId, stepId: stepTick.stepId })
+    .from(stepTick)
+    .where(and(eq(stepTick.shopId, shopId), inArray(stepTick.revisionId, [...revisionIds])));
 }
 
 /** Call it with the revision locked. False when the step is ticked already: who did it first, and when, stands. */

@@ -23,6 +23,7 @@ export interface TableBoard {
   readonly heldBy: LayoutBoard["heldBy"];
   /** The same wood as in `face`, with whose it is. */
   readonly spokenFor: LayoutBoard["spokenFor"];
+  readonly takenBy: LayoutBoard["takenBy"];
   /** Largest first. All cover the whole board. */
   readonly levels: readonly PictureLevel[];
 }
@@ -48,6 +49,7 @@ export function tableBoard(board: LayoutBoard): TableBoard {
     newerStraighteningId: board.newerStraighteningId,
     heldBy: board.heldBy,
     spokenFor: board.spokenFor,
+    takenBy: board.takenBy,
     levels,
   };
 }

@@ -6,6 +6,7 @@ import { idSchema } from "./ids";
 import { allowanceUmSchema, pointSchema, sizeUmSchema } from "./length";
 import { spokenForSchema } from "./spoken-for";
 import { straighteningSchema } from "./straightening";
+import { takenBySchema } from "./taken-by";
 
 const pieceIdSchema = z.string().regex(/^p[1-9]\d{0,3}$/);
 
@@ -71,6 +72,8 @@ export const layoutBoardSchema = z.object({
   ),
   /** What those on the same picture take of it. */
   spokenFor: z.array(spokenForSchema),
+  /** The cut order that its picture belongs to, or that has cut into the board since: no other can be issued from it. */
+  takenBy: takenBySchema.nullable(),
 });
 
 export const layoutSchema = z.object({

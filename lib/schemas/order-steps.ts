@@ -40,8 +40,8 @@ type Unnumbered<S> = S extends OrderStep ? Omit<S, "number"> : never;
 export function orderSteps(snapshot: OrderSnapshot): readonly OrderStep[] {
   const tests = testCuts(snapshot);
   const steps = snapshot.boards.flatMap((board, index): Unnumbered<OrderStep>[] => [
-    { id: `${board.tag}:fetch`, kind: "fetch", board },
-    { id: `${board.tag}:mark`, kind: "mark", board },
+    { id: fetchId(board.tag), kind: "fetch", board },
+    { id: markId(board.tag), kind: "mark", board },
     ...(index === 0 ? tests.map((test) => ({ ...test, kind: "test-cut" as const, board })) : []),
     ...board.program.steps.map((cut) => ({ id: `${board.tag}:${cut.number}`, kind: "cut" as const, board, cut })),
     ...cleanUpGroups(board).map((group, i) => ({
@@ -58,6 +58,17 @@ export function orderSteps(snapshot: OrderSnapshot): readonly OrderStep[] {
     })),
   ]);
   return steps.map((step, index) => ({ ...step, number: index + 1 }));
+}
+
+const fetchId = (tag: string) => `${tag}:fetch`;
+const markId = (tag: string) => `${tag}:mark`;
+
+/**
+ * Whether wood of the board is gone once this step is ticked: a cut, or what can only be done after one. Told by the id alone, so that
+ * nobody has to read a snapshot for it. Test cuts are made in scrap.
+ */
+export function takesWood(stepId: string, tag: string): boolean {
+  return stepId.startsWith(`${tag}:`) && stepId !== fetchId(tag) && stepId !== markId(tag);
 }
 
 export interface TestCut {

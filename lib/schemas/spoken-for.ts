@@ -15,7 +15,7 @@ export const spokenForSchema = z.object({
   faceId: idSchema,
   faceTitle: z.string(),
   jobTitle: z.string(),
-  /** Given away: a cut order that holds has it cut, or it is cut already. Else it is a plan, and whoever is issued first has the wood. */
+  /** A cut order that holds cuts it, and has the board. Else it is a plan, and whoever is issued first has the wood. */
   issued: z.boolean(),
 });
 export type SpokenForPiece = z.output<typeof spokenForSchema>;
@@ -23,7 +23,7 @@ export type SpokenForPiece = z.output<typeof spokenForSchema>;
 /** Wood spoken for by its id; undefined where it no longer is. */
 export type WoodOf = (spokenForId: string) => Pick<SpokenForPiece, "label" | "faceTitle" | "jobTitle" | "issued"> | undefined;
 
-/** Whether a layout with this problem may not be issued: all but lying on wood that is only planned for elsewhere. */
-export function standsInTheWay(problem: Problem, woodOf: WoodOf): boolean {
-  return problem.kind !== "spoken-for" || woodOf(problem.spokenForId)?.issued !== false;
+/** Whether a layout with this problem may not be issued. Wood spoken for is none by itself: once it is issued, the whole board is taken. */
+export function standsInTheWay(problem: Problem): boolean {
+  return problem.kind !== "spoken-for";
 }

@@ -9,6 +9,7 @@ import { orderSteps } from "@/lib/schemas/order-steps";
 import type { ShopAccess } from "@/lib/server/access";
 import { database } from "@/lib/server/database";
 import { env } from "@/lib/server/env";
+import { moveToVersion } from "@/lib/server/layouts/boards-on-table";
 import { fingerprintOf } from "@/lib/server/orders/fingerprint";
 import { issueOrder } from "@/lib/server/orders/issue";
 import { closePlanPool } from "@/lib/server/orders/plan-pool";
@@ -18,6 +19,7 @@ import { tickStep, untickStep } from "@/lib/server/orders/ticks";
 import { bundlePlanWorker } from "../support/bundle-worker";
 import { type MadeLayout, makeLayout } from "../support/make-layout";
 import { makeShop } from "../support/make-shop";
+import { newPicture } from "../support/new-picture";
 
 /** The session that the next handler call finds in its cookie. */
 let sessionId: string | null = null;
@@ -206,8 +208,9 @@ describe("a later change of the layout", () => {
     const made = await makeLayout(maker);
     const first = await issueOrder(maker, made.faceId, 1);
     await tickAll(first.id);
-    await moveLayoutOn(made, maker, 2);
-    const second = await issueOrder(maker, made.faceId, 2);
+    const { faceId, boardId } = made;
+    await moveToVersion(maker, faceId, boardId, await newPicture(maker, boardId, "new photo"));
+    const second = await issueOrder(maker, faceId, 1);
     expect(second.id).not.toBe(first.id);
     expect(second).toMatchObject({ revision: 1, state: "issued" });
     expect((await readOrder(maker.shopId, first.id)).state).toBe("cut");

@@ -65,6 +65,7 @@ export function tableBoardOf(face: BoardFace): TableBoard {
     newerStraighteningId: null,
     heldBy: [],
     spokenFor: [],
+    takenBy: null,
     levels: [],
   };
 }

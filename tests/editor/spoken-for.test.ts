@@ -59,12 +59,12 @@ test("a drag comes to lie the kerf from wood of another face", () => {
   expect(problemsOf(preview?.layout ?? rowDocument().layout, table.boards)).toEqual([]);
 });
 
-test("only wood that is issued stands in the way of issuing, or wood of which nothing is known any more", () => {
+test("wood of other faces is told of and stands in nobody's way by itself, issued or not", () => {
   const board = takenBoard(wood(1000, 1050), wood(1060, 1070, true));
   const found = problemsOf(rowDocument().layout, [board]);
   expect(found.map((problem) => problem.kind === "spoken-for" && problem.spokenForId)).toEqual(["face p1000", "face p1060"]);
   const woodOf = woodOfBoards([{ ...tableBoardOf(board), spokenFor: [wood(1000, 1050), wood(1060, 1070, true)] }]);
-  expect(found.map((problem) => standsInTheWay(problem, woodOf))).toEqual([false, true]);
-  expect(found.map((problem) => standsInTheWay(problem, () => undefined))).toEqual([true, true]);
-  expect(standsInTheWay({ kind: "grain", pieces: ["p1"] }, woodOf)).toBe(true);
+  expect(found.map((problem) => "spokenForId" in problem && woodOf(problem.spokenForId)?.issued)).toEqual([false, true]);
+  expect(found.map(standsInTheWay)).toEqual([false, false]);
+  expect(standsInTheWay({ kind: "grain", pieces: ["p1"] })).toBe(true);
 });

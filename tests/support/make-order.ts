@@ -94,7 +94,6 @@ function boardOf({ boardMm, place, keepClear }: OrderWanted, index: number) {
     board: { id, tagNumber: 41 + index, species: "black walnut", cut: "flat" as const, place, thickness: umFromMm(26) },
     straightening: { id: newId(), ...size, outline: null, zonesRevision: 0 },
     keepClear,
-    spokenFor: [],
   };
 }
 

@@ -11,6 +11,7 @@ import { database } from "../database";
 import { notFound } from "../faults";
 import { straighteningOf } from "../straightenings/straightening-of";
 import { holdersOf, spokenForOn } from "./spoken-for";
+import { takersOf } from "./taken-by";
 
 export type LayoutBoard = z.output<typeof layoutBoardSchema>;
 
@@ -36,7 +37,7 @@ export async function readLayout(access: ShopAccess, faceId: string): Promise<La
   };
 }
 
-/** Every board on the table, with the version of its picture used and who else counts on it. */
+/** Every board on the table, with the version of its picture used, who else counts on it and whose it is. */
 export async function layoutBoards(db: Connection, shopId: ShopId, layoutId: string): Promise<LayoutBoard[]> {
   const rows = await listLayoutBoards(db, shopId, layoutId);
   const holders = await holdersOf(
@@ -45,6 +46,7 @@ export async function layoutBoards(db: Connection, shopId: ShopId, layoutId: str
     rows.map(({ board }) => board.id),
     layoutId,
   );
+  const takers = await takersOf(db, shopId, layoutId);
   return Promise.all(
     rows.map(async ({ board, straightening, currentStraighteningId }) => ({
       boardId: board.id,
@@ -55,15 +57,16 @@ export async function layoutBoards(db: Connection, shopId: ShopId, layoutId: str
       straightening: await straighteningOf(db, shopId, straightening),
       newerStraighteningId: currentStraighteningId === straightening.id ? null : currentStraighteningId,
       heldBy: holders
-        .filter(({ boardId, standing }) => boardId === board.id && standing !== "gone")
-        .map(({ faceId, faceTitle, jobTitle, standing, straighteningId }) => ({
+        .filter(({ boardId }) => boardId === board.id)
+        .map(({ faceId, faceTitle, jobTitle, issued, straighteningId }) => ({
           faceId,
           faceTitle,
           jobTitle,
-          issued: standing === "issued",
+          issued,
           samePicture: straighteningId === straightening.id,
         })),
       spokenFor: spokenForOn(holders, board.id, straightening.id),
+      takenBy: takers.get(board.id) ?? null,
     })),
   );
 }

@@ -25,7 +25,6 @@ import {
 } from "@/lib/layout";
 import { cutProgramSchema } from "@/lib/schemas/cut-program";
 import type { OrderSnapshot, SnapshotBoard } from "@/lib/schemas/order-snapshot";
-import { type SpokenForPiece, standsInTheWay } from "@/lib/schemas/spoken-for";
 import { printTag } from "@/lib/schemas/tag";
 import type { KeepClearArea } from "@/lib/schemas/zones";
 import { cutRefusalSentence, problemSentence } from "@/lib/words/layout-problem";
@@ -48,7 +47,6 @@ export interface LayoutBoard {
   readonly board: Pick<BoardRow["board"], "id" | "tagNumber" | "species" | "cut" | "place" | "thickness">;
   readonly straightening: Pick<BoardRow["straightening"], "id" | "length" | "width" | "outline" | "zonesRevision">;
   readonly keepClear: readonly KeepClearArea[];
-  readonly spokenFor: readonly SpokenForPiece[];
 }
 
 /** The snapshot, or a refusal that names everything in the way. */
@@ -65,8 +63,7 @@ export async function freeze(given: ToFreeze, plan: Planner): Promise<OrderSnaps
     ripSaw: given.ripSaw,
   } as const;
   const style = styleOf(heading);
-  const used = given.boards.filter(({ board }) => piecesOnBoard(face.layout, board.id).length > 0);
-  const planned = used.map(async (one): Promise<SnapshotBoard | string> => {
+  const planned = boardsUsed(given).map(async (one): Promise<SnapshotBoard | string> => {
     const request = cutRequestOf(given, one);
     const outcome = await plan(request);
     if (!outcome.ok) return cutRefusalSentence(outcome, style, printTag(one.board.tagNumber));
@@ -78,18 +75,22 @@ export async function freeze(given: ToFreeze, plan: Planner): Promise<OrderSnaps
   return { ...heading, faces: [face], boards: boards.filter((board) => typeof board !== "string") };
 }
 
-/** Throws a refusal in words for what can be seen without planning the cuts. Quick enough to be asked again under a lock. */
-export function refuseProblems({ shop, face, boards }: ToFreeze): void {
+/** Those on the table that a piece lies on. */
+export function boardsUsed({ face, boards }: ToFreeze): readonly LayoutBoard[] {
+  return boards.filter(({ board }) => piecesOnBoard(face.layout, board.id).length > 0);
+}
+
+/** Throws a refusal in words for what can be seen without planning the cuts. */
+function refuseProblems({ shop, face, boards }: ToFreeze): void {
   const tagOf = (stockId: string) => {
     const found = boards.find(({ board }) => board.id === stockId);
     return found ? printTag(found.board.tagNumber) : stockId;
   };
-  const spokenFor = new Map(boards.flatMap((board) => board.spokenFor.map((wood) => [wood.id, wood] as const)));
-  const woodOf = (id: string) => spokenFor.get(id);
+  // No board face has wood spoken for.
+  const woodOf = () => undefined;
   const found = problems(face.layout, boards.map(boardFaceOf));
-  const wrong = found.filter((problem) => standsInTheWay(problem, woodOf));
-  if (wrong.length === 0) return;
-  throw refusedFor(wrong.map((problem) => problemSentence(problem, styleOf(unitsOf(shop)), { tagOf, woodOf })));
+  if (found.length === 0) return;
+  throw refusedFor(found.map((problem) => problemSentence(problem, styleOf(unitsOf(shop)), { tagOf, woodOf })));
 }
 
 function unitsOf({ units, inchFraction }: ToFreeze["shop"]): Pick<OrderSnapshot, "units" | "inchFraction"> {
@@ -97,16 +98,19 @@ function unitsOf({ units, inchFraction }: ToFreeze["shop"]): Pick<OrderSnapshot,
 }
 
 /** The first few in full; a long list is worked off at the layout table, where each problem can be seen. */
-function refusedFor(sentences: readonly string[]) {
+export function refusedFor(sentences: readonly string[]) {
   const shown = sentences.slice(0, 3);
   const more = sentences.length - shown.length;
   return refused(`This layout cannot be cut yet. ${shown.join(" ")}${more > 0 ? ` And ${more} more.` : ""}`);
 }
 
-/** The board as its picture of that version shows it: size, outline and keep-clear areas are in the picture's frame. */
-function boardFaceOf({ board, straightening, keepClear, spokenFor }: LayoutBoard): BoardFace {
+/**
+ * The board as its picture of that version shows it: size, outline and keep-clear areas are in the picture's frame. The order has it to
+ * itself (`refuse-taken.ts`): what others have only planned for does not stand in its way.
+ */
+function boardFaceOf({ board, straightening, keepClear }: LayoutBoard): BoardFace {
   const { length, width, outline } = straightening;
-  return { id: board.id, length, width, thickness: board.thickness, outline, keepClear, spokenFor };
+  return { id: board.id, length, width, thickness: board.thickness, outline, keepClear, spokenFor: [] };
 }
 
 function cutRequestOf({ shop, face }: ToFreeze, one: LayoutBoard): CutRequest {

@@ -16,11 +16,11 @@ import { orderSteps } from "@/lib/schemas/order-steps";
 import type { ShopAccess } from "../access";
 import { database } from "../database";
 import { conflict, notFound } from "../faults";
-import { holdersOf, spokenForOn } from "../layouts/spoken-for";
 import { fingerprintOf } from "./fingerprint";
-import { freeze, type LayoutBoard, refuseProblems, type ToFreeze } from "./freeze";
+import { boardsUsed, freeze, type LayoutBoard, type ToFreeze } from "./freeze";
 import { planInThread } from "./plan-pool";
 import { orderRow } from "./read-orders";
+import { refuseTaken } from "./refuse-taken";
 import { markSuperseded } from "./supersede";
 
 /**
@@ -37,6 +37,7 @@ export async function issueOrder(access: ShopAccess, faceId: string, layoutRevis
 
   // Planning may take seconds: nothing is locked meanwhile, and what it was made from is looked at again under the lock.
   const given = await toFreeze(db, access, faceId, seen.layout);
+  await refuseTaken(db, access.shopId, seen.layout.id, boardsUsed(given));
   const snapshot = await freeze(given, planInThread);
   const orderId = await db.transaction(async (tx) => {
     const layout = await lockLayout(tx, access.shopId, faceId);
@@ -51,9 +52,10 @@ export async function issueOrder(access: ShopAccess, faceId: string, layoutRevis
     await refuseOtherTable(tx, access.shopId, layout.id, given);
     const already = await issuedAlready(tx, access.shopId, faceId, layoutRevision);
     if (already) return already;
-    // Another face may have been issued from the same wood while the cuts were planned.
-    refuseProblems({ ...given, boards: await withSpokenFor(tx, access.shopId, layout.id, given.boards) });
-    return insertIssued(tx, access, snapshot);
+    const next = await nextRevision(tx, access.shopId, faceId);
+    // Another face may have been issued from the same board, or the bench may have begun to cut it, while the cuts were planned.
+    await refuseTaken(tx, access.shopId, layout.id, boardsUsed(given));
+    return insertIssued(tx, access, snapshot, next);
   });
   return orderRow(access.shopId, orderId);
 }
@@ -82,18 +84,6 @@ async function lockInOrder(tx: Connection, shopId: ShopId, boards: readonly Layo
   for (const id of ids) await lockBoard(tx, shopId, id);
 }
 
-/** The boards with what other faces take of them now. */
-async function withSpokenFor<B extends Pick<LayoutBoard, "board" | "straightening">>(
-  db: Connection,
-  shopId: ShopId,
-  layoutId: string,
-  boards: readonly B[],
-) {
-  const boardIds = boards.map(({ board }) => board.id);
-  const holders = await holdersOf(db, shopId, boardIds, layoutId);
-  return boards.map((one) => ({ ...one, spokenFor: spokenForOn(holders, one.board.id, one.straightening.id) }));
-}
-
 /** The order that still holds for this revision of the layout. */
 async function issuedAlready(db: Connection, shopId: ShopId, faceId: string, layoutRevision: number): Promise<string | null> {
   const order = await findNewestOrderOfFace(db, shopId, faceId);
@@ -103,11 +93,16 @@ async function issuedAlready(db: Connection, shopId: ShopId, faceId: string, lay
 }
 
 /** Call it with the layout locked: that keeps two from issuing one face at once. */
-async function insertIssued(tx: Connection, access: ShopAccess, snapshot: OrderSnapshot): Promise<string> {
+async function insertIssued(
+  tx: Connection,
+  access: ShopAccess,
+  snapshot: OrderSnapshot,
+  next: Awaited<ReturnType<typeof nextRevision>>,
+): Promise<string> {
   const { shopId, userId } = access;
   const [{ faceId, layoutRevision } = { faceId: "", layoutRevision: 0 }] = snapshot.faces;
   const at = new Date();
-  const order = (await nextRevision(tx, shopId, faceId)) ?? (await newOrder(tx, access, snapshot, at));
+  const order = next ?? (await newOrder(tx, access, snapshot, at));
   // After the number: history rows hold on to the shop's row, and two that both do could never take its counter.
   await markSuperseded(tx, shopId, faceId, { userId, reason: "issued again" }, at);
   await setOrderState(tx, shopId, order.id, "issued", at);
@@ -126,7 +121,8 @@ async function insertIssued(tx: Connection, access: ShopAccess, snapshot: OrderS
   return order.id;
 }
 
-/** Of the face's newest order, unless there is none or it is cut. The order is locked, as ticking locks it. */
+/** Of the face's newest order, unless there is none or it is cut. The order is locked, as ticking locks it: no step is ticked from
+ *  here on. */
 async function nextRevision(tx: Connection, shopId: ShopId, faceId: string) {
   const found = await findNewestOrderOfFace(tx, shopId, faceId);
   const order = found && (await lockOrder(tx, shopId, found.id));
@@ -154,7 +150,7 @@ async function toFreeze(db: Connection, access: ShopAccess, faceId: string, layo
   const job = found && (await findJob(db, shopId, found.face.jobId));
   if (!shop || !found || !job) throw notFound("face");
   const { id, number, title, client } = job;
-  const rows = await withSpokenFor(db, shopId, layout.id, await listLayoutBoards(db, shopId, layout.id));
+  const rows = await listLayoutBoards(db, shopId, layout.id);
   const boards = rows.map(async (row) => ({ ...row, keepClear: await listKeepClear(db, shopId, row.straightening.id) }));
   return {
     shop,
