@@ -297,6 +297,15 @@ describe("at the same time", () => {
     }
   });
 
+  test("two faces on two pictures of one photograph: one is issued, every time", async () => {
+    for (let round = 0; round < 6; round += 1) {
+      const { one, two } = await twoFaces();
+      await moveOver(two, await newPicture(maker, one.boardId, "same photo"));
+      const outcomes = await Promise.allSettled([issue(one), issue(two)]);
+      expect(outcomes.map(({ status }) => status).sort()).toEqual(["fulfilled", "rejected"]);
+    }
+  });
+
   test("five faces of one board: one is issued", async () => {
     const one = await makeLayout(maker);
     const faces = [one, ...(await Promise.all([1, 2, 3, 4].map(() => besides(one))))];
