@@ -16,6 +16,8 @@ export function useIssuing({ order, revision }: Pick<Layout, "order" | "revision
   const document = useEditorState((state) => state.document);
   const pictures = useEditorState(picturesUsed);
   const [openedOn] = useState(pictures);
+  // Once a change is saved, nothing tells so but this and `sync.revision()`.
+  useEditorState((state) => state.sync);
   const refreshBoards = useFreshBoards();
   const issue = useMutation({
     mutationFn: async () => {
