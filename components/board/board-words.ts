@@ -26,7 +26,7 @@ export const orderNames: Readonly<Record<Sort, { readonly up: string; readonly d
 export const quartersText = (nominalQuarters: number | null): string => (nominalQuarters === null ? "" : `${nominalQuarters}/4`);
 
 /** To two decimals at most, which a thickness sold by quarters never needs more of: `8`, `6.25`. */
-export const boardFeetText = (boardFeet: number): string => String(Number(boardFeet.toFixed(2)));
+export const boardFeetText = (boardFeet: number): string => (boardFeet === 0 ? "under 1" : String(Number(boardFeet.toFixed(2))));
 
 const M3_PER_BOARD_FOOT = 0.0254 ** 3 * 144;
 

@@ -1,5 +1,5 @@
 "use client";
-/** Making a board from a photograph: what is known of it, before its corners are marked. */
+/** Making a board, from a photograph whose corners are marked next, or without one: what is known of it. */
 import { useMutation } from "@tanstack/react-query";
 import Image from "next/image";
 import Link from "next/link";
@@ -27,7 +27,7 @@ interface Size {
   readonly width: Um | null;
 }
 
-export function NewBoardScreen({ photo, species }: { photo: Photo; species: readonly string[] }) {
+export function NewBoardScreen({ photo, species }: { photo: Photo | null; species: readonly string[] }) {
   const router = useRouter();
   const { currency, timeZone } = useUnits();
   const [draft, setDraft] = useState<BoardDraft>(emptyDraft);
@@ -39,7 +39,7 @@ export function NewBoardScreen({ photo, species }: { photo: Photo; species: read
   const create = useMutation({
     mutationFn: createBoard,
     // In place of the form: going back must not offer to enter the same board once more.
-    onSuccess: ({ id }) => router.replace(`/rack/${id}/mark?photo=${photo.id}`),
+    onSuccess: ({ id }) => router.replace(photo ? `/rack/${id}/mark?photo=${photo.id}` : `/rack/${id}`),
   });
 
   const submit = (event: FormEvent<HTMLFormElement>) => {
@@ -62,7 +62,7 @@ export function NewBoardScreen({ photo, species }: { photo: Photo; species: read
   return (
     <>
       <PageTitle
-        title="A board from this photograph"
+        title={photo ? "A board from this photograph" : "A board without a photograph"}
         above={
           <Link href="/rack/take-in" className="underline">
             Take in wood
@@ -70,9 +70,13 @@ export function NewBoardScreen({ photo, species }: { photo: Photo; species: read
         }
       />
       <div className="grid gap-6 p-4 md:p-5 lg:grid-cols-2">
-        <WholePhoto photo={photo} />
+        {photo ? (
+          <WholePhoto photo={photo} />
+        ) : (
+          <p className="text-pencil">It hangs in the rack by its size and can be laid out once a photograph of it is marked.</p>
+        )}
         <form ref={form} noValidate onSubmit={submit} className="grid content-start gap-4 sm:grid-cols-2">
-          <SizeFields size={size} errors={errors} onChange={setSize} />
+          <SizeFields size={size} errors={errors} bySheet={photo !== null} onChange={setSize} />
           <BoardFields draft={draft} errors={errors} species={species} onChange={setDraft} />
           <TextField
             label="Moisture, %"
@@ -88,7 +92,7 @@ export function NewBoardScreen({ photo, species }: { photo: Photo; species: read
             {create.isError && <Notice kind="stop">{messageOf(create.error)}</Notice>}
             <div className="flex flex-wrap gap-2">
               <Button type="submit" kind="primary" disabled={create.isPending || create.isSuccess}>
-                Enter board and mark it
+                {photo ? "Enter board and mark it" : "Enter board"}
               </Button>
               <Link href="/rack/take-in" className={buttonClass("plain")}>
                 Back
@@ -124,10 +128,12 @@ function WholePhoto({ photo }: { photo: Photo }) {
 interface SizeFieldsProps {
   size: Size;
   errors: { length?: string; width?: string };
+  /** Whether a sheet in the photograph may give the size. */
+  bySheet: boolean;
   onChange: (size: Size) => void;
 }
 
-function SizeFields({ size, errors, onChange }: SizeFieldsProps) {
+function SizeFields({ size, errors, bySheet, onChange }: SizeFieldsProps) {
   const choices = [
     { from: "known", text: "I have measured the board" },
     { from: "sheet", text: "A sheet of known size lies on it: measure the board by that" },
@@ -135,7 +141,7 @@ function SizeFields({ size, errors, onChange }: SizeFieldsProps) {
   return (
     <fieldset className="grid grid-cols-2 items-start gap-3 rounded-md border border-rule bg-sheet p-4 sm:col-span-2">
       <legend className="px-1 font-measure text-lg font-semibold">Size</legend>
-      {choices.map(({ from, text }) => (
+      {(bySheet ? choices : []).map(({ from, text }) => (
         <label key={from} className="col-span-2 flex min-h-8 items-center gap-2">
           <input
             type="radio"

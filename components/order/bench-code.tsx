@@ -1,4 +1,4 @@
-/** The way to the bench for a phone: a code to scan, and the address in words. */
+/** The way to the bench for a phone: a code to scan, and the same address as a link. */
 
 export interface BenchQr {
   readonly url: string;
@@ -25,7 +25,11 @@ export function BenchCode({ qr: { url, size, runs } }: { qr: BenchQr }) {
           <path d={runs.map(({ x, y, length }) => `M${x} ${y}h${length}v1h${-length}z`).join("")} />
         </svg>
         <p className="min-w-0 text-sm">
-          Scan it with a phone that is signed in, or open <span className="break-all">{url}</span>
+          Scan it with a phone that is signed in, or{" "}
+          <a href={url} className="text-chalk underline">
+            open the bench here
+          </a>
+          .
         </p>
       </div>
     </section>

@@ -47,7 +47,7 @@ export function OrderStepsTable({ order, steps, ticks }: Props) {
                 Setting, {style.unit === "mm" ? "mm" : "in"}
               </th>
               <th className="hidden py-1.5 pr-3 font-normal md:table-cell" scope="col">
-                Gives
+                Gives, {style.unit === "mm" ? "mm" : "in"}
               </th>
               <th className="hidden py-1.5 font-normal sm:table-cell" scope="col">
                 Done
@@ -69,6 +69,9 @@ export function OrderStepsTable({ order, steps, ticks }: Props) {
                         {note}
                       </span>
                     ))}
+                    <span className="block md:hidden">
+                      <GivesList gives={words.gives} />
+                    </span>
                     {tick && (
                       <span className="block text-moss sm:hidden">
                         Done: <WhoAndWhen tick={tick} />

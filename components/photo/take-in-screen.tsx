@@ -1,6 +1,7 @@
 "use client";
 import { useQuery } from "@tanstack/react-query";
 import Link from "next/link";
+import { buttonClass } from "@/components/ui/button";
 import { PageTitle } from "@/components/ui/page-title";
 import { loosePhotosQuery } from "@/lib/client/photo";
 import type { Photo } from "@/lib/schemas/photo";
@@ -23,7 +24,13 @@ export function TakeInScreen({ photos, mayEdit }: { photos: readonly Photo[]; ma
             Rack
           </Link>
         }
-      />
+      >
+        {mayEdit && (
+          <Link href="/rack/take-in?photo=none" className={buttonClass()}>
+            Enter a board without a photograph
+          </Link>
+        )}
+      </PageTitle>
       <div className="flex flex-col gap-6 p-4 md:p-5">
         <FileSources onFiles={uploads.add} />
         <UploadList uploads={uploads} />

@@ -12,13 +12,14 @@ interface Props {
   searchParams: Promise<{ photo?: string | string[] }>;
 }
 
-/** With a photograph in the address: the form for the board on it. */
+/** With a photograph in the address: the form for the board on it; with "none", for a board that has no photograph yet. */
 export default async function TakeInPage({ searchParams }: Props) {
   const { photo } = await searchParams;
   const access = await pageAccess("/rack/take-in");
   const mayEdit = access.role !== "assistant";
   if (typeof photo === "string" && mayEdit) {
-    return <NewBoardScreen photo={await orNotFound(readPhoto(access, photo))} species={await readSpecies(access)} />;
+    const found = photo === "none" ? null : await orNotFound(readPhoto(access, photo));
+    return <NewBoardScreen photo={found} species={await readSpecies(access)} />;
   }
   return <TakeInScreen photos={await readLoosePhotos(access, 50)} mayEdit={mayEdit} />;
 }
