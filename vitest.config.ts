@@ -12,6 +12,7 @@ export default defineConfig({
   },
   test: {
     include: ["tests/**/*.test.ts"],
+    setupFiles: ["tests/support/property-seed.ts"],
     // Property tests search; a loaded machine takes several times as long as an idle one.
     testTimeout: 60_000,
   },
