@@ -15,6 +15,8 @@ export default defineConfig({
   workers: 1,
   retries: 0,
   timeout: 60_000,
+  // Pages ask for news every 5 s, and a loaded machine takes its time.
+  expect: { timeout: 15_000 },
   forbidOnly: Boolean(process.env.CI),
   use: {
     baseURL,
