@@ -67,8 +67,12 @@ function TableScreen({ initial }: Pick<Props, "initial">) {
             <Link href={`/jobs/${initial.jobId}`} className="underline-offset-2 hover:underline">
               {initial.jobTitle}
             </Link>
-            {" · "}
-            <SaveStatus />
+            {mayChange && (
+              <>
+                {" · "}
+                <SaveStatus />
+              </>
+            )}
           </>
         }
       >

@@ -2,14 +2,18 @@
 /** Says what happened: seen below the table, heard by those who hear the page. */
 import { useUnits } from "@/components/shell/units";
 import { announcementSentence } from "./said-sentence";
-import { useEditorState } from "./table-context";
+import { useEditorState, useTableContext } from "./table-context";
 import { useTagOf } from "./use-tag-of";
 
 export function LiveLine() {
+  const { editor } = useTableContext();
   const announcement = useEditorState((state) => state.announcement);
   const { style } = useUnits();
   const tagOf = useTagOf();
   const refused = announcement?.kind === "refused" || announcement?.kind === "read-only";
+  const hint = editor.mayChange
+    ? "Drag the set on the stock side, or let a front loose."
+    : "You may look at this layout but not change it.";
   return (
     <p
       role="status"
@@ -19,7 +23,7 @@ export function LiveLine() {
         // A new element each time, so that the same words are heard twice.
         <span key={announcement.number}>{announcementSentence(announcement, style, tagOf)}</span>
       ) : (
-        "Drag the set on the stock side, or let a front loose."
+        hint
       )}
     </p>
   );
