@@ -41,12 +41,12 @@ export function LayoutTable({ initial, shop, mayChange }: Props) {
   const table = useTable(initial, mayChange);
   return (
     <TableProvider value={{ ...table, faceId: initial.faceId, shop, saws: shop.saws }}>
-      <TableScreen initial={initial} />
+      <TableScreen initial={initial} mayChange={mayChange} />
     </TableProvider>
   );
 }
 
-function TableScreen({ initial }: Pick<Props, "initial">) {
+function TableScreen({ initial, mayChange }: Omit<Props, "shop">) {
   const viewRef = useRef<TableView | null>(null);
   const [helping, setHelping] = useState(false);
   const help = useCallback(() => setHelping(true), []);
