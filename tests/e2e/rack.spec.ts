@@ -205,13 +205,13 @@ test("photographs are dropped on the page and pasted into it", async ({ makerPag
 test("a board without a photograph is entered by its size and hangs in the rack", async ({ makerPage: page }) => {
   await page.goto("/rack/take-in");
   await page.getByRole("link", { name: "Enter a board without a photograph" }).click();
-  await page.getByLabel("Length, along the grain").fill("620");
-  await page.getByLabel("Width", { exact: true }).fill("70");
+  await page.getByLabel("Length, along the grain").fill("1300");
+  await page.getByLabel("Width", { exact: true }).fill("150");
   await page.getByLabel("Species").fill("Ash");
   await page.getByLabel("Thickness, measured").fill("20");
   expect(await accessibilityFaults(page)).toEqual([]);
   await page.getByRole("button", { name: "Enter board" }).click();
   await expect(page.getByRole("heading", { name: "B-001, Ash" })).toBeVisible();
-  // 70 mm tallies to 3 in, 620 mm to 2 ft, 20 mm counts as 1 in: 3 × 2 ÷ 12.
-  await expect(page.getByRole("definition").filter({ hasText: /^0\.5/ })).toBeVisible();
+  // 150 mm tallies to 6 in, 1300 mm to 4 ft, 20 mm counts as 1 in: 6 × 4 ÷ 12.
+  await expect(page.getByRole("definition").filter({ hasText: /^2$/ })).toBeVisible();
 });
