@@ -10,9 +10,19 @@ export interface Title {
   readonly rest: string;
 }
 
+/** Thinner than a saw takes surely, half a millimetre: common practice, no source. */
+const THINNEST_SAWN_UM = 500;
+
+/** Whether a cut takes a sliver so thin that it is a matter for the plane. */
+export function isShaving(cut: CutStep, board: SnapshotBoard): boolean {
+  if (cut.kind === "true" || !cut.trim || cut.bladeSide !== "far" || cut.setting > THINNEST_SAWN_UM) return false;
+  return !isBoardsOwn(trimmedEdge(cut), cut, board);
+}
+
 export function cutTitle(cut: CutStep, board: SnapshotBoard): Title {
   if (cut.kind === "true")
     return { verb: isEnd(cut.fromEdge) ? "Square" : "Joint", rest: `the ${edgeNames[cut.fromEdge]} of the board` };
+  if (isShaving(cut, board)) return { verb: isEnd(cut.fromEdge) ? "Shoot" : "Plane", rest: trimmed(cut, board) };
   const verb = cut.kind === "rip" ? "Rip" : "Crosscut";
   return { verb, rest: whatComesOff(cut, board) };
 }

@@ -1,9 +1,9 @@
 /** Every step of a cut order in words: the same on paper, at the bench and on the maker's screen. */
 import { type CutStep, type Edge, type LengthStyle, type Part, printedLength, type Um } from "@/lib/layout";
-import type { OrderSnapshot } from "@/lib/schemas/order-snapshot";
+import type { OrderSnapshot, SnapshotBoard } from "@/lib/schemas/order-snapshot";
 import type { CleanUpGroup, OrderStep } from "@/lib/schemas/order-steps";
 import { cautionWords } from "./caution";
-import { cutTitle, type Title, truingNote } from "./cut-title";
+import { cutTitle, isShaving, type Title, truingNote } from "./cut-title";
 import { edgeNames, measuredFrom } from "./edge-name";
 import { labelRanges, partName, sizeFigures } from "./part-name";
 
@@ -72,6 +72,7 @@ function testCutWords({ saw, cuts }: Extract<OrderStep, { kind: "test-cut" }>): 
 function cutWords(step: Extract<OrderStep, { kind: "cut" }>, style: LengthStyle, before: OrderStep | undefined): StepWords {
   const { cut, board } = step;
   const truing = cut.kind === "true";
+  if (isShaving(cut, board)) return shavingWords(cut, board, style);
   return {
     ...cutTitle(cut, board),
     notes: truing ? [truingNote(cut, style)] : cutNotes(cut, before),
@@ -80,6 +81,20 @@ function cutWords(step: Extract<OrderStep, { kind: "cut" }>, style: LengthStyle,
     measure: truing ? null : measure(cut),
     setting: truing ? null : cut.setting,
     gives: truing ? [] : cut.yields.map((part) => givesOf(part, style)),
+  };
+}
+
+/** A sliver for the plane: what it takes off, and none of the saw's cautions. */
+function shavingWords(cut: CutStep, board: SnapshotBoard, style: LengthStyle): StepWords {
+  const from = measuredFrom(cut.fromEdge, cut.fromEdgeState);
+  return {
+    ...cutTitle(cut, board),
+    notes: ["Thinner than the saw takes surely: use the plane."],
+    cautions: cut.cautions.filter((caution) => caution === "too-short-for-planer").map((caution) => cautionWords[caution]),
+    from,
+    measure: `Take so much off the ${from}`,
+    setting: cut.setting,
+    gives: cut.yields.map((part) => givesOf(part, style)),
   };
 }
 

@@ -63,11 +63,33 @@ describe("the steps of an order", () => {
     const { snapshot } = await makeOrder();
     for (const step of orderSteps(snapshot)) {
       if (step.kind !== "cut" || step.cut.kind === "true") continue;
-      const { measure, cautions } = stepWords(step, styleOf(snapshot));
+      const { measure, cautions, verb } = stepWords(step, styleOf(snapshot));
+      if (verb === "Shoot") continue;
       const far = step.cut.bladeSide === "far";
       expect(measure?.startsWith("Mark from")).toBe(far);
       expect(cautions.some((caution) => caution.includes("No fence or stop"))).toBe(far);
     }
+  });
+
+  test("a sliver thinner than a saw takes surely goes to the plane, with none of the saw's cautions", async () => {
+    // Gap 3.0, kerf 2.4, clean-up 0.2 on either side: 0.2 is left between two fronts.
+    const { snapshot } = await makeOrder();
+    const slivers = orderSteps(snapshot).filter((step) => step.kind === "cut" && step.cut.setting === 200);
+    expect(slivers).toHaveLength(3);
+    for (const step of slivers) {
+      const words = stepWords(step, styleOf(snapshot));
+      expect(`${words.verb} ${words.rest}`).toBe("Shoot the sliver off the fresh left end of strip A");
+      expect(words.setting).toBe(200);
+      expect(words.cautions.join()).not.toMatch(/fence|guard|clamp/i);
+    }
+  });
+
+  test("a wider sliver is sawn", async () => {
+    const { snapshot } = await makeOrder({ gapMm: 5 });
+    const said = lines(await makeOrder({ gapMm: 5 }));
+    expect(orderSteps(snapshot).filter((step) => step.kind === "cut" && step.cut.setting === 2_200)).toHaveLength(3);
+    expect(said.filter((line) => line.startsWith("Crosscut the sliver"))).toHaveLength(3);
+    expect(said.filter((line) => line.startsWith("Shoot"))).toEqual([]);
   });
 
   test("say of each part what becomes of it, the wanted one first", async () => {
