@@ -2,6 +2,7 @@
 /** The thumb's part of the screen: done and on to the next, back, and the list of all steps. */
 import { messageOf } from "@/lib/client/fault-from-server";
 import type { OrderStep } from "@/lib/schemas/order-steps";
+import { isShaving } from "@/lib/words/cut-title";
 import { Button, buttonClass } from "../ui/button";
 import type { BenchState } from "./use-bench";
 
@@ -59,6 +60,7 @@ function doneWord(step: OrderStep): string {
     case "test-cut":
       return "Tested";
     case "cut":
+      if (isShaving(step.cut, step.board)) return "Planed";
       return step.cut.kind === "true" ? "Straight" : "Cut";
     case "clean-up":
       return "Cleaned up";

@@ -5,7 +5,7 @@ import { useState } from "react";
 import { messageOf } from "@/lib/client/fault-from-server";
 import type { Order } from "@/lib/schemas/order";
 import { revisionLetter } from "@/lib/words/revision-letter";
-import { ProgressTape } from "../order/progress-tape";
+import { StepTape } from "../order/step-tape";
 import { Notice } from "../ui/notice";
 import { BenchButtons } from "./bench-buttons";
 import { OrderDone } from "./order-done";
@@ -31,7 +31,7 @@ export function Bench({ order }: { order: Order }) {
             step {at + 1} of {steps.length}
           </span>
         </div>
-        <ProgressTape steps={steps.length} done={done} at={bench.superseded || allDone ? null : at} />
+        <StepTape steps={steps.length} done={done} at={bench.superseded || allDone ? null : at} />
       </header>
       {bench.superseded ? (
         <SupersededStop order={order} newestRevision={bench.newestRevision} />

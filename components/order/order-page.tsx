@@ -18,8 +18,8 @@ import { FaceView } from "./face-view";
 import { LabelForm } from "./label-form";
 import { OrderRevisions } from "./order-revisions";
 import { OrderStepsTable } from "./order-steps-table";
-import { ProgressTape } from "./progress-tape";
 import { ShopDate } from "./shop-date";
+import { StepTape } from "./step-tape";
 
 interface Props {
   initial: Order;
@@ -72,7 +72,7 @@ export function OrderPage({ initial, revision, paper, qr }: Props) {
           Open the bench
         </Link>
       </PageTitle>
-      <ProgressTape steps={steps.length} done={done} at={next < 0 || progress.superseded ? null : next} />
+      <StepTape steps={steps.length} done={done} at={next < 0 || progress.superseded ? null : next} />
       <div className="grid items-start gap-5 p-4 md:p-5 lg:grid-cols-[minmax(0,1fr)_20rem]">
         <div className="flex min-w-0 flex-col gap-4">
           {connectionError && (

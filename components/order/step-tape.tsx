@@ -11,7 +11,7 @@ interface Props {
 
 const heightPx = 26;
 
-export function ProgressTape({ steps, done, at, className = "" }: Props) {
+export function StepTape({ steps, done, at, className = "" }: Props) {
   const every = figureEvery(steps);
   const places = done.flatMap((ticked, place) => (ticked ? [place] : []));
   const percent = (place: number) => `${(place / steps) * 100}%`;
