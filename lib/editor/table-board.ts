@@ -40,6 +40,7 @@ export function tableBoard(board: LayoutBoard): TableBoard {
       outline: straightening.zones.outline,
       keepClear: straightening.zones.keepClear,
       spokenFor: board.spokenFor,
+      glueLines: [],
     },
     tag: board.tag,
     species: board.species,

@@ -116,7 +116,7 @@ function boardFaceOf({ boards }: Layout): BoardFace {
   const { length, width, zones } = board.straightening;
   const { outline, keepClear } = zones;
   const { spokenFor } = board;
-  return { id: board.boardId, length, width, thickness: board.thickness, outline, keepClear, spokenFor };
+  return { id: board.boardId, length, width, thickness: board.thickness, outline, keepClear, spokenFor, glueLines: [] };
 }
 
 function idOf(boardIds: ReadonlyMap<string, string>, key: string): string {

@@ -136,7 +136,7 @@ describe("issuing", () => {
 });
 
 function boardFaceOf({ boardId, thickness, straightening: { length, width }, spokenFor }: LayoutBoard): BoardFace {
-  return { id: boardId, length, width, thickness, outline: null, keepClear: [], spokenFor };
+  return { id: boardId, length, width, thickness, outline: null, keepClear: [], spokenFor, glueLines: [] };
 }
 
 async function queriesOf<T>(run: () => Promise<T>): Promise<readonly [number, T]> {

@@ -23,6 +23,7 @@ export const longBoard: BoardFace = {
     },
   ],
   spokenFor: [],
+  glueLines: [],
 };
 
 export const shortBoard: BoardFace = {
@@ -33,6 +34,7 @@ export const shortBoard: BoardFace = {
   outline: null,
   keepClear: [],
   spokenFor: [],
+  glueLines: [],
 };
 
 export const boards = [longBoard, shortBoard] as const;

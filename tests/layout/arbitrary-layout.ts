@@ -150,6 +150,7 @@ export function boardOf(id: string, length: number, width: number, more: Partial
     outline: null,
     keepClear: [],
     spokenFor: [],
+    glueLines: [],
     ...more,
   };
 }

@@ -42,4 +42,6 @@ export interface BoardFace {
   readonly outline: readonly StockPoint[] | null;
   readonly keepClear: readonly KeepClear[];
   readonly spokenFor: readonly SpokenFor[];
+  /** Where boards are glued edge to edge: distances across the grain from y = 0, rising. Empty for a board in one piece. */
+  readonly glueLines: readonly Um[];
 }

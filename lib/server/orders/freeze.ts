@@ -110,7 +110,7 @@ export function refusedFor(sentences: readonly string[]) {
  */
 function boardFaceOf({ board, straightening, keepClear }: LayoutBoard): BoardFace {
   const { length, width, outline } = straightening;
-  return { id: board.id, length, width, thickness: board.thickness, outline, keepClear, spokenFor: [] };
+  return { id: board.id, length, width, thickness: board.thickness, outline, keepClear, spokenFor: [], glueLines: [] };
 }
 
 function cutRequestOf({ shop, face }: ToFreeze, one: LayoutBoard): CutRequest {
