@@ -3,8 +3,9 @@
  * smaller. What still fits is kept as it is, an outline that reaches over is cut to the rectangle, what lies off the board is dropped.
  */
 import type { StockPoint } from "../frame/point";
-import { type Um, um } from "../units/um";
+import { um } from "../units/um";
 import type { KeepClearShape } from "./board";
+import { cutPolygon } from "./cut-polygon";
 import { type BoardSize, outsideFault, polygonFault } from "./polygon-fault";
 
 export type CarriedOutline =
@@ -38,38 +39,12 @@ function boundsOfArea(area: KeepClearShape): { left: number; right: number; top:
   return { left: x - halfX, right: x + halfX, top: y - halfY, bottom: y + halfY };
 }
 
-type Side = { readonly axis: "x" | "y"; readonly limit: Um; readonly keeps: "above" | "below" };
-
-/** One side after the other, each cutting off what lies beyond it (Sutherland and Hodgman). */
+/** Cut to the board's own rectangle. */
 function cutToRectangle(outline: readonly StockPoint[], { length, width }: BoardSize): readonly StockPoint[] {
-  const sides: readonly Side[] = [
+  return cutPolygon(outline, [
     { axis: "x", limit: um(0), keeps: "above" },
     { axis: "x", limit: length, keeps: "below" },
     { axis: "y", limit: um(0), keeps: "above" },
     { axis: "y", limit: width, keeps: "below" },
-  ];
-  return sides.reduce<readonly StockPoint[]>((points, side) => withoutDoubles(cutAt(points, side)), outline);
-}
-
-function cutAt(points: readonly StockPoint[], side: Side): StockPoint[] {
-  const inside = (p: StockPoint) => (side.keeps === "above" ? p[side.axis] >= side.limit : p[side.axis] <= side.limit);
-  return points.flatMap((point, index) => {
-    const before = points.at(index - 1) ?? point;
-    if (inside(point)) return inside(before) ? [point] : [onSide(before, point, side), point];
-    return inside(before) ? [onSide(before, point, side)] : [];
-  });
-}
-
-function onSide(from: StockPoint, to: StockPoint, { axis, limit }: Side): StockPoint {
-  const t = (limit - from[axis]) / (to[axis] - from[axis]);
-  return axis === "x"
-    ? { x: limit, y: um(Math.round(from.y + t * (to.y - from.y))) }
-    : { x: um(Math.round(from.x + t * (to.x - from.x))), y: limit };
-}
-
-function withoutDoubles(points: readonly StockPoint[]): readonly StockPoint[] {
-  return points.filter(({ x, y }, index) => {
-    const before = points.at(index - 1);
-    return points.length === 1 || before?.x !== x || before.y !== y;
-  });
+  ]);
 }
