@@ -91,8 +91,22 @@ export { type Verdict, verifyProgram } from "./program/verify-program";
 export { type Drift, drifts } from "./seam/drift";
 export type { Seam, UmRange } from "./seam/seam";
 export { seams } from "./seam/seams";
+export type { BlankMember, BlankPlan, MemberPlace, PlacedMember } from "./stock/blank/blank-plan";
+export { type BlankJoint, type BlankStrip, blankStrips, type StripLayout, type StripOutcome } from "./stock/blank/blank-strips";
+export {
+  type BlankArea,
+  type BlankGlueLine,
+  type BlankOutcome,
+  type BlankRefusal,
+  type ComposedBlank,
+  composeBlank,
+  THICKNESS_TOLERANCE,
+} from "./stock/blank/compose-blank";
 export type { BoardFace, KeepClear, KeepClearKind, KeepClearShape, SpokenFor } from "./stock/board";
+export { carryGlueLines, liesWithin } from "./stock/carry-glue-lines";
 export { type CarriedOutline, carryOutline, liesOnBoard } from "./stock/carry-zones";
+export { movedArea, movedPoint, movedPolygon } from "./stock/move-area";
+export { otherSideFrom, SIDES_AGREE, type SidesCheck, sidesCheck, turnedOver } from "./stock/other-side";
 export { type BoardSize, outsideFault, type PolygonFault, polygonFault } from "./stock/polygon-fault";
 export {
   carpentersTriangle,
@@ -110,17 +124,3 @@ export { type BareUnit, LONGEST_UM, type ParsedLength, parseLength } from "./uni
 export { type PrintedLength, printedLength, printLength } from "./units/print-length";
 export type { Um } from "./units/um";
 export { mmFromUm, um, umFromMm } from "./units/um";
-export type { BlankMember, BlankPlan, MemberPlace, PlacedMember } from "./stock/blank/blank-plan";
-export { type BlankJoint, type BlankStrip, blankStrips, type StripLayout, type StripOutcome } from "./stock/blank/blank-strips";
-export {
-  type BlankArea,
-  type BlankGlueLine,
-  type BlankOutcome,
-  type BlankRefusal,
-  type ComposedBlank,
-  composeBlank,
-  THICKNESS_TOLERANCE,
-} from "./stock/blank/compose-blank";
-export { carryGlueLines, liesWithin } from "./stock/carry-glue-lines";
-export { movedArea, movedPoint, movedPolygon } from "./stock/move-area";
-export { otherSideFrom, SIDES_AGREE, type SidesCheck, sidesCheck, turnedOver } from "./stock/other-side";
