@@ -70,7 +70,11 @@ export function freshDraft(photo: PhotoSize, board: { length: Um; width: Um }): 
 }
 
 /** Starts from the marks of an earlier version, made on this photograph. */
-export function draftFrom(marking: Straightening["marking"], photo: PhotoSize, board: { length: Um; width: Um }): Draft {
+export function draftFrom(
+  marking: NonNullable<Straightening["marking"]>,
+  photo: PhotoSize,
+  board: { length: Um; width: Um },
+): Draft {
   const fresh = freshDraft(photo, board);
   const { reference } = marking;
   return {

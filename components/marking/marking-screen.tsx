@@ -44,7 +44,7 @@ interface Props {
 export function MarkingScreen({ board, photo, previous }: Props) {
   const size = useMemo(() => ({ width: photo.widthPx, height: photo.heightPx }), [photo.widthPx, photo.heightPx]);
   const marking = useMarking(size, () =>
-    previous?.photoId === photo.id ? draftFrom(previous.marking, size, board) : freshDraft(size, board),
+    previous?.photoId === photo.id && previous.marking ? draftFrom(previous.marking, size, board) : freshDraft(size, board),
   );
   const stage = useStageView(size, MOST_SCALE, MARGIN_PX);
   const { image, state } = useImage(photo.levels[0]?.url ?? null);

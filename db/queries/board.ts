@@ -178,6 +178,13 @@ export async function updateBoard(
   return result.affectedRows === 1;
 }
 
+export async function setBoardKind(tx: Connection, shopId: ShopId, boardId: string, kind: BoardFields["kind"], at: Date) {
+  await tx
+    .update(board)
+    .set({ kind, updatedAt: at })
+    .where(and(eq(board.shopId, shopId), eq(board.id, boardId)));
+}
+
 export async function insertReading(
   tx: Connection,
   shopId: ShopId,

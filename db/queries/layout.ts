@@ -79,10 +79,15 @@ export async function deleteLayout(tx: Connection, shopId: ShopId, layoutId: str
   await tx.delete(layout).where(and(eq(layout.shopId, shopId), eq(layout.id, layoutId)));
 }
 
-/** The boards on a layout's table with the picture version used, in the order they were put there. */
+/** The boards on a layout's table with the picture version used and the present ones of both sides, in the order of their tags. */
 export async function listLayoutBoards(db: Connection, shopId: ShopId, layoutId: string) {
   return db
-    .select({ board, straightening, currentStraighteningId: boardPicture.straighteningId })
+    .select({
+      board,
+      straightening,
+      faceStraighteningId: boardPicture.straighteningId,
+      backStraighteningId: boardPicture.backStraighteningId,
+    })
     .from(layoutBoard)
     .innerJoin(board, eq(board.id, layoutBoard.boardId))
     .innerJoin(straightening, eq(straightening.id, layoutBoard.straighteningId))

@@ -1,19 +1,31 @@
 /** Which revisions of cut orders cut from which boards. */
 import "server-only";
-import { and, asc, desc, eq, gte, isNotNull, or } from "drizzle-orm";
+import { and, asc, desc, eq, gte, isNotNull, isNull, lte, ne, or } from "drizzle-orm";
 import { alias } from "drizzle-orm/mysql-core";
 import type { Connection } from "../client";
-import { board, cutOrder, cutOrderFace, layout, layoutBoard, orderRevision, orderRevisionBoard, straightening } from "../schema";
+import {
+  board,
+  cutOrder,
+  cutOrderFace,
+  layout,
+  layoutBoard,
+  orderRevision,
+  orderRevisionBoard,
+  photo,
+  straightening,
+} from "../schema";
 import type { ShopId } from "../shop-id";
 
 /**
  * Every revision that cuts from a board on the layout's table, as the picture that the layout lies on shows it: from that picture, from
- * another one marked on the same photograph, or from a newer one, after which the older ones are no truer. Of each board the highest
+ * another one marked on the same photograph, or from a newer one, after which the older ones are no truer. Face and back are the same
+ * wood: an order from one side has the pictures of the other that were photographed before it was issued. Of each board the highest
  * order number first, and of it the newest revision.
  */
 export async function listRevisionsOnBoards(db: Connection, shopId: ShopId, layoutId: string) {
   const used = alias(straightening, "used");
   const cutFrom = alias(straightening, "cut_from");
+  const usedPhoto = alias(photo, "used_photo");
   return db
     .select({
       boardId: board.id,
@@ -30,6 +42,7 @@ export async function listRevisionsOnBoards(db: Connection, shopId: ShopId, layo
     .innerJoin(layout, eq(layout.id, layoutBoard.layoutId))
     .innerJoin(board, eq(board.id, layoutBoard.boardId))
     .innerJoin(used, eq(used.id, layoutBoard.straighteningId))
+    .leftJoin(usedPhoto, eq(usedPhoto.id, used.photoId))
     .innerJoin(orderRevisionBoard, eq(orderRevisionBoard.boardId, layoutBoard.boardId))
     .innerJoin(cutFrom, eq(cutFrom.id, orderRevisionBoard.straighteningId))
     .innerJoin(orderRevision, eq(orderRevision.id, orderRevisionBoard.revisionId))
@@ -40,7 +53,12 @@ export async function listRevisionsOnBoards(db: Connection, shopId: ShopId, layo
         eq(layoutBoard.shopId, shopId),
         eq(layoutBoard.layoutId, layoutId),
         eq(orderRevisionBoard.shopId, shopId),
-        or(gte(cutFrom.version, used.version), eq(cutFrom.photoId, used.photoId)),
+        or(
+          eq(cutFrom.photoId, used.photoId),
+          and(eq(cutFrom.side, used.side), gte(cutFrom.version, used.version)),
+          // The other side of the same wood: only a photograph that came in after the order was issued can show it cut.
+          and(ne(cutFrom.side, used.side), or(isNull(usedPhoto.id), lte(usedPhoto.createdAt, orderRevision.issuedAt))),
+        ),
       ),
     )
     .orderBy(asc(board.tagNumber), asc(board.id), desc(cutOrder.number), desc(orderRevision.revision));

@@ -2,6 +2,7 @@
 import "server-only";
 import { and, asc, desc, eq, inArray, max } from "drizzle-orm";
 import { v7 as newId } from "uuid";
+import type { BoardSide } from "@/lib/schemas/straightening";
 import type { Connection } from "../client";
 import { board, boardPicture, keepClear, straightening } from "../schema";
 import type { ShopId } from "../shop-id";
@@ -54,22 +55,28 @@ export async function listStraightenings(db: Connection, shopId: ShopId, boardId
     .orderBy(desc(straightening.version));
 }
 
-/** The version the rack shows, or undefined while there is none. */
-export async function findBoardPicture(db: Connection, shopId: ShopId, boardId: string): Promise<StraighteningRow | undefined> {
+/** The version of its face that the rack shows, or that of its back; undefined while there is none. */
+export async function findBoardPicture(
+  db: Connection,
+  shopId: ShopId,
+  boardId: string,
+  side: BoardSide = "face",
+): Promise<StraighteningRow | undefined> {
+  const shown = side === "face" ? boardPicture.straighteningId : boardPicture.backStraighteningId;
   const [row] = await db
     .select({ straightening })
     .from(boardPicture)
-    .innerJoin(straightening, eq(straightening.id, boardPicture.straighteningId))
+    .innerJoin(straightening, eq(straightening.id, shown))
     .where(and(eq(boardPicture.shopId, shopId), eq(boardPicture.boardId, boardId)));
   return row?.straightening;
 }
 
 type NewVersion = Pick<
   typeof straightening.$inferInsert,
-  "boardId" | "photoId" | "marking" | "length" | "width" | "createdBy" | "createdAt"
+  "boardId" | "photoId" | "side" | "marking" | "length" | "width" | "createdBy" | "createdAt"
 >;
 
-/** A version that waits for its picture. The board's row must be locked, so that no number is given twice. */
+/** A version that waits for its picture. The board's row must be locked, so that no number is given twice; both sides count together. */
 export async function insertWaitingStraightening(tx: Connection, shopId: ShopId, fields: NewVersion) {
   const [last] = await tx
     .select({ version: max(straightening.version) })
@@ -102,6 +109,14 @@ export async function endWaitingStraightening(
     .set(end)
     .where(and(eq(straightening.shopId, shopId), eq(straightening.id, straighteningId), eq(straightening.state, "waiting")));
   return result.affectedRows === 1;
+}
+
+/** The picture of the back. A board has one of its face before, which holds the row. */
+export async function setBackPicture(tx: Connection, shopId: ShopId, boardId: string, straighteningId: string) {
+  await tx
+    .update(boardPicture)
+    .set({ backStraighteningId: straighteningId })
+    .where(and(eq(boardPicture.shopId, shopId), eq(boardPicture.boardId, boardId)));
 }
 
 /** Shows this version in the rack; the board takes its size from it. */

@@ -1,5 +1,5 @@
 import { date, index, int, mysqlTable, smallint, text, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
-import { boardStates, cuts } from "@/lib/schemas/board";
+import { boardKinds, boardStates, cuts } from "@/lib/schemas/board";
 import { idColumn, minorUnitsColumn, umColumn, utcColumn } from "../columns";
 import { shopIdColumn } from "../shop-id-column";
 import { user } from "./user";
@@ -12,6 +12,7 @@ export const board = mysqlTable(
     shopId: shopIdColumn(),
     /** Tag "B-041" is number 41. */
     tagNumber: int("tag_number").notNull(),
+    kind: varchar("kind", { length: 8, enum: boardKinds }).notNull().default("board"),
     state: varchar("state", { length: 8, enum: boardStates }).notNull(),
     species: varchar("species", { length: 80 }).notNull(),
     cut: varchar("cut", { length: 8, enum: cuts }).notNull(),

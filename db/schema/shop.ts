@@ -1,4 +1,5 @@
 import { char, int, mysqlTable, smallint, varchar } from "drizzle-orm/mysql-core";
+import { um } from "@/lib/layout";
 import { idColumn, umColumn, utcColumn } from "../columns";
 import type { ShopId } from "../shop-id";
 
@@ -17,6 +18,8 @@ export const shop = mysqlTable("shop", {
   shortestMachined: umColumn("shortest_machined_um").notNull(),
   offcutLength: umColumn("offcut_length_um").notNull(),
   offcutWidth: umColumn("offcut_width_um").notNull(),
+  /** What jointing takes off each edge that is glued. 1.5 mm: common practice, no source. */
+  jointing: umColumn("jointing_um").notNull().default(um(1500)),
   nextBoardNumber: int("next_board_number").notNull(),
   nextJobNumber: int("next_job_number").notNull(),
   nextOrderNumber: int("next_order_number").notNull(),

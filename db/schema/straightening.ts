@@ -1,7 +1,7 @@
 import { double, index, int, mysqlTable, text, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
 import { markingSchema } from "@/lib/schemas/marking";
 import { pictureLevelsSchema } from "@/lib/schemas/photo";
-import { straighteningStates } from "@/lib/schemas/straightening";
+import { boardSides, straighteningStates } from "@/lib/schemas/straightening";
 import { keepClearKinds, keepClearShapeSchema, outlineSchema } from "@/lib/schemas/zones";
 import { idColumn, jsonOf, umColumn, utcColumn } from "../columns";
 import { shopIdColumn } from "../shop-id-column";
@@ -22,11 +22,13 @@ export const straightening = mysqlTable(
     boardId: idColumn("board_id")
       .notNull()
       .references(() => board.id),
-    photoId: idColumn("photo_id")
-      .notNull()
-      .references(() => photo.id),
+    /** null, and no marks: composed from the pictures of the boards that a blank is glued up from. */
+    photoId: idColumn("photo_id").references(() => photo.id),
+    /** Which face of the board it shows. The back's frame is the face's turned over about the long edge: y_back = width − y_face. */
+    side: varchar("side", { length: 4, enum: boardSides }).notNull().default("face"),
+    /** Versions of both sides count together. */
     version: int("version").notNull(),
-    marking: jsonOf(markingSchema)("marking").notNull(),
+    marking: jsonOf(markingSchema)("marking"),
     state: varchar("state", { length: 12, enum: straighteningStates }).notNull(),
     /** Why it failed, in words for the maker; null unless failed. */
     failure: text("failure"),
@@ -53,7 +55,10 @@ export const straightening = mysqlTable(
   ],
 );
 
-/** The version of a board's picture that the rack shows and new layouts start from. No row until one is straightened. */
+/**
+ * The version of a board's picture that the rack shows and new layouts start from: of its face. No row until one is straightened. The
+ * picture of its back is told apart by name, so that whoever asks for the board's picture gets the face.
+ */
 export const boardPicture = mysqlTable("board_picture", {
   boardId: idColumn("board_id")
     .primaryKey()
@@ -61,6 +66,8 @@ export const boardPicture = mysqlTable("board_picture", {
   straighteningId: idColumn("straightening_id")
     .notNull()
     .references(() => straightening.id),
+  /** null while the back has no picture. */
+  backStraighteningId: idColumn("back_straightening_id").references(() => straightening.id),
   shopId: shopIdColumn(),
 });
 

@@ -5,6 +5,8 @@ import { idSchema } from "./ids";
 import { sizeUmSchema, umSchema } from "./length";
 import { servedLevelSchema } from "./photo";
 
+/** One piece of wood, or boards glued edge to edge. */
+export const boardKinds = ["board", "blank"] as const;
 /** In the rack and free to use, used up by an order, or gone for another reason. Held is not a state: layouts say so. */
 export const boardStates = ["rack", "cut", "gone"] as const;
 /** How the board was sawn from the log; "angled" grain between flat and quarter is rift in the trade. */

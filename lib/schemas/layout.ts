@@ -64,8 +64,10 @@ export const layoutBoardSchema = z.object({
   place: z.string(),
   thickness: sizeUmSchema,
   straightening: straighteningSchema,
-  /** A newer version than the one this layout was made on, if there is one. */
+  /** A newer version of the same side than the one this layout was made on, if there is one. */
   newerStraighteningId: idSchema.nullable(),
+  /** The picture of the board's other side, if there is one: the layout may be moved over to it. */
+  otherSideStraighteningId: idSchema.nullable(),
   /** Other faces of open jobs with this board on their table. On another picture of it there is no saying whether the two overlap. */
   heldBy: z.array(
     z.object({ faceId: idSchema, faceTitle: z.string(), jobTitle: z.string(), issued: z.boolean(), samePicture: z.boolean() }),

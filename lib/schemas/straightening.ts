@@ -7,14 +7,20 @@ import { markingSchema } from "./marking";
 import { servedLevelSchema } from "./photo";
 import { zonesSaveSchema, zonesSchema } from "./zones";
 
+/** Turned over about its long edge, the board shows its back: left stays left, the upper edge becomes the lower one. */
+export const boardSides = ["face", "back"] as const;
+export type BoardSide = (typeof boardSides)[number];
+
 export const straighteningStates = ["waiting", "done", "failed", "cancelled"] as const;
 
 export const straighteningSchema = z.object({
   id: idSchema,
   boardId: idSchema,
-  photoId: idSchema,
+  /** null, and no marks: composed from the pictures of the boards that a blank is glued up from. */
+  photoId: idSchema.nullable(),
+  side: z.enum(boardSides),
   version: z.int(),
-  marking: markingSchema,
+  marking: markingSchema.nullable(),
   state: z.enum(straighteningStates),
   failure: z.string().nullable(),
   /** The task that makes the picture, while state is "waiting". */
@@ -32,11 +38,17 @@ export type Straightening = z.output<typeof straighteningSchema>;
 export const startStraightening = defineEndpoint({
   method: "POST",
   path: "/api/boards/{boardId}/straightenings",
-  summary: "Mark a photograph and have it straightened; makes a new version, earlier layouts keep theirs",
+  summary:
+    "Mark a photograph of a board's face or back and have it straightened; makes a new version, earlier layouts keep theirs",
   tag: "straightenings",
   access: makers,
   params: z.object({ boardId: idSchema }),
-  body: z.object({ photoId: idSchema, marking: markingSchema }),
+  body: z.object({
+    photoId: idSchema,
+    marking: markingSchema,
+    /** The face unless said otherwise. */
+    side: z.enum(boardSides).optional(),
+  }),
   response: straighteningSchema,
 });
 
@@ -53,7 +65,7 @@ export const getStraightening = defineEndpoint({
 export const listStraightenings = defineEndpoint({
   method: "GET",
   path: "/api/boards/{boardId}/straightenings",
-  summary: "All versions of a board's picture, newest first",
+  summary: "All versions of a board's pictures, of its face and its back, newest first",
   tag: "straightenings",
   access: everyone,
   params: z.object({ boardId: idSchema }),
@@ -63,7 +75,7 @@ export const listStraightenings = defineEndpoint({
 export const saveZones = defineEndpoint({
   method: "PUT",
   path: "/api/straightenings/{straighteningId}/zones",
-  summary: "Save outline and keep-clear areas as one; a conflict names the present revision",
+  summary: "Save outline, keep-clear areas and glue lines as one; a conflict names the present revision",
   tag: "straightenings",
   access: makers,
   params: z.object({ straighteningId: idSchema }),

@@ -54,6 +54,7 @@ const knot = (xMm = 1800, fields: Partial<KeepClearArea> = {}): KeepClearArea =>
 const zones = (revision: number, keepClear: KeepClearArea[], outline: Zones["outline"] = null): Zones => ({
   outline,
   keepClear,
+  glueLines: [],
   revision,
 });
 

@@ -3,8 +3,10 @@ import "server-only";
 import type { z } from "zod";
 import type { Connection } from "@/db/client";
 import { findLayout, listLayoutBoards, listNewestOrders } from "@/db/queries/layout";
+import type { StraighteningRow } from "@/db/queries/straightening";
 import type { ShopId } from "@/db/shop-id";
 import type { Layout, layoutBoardSchema } from "@/lib/schemas/layout";
+import type { BoardSide } from "@/lib/schemas/straightening";
 import { printTag } from "@/lib/schemas/tag";
 import type { ShopAccess } from "../access";
 import { database } from "../database";
@@ -48,14 +50,14 @@ export async function layoutBoards(db: Connection, shopId: ShopId, layoutId: str
   );
   const takers = await takersOf(db, shopId, layoutId);
   return Promise.all(
-    rows.map(async ({ board, straightening, currentStraighteningId }) => ({
+    rows.map(async ({ board, straightening, faceStraighteningId, backStraighteningId }) => ({
       boardId: board.id,
       tag: printTag(board.tagNumber),
       species: board.species,
       place: board.place,
       thickness: board.thickness,
       straightening: await straighteningOf(db, shopId, straightening),
-      newerStraighteningId: currentStraighteningId === straightening.id ? null : currentStraighteningId,
+      ...otherPictures(straightening, { face: faceStraighteningId, back: backStraighteningId }),
       heldBy: holders
         .filter(({ boardId }) => boardId === board.id)
         .map(({ faceId, faceTitle, jobTitle, issued, straighteningId }) => ({
@@ -69,4 +71,13 @@ export async function layoutBoards(db: Connection, shopId: ShopId, layoutId: str
       takenBy: takers.get(board.id) ?? null,
     })),
   );
+}
+
+/** A newer picture of the side that the layout lies on, and the present one of the other side. */
+function otherPictures({ id, side }: StraighteningRow, present: Readonly<Record<BoardSide, string | null>>) {
+  const newest = present[side];
+  return {
+    newerStraighteningId: newest === id ? null : newest,
+    otherSideStraighteningId: present[side === "face" ? "back" : "face"],
+  };
 }

@@ -3,7 +3,12 @@ import "server-only";
 import { lockBoard } from "@/db/queries/board";
 import { recordHistory } from "@/db/queries/history";
 import { lockPhoto } from "@/db/queries/photo";
-import { findStraightening, insertWaitingStraightening, setStraighteningTask } from "@/db/queries/straightening";
+import {
+  findBoardPicture,
+  findStraightening,
+  insertWaitingStraightening,
+  setStraighteningTask,
+} from "@/db/queries/straightening";
 import { insertTask } from "@/db/queries/task";
 import { fitMarking } from "@/lib/layout";
 import type { BodyOf } from "@/lib/schemas/endpoint";
@@ -18,7 +23,7 @@ import { straighteningOf } from "./straightening-of";
 export async function startStraightening(
   access: ShopAccess,
   boardId: string,
-  { photoId, marking }: BodyOf<typeof endpoint>,
+  { photoId, marking, side = "face" }: BodyOf<typeof endpoint>,
 ): Promise<Straightening> {
   const style = await lengthStyleOf(access.shopId);
   const at = new Date();
@@ -27,11 +32,14 @@ export async function startStraightening(
     if (!board) throw notFound("board");
     const photo = await lockPhoto(tx, access.shopId, photoId);
     if (!photo) throw notFound("photograph");
+    if (side === "back" && !(await findBoardPicture(tx, access.shopId, boardId))) {
+      throw refused("The back is taken as the face turned over. Mark a photograph of the face first.");
+    }
     const fit = fitMarking(marking, { width: photo.widthPx, height: photo.heightPx });
     if (!fit.ok) throw refused(marksRefusalWords(fit.refusal, style));
 
     const { length, width } = fit;
-    const fields = { boardId, photoId, marking, length, width, createdBy: access.userId, createdAt: at };
+    const fields = { boardId, photoId, side, marking, length, width, createdBy: access.userId, createdAt: at };
     const { id: straighteningId, version } = await insertWaitingStraightening(tx, access.shopId, fields);
     const taskId = await insertTask(tx, access.shopId, {
       kind: "straighten",
@@ -43,7 +51,7 @@ export async function startStraightening(
     await recordHistory(
       tx,
       access.shopId,
-      { userId: access.userId, noun: "board", nounId: boardId, verb: "marked", detail: { version, straighteningId } },
+      { userId: access.userId, noun: "board", nounId: boardId, verb: "marked", detail: { version, straighteningId, side } },
       at,
     );
     const row = await findStraightening(tx, access.shopId, straighteningId);

@@ -56,9 +56,11 @@ export const straightenTask: TaskKind = {
 class WordedRefusal extends Error {}
 
 async function makePicture(version: StraighteningRow, { shopId, signal, onProgress }: TaskContext): Promise<MadePicture> {
-  const photo = await findPhoto(database(), shopId, version.photoId);
+  const { photoId, marking } = version;
+  if (photoId === null || marking === null) throw new Error("a picture that is composed of others cannot be straightened");
+  const photo = await findPhoto(database(), shopId, photoId);
   if (!photo) throw new Error("the photograph of a version is gone");
-  const outcome = await straighten({ source: await originalOf(photo), marking: version.marking, onProgress, signal });
+  const outcome = await straighten({ source: await originalOf(photo), marking, onProgress, signal });
   if (!outcome.ok) {
     if (outcome.of === "photo") throw new Error(`an original that was taken in cannot be read: ${outcome.refusal.reason}`);
     throw new WordedRefusal(marksRefusalWords(outcome.refusal, await lengthStyleOf(shopId)));

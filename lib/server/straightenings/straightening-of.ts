@@ -1,6 +1,7 @@
 /** A version of a board's picture as the browser sees it: addresses of its levels instead of storage keys, and its zones. */
 import "server-only";
 import type { Connection } from "@/db/client";
+import { listGlueLines } from "@/db/queries/glue-line";
 import { listKeepClear, type StraighteningRow } from "@/db/queries/straightening";
 import type { ShopId } from "@/db/shop-id";
 import type { ServedLevel } from "@/lib/schemas/photo";
@@ -11,6 +12,7 @@ export async function straighteningOf(db: Connection, shopId: ShopId, row: Strai
     id: row.id,
     boardId: row.boardId,
     photoId: row.photoId,
+    side: row.side,
     version: row.version,
     marking: row.marking,
     state: row.state,
@@ -21,7 +23,12 @@ export async function straighteningOf(db: Connection, shopId: ShopId, row: Strai
     pxPerMm: row.pxPerMm,
     residual: row.residual,
     levels: row.levels.map((level) => servedLevel(row.id, level)),
-    zones: { outline: row.outline, keepClear: await listKeepClear(db, shopId, row.id), revision: row.zonesRevision },
+    zones: {
+      outline: row.outline,
+      keepClear: await listKeepClear(db, shopId, row.id),
+      glueLines: await listGlueLines(db, shopId, row.id),
+      revision: row.zonesRevision,
+    },
     createdAt: row.createdAt.toISOString(),
   };
 }

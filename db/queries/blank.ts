@@ -1,0 +1,55 @@
+/** Blanks that are planned, and the boards they are glued up from. */
+import "server-only";
+import { and, asc, eq, inArray } from "drizzle-orm";
+import type { Connection } from "../client";
+import { blank, blankMember, board, straightening } from "../schema";
+import type { ShopId } from "../shop-id";
+
+export type BlankMemberRow = typeof blankMember.$inferSelect;
+
+export async function findBlank(db: Connection, shopId: ShopId, boardId: string) {
+  const [row] = await db
+    .select()
+    .from(blank)
+    .where(and(eq(blank.shopId, shopId), eq(blank.boardId, boardId)));
+  return row;
+}
+
+/** Throws a duplicate-key error when one of the boards has got into another blank. */
+export async function insertBlank(
+  tx: Connection,
+  shopId: ShopId,
+  row: Omit<typeof blank.$inferInsert, "shopId">,
+  members: readonly Omit<typeof blankMember.$inferInsert, "shopId" | "blankId">[],
+) {
+  await tx.insert(blank).values({ ...row, shopId });
+  await tx.insert(blankMember).values(members.map((member) => ({ ...member, shopId, blankId: row.boardId })));
+}
+
+/** The boards are free again; the blank's own row in the rack stays. */
+export async function deleteBlank(tx: Connection, shopId: ShopId, boardId: string) {
+  await tx.delete(blankMember).where(and(eq(blankMember.shopId, shopId), eq(blankMember.blankId, boardId)));
+  await tx.delete(blank).where(and(eq(blank.shopId, shopId), eq(blank.boardId, boardId)));
+}
+
+/** The boards of a blank with the picture each was planned with, from the upper edge down. */
+export async function listMembers(db: Connection, shopId: ShopId, blankId: string) {
+  return db
+    .select({ member: blankMember, board, straightening })
+    .from(blankMember)
+    .innerJoin(board, eq(board.id, blankMember.boardId))
+    .innerJoin(straightening, eq(straightening.id, blankMember.straighteningId))
+    .where(and(eq(blankMember.shopId, shopId), eq(blankMember.blankId, blankId)))
+    .orderBy(asc(blankMember.position));
+}
+
+/** Of these boards, those that are in a blank, with its tag number. */
+export async function listInBlanks(db: Connection, shopId: ShopId, boardIds: readonly string[]) {
+  if (boardIds.length === 0) return [];
+  return db
+    .select({ boardId: blankMember.boardId, blankId: blankMember.blankId, blankTagNumber: board.tagNumber })
+    .from(blankMember)
+    .innerJoin(board, eq(board.id, blankMember.blankId))
+    .where(and(eq(blankMember.shopId, shopId), inArray(blankMember.boardId, [...boardIds])))
+    .orderBy(asc(blankMember.boardId));
+}
