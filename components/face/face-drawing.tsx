@@ -1,7 +1,7 @@
 "use client";
 import { useRef } from "react";
 import { useSize } from "@/components/picture/use-size";
-import { facePieces, faceSize, type GridFace } from "@/lib/layout";
+import { type Face, facePieces, faceSize } from "@/lib/layout";
 
 /** A number is read at arm's length at this size, CSS px, and never fills more than this share of its front. */
 const labelPx = 18;
@@ -13,7 +13,7 @@ const marginPx = 2;
  * The fronts of a face as outlines, to scale, with their numbers. A drawing only: the wood is on the layout table.
  * `className` gives it its room; the face lies in the middle of that.
  */
-export function FaceDrawing({ face, className = "" }: { face: GridFace; className?: string }) {
+export function FaceDrawing({ face, className = "" }: { face: Face; className?: string }) {
   const box = useRef<HTMLDivElement>(null);
   const room = useSize(box);
   const { width, height } = faceSize(face);

@@ -123,5 +123,5 @@ function faceOf(columns: AxisDraft, rows: AxisDraft, grain: GridFace["grain"]): 
   const across = axisSizes(columns);
   const down = axisSizes(rows);
   if (!across.ok || !down.ok) return null;
-  return { columns: across.sizes, rows: down.sizes, columnGaps: across.gaps, rowGaps: down.gaps, grain };
+  return { pattern: "grid", columns: across.sizes, rows: down.sizes, columnGaps: across.gaps, rowGaps: down.gaps, grain };
 }

@@ -113,8 +113,9 @@ function CutFields({ direction }: { direction: CutDirection }) {
   );
 }
 
-/** The widest sliver that a second cut of this kind takes out; null where no fronts are parted by such cuts. */
+/** The widest sliver that a second cut of this kind takes out of a grid; null where no fronts are parted by such cuts. */
 function largestSliver({ face, spacing, ...cuts }: FaceLayout, direction: CutDirection): Um | null {
+  if (face.pattern !== "grid") return null;
   const gaps = cutBetween("columns", face.grain) === direction ? face.columnGaps : face.rowGaps;
   if (gaps.length === 0) return null;
   return um(Math.max(...gaps.map((gap) => sliverOf(cuts[direction], gap, spacing))));

@@ -8,9 +8,15 @@ import { Button } from "@/components/ui/button";
 import { Modal } from "@/components/ui/modal";
 import { changeSizes } from "@/lib/editor/commands/change-sizes";
 import { type GridFace, um } from "@/lib/layout";
-import { useEditorState, useTableContext } from "./table-context";
+import { useTableContext } from "./table-context";
 
-export function OpeningDialog({ open, onOpenChange }: { open: boolean; onOpenChange: (open: boolean) => void }) {
+interface OpeningDialogProps {
+  face: GridFace;
+  open: boolean;
+  onOpenChange: (open: boolean) => void;
+}
+
+export function OpeningDialog({ face, open, onOpenChange }: OpeningDialogProps) {
   return (
     <Modal
       open={open}
@@ -18,15 +24,14 @@ export function OpeningDialog({ open, onOpenChange }: { open: boolean; onOpenCha
       title="Sizes from an opening"
       lead="The anchor stays where it is in the wood; the other fronts move away from it or towards it."
     >
-      {open && <OpeningForm onDone={() => onOpenChange(false)} />}
+      {open && <OpeningForm face={face} onDone={() => onOpenChange(false)} />}
     </Modal>
   );
 }
 
-function OpeningForm({ onDone }: { onDone: () => void }) {
+function OpeningForm({ face, onDone }: { face: GridFace; onDone: () => void }) {
   const { editor } = useTableContext();
   const { units } = useUnits();
-  const face = useEditorState((state) => state.document.layout.face);
   const [columns, setColumns] = useState(() => draftOf(face, "columns", units));
   const [rows, setRows] = useState(() => draftOf(face, "rows", units));
   const across = axisSizes(columns);

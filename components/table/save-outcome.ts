@@ -3,8 +3,7 @@ import { FaultFromServer, messageOf } from "@/lib/client/fault-from-server";
 import { getLayout, saveLayout } from "@/lib/client/layout";
 import { documentOf } from "@/lib/editor/document";
 import type { SaveOutcome, SaveRequest } from "@/lib/editor/sync/sync";
-import type { FaceLayout } from "@/lib/layout";
-import type { Layout } from "@/lib/schemas/layout";
+import { faceLayoutSchema, type Layout } from "@/lib/schemas/layout";
 
 /** `onElsewhere` is told what stands on the server when another window was first: it may have other boards, too. Never throws. */
 export async function saveOutcome(
@@ -14,7 +13,7 @@ export async function saveOutcome(
 ): Promise<SaveOutcome> {
   const { layout, crosscutSawId, ripSawId } = document;
   try {
-    const body = { baseRevision, document: wireOf(layout), crosscutSawId, ripSawId };
+    const body = { baseRevision, document: faceLayoutSchema.parse(layout), crosscutSawId, ripSawId };
     const { revision } = await saveLayout(faceId, body);
     return { kind: "saved", revision };
   } catch (error) {
@@ -37,13 +36,3 @@ function outcomeOfFailure(error: unknown): SaveOutcome {
 }
 
 const passing: ReadonlySet<string> = new Set(["unexpected", "too-many-tries"]);
-
-/** The same in arrays that may be written to, as the wire's types have them. */
-function wireOf({ face, groups, ...rest }: FaceLayout): Parameters<typeof saveLayout>[1]["document"] {
-  const { columns, rows, columnGaps, rowGaps, grain } = face;
-  return {
-    ...rest,
-    face: { columns: [...columns], rows: [...rows], columnGaps: [...columnGaps], rowGaps: [...rowGaps], grain },
-    groups: groups.map((group) => ({ ...group, pieceIds: [...group.pieceIds], takesPlaceOf: { ...group.takesPlaceOf } })),
-  };
-}

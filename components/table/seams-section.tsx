@@ -3,7 +3,7 @@ import { useUnits } from "@/components/shell/units";
 import { factsOf } from "@/lib/editor/selectors/facts";
 import { type SeamRelation, seamRelation } from "@/lib/editor/selectors/seam-relation";
 import { jumpOf } from "@/lib/editor/view/jump-chips";
-import { cutBetween, type Drift, type GridFace, printedLength, type Seam, type UmRange } from "@/lib/layout";
+import { cutBetween, type Drift, type Face, printedLength, type Seam, type UmRange } from "@/lib/layout";
 import { PanelSection } from "./panel-section";
 import { useTableContext } from "./table-context";
 import { useLiveLayout } from "./use-live-layout";
@@ -58,7 +58,7 @@ export function SeamsSection() {
     </PanelSection>
   );
 
-  function driftFigure({ normal }: Seam, face: GridFace, drift: Drift["drift"]): string {
+  function driftFigure({ normal }: Seam, face: Face, drift: Drift["drift"]): string {
     if (drift === null) return "–";
     const cut = cutBetween(normal === "right" ? "columns" : "rows", face.grain);
     return printedLength(cut === "crosscut" ? drift.along : drift.across, style).figure;

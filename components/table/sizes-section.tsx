@@ -17,14 +17,18 @@ export function SizesSection() {
   const { width, height } = faceSize(face);
   return (
     <PanelSection title="Sizes" beside={<span className="measure">{`${print(width)} × ${print(height)}`}</span>} open={false}>
-      <fieldset className="flex flex-col gap-3" disabled={!editor.mayChange}>
-        <AxisFields axis="columns" />
-        <AxisFields axis="rows" />
-        <Button size="small" onClick={() => setAsking(true)}>
-          Work out from an opening…
-        </Button>
-      </fieldset>
-      <OpeningDialog open={asking} onOpenChange={setAsking} />
+      {face.pattern === "grid" && (
+        <>
+          <fieldset className="flex flex-col gap-3" disabled={!editor.mayChange}>
+            <AxisFields face={face} axis="columns" />
+            <AxisFields face={face} axis="rows" />
+            <Button size="small" onClick={() => setAsking(true)}>
+              Work out from an opening…
+            </Button>
+          </fieldset>
+          <OpeningDialog face={face} open={asking} onOpenChange={setAsking} />
+        </>
+      )}
     </PanelSection>
   );
 }
@@ -34,9 +38,8 @@ const names = {
   rows: { size: "Height", gap: "Gap below", add: "Add a row", remove: "Remove the last row", gaps: "rowGaps" },
 } as const;
 
-function AxisFields({ axis }: { axis: "columns" | "rows" }) {
+function AxisFields({ face, axis }: { face: GridFace; axis: "columns" | "rows" }) {
   const { editor } = useTableContext();
-  const face = useEditorState((state) => state.document.layout.face);
   const name = names[axis];
   const sizes = face[axis];
   const gaps = face[name.gaps];

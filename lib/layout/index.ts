@@ -21,14 +21,15 @@ export { identity } from "./frame/isometry";
 export type { FacePoint, FaceRect, Frame, Point, Rect, StockPoint, StockRect } from "./frame/point";
 export { changeAnchor } from "./pattern/change-anchor";
 export { changeCuts, changeFace, type FaceChange } from "./pattern/change-face";
+export { faceSize, seamPlaces } from "./pattern/charts";
 export { cleanUpEdges } from "./pattern/clean-up-edges";
+export type { Face, Grain, GridFace, Pattern } from "./pattern/face";
+export type { FaceFault } from "./pattern/face-fault";
 export type {
   AnchorX,
   AnchorY,
   CutLoss,
   FaceLayout,
-  Grain,
-  GridFace,
   PieceGroup,
   Placement,
   QuarterTurns,
@@ -44,13 +45,14 @@ export {
   sizesFromOpening,
   WHOLE_MICROMETRES,
 } from "./pattern/graduate";
-export { faceSize } from "./pattern/grids";
 export { type FacePiece, facePieces, layOut, unplacedPieces } from "./pattern/lay-out";
 export { groupById, type LayoutChange, type LayoutRefusal, type PieceSize } from "./pattern/layout-change";
 export { type LayoutFault, layoutFaults } from "./pattern/layout-faults";
 export { letLoose, regroup } from "./pattern/let-loose";
 export { type CutDirection, cutBetween, jumpAcrossGap, lossOf, sliverOf, spacingOf } from "./pattern/loss";
-export { labelAt, pieceCount, pieceIdAt, pieceIdsOf, readingIndexOf } from "./pattern/piece-ids";
+export type { EdgeAmounts, HungPiece, Mirrored, SeamPlace } from "./pattern/pattern-rules";
+export { pieceCount, pieceIdsOf, readingIndexOf } from "./pattern/piece-ids";
+export { labelAt, pieceIdAt } from "./pattern/piece-names";
 export { groupBounds, liftGroup, moveGroup, placeGroup, turnGroup, turnsAlongGrain } from "./pattern/place-group";
 export { groupOf } from "./pattern/slots";
 export { swapPieces } from "./pattern/swap-pieces";
@@ -65,7 +67,7 @@ export { type PaperName, type PaperSize, paperSizes } from "./picture/paper-size
 export { measureMm, type PhotoGeometry, photoFromStockMm, stockMmFromPhoto, warpMapAt } from "./picture/photo-geometry";
 export { type LevelSize, pyramidLevels } from "./picture/pyramid";
 export { type Pixels, type WarpMap, warpInBands } from "./picture/warp";
-export type { Piece, PieceId, StockId } from "./piece";
+export type { Piece, PieceId, PieceRole, StockId } from "./piece";
 export { type ConservationLine, conservationLine, type WoodSum } from "./program/conservation-line";
 export { type BoardEdges, boardEdges, type CutRequest, defaultCutBudget, type PlacedPiece } from "./program/cut-request";
 export { cutRefusal, planCuts } from "./program/plan-cuts";
@@ -86,7 +88,7 @@ export type {
   StepKind,
 } from "./program/program";
 export { type ReplayFault, type ReplayOutcome, replay } from "./program/replay";
-export { cutRequestFor, piecesOnBoard } from "./program/request-for-board";
+export { cutRequestFor, type PieceOnBoard, piecesOnBoard } from "./program/request-for-board";
 export { type Verdict, verifyProgram } from "./program/verify-program";
 export { type Drift, drifts } from "./seam/drift";
 export type { Seam, UmRange } from "./seam/seam";

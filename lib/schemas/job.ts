@@ -2,7 +2,7 @@
 import { z } from "zod";
 import { defineEndpoint, everyone, makers } from "./endpoint";
 import { idSchema } from "./ids";
-import { cutLossSchema, gridFaceSchema } from "./layout";
+import { cutLossSchema, faceSchema } from "./layout";
 
 const jobFields = {
   title: z.string().trim().min(1, "Give the job a title").max(120),
@@ -18,7 +18,7 @@ export const faceRowSchema = z.object({
   layoutRevision: z.int(),
   pieces: z.int(),
   /** Face as it will stand, for a small drawing. */
-  face: gridFaceSchema,
+  face: faceSchema,
   boards: z.array(z.string()),
   order: z.object({ id: idSchema, number: z.int(), revision: z.int(), superseded: z.boolean() }).nullable(),
 });
@@ -90,7 +90,7 @@ export const updateJob = defineEndpoint({
 /** What a new face is made from; the core turns it into a layout with one set, not yet on wood. */
 export const createFaceSchema = z.object({
   title: z.string().trim().min(1, "Give the face a title").max(120),
-  face: gridFaceSchema,
+  face: faceSchema,
   crosscut: cutLossSchema,
   rip: cutLossSchema,
   crosscutSawId: idSchema.nullable(),

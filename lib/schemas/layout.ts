@@ -1,6 +1,6 @@
 /** The layout document on the wire: the core's FaceLayout, checked. */
 import { z } from "zod";
-import type { FaceLayout } from "@/lib/layout";
+import type { Face, FaceLayout } from "@/lib/layout";
 import { defineEndpoint, everyone, makers } from "./endpoint";
 import { idSchema } from "./ids";
 import { allowanceUmSchema, pointSchema, sizeUmSchema } from "./length";
@@ -10,8 +10,10 @@ import { takenBySchema } from "./taken-by";
 
 const pieceIdSchema = z.string().regex(/^p[1-9]\d{0,3}$/);
 
+/** Layouts and orders from before there were patterns have none: they are grids. */
 export const gridFaceSchema = z
   .object({
+    pattern: z.literal("grid").optional().default("grid"),
     columns: z.array(sizeUmSchema).min(1).max(40),
     rows: z.array(sizeUmSchema).min(1).max(40),
     columnGaps: z.array(allowanceUmSchema),
@@ -21,6 +23,12 @@ export const gridFaceSchema = z
   .refine((face) => face.columnGaps.length === face.columns.length - 1 && face.rowGaps.length === face.rows.length - 1, {
     message: "there is one gap fewer than columns, and one fewer than rows",
   });
+
+/** A face by its pattern. */
+export const faceSchema = z.discriminatedUnion("pattern", [gridFaceSchema]);
+
+/** Fails to compile when the wire and the core drift apart. */
+export const faceForCore = (face: z.output<typeof faceSchema>): Face => face;
 
 export const cutLossSchema = z.object({
   kerf: allowanceUmSchema,
@@ -44,7 +52,7 @@ const groupSchema = z.object({
 });
 
 export const faceLayoutSchema = z.object({
-  face: gridFaceSchema,
+  face: faceSchema,
   crosscut: cutLossSchema,
   rip: cutLossSchema,
   spacing: z.enum(["followGap", "tight"]),

@@ -25,6 +25,7 @@ const loss = { kerf: umFromMm(2.4), cleanUpBefore: umFromMm(0.2), cleanUpAfter: 
 const rowOfFour = (sawId: string) => ({
   title: "Top row",
   face: {
+    pattern: "grid" as const,
     columns: [240, 240, 240, 240].map(umFromMm),
     rows: [umFromMm(184)],
     columnGaps: [3, 3, 3].map(umFromMm),

@@ -96,7 +96,8 @@ export const anyCommand: fc.Arbitrary<Command> = fc.oneof(
       (d) => {
         const gaps = (count: number) => Array.from({ length: count - 1 }, () => gap);
         const { grain } = d.layout.face;
-        return changeSizes(d, { columns, rows, columnGaps: gaps(columns.length), rowGaps: gaps(rows.length), grain });
+        const between = { columnGaps: gaps(columns.length), rowGaps: gaps(rows.length) };
+        return changeSizes(d, { pattern: "grid", columns, rows, ...between, grain });
       },
   ),
 );

@@ -52,6 +52,7 @@ export const arbitraryFace: fc.Arbitrary<GridFace> = fc
     const sizes = (count: number) => fc.array(size, { minLength: count, maxLength: count });
     const gaps = (count: number) => fc.array(umBetween(0, 6_000), { minLength: count - 1, maxLength: count - 1 });
     return fc.record({
+      pattern: fc.constant("grid" as const),
       columns: sizes(columns),
       rows: sizes(rows),
       columnGaps: gaps(columns),

@@ -1,6 +1,6 @@
 /** The upper layer of the stock side: the pieces as they lie, what the cuts around them take, and the line that a drag has snapped to. */
 import type { StaticCanvas } from "fabric";
-import { boundsOf, cleanUpEdges, groupOf, type PieceId, polygonToStock, type StockRect } from "@/lib/layout";
+import { boundsOf, cleanUpEdges, type EdgeAmounts, type PieceId, polygonToStock, type StockRect } from "@/lib/layout";
 import { factsOf } from "../selectors/facts";
 import type { Preview } from "../tools/drag";
 import type { TableGeometry } from "../view/geometry";
@@ -45,7 +45,12 @@ export class PiecesLayer {
       return [{ piece, rect, box }];
     });
     const whole = { left: 0, top: 0, width: this.#canvas.width, height: this.#canvas.height };
-    this.#sketches.named("loss").put(whole, paintLoss(lying.map(({ piece, box }) => lossBand(layout, piece.id, box, px))));
+    const cleanUps = cleanUpEdges(layout, pieces);
+    const bands = lying.flatMap(({ piece, box }) => {
+      const cleanUp = cleanUps.get(piece.id);
+      return cleanUp ? [lossBand(layout, cleanUp, box, px)] : [];
+    });
+    this.#sketches.named("loss").put(whole, paintLoss(bands));
     // Chosen pieces lie on top, so that their outline is whole.
     const inOrder = [...lying].sort((p, q) => Number(selection.includes(p.piece.id)) - Number(selection.includes(q.piece.id)));
     for (const { piece, rect, box } of inOrder) {
@@ -88,9 +93,9 @@ export class PiecesLayer {
   }
 }
 
-function lossBand(layout: Preview["layout"], id: PieceId, box: Box, px: number): LossBand {
-  const { left, right, top, bottom } = cleanUpEdges(layout, groupOf(layout, id)?.placement?.turns ?? 0);
-  const [along, across] = [layout.crosscut.kerf, layout.rip.kerf];
+function lossBand({ crosscut, rip }: Preview["layout"], cleanUp: EdgeAmounts, box: Box, px: number): LossBand {
+  const { left, right, top, bottom } = cleanUp;
+  const [along, across] = [crosscut.kerf, rip.kerf];
   return {
     piece: box,
     grown: {

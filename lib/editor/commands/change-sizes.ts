@@ -1,9 +1,9 @@
 /** Other sizes, gaps or counts of fronts, or the grain run the other way. */
-import { changeFace, type FaceLayout, type Grain, type GridFace, groupBounds, placeGroup, turnsAlongGrain } from "@/lib/layout";
+import { changeFace, type Face, type FaceLayout, type Grain, groupBounds, placeGroup, turnsAlongGrain } from "@/lib/layout";
 import type { TableDocument } from "../document";
 import { type CommandOutcome, stepToLayout } from "./outcome";
 
-export function changeSizes(document: TableDocument, face: GridFace): CommandOutcome {
+export function changeSizes(document: TableDocument, face: Face): CommandOutcome {
   const { layout, swapsUndone } = changeFace(document.layout, face);
   return stepToLayout(document, layout, { did: "changed-sizes", swapsUndone });
 }

@@ -5,7 +5,7 @@
  * Table frame (stock side): x along every board from its left end, y down over the stacked boards, µm. Rulers and spaces between boards keep their size in pixels at
  * every zoom, so their share of the table frame changes with it.
  */
-import { type BoardFace, type FaceLayout, faceSize, type StockId, type Um, um } from "@/lib/layout";
+import { type BoardFace, type Face, faceSize, type StockId, seamPlaces, type Um, um } from "@/lib/layout";
 
 export interface Size {
   readonly width: number;
@@ -65,13 +65,12 @@ export interface TableGeometry {
 
 export interface TableContent {
   readonly boards: readonly BoardFace[];
-  readonly face: FaceLayout["face"];
+  readonly face: Face;
 }
 
 export function tableGeometry({ boards, face }: TableContent, sides: { show: Size; stock: Size }, view: View): TableGeometry {
   const { width, height } = faceSize(face);
-  const beside = face.rows.length > 1 ? CHIP_ROOM_BESIDE_PX : 0;
-  const below = face.columns.length > 1 ? CHIP_ROOM_BELOW_PX : 0;
+  const { beside, below } = chipRoom(face);
   const faceFit = Math.min(
     usable(sides.show.width, 2 * MARGIN_PX + beside) / mm(width),
     usable(sides.show.height, 2 * MARGIN_PX + below) / mm(height),
@@ -117,6 +116,23 @@ export function tableGeometry({ boards, face }: TableContent, sides: { show: Siz
     stockOrigin: stock.origin,
     view: { zoom: view.zoom, show: show.pan, stock: stock.pan },
   };
+}
+
+interface ChipRoom {
+  readonly beside: number;
+  readonly below: number;
+}
+
+const chipRoomByFace = new WeakMap<Face, ChipRoom>();
+
+/** What the chips of the outer seams need beside the face and below it. Asked on every frame, so worked out once a face. */
+function chipRoom(face: Face): ChipRoom {
+  const known = chipRoomByFace.get(face);
+  if (known) return known;
+  const normals = new Set(seamPlaces(face).map(({ normal }) => normal));
+  const room = { beside: normals.has("down") ? CHIP_ROOM_BESIDE_PX : 0, below: normals.has("right") ? CHIP_ROOM_BELOW_PX : 0 };
+  chipRoomByFace.set(face, room);
+  return room;
 }
 
 /** Where the content of a side starts. What fits is not moved; what does not is moved up to its edges and no further. */

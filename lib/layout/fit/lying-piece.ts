@@ -3,13 +3,14 @@ import { boundsOf, polygonToStock } from "../frame/apply-isometry";
 import { cleanUpEdges } from "../pattern/clean-up-edges";
 import type { FaceLayout } from "../pattern/face-layout";
 import { layOut } from "../pattern/lay-out";
-import type { Piece, PieceId, StockId } from "../piece";
+import type { Piece, PieceId, PieceRole, StockId } from "../piece";
 import type { Edge } from "../program/program";
 import type { Um } from "../units/um";
 import { type Spans, spansOf } from "./span";
 
 export interface LyingPiece {
   readonly id: PieceId;
+  readonly role: PieceRole;
   readonly groupId: string;
   readonly stockId: StockId;
   /** Finished size. */
@@ -23,12 +24,14 @@ export interface LyingPiece {
 /** Every piece laid on wood, in reading order. */
 export function lyingPieces(layout: FaceLayout, pieces: readonly Piece[] = layOut(layout)): LyingPiece[] {
   const groupById = new Map(layout.groups.flatMap((group) => group.pieceIds.map((id) => [id, group] as const)));
-  return pieces.flatMap(({ id, stockId, outline, stockFromFace }): LyingPiece[] => {
+  const cleanUps = cleanUpEdges(layout, pieces);
+  return pieces.flatMap(({ id, role, stockId, outline, stockFromFace }): LyingPiece[] => {
     const group = groupById.get(id);
-    if (group === undefined || group.placement === null) return [];
+    if (group === undefined) return [];
+    const cleanUp = cleanUps.get(id);
+    if (cleanUp === undefined) return [];
     const spans = spansOf(boundsOf(polygonToStock(stockFromFace, outline)));
-    const cleanUp = cleanUpEdges(layout, group.placement.turns);
-    return [{ id, groupId: group.id, stockId, spans, blank: grownBy(spans, cleanUp), cleanUp }];
+    return [{ id, role, groupId: group.id, stockId, spans, blank: grownBy(spans, cleanUp), cleanUp }];
   });
 }
 

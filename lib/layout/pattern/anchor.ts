@@ -1,5 +1,5 @@
 /**
- * The anchor point of a group: the point of the spaced grid that its placement pins to the wood, and the point of the face that
+ * The anchor point of a group: the point of the spaced chart that its placement pins to the wood, and the point of the face that
  * belongs to it. Both in the axes of the face, before turning.
  *
  * A centre that falls on half a micrometre goes to the side of the origin, here and nowhere else; since the pieces are placed by
@@ -9,45 +9,52 @@ import { boundsOf } from "../frame/apply-isometry";
 import type { FacePoint, FaceRect } from "../frame/point";
 import type { PieceId } from "../piece";
 import { type Um, um } from "../units/um";
+import { hungChart, outlineOf, spacedChart } from "./charts";
 import type { AnchorX, AnchorY, FaceLayout, PieceGroup } from "./face-layout";
-import { faceGrid, type Grid, outlineOf, placeOf, rectAt, spacedGrid } from "./grids";
+import type { ChartPlace } from "./pattern-rules";
+import { ofPiece } from "./piece-ids";
 import { slotOf } from "./slots";
 
-/** What an anchor is found from: the box of the group and, per piece, its rectangle. */
-interface Ground {
-  readonly box: FaceRect;
-  readonly rectOf: (id: PieceId) => FaceRect;
-}
-
-/** The anchor point in the spaced grid. */
-export function spacedAnchor(layout: FaceLayout, group: PieceGroup, grid: Grid = spacedGrid(layout)): FacePoint {
-  const slotRect = (id: PieceId) => rectAt(grid, placeOf(layout.face, slotOf(group, id)));
-  return anchorPoint(layout, group, { box: boxOf(group, slotRect), rectOf: slotRect });
+/** The anchor point in the spaced chart. */
+export function spacedAnchor(layout: FaceLayout, group: PieceGroup, places = spacedChart(layout)): FacePoint {
+  const slotRect = (id: PieceId) => ofPiece(places, slotOf(group, id)).rect;
+  return anchorPoint(layout, group, places, { slotRect, ownRect: slotRect });
 }
 
 /** The point of the hung face at which the wood of the group shows without drift. */
-export function faceAnchor(layout: FaceLayout, group: PieceGroup, grid: Grid = faceGrid(layout.face)): FacePoint {
-  const slotRect = (id: PieceId) => rectAt(grid, placeOf(layout.face, slotOf(group, id)));
-  const ownRect = (id: PieceId) => rectAt(grid, placeOf(layout.face, id));
-  return anchorPoint(layout, group, { box: boxOf(group, slotRect), rectOf: ownRect });
+export function faceAnchor(layout: FaceLayout, group: PieceGroup): FacePoint {
+  const hung = hungChart(layout.face);
+  const slotRect = (id: PieceId) => ofPiece(hung, slotOf(group, id)).rect;
+  const ownRect = (id: PieceId) => ofPiece(hung, id).rect;
+  return anchorPoint(layout, group, spacedChart(layout), { slotRect, ownRect });
 }
 
-/** The smallest rectangle around the slots of a group in the spaced grid. Throws on a group without pieces. */
+/** The smallest rectangle around the slots of a group in the spaced chart. Throws on a group without pieces. */
 export function spacedBox(layout: FaceLayout, group: PieceGroup): FaceRect {
-  const grid = spacedGrid(layout);
-  return boxOf(group, (id) => rectAt(grid, placeOf(layout.face, slotOf(group, id))));
+  const places = spacedChart(layout);
+  return boxOf(group.pieceIds, (id) => ofPiece(places, slotOf(group, id)).rect);
 }
 
-function boxOf(group: PieceGroup, rectOf: (id: PieceId) => FaceRect): FaceRect {
-  return boundsOf(group.pieceIds.flatMap((id) => outlineOf(rectOf(id))));
+type RectOf = (id: PieceId) => FaceRect;
+
+/** What an anchor is found from: the rectangle of the slot that a piece is cut from, and that of the piece itself. */
+interface Ground {
+  readonly slotRect: RectOf;
+  readonly ownRect: RectOf;
 }
 
-function anchorPoint(layout: FaceLayout, group: PieceGroup, { box, rectOf }: Ground): FacePoint {
+function anchorPoint(layout: FaceLayout, group: PieceGroup, places: readonly ChartPlace[], ground: Ground): FacePoint {
+  const guides = group.pieceIds.filter((id) => ofPiece(places, slotOf(group, id)).anchors);
+  const box = boxOf(guides.length > 0 ? guides : group.pieceIds, ground.slotRect);
   const own = (anchor: AnchorX | AnchorY) =>
-    typeof anchor === "object" && group.pieceIds.includes(anchor.piece) ? rectOf(anchor.piece) : box;
+    typeof anchor === "object" && group.pieceIds.includes(anchor.piece) ? ground.ownRect(anchor.piece) : box;
   const forX = own(layout.anchorX);
   const forY = own(layout.anchorY);
   return { x: pointOn(layout.anchorX, forX.x, forX.width), y: pointOn(layout.anchorY, forY.y, forY.height) };
+}
+
+function boxOf(ids: readonly PieceId[], rectOf: RectOf): FaceRect {
+  return boundsOf(ids.flatMap((id) => outlineOf(rectOf(id))));
 }
 
 function pointOn(anchor: AnchorX | AnchorY, start: Um, size: Um): Um {

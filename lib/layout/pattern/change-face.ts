@@ -3,10 +3,11 @@
  * moves away from it or towards it.
  */
 import type { PieceId } from "../piece";
-import type { AnchorX, AnchorY, FaceLayout, GridFace } from "./face-layout";
+import { hungChart } from "./charts";
+import type { Face } from "./face";
+import type { AnchorX, AnchorY, FaceLayout } from "./face-layout";
 import type { CutChoices } from "./fresh-layout";
-import { faceGrid, placeOf, rectAt } from "./grids";
-import { pieceIdsOf } from "./piece-ids";
+import { ofPiece, pieceIdsOf } from "./piece-ids";
 import { groupWith, slotOf } from "./slots";
 
 export interface FaceChange {
@@ -22,10 +23,10 @@ export function changeCuts(layout: FaceLayout, cuts: Partial<CutChoices>): FaceL
 }
 
 /**
- * Another grid of fronts. Pieces that exist before and after stay in their groups; new ones join the set; what an anchor or a
+ * Another face. Pieces that exist before and after stay in their groups; new ones join the set; what an anchor or a
  * swap refers to and is no longer there is given up.
  */
-export function changeFace(layout: FaceLayout, face: GridFace): FaceChange {
+export function changeFace(layout: FaceLayout, face: Face): FaceChange {
   const ids = pieceIdsOf(face);
   const present = new Set(ids);
   const held = new Set(layout.groups.flatMap((group) => group.pieceIds));
@@ -53,13 +54,13 @@ export function changeFace(layout: FaceLayout, face: GridFace): FaceChange {
  * Slots are a permutation of the pieces. A cycle of it stays whole while all its pieces are there and of one size; otherwise
  * all of it is undone, so that the slots remain a permutation.
  */
-function undoneSwaps(layout: FaceLayout, face: GridFace, present: ReadonlySet<PieceId>): Set<PieceId> {
+function undoneSwaps(layout: FaceLayout, face: Face, present: ReadonlySet<PieceId>): Set<PieceId> {
   const next = new Map(layout.groups.flatMap((group) => group.pieceIds.map((id) => [id, slotOf(group, id)] as const)));
-  const grid = faceGrid(face);
+  const hung = hungChart(face);
   const sizeOf = (id: PieceId) => {
     if (!present.has(id)) return "gone";
-    const { width, height } = rectAt(grid, placeOf(face, id));
-    return `${width}×${height}`;
+    const { role, rect } = ofPiece(hung, id);
+    return `${role} ${rect.width}×${rect.height}`;
   };
   const undone = new Set<PieceId>();
   for (const start of next.keys()) {

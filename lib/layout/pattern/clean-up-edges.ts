@@ -1,25 +1,30 @@
 /** Which clean-up each edge of a piece gets, seen in the stock frame: the sawn blank is the piece grown by these. */
+import type { Isometry } from "../frame/isometry";
+import type { Piece, PieceId } from "../piece";
 import type { Edge } from "../program/program";
-import type { Um } from "../units/um";
-import type { FaceLayout, QuarterTurns } from "./face-layout";
-import { cutBetween } from "./loss";
+import type { FaceLayout } from "./face-layout";
+import type { EdgeAmounts } from "./pattern-rules";
+import { ofPiece } from "./piece-ids";
+import { rulesOf } from "./rules-of";
 
-/** Clockwise as seen, so that n quarter turns take an edge n places on. */
-const clockwise = ["top", "right", "bottom", "left"] as const satisfies readonly Edge[];
+/** Clean-up by stock edge of each of these pieces of a layout, as they lie on wood. */
+export function cleanUpEdges(layout: FaceLayout, pieces: readonly Piece[]): ReadonlyMap<PieceId, EdgeAmounts> {
+  const onFace = rulesOf(layout.face).cleanUps(layout);
+  return new Map(pieces.map(({ id, stockFromFace }) => [id, onStock(ofPiece(onFace, id), stockFromFace)]));
+}
 
-/**
- * Clean-up per stock edge of a piece laid with these turns. On the face the edge before a cut is a piece's right or bottom
- * one, the edge after it the next piece's left or top one; outer edges of the face are sawn and cleaned like the rest.
- */
-export function cleanUpEdges(layout: FaceLayout, turns: QuarterTurns): Readonly<Record<Edge, Um>> {
-  const columnCut = layout[cutBetween("columns", layout.face.grain)];
-  const rowCut = layout[cutBetween("rows", layout.face.grain)];
-  const onFace: Readonly<Record<Edge, Um>> = {
-    left: columnCut.cleanUpAfter,
-    right: columnCut.cleanUpBefore,
-    top: rowCut.cleanUpAfter,
-    bottom: rowCut.cleanUpBefore,
+/** Right for quarter turns and mirrors, which take edges to edges. */
+function onStock(onFace: EdgeAmounts, { a, b, c, d }: Isometry): EdgeAmounts {
+  const lying: Partial<Record<Edge, EdgeAmounts[Edge]>> = {
+    [edgeToward(a, b)]: onFace.right,
+    [edgeToward(-a, -b)]: onFace.left,
+    [edgeToward(c, d)]: onFace.bottom,
+    [edgeToward(-c, -d)]: onFace.top,
   };
-  const lyingAt = (edge: Edge) => onFace[clockwise[(clockwise.indexOf(edge) + 4 - turns) % 4] ?? edge];
-  return { left: lyingAt("left"), right: lyingAt("right"), top: lyingAt("top"), bottom: lyingAt("bottom") };
+  return { ...onFace, ...lying };
+}
+
+function edgeToward(x: number, y: number): Edge {
+  if (Math.abs(x) > Math.abs(y)) return x > 0 ? "right" : "left";
+  return y > 0 ? "bottom" : "top";
 }

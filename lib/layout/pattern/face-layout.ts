@@ -2,25 +2,14 @@
  * The document of a layout on solid stock: parameters from which `layOut` derives every piece. Plain immutable JSON; there is
  * no second representation of where a piece lies.
  *
- * The face is a grid of fronts (a row has one row, a stack one column). As cut from stock its columns and rows do not lie at the
- * gaps of the face but at the spacing that the saw's loss asks for: the "spaced" grid. A group is a set of pieces that keep their
- * places in the spaced grid and lie on one board together; a piece let loose is a group of one.
+ * The face follows a pattern (`face.ts`). As cut from stock its pieces do not lie at the gaps of the face but at the spacing that
+ * the saw's loss asks for: the "spaced chart". A group is a set of pieces that keep their places in the spaced chart and lie on
+ * one board together; a piece let loose is a group of one.
  */
 import type { StockPoint } from "../frame/point";
 import type { PieceId, StockId } from "../piece";
 import type { Um } from "../units/um";
-
-export type Grain = "horizontal" | "vertical";
-
-/** Sizes and gaps of the face. `columnGaps.length === columns.length − 1`, likewise rows. Reading order numbers the pieces. */
-export interface GridFace {
-  readonly columns: readonly Um[];
-  readonly rows: readonly Um[];
-  readonly columnGaps: readonly Um[];
-  readonly rowGaps: readonly Um[];
-  /** How the grain runs on the face. Horizontal: columns are parted by crosscuts and rows by rips; vertical: the other way. */
-  readonly grain: Grain;
-}
+import type { Face } from "./face";
 
 /** What one cut takes between two show edges: loss = kerf + clean-up on either side (engine: what a cut costs). */
 export interface CutLoss {
@@ -57,7 +46,7 @@ export interface PieceGroup {
 }
 
 export interface FaceLayout {
-  readonly face: GridFace;
+  readonly face: Face;
   readonly crosscut: CutLoss;
   readonly rip: CutLoss;
   readonly spacing: Spacing;

@@ -1,6 +1,7 @@
-/** New layouts: a row, a stack or a grid of fronts in one set that is not laid on wood yet. */
+/** New layouts in one set that is not laid on wood yet, and the faces of a row, a stack or a grid of fronts. */
 import type { Um } from "../units/um";
-import type { CutLoss, FaceLayout, Grain, GridFace, Spacing } from "./face-layout";
+import type { Face, Grain, GridFace } from "./face";
+import type { CutLoss, FaceLayout, Spacing } from "./face-layout";
 import { pieceIdsOf } from "./piece-ids";
 
 export interface CutChoices {
@@ -13,7 +14,7 @@ export interface CutChoices {
 export const SET_ID = "set";
 
 /** A layout over a face, anchored in its middle: that halves the greatest drift. */
-export function freshLayout(face: GridFace, cuts: CutChoices): FaceLayout {
+export function freshLayout(face: Face, cuts: CutChoices): FaceLayout {
   return {
     face,
     crosscut: cuts.crosscut,
@@ -38,5 +39,6 @@ export function stackFace(heights: readonly Um[], width: Um, gap: Um, grain: Gra
 /** Rows and columns of fronts with one gap between columns and one between rows. */
 export function gridFace(columns: readonly Um[], rows: readonly Um[], columnGap: Um, rowGap: Um, grain: Grain): GridFace {
   const gaps = (count: number, gap: Um) => Array.from({ length: Math.max(0, count - 1) }, () => gap);
-  return { columns, rows, columnGaps: gaps(columns.length, columnGap), rowGaps: gaps(rows.length, rowGap), grain };
+  const between = { columnGaps: gaps(columns.length, columnGap), rowGaps: gaps(rows.length, rowGap) };
+  return { pattern: "grid", columns, rows, ...between, grain };
 }

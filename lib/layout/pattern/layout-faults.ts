@@ -3,16 +3,16 @@
  * mistakes of a program, not of a maker: what a maker can get wrong is in `fit/problems.ts`.
  */
 import type { PieceId } from "../piece";
+import { hungChart } from "./charts";
+import type { FaceFault } from "./face-fault";
 import type { FaceLayout } from "./face-layout";
-import { faceGrid, placeOf, rectAt } from "./grids";
-import { pieceIdsOf } from "./piece-ids";
+import { ofPiece, pieceIdsOf } from "./piece-ids";
+import { rulesOf } from "./rules-of";
 import { slotOf } from "./slots";
 
 export type LayoutFault =
-  | { readonly fault: "empty-face" }
-  | { readonly fault: "gap-count"; readonly axis: "columns" | "rows" }
-  | { readonly fault: "size-not-positive"; readonly axis: "columns" | "rows"; readonly index: number }
-  | { readonly fault: "negative-length"; readonly where: "columnGaps" | "rowGaps" | "crosscut" | "rip" }
+  | FaceFault
+  | { readonly fault: "negative-length"; readonly where: "crosscut" | "rip" }
   | { readonly fault: "no-group" }
   | { readonly fault: "group-id-twice"; readonly groupId: string }
   | { readonly fault: "unknown-piece"; readonly piece: PieceId }
@@ -23,31 +23,17 @@ export type LayoutFault =
 
 /** Everything that is wrong with the shape of a layout; empty when `layOut` may be called. */
 export function layoutFaults(layout: FaceLayout): LayoutFault[] {
-  const faults = faceFaults(layout);
-  // The rest counts pieces by the grid, which has to be sound first.
+  const faults = [...rulesOf(layout.face).faults(layout.face), ...lossFaults(layout)];
+  // The rest counts pieces by the face, which has to be sound first.
   return faults.length > 0 ? faults : groupFaults(layout);
 }
 
-function faceFaults({ face, crosscut, rip }: FaceLayout): LayoutFault[] {
-  const faults: LayoutFault[] = [];
-  if (face.columns.length === 0 || face.rows.length === 0) faults.push({ fault: "empty-face" });
-  for (const axis of ["columns", "rows"] as const) {
-    const gaps = axis === "columns" ? face.columnGaps : face.rowGaps;
-    if (gaps.length !== Math.max(0, face[axis].length - 1)) faults.push({ fault: "gap-count", axis });
-    face[axis].forEach((size, index) => {
-      if (!(size > 0)) faults.push({ fault: "size-not-positive", axis, index });
-    });
-  }
-  const lengths = {
-    columnGaps: face.columnGaps,
-    rowGaps: face.rowGaps,
-    crosscut: [crosscut.kerf, crosscut.cleanUpBefore, crosscut.cleanUpAfter],
-    rip: [rip.kerf, rip.cleanUpBefore, rip.cleanUpAfter],
-  };
-  for (const where of ["columnGaps", "rowGaps", "crosscut", "rip"] as const) {
-    if (lengths[where].some((length) => !(length >= 0))) faults.push({ fault: "negative-length", where });
-  }
-  return faults;
+function lossFaults(layout: FaceLayout): LayoutFault[] {
+  return (["crosscut", "rip"] as const).flatMap((where) => {
+    const { kerf, cleanUpBefore, cleanUpAfter } = layout[where];
+    const sound = [kerf, cleanUpBefore, cleanUpAfter].every((length) => length >= 0);
+    return sound ? [] : [{ fault: "negative-length", where }];
+  });
 }
 
 function groupFaults(layout: FaceLayout): LayoutFault[] {
@@ -77,12 +63,13 @@ function groupFaults(layout: FaceLayout): LayoutFault[] {
     if (slots !== 1) faults.push({ fault: "slot-not-once", piece, times: slots });
   }
 
-  const grid = faceGrid(layout.face);
+  const hung = hungChart(layout.face);
   for (const { id, slot } of held) {
     if (!known.has(id) || !known.has(slot)) continue;
-    const own = rectAt(grid, placeOf(layout.face, id));
-    const taken = rectAt(grid, placeOf(layout.face, slot));
-    if (own.width !== taken.width || own.height !== taken.height) faults.push({ fault: "swap-of-unequal", piece: id, slot });
+    const own = ofPiece(hung, id);
+    const taken = ofPiece(hung, slot);
+    const alike = own.role === taken.role && own.rect.width === taken.rect.width && own.rect.height === taken.rect.height;
+    if (!alike) faults.push({ fault: "swap-of-unequal", piece: id, slot });
   }
   return faults;
 }

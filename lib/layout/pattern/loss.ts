@@ -5,7 +5,8 @@
  * of the figure is missing at the seam. Lengths in µm.
  */
 import { type Um, um } from "../units/um";
-import type { CutLoss, Grain, Spacing } from "./face-layout";
+import type { Grain } from "./face";
+import type { CutLoss, Spacing } from "./face-layout";
 
 export type CutDirection = "crosscut" | "rip";
 

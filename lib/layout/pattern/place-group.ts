@@ -5,7 +5,8 @@ import type { StockPoint, StockRect } from "../frame/point";
 import type { StockId } from "../piece";
 import { type Um, um } from "../units/um";
 import { spacedBox } from "./anchor";
-import type { FaceLayout, Grain, QuarterTurns } from "./face-layout";
+import type { Grain } from "./face";
+import type { FaceLayout, QuarterTurns } from "./face-layout";
 import { groupAt, originOf } from "./group-origin";
 import { changed, groupById, type LayoutChange, refused, withGroup } from "./layout-change";
 
@@ -41,7 +42,7 @@ export function moveGroup(layout: FaceLayout, groupId: string, by: { readonly x:
 
 /**
  * Turns the group end for end about the middle of its own rectangle, which stays exactly where it is. With o the origin, R
- * the turn and c₀, c₁ the opposite corners of the group's box in the spaced grid: o + R·c₀ = o' − R·c₁, so o' = o + R·(c₀ +
+ * the turn and c₀, c₁ the opposite corners of the group's box in the spaced chart: o + R·c₀ = o' − R·c₁, so o' = o + R·(c₀ +
  * c₁), a whole number.
  */
 export function turnGroup(layout: FaceLayout, groupId: string): LayoutChange {

@@ -1,5 +1,5 @@
 /**
- * Slots: the places of the spaced grid. Every piece of a face is cut from one slot and every slot gives one piece; a piece
+ * Slots: the places of the spaced chart. Every piece of a face is cut from one slot and every slot gives one piece; a piece
  * that has not changed places is cut from its own.
  */
 import type { PieceId } from "../piece";

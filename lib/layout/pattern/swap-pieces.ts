@@ -3,10 +3,11 @@
  * and only the labels on it change.
  */
 import type { PieceId } from "../piece";
+import { hungChart } from "./charts";
 import type { FaceLayout, PieceGroup } from "./face-layout";
-import { faceGrid, placeOf, rectAt } from "./grids";
 import { groupAt, originOf } from "./group-origin";
 import { changed, type LayoutChange, type PieceSize, refused, withGroup } from "./layout-change";
+import { ofPiece } from "./piece-ids";
 import { groupOf, groupWith, slotOf, slotsOf } from "./slots";
 
 export function swapPieces(layout: FaceLayout, p: PieceId, q: PieceId): LayoutChange {
@@ -41,6 +42,6 @@ function withSlots(layout: FaceLayout, group: PieceGroup, slots: ReadonlyMap<Pie
 }
 
 function sizeOf(layout: FaceLayout, id: PieceId): PieceSize {
-  const { width, height } = rectAt(faceGrid(layout.face), placeOf(layout.face, id));
+  const { width, height } = ofPiece(hungChart(layout.face), id).rect;
   return { width, height };
 }

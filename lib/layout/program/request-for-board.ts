@@ -3,21 +3,24 @@ import { boundsOf, polygonToStock } from "../frame/apply-isometry";
 import { cleanUpEdges } from "../pattern/clean-up-edges";
 import type { FaceLayout } from "../pattern/face-layout";
 import { layOut } from "../pattern/lay-out";
-import type { StockId } from "../piece";
+import type { PieceRole, StockId } from "../piece";
 import type { BoardFace } from "../stock/board";
 import type { CutRequest, PlacedPiece } from "./cut-request";
 
+/** A piece as it is to be sawn, and what it is in its face. Strips that a program names are something else: parts that are cut again. */
+export interface PieceOnBoard extends PlacedPiece {
+  readonly role: PieceRole;
+}
+
 /** The pieces of a layout that lie on one board, in reading order of the face. */
-export function piecesOnBoard(layout: FaceLayout, stockId: StockId): PlacedPiece[] {
-  const turns = new Map(layout.groups.flatMap(({ pieceIds, placement }) => pieceIds.map((id) => [id, placement?.turns ?? 0])));
-  return layOut(layout)
-    .filter((piece) => piece.stockId === stockId)
-    .map(({ id, label, outline, stockFromFace }) => ({
-      pieceId: id,
-      label,
-      rect: boundsOf(polygonToStock(stockFromFace, outline)),
-      cleanUp: cleanUpEdges(layout, turns.get(id) ?? 0),
-    }));
+export function piecesOnBoard(layout: FaceLayout, stockId: StockId): PieceOnBoard[] {
+  const here = layOut(layout).filter((piece) => piece.stockId === stockId);
+  const cleanUps = cleanUpEdges(layout, here);
+  return here.flatMap(({ id, label, role, outline, stockFromFace }): PieceOnBoard[] => {
+    const cleanUp = cleanUps.get(id);
+    const rect = boundsOf(polygonToStock(stockFromFace, outline));
+    return cleanUp === undefined ? [] : [{ pieceId: id, label, role, rect, cleanUp }];
+  });
 }
 
 /** `shop`: what the board's state and the shop's rules add to the layout. */

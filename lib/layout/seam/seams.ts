@@ -9,74 +9,38 @@
  */
 import { toStock } from "../frame/apply-isometry";
 import { turnedVector } from "../frame/combine-isometries";
+import type { Isometry } from "../frame/isometry";
 import type { FacePoint } from "../frame/point";
-import type { FaceLayout, GridFace } from "../pattern/face-layout";
-import { faceGrid, type Grid, rectAt } from "../pattern/grids";
+import { seamPlaces } from "../pattern/charts";
+import type { FaceLayout } from "../pattern/face-layout";
 import { layOut } from "../pattern/lay-out";
-import { type GridPlace, pieceIdAt } from "../pattern/piece-ids";
-import type { Piece, PieceId } from "../piece";
+import type { SeamPlace } from "../pattern/pattern-rules";
+import type { Piece } from "../piece";
 import { type Um, um } from "../units/um";
 import type { Seam, UmRange } from "./seam";
 
 /** The seams in reading order of their first piece, the one on its right before the one below it. */
 export function seams(layout: FaceLayout, pieces: readonly Piece[] = layOut(layout)): Seam[] {
-  const { face } = layout;
-  const grid = faceGrid(face);
   const byId = new Map(pieces.map((piece) => [piece.id, piece]));
-  return face.rows.flatMap((_, row) =>
-    face.columns.flatMap((_, column) => {
-      const place = { row, column };
-      return [seamRight(face, grid, byId, place), seamDown(face, grid, byId, place)].filter((seam) => seam !== null);
-    }),
-  );
+  return seamPlaces(layout.face).map((place) => ({ ...place, jump: jumpOver(byId.get(place.a), byId.get(place.b), place) }));
 }
 
-type PiecesById = ReadonlyMap<PieceId, Piece>;
-
-function seamRight(face: GridFace, grid: Grid, byId: PiecesById, { row, column }: GridPlace): Seam | null {
-  if (column + 1 >= face.columns.length) return null;
-  const rect = rectAt(grid, { row, column });
-  const from = { x: um(rect.x + rect.width), y: rect.y };
-  const to = { x: from.x, y: um(rect.y + rect.height) };
-  const first = row * face.columns.length + column;
-  return seamBetween(byId, pieceIdAt(first), pieceIdAt(first + 1), {
-    from,
-    to,
-    gap: face.columnGaps[column] ?? um(0),
-    normal: "right",
-  });
-}
-
-function seamDown(face: GridFace, grid: Grid, byId: PiecesById, { row, column }: GridPlace): Seam | null {
-  if (row + 1 >= face.rows.length) return null;
-  const rect = rectAt(grid, { row, column });
-  const from = { x: rect.x, y: um(rect.y + rect.height) };
-  const to = { x: um(rect.x + rect.width), y: from.y };
-  const first = row * face.columns.length + column;
-  const below = first + face.columns.length;
-  return seamBetween(byId, pieceIdAt(first), pieceIdAt(below), { from, to, gap: face.rowGaps[row] ?? um(0), normal: "down" });
-}
-
-type SeamPlace = Pick<Seam, "from" | "to" | "gap" | "normal">;
-
-function seamBetween(byId: PiecesById, a: PieceId, b: PieceId, place: SeamPlace): Seam {
-  const pieceA = byId.get(a);
-  const pieceB = byId.get(b);
-  const sameStock = pieceA !== undefined && pieceB !== undefined && pieceA.stockId === pieceB.stockId;
-  return { a, b, ...place, jump: sameStock ? jumpOver(pieceA, pieceB, place) : null };
-}
-
-function jumpOver(a: Piece, b: Piece, { from, to, gap, normal }: SeamPlace): { along: UmRange; across: UmRange } {
-  const overGap = normal === "right" ? { x: gap, y: 0 } : { x: 0, y: gap };
-  const inWood = turnedVector(a.stockFromFace, overGap.x, overGap.y);
+function jumpOver(a: Piece | undefined, b: Piece | undefined, place: SeamPlace): Seam["jump"] {
+  if (a === undefined || b === undefined || a.stockId !== b.stockId) return null;
+  const { from, to, facing } = place;
+  const inWood = woodOfGap(a.stockFromFace, place);
   const jumpAt = (p: FacePoint) => {
     const onA = toStock(a.stockFromFace, p);
-    const onB = toStock(b.stockFromFace, { x: um(p.x + overGap.x), y: um(p.y + overGap.y) });
+    const onB = toStock(b.stockFromFace, { x: um(p.x + facing.x - from.x), y: um(p.y + facing.y - from.y) });
     return { along: um(Math.round(onB.x - onA.x - inWood.x)), across: um(Math.round(onB.y - onA.y - inWood.y)) };
   };
   const start = jumpAt(from);
   const end = jumpAt(to);
   return { along: rangeOf(start.along, end.along), across: rangeOf(start.across, end.across) };
+}
+
+function woodOfGap(a: Isometry, { gap, normal }: SeamPlace): { readonly x: number; readonly y: number } {
+  return normal === "right" ? turnedVector(a, gap, 0) : turnedVector(a, 0, gap);
 }
 
 function rangeOf(p: Um, q: Um): UmRange {

@@ -8,8 +8,8 @@
  */
 import { toStock } from "../frame/apply-isometry";
 import type { FacePoint, FaceRect, StockPoint } from "../frame/point";
+import { faceSize } from "../pattern/charts";
 import type { FaceLayout } from "../pattern/face-layout";
-import { faceSize } from "../pattern/grids";
 import { facePieces, layOut } from "../pattern/lay-out";
 import type { Piece, PieceId } from "../piece";
 import { type Um, um } from "../units/um";

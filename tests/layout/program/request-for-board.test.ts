@@ -12,6 +12,7 @@ const loss = { kerf: umFromMm(2.4), cleanUpBefore: umFromMm(0.2), cleanUpAfter: 
 function layoutOf(turns: 0 | 2, spacing: FaceLayout["spacing"]): FaceLayout {
   return {
     face: {
+      pattern: "grid",
       columns: [umFromMm(300), umFromMm(300)],
       rows: [umFromMm(120), umFromMm(150)],
       columnGaps: [umFromMm(3)],
