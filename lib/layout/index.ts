@@ -69,23 +69,34 @@ export { type LevelSize, pyramidLevels } from "./picture/pyramid";
 export { type Pixels, type WarpMap, warpInBands } from "./picture/warp";
 export type { Piece, PieceId, PieceRole, StockId } from "./piece";
 export { type ConservationLine, conservationLine, type WoodSum } from "./program/conservation-line";
-export { type BoardEdges, boardEdges, type CutRequest, defaultCutBudget, type PlacedPiece } from "./program/cut-request";
+export {
+  type BoardEdges,
+  boardEdges,
+  type CutRequest,
+  defaultCutBudget,
+  type PlacedPiece,
+  type RoughAllowances,
+} from "./program/cut-request";
+export { type CutMachines, type Machine, type MachineKind, type MachineLimits, noLimits } from "./program/machine";
 export { cutRefusal, planCuts } from "./program/plan-cuts";
-export type {
-  Caution,
-  CleanUp,
-  Conservation,
-  CutKind,
-  CutProgram,
-  CutProgramOutcome,
-  CutStep,
-  Edge,
-  EdgeState,
-  Part,
-  PartKind,
-  SearchReport,
-  ShopLimits,
-  StepKind,
+export {
+  bladeOf,
+  type Caution,
+  type CleanUp,
+  type Conservation,
+  type CutKind,
+  type CutProgram,
+  type CutProgramOutcome,
+  type CutStep,
+  type Edge,
+  type EdgeState,
+  isSawn,
+  type Part,
+  type PartKind,
+  type SearchReport,
+  type ShopLimits,
+  type StepKind,
+  THINNEST_SAWN,
 } from "./program/program";
 export { type ReplayFault, type ReplayOutcome, replay } from "./program/replay";
 export { cutRequestFor, type PieceOnBoard, piecesOnBoard } from "./program/request-for-board";

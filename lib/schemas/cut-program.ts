@@ -1,13 +1,32 @@
 /** The core's cut program as JSON, as it is frozen in an order. */
 import { z } from "zod";
 import type { CutProgram } from "@/lib/layout";
-import { rectSchema, umSchema } from "./length";
+import { allowanceUmSchema, rectSchema, sizeUmSchema, umSchema } from "./length";
+
+/** What a saw of the shop may take in hand; a program freezes it with the saw. */
+export const machineLimitsSchema = z.object({
+  rips: z.boolean(),
+  crosscuts: z.boolean(),
+  widestRip: sizeUmSchema.nullable(),
+  longestCrosscut: sizeUmSchema.nullable(),
+  shortest: umSchema,
+  narrowest: umSchema,
+});
+
+export const machineSchema = z.object({
+  id: z.string(),
+  name: z.string(),
+  kind: z.enum(["table", "track", "band", "hand"]),
+  kerf: allowanceUmSchema,
+  cleanUp: allowanceUmSchema,
+  limits: machineLimitsSchema,
+});
 
 const edgeSchema = z.enum(["left", "right", "top", "bottom"]);
 
 export const partSchema = z.object({
   id: z.string(),
-  kind: z.enum(["board", "strip", "blank", "piece", "offcut", "waste"]),
+  kind: z.enum(["board", "rough", "strip", "blank", "piece", "offcut", "waste"]),
   label: z.string().nullable(),
   pieceId: z.string().nullable(),
   rect: rectSchema,
@@ -15,10 +34,12 @@ export const partSchema = z.object({
 
 export const cutStepSchema = z.object({
   number: z.int(),
-  kind: z.enum(["true", "rip", "crosscut"]),
+  kind: z.enum(["true", "plane", "flatten", "rip", "crosscut"]),
+  stage: z.literal("rough").optional(),
+  machineId: z.string().optional(),
   part: partSchema,
   fromEdge: edgeSchema,
-  fromEdgeState: z.enum(["rough", "trued", "sawn"]),
+  fromEdgeState: z.enum(["rough", "marked", "trued", "sawn"]),
   setting: umSchema,
   bladeSide: z.enum(["near", "far"]),
   kerf: rectSchema,
@@ -33,6 +54,8 @@ export const cutStepSchema = z.object({
       "guard-and-riving-knife",
       "offcut-not-between-fence-and-blade",
       "too-short-for-planer",
+      "no-machine",
+      "not-flat",
     ]),
   ),
 });
@@ -43,6 +66,7 @@ const areaSchema = z.int().min(0);
 export const cutProgramSchema = z.object({
   steps: z.array(cutStepSchema),
   kerf: z.object({ rip: umSchema, crosscut: umSchema }),
+  machines: z.array(machineSchema).optional(),
   cleanUps: z.array(z.object({ partId: z.string(), edge: edgeSchema, amount: umSchema })),
   pieces: z.array(partSchema),
   offcuts: z.array(partSchema),

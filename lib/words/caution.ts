@@ -8,6 +8,8 @@ export const cautionWords: Readonly<Record<Caution, string>> = {
   "offcut-not-between-fence-and-blade":
     "Cut to a mark, blade on its waste side. No fence or stop there: what comes off would be caught.",
   "too-short-for-planer": "Too short for jointer and planer: clean it up by hand.",
+  "no-machine": "No saw of the shop is said to take this cut: choose a safe way before you begin.",
+  "not-flat": "The board is not flat yet and can rock and bind: support it, and keep it off a saw table if you can.",
 };
 
 /** Printed on every order and shown with every step that has a caution. */

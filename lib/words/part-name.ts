@@ -6,6 +6,8 @@ export function partName(part: Pick<Part, "kind" | "label">): string {
   switch (part.kind) {
     case "board":
       return "the board";
+    case "rough":
+      return `rough part ${part.label}`;
     case "strip":
       return `strip ${part.label}`;
     case "blank":

@@ -1,6 +1,6 @@
 /** The check that is printed under a cut order: where the board went, as areas and, where the pieces are one row, along its length. */
 import type { StockRect } from "../frame/point";
-import type { CutProgram, CutStep, Part } from "./program";
+import { bladeOf, type CutProgram, type CutStep, isSawn, type Part } from "./program";
 
 /** All parts add up to `board`. In µm² for areas, in µm along a strip. */
 export interface WoodSum {
@@ -32,15 +32,16 @@ export function conservationLine(program: CutProgram): ConservationLine | null {
 
 function sumUp(program: CutProgram, board: StockRect, measure: (rect: StockRect) => number): WoodSum {
   const total = (rects: readonly StockRect[]) => rects.reduce((sum, rect) => sum + measure(rect), 0);
-  const cuts = program.steps.filter((step) => step.kind !== "true");
+  const cuts = program.steps.filter((step) => isSawn(step.kind));
   const truing = program.steps.filter((step) => step.kind === "true").map((step) => step.kerf);
+  const planed = program.steps.filter((step) => step.kind === "plane").map((step) => step.kerf);
   const shaving = (step: CutStep) => isNarrowerThanBlade(step, program);
   const between = sliversIn(program);
   const fronts = total(program.pieces.map((piece) => piece.rect));
   return {
     fronts,
     kerf: total(cuts.filter((step) => !shaving(step)).map((step) => step.kerf)),
-    slivers: total(cuts.filter(shaving).map((step) => step.kerf)) + total(between.map((part) => part.rect)),
+    slivers: total(cuts.filter(shaving).map((step) => step.kerf)) + total(planed) + total(between.map((part) => part.rect)),
     cleanUp: total(truing) + total(blanksOf(program).map((part) => part.rect)) - fronts,
     offcuts: total(program.offcuts.map((part) => part.rect)),
     waste: total(program.waste.filter((part) => !between.includes(part)).map((part) => part.rect)),
@@ -61,13 +62,12 @@ function blanksOf(program: CutProgram): readonly Part[] {
 }
 
 function isNarrowerThanBlade(step: CutStep, program: CutProgram): boolean {
-  if (step.kind === "true") return false;
-  return (step.kind === "crosscut" ? step.kerf.width : step.kerf.height) < program.kerf[step.kind];
+  return (step.kind === "crosscut" ? step.kerf.width : step.kerf.height) < bladeOf(step, program);
 }
 
 /** Waste of a trim that does not reach the board's own edge in the direction the trim works. */
 function sliversIn(program: CutProgram): readonly Part[] {
-  const cuts = program.steps.filter((step) => step.kind !== "true");
+  const cuts = program.steps.filter((step) => isSawn(step.kind));
   const board = cuts[0]?.part.rect;
   if (!board) return [];
   return program.waste.filter((part) => {

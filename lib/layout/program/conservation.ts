@@ -1,7 +1,7 @@
 /** Where the wood of the board goes, in µm²; whole numbers far below 2^53, so sums are exact. */
 import type { StockRect } from "../frame/point";
 import type { CutRequest } from "./cut-request";
-import type { Conservation, CutProgram, Part } from "./program";
+import { type Conservation, type CutProgram, isSawn, type Part } from "./program";
 
 /** Area in µm². */
 export function rectArea(rect: StockRect): number {
@@ -15,13 +15,13 @@ export function conservationOf(
 ): Conservation {
   const parts = new Map(program.steps.flatMap((step) => step.yields).map((part) => [part.id, part]));
   const blanks = program.pieces.map((piece) => parts.get(piece.id) ?? piece);
-  const dust = (truing: boolean) =>
-    total(program.steps.filter((step) => (step.kind === "true") === truing).map((step) => rectArea(step.kerf)));
+  const dust = (ofSaw: boolean) =>
+    total(program.steps.filter((step) => isSawn(step.kind) === ofSaw).map((step) => rectArea(step.kerf)));
   return {
     stock: board.length * board.width,
     pieces: areaOfAll(program.pieces),
-    kerf: dust(false),
-    cleanUp: dust(true) + areaOfAll(blanks) - areaOfAll(program.pieces),
+    kerf: dust(true),
+    cleanUp: dust(false) + areaOfAll(blanks) - areaOfAll(program.pieces),
     offcuts: areaOfAll(program.offcuts),
     waste: areaOfAll(program.waste),
   };

@@ -1,7 +1,7 @@
 /**
  * Carries a program out on rectangles, knowing nothing of how it was planned: from each step only the part in hand, the kind, the
- * edge, the setting and the side of the blade are used, with the width of the blade. It shares no code with the planner, so that
- * an error in one cannot hide in the other.
+ * stage, the edge, the setting and the side of the blade are used, with the width of the machine's blade. It shares no code with the
+ * planner, so that an error in one cannot hide in the other.
  */
 import type { StockRect } from "../frame/point";
 import { um } from "../units/um";
@@ -14,8 +14,12 @@ export type ReplayOutcome =
 
 export type ReplayFault =
   | "part-not-in-hand"
-  /** Measured from an edge that is rough, or no crosscut fence edge is straight. */
+  /** Measured from an edge that is rough, or no crosscut fence edge is straight, or an edge is planed that is rough. */
   | "edge-not-straight"
+  /** A step names a machine that the program does not know. */
+  | "unknown-machine"
+  /** A fine cut in a part that has yet to be flattened, or a rough one in a part that is flat. */
+  | "wrong-stage"
   /** The setting is not positive or the blade misses the part. */
   | "blade-misses"
   /** More or fewer parts come off than the step says. */
@@ -24,6 +28,8 @@ export type ReplayFault =
 interface Held {
   readonly rect: StockRect;
   readonly edges: Readonly<Record<Edge, EdgeState>>;
+  /** Through planer and jointer, or from a board that was flat as it came. */
+  readonly flat: boolean;
 }
 
 /** Low: left or top. Lengths run from the low edge along the axis the cut parts. */
@@ -38,20 +44,20 @@ export function replay(
   program: CutProgram,
 ): ReplayOutcome {
   const whole = { x: um(0), y: um(0), width: um(board.length), height: um(board.width) };
-  const bench = new Map<string, Held>([["board", { rect: whole, edges }]]);
+  const bench = new Map<string, Held>([["board", { rect: whole, edges, flat: !hasRoughStage(program) }]]);
   const names = new Map<string, Part>();
   let kerf = 0;
   let cleanUp = 0;
   for (const step of program.steps) {
     const held = bench.get(step.part.id);
     if (!held) return { ok: false, step: step.number, reason: "part-not-in-hand" };
-    const done = step.kind === "true" ? trued(held, step) : sawn(held, step, program.kerf[step.kind]);
+    const done = workedOn(held, step, program);
     if (typeof done === "string") return { ok: false, step: step.number, reason: done };
     if (done.length !== step.yields.length) return { ok: false, step: step.number, reason: "yields-differ" };
     bench.delete(step.part.id);
     const lost = area(held.rect) - done.reduce((sum, one) => sum + area(one.rect), 0);
-    if (step.kind === "true") cleanUp += lost;
-    else kerf += lost;
+    if (step.kind === "rip" || step.kind === "crosscut") kerf += lost;
+    else cleanUp += lost;
     for (const [i, made] of step.yields.entries()) {
       const one = done[i];
       if (one) bench.set(made.id, one);
@@ -67,24 +73,55 @@ export function replay(
   return { ok: true, parts, dust: { kerf, cleanUp } };
 }
 
-function trued(held: Held, step: CutStep): readonly Held[] | ReplayFault {
-  if (step.setting < 0) return "blade-misses";
-  return [{ rect: shaved(held.rect, step.fromEdge, step.setting), edges: { ...held.edges, [step.fromEdge]: "trued" } }];
+function workedOn(held: Held, step: CutStep, program: CutProgram): readonly Held[] | ReplayFault {
+  if ((step.stage === "rough" || step.kind === "flatten") === held.flat && hasRoughStage(program)) return "wrong-stage";
+  switch (step.kind) {
+    case "true":
+      return trued(held, step);
+    case "plane":
+      return held.edges[step.fromEdge] === "trued" || held.edges[step.fromEdge] === "sawn"
+        ? trued(held, step)
+        : "edge-not-straight";
+    case "flatten":
+      return [{ ...held, flat: true }];
+    default: {
+      if (step.machineId === undefined) return sawn(held, step, program.kerf[step.kind]);
+      const machine = program.machines?.find(({ id }) => id === step.machineId);
+      return machine ? sawn(held, step, machine.kerf) : "unknown-machine";
+    }
+  }
 }
+
+const hasRoughStage = (program: CutProgram): boolean => program.steps.some(({ kind }) => kind === "flatten");
+
+function trued(held: Held, step: CutStep): readonly Held[] | ReplayFault {
+  const { fromEdge, setting } = step;
+  if (setting < 0 || setting >= (isAlong(fromEdge) ? held.rect.width : held.rect.height)) return "blade-misses";
+  return [{ ...held, rect: shaved(held.rect, fromEdge, setting), edges: { ...held.edges, [fromEdge]: "trued" } }];
+}
+
+/** Whether a cut may be measured so. A rough cut follows a line marked from whatever edge there is. */
+function mayMeasure(held: Held, { kind, stage, fromEdge, bladeSide }: CutStep): boolean {
+  if (stage === "rough") return true;
+  if (kind === "crosscut" && !isStraight(held.edges.top) && !isStraight(held.edges.bottom)) return false;
+  return isStraight(held.edges[fromEdge]) || (held.edges[fromEdge] === "marked" && bladeSide === "far");
+}
+
+const isStraight = (state: EdgeState): boolean => state === "trued" || state === "sawn";
 
 /** The parts left, that next to the measured edge first. */
 function sawn(held: Held, step: CutStep, blade: number): readonly Held[] | ReplayFault {
   const { fromEdge, setting, bladeSide } = step;
   if (isAlong(fromEdge) !== (step.kind === "crosscut")) return "blade-misses";
-  if (held.edges[fromEdge] === "rough") return "edge-not-straight";
-  if (step.kind === "crosscut" && held.edges.top === "rough" && held.edges.bottom === "rough") return "edge-not-straight";
+  if (!mayMeasure(held, step)) return "edge-not-straight";
   const size = isAlong(fromEdge) ? held.rect.width : held.rect.height;
   const nearPart = bladeSide === "near" ? setting : Math.max(setting - blade, 0);
   const farPart = Math.max(bladeSide === "near" ? size - setting - blade : size - setting, 0);
   if (setting <= 0 || setting >= size) return "blade-misses";
   const other = opposite[fromEdge];
-  const near: Held = { rect: shaved(held.rect, other, size - nearPart), edges: { ...held.edges, [other]: "sawn" } };
-  const far: Held = { rect: shaved(held.rect, fromEdge, size - farPart), edges: { ...held.edges, [fromEdge]: "sawn" } };
+  const left = step.stage !== "rough" ? "sawn" : step.kind === "crosscut" ? "marked" : "rough";
+  const near: Held = { ...held, rect: shaved(held.rect, other, size - nearPart), edges: { ...held.edges, [other]: left } };
+  const far: Held = { ...held, rect: shaved(held.rect, fromEdge, size - farPart), edges: { ...held.edges, [fromEdge]: left } };
   return [near, far].filter((one) => area(one.rect) > 0);
 }
 
