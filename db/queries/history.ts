@@ -10,7 +10,7 @@ type Detail = typeof history.$inferInsert.detail;
 
 export interface HistoryEntry {
   readonly userId: string | null;
-  readonly noun: "board" | "photo" | "straightening" | "job" | "face" | "layout" | "order" | "shop" | "saw";
+  readonly noun: "board" | "photo" | "straightening" | "job" | "face" | "layout" | "order" | "shop" | "saw" | "species";
   readonly nounId: string;
   readonly verb: string;
   readonly detail?: Detail;

@@ -1,5 +1,6 @@
 import { date, index, int, mysqlTable, text, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
-import { idColumn, utcColumn } from "../columns";
+import { climateSchema } from "@/lib/schemas/climate";
+import { idColumn, jsonOf, utcColumn } from "../columns";
 import { shopIdColumn } from "../shop-id-column";
 
 /** A piece of furniture or a commission: what the faces belong to. */
@@ -13,6 +14,8 @@ export const job = mysqlTable(
     client: varchar("client", { length: 120 }).notNull(),
     note: text("note").notNull(),
     dueOn: date("due_on", { mode: "string" }),
+    /** Where this furniture will live; null: where the shop's usually does. */
+    climate: jsonOf(climateSchema)("climate"),
     state: varchar("state", { length: 8, enum: ["open", "closed"] }).notNull(),
     revision: int("revision").notNull(),
     createdAt: utcColumn("created_at").notNull(),

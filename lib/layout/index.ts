@@ -19,6 +19,33 @@ export { composed, inverted, quarterTurn, turnedVector } from "./frame/combine-i
 export type { Isometry } from "./frame/isometry";
 export { identity } from "./frame/isometry";
 export type { FacePoint, FaceRect, Frame, Point, Rect, StockPoint, StockRect } from "./frame/point";
+export { type Climate, defaultClimate, type YearlyMoisture, yearlyMoisture } from "./movement/climate";
+export { type Air, equilibriumMoisture } from "./movement/equilibrium-moisture";
+export type { FaceGap, FaceSide } from "./movement/face-gaps";
+export { faceMovement } from "./movement/face-movement";
+export { knownSpecies } from "./movement/known-species";
+export { matchSpecies, type SpeciesMatch } from "./movement/match-species";
+export type {
+  BoardWood,
+  FaceMovement,
+  GapFigures,
+  GapThroughYear,
+  MovementRequest,
+  MovementWarning,
+  Season,
+} from "./movement/movement";
+export {
+  COEFFICIENT_RANGE,
+  coefficientAt,
+  FIBRE_SATURATION,
+  ringAngleOfCut,
+  strainAcross,
+  type WoodMovement,
+} from "./movement/size-change";
+export type { Species, SpeciesSource } from "./movement/species";
+export { type Surround, sheetAtMost } from "./movement/surround";
+export { type RecommendedGap, recommendedGap, roundedUp, useRecommendedGap } from "./movement/use-recommended-gap";
+export { type BoardFacts, noWoodChoice, type WoodChoice, type WoodOfBoard, woodOfBoard } from "./movement/wood-of-board";
 export { changeAnchor } from "./pattern/change-anchor";
 export { changeCuts, changeFace, type FaceChange } from "./pattern/change-face";
 export { faceSize, seamPlaces } from "./pattern/charts";

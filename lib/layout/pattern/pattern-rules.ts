@@ -66,6 +66,11 @@ export interface PatternRules<F extends Face = Face> {
   readonly cleanUps: (layout: CutSettings<F>) => readonly EdgeAmounts[];
   /** In reading order of the first piece, the seam on its right before the one below it. */
   readonly seams: (face: F) => readonly SeamPlace[];
+  /**
+   * The face with the gaps along an axis that its fronts can make, all of this width; openings and the face keep their size, the fronts
+   * give up what the gaps take. Null when a front would come to nothing; absent where the pattern has no such gaps.
+   */
+  readonly evenGaps?: (face: F, axis: "columns" | "rows", gap: Um) => F | null;
   /** Everything that makes the face mean nothing; the others may only be asked when there is none. */
   readonly faults: (face: F) => readonly FaceFault[];
 }

@@ -15,7 +15,5 @@ export function withEvenGaps(face: GridFace, axis: "columns" | "rows", gap: Um):
   if (smaller.some((size) => size <= 0)) return null;
   const left = each * sizes.length - more;
   const wider = gaps.map((_, index) => um(index === gaps.length - 1 ? gap + left : gap));
-  return axis === "columns"
-    ? { ...face, columns: smaller, columnGaps: wider }
-    : { ...face, rows: smaller, rowGaps: wider };
+  return axis === "columns" ? { ...face, columns: smaller, columnGaps: wider } : { ...face, rows: smaller, rowGaps: wider };
 }

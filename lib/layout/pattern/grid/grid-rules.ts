@@ -10,6 +10,7 @@ import { cutBetween, spacingOf } from "../loss";
 import type { CutSettings, PatternRules, SeamPlace } from "../pattern-rules";
 import { pieceIdAt } from "../piece-names";
 import { lengthOf, type Run, startsOf } from "../run";
+import { withEvenGaps } from "./even-gaps";
 
 export const gridRules: PatternRules<GridFace> = {
   count: ({ rows, columns }) => rows.length * columns.length,
@@ -21,6 +22,7 @@ export const gridRules: PatternRules<GridFace> = {
   places: (layout) => rectsOf(spacedGrid(layout)).map((rect) => ({ rect, mirrored: "no", anchors: true })),
   cleanUps: cleanUpsOfGrid,
   seams: (face) => face.rows.flatMap((_, row) => face.columns.flatMap((_, column) => seamsOf(face, row, column))),
+  evenGaps: withEvenGaps,
   faults: gridFaults,
 };
 
