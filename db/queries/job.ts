@@ -30,7 +30,7 @@ export async function updateJob(
   shopId: ShopId,
   jobId: string,
   baseRevision: number,
-  fields: Partial<JobFields & { state: "open" | "closed" }>,
+  fields: Partial<JobFields & Pick<typeof job.$inferInsert, "state" | "climate">>,
   at: Date,
 ): Promise<boolean> {
   const [result] = await db

@@ -3,7 +3,7 @@ import "server-only";
 import { and, eq, inArray } from "drizzle-orm";
 import { printTag } from "@/lib/schemas/tag";
 import type { Connection } from "../client";
-import { board, cutOrder, face, job, layout, photo, saw } from "../schema";
+import { board, cutOrder, face, job, layout, photo, saw, species } from "../schema";
 import type { ShopId } from "../shop-id";
 
 export interface Label {
@@ -64,6 +64,13 @@ const readers: Readonly<Record<string, Read>> = {
         .select({ id: saw.id, name: saw.name })
         .from(saw)
         .where(and(eq(saw.shopId, shopId), inArray(saw.id, ids)))
+    ).map(({ id, name }) => [id, name, "/shop"]),
+  species: async (db, shopId, ids) =>
+    (
+      await db
+        .select({ id: species.id, name: species.name })
+        .from(species)
+        .where(and(eq(species.shopId, shopId), inArray(species.id, ids)))
     ).map(({ id, name }) => [id, name, "/shop"]),
 };
 

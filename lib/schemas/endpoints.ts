@@ -5,11 +5,13 @@ import * as history from "./history";
 import * as job from "./job";
 import * as layout from "./layout";
 import * as order from "./order";
+import * as movement from "./movement";
 import * as photo from "./photo";
 import * as service from "./service";
 import * as session from "./session";
 import * as shop from "./shop";
 import * as straightening from "./straightening";
+import * as species from "./species";
 import * as task from "./task";
 
 const isEndpoint = (value: unknown): value is Endpoint =>
@@ -20,6 +22,7 @@ export const endpoints: readonly Endpoint[] = [
   session,
   shop,
   board,
+  species,
   photo,
   straightening,
   task,
@@ -27,4 +30,5 @@ export const endpoints: readonly Endpoint[] = [
   layout,
   order,
   history,
+  movement,
 ].flatMap((noun) => Object.values(noun).filter(isEndpoint));

@@ -1,5 +1,6 @@
 /** Jobs and their faces. */
 import { z } from "zod";
+import { climateSchema } from "./climate";
 import { defineEndpoint, everyone, makers } from "./endpoint";
 import { idSchema } from "./ids";
 import { cutLossSchema, faceSchema } from "./layout";
@@ -35,7 +36,11 @@ export const jobRowSchema = z.object({
 });
 export type JobRow = z.output<typeof jobRowSchema>;
 
-export const jobSchema = jobRowSchema.extend({ faceList: z.array(faceRowSchema) });
+export const jobSchema = jobRowSchema.extend({
+  /** Where this furniture will live; null: where the shop's usually does. */
+  climate: climateSchema.nullable(),
+  faceList: z.array(faceRowSchema),
+});
 export type Job = z.output<typeof jobSchema>;
 
 const params = z.object({ jobId: idSchema });
@@ -83,7 +88,10 @@ export const updateJob = defineEndpoint({
   tag: "jobs",
   access: makers,
   params,
-  body: z.object({ baseRevision: z.int(), ...z.object({ ...jobFields, state: z.enum(["open", "closed"]) }).partial().shape }),
+  body: z.object({
+    baseRevision: z.int(),
+    ...z.object({ ...jobFields, state: z.enum(["open", "closed"]), climate: climateSchema.nullable() }).partial().shape,
+  }),
   response: jobSchema,
 });
 

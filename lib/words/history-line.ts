@@ -18,6 +18,7 @@ const sayings: Readonly<Record<string, string>> = {
   "face added": "added the face",
   "face renamed": "renamed the face",
   "face removed": "removed a face",
+  "face movement chosen": "chose what stands round the fronts of",
   "layout saved": "worked on",
   "layout board put on": "put a board on the table of",
   "layout board taken off": "took a board off the table of",
@@ -27,7 +28,11 @@ const sayings: Readonly<Record<string, string>> = {
   "order unticked": "took back a tick of",
   "saw added": "added the saw",
   "saw changed": "changed the saw",
+  "species added": "added the species",
+  "species changed": "changed the species",
+  "species removed": "removed a species",
   "shop changed": "changed the settings",
+  "shop movement changed": "changed the movement settings",
 };
 
 /** The words around the name of the thing. */

@@ -5,6 +5,7 @@ import type { Connection } from "@/db/client";
 import { recordHistory } from "@/db/queries/history";
 import { deleteFace, findFace, findJob, insertFace, renameFace, touchJob } from "@/db/queries/job";
 import { deleteLayout, insertLayout, listNewestOrders, lockLayout } from "@/db/queries/layout";
+import { deleteFaceMovement } from "@/db/queries/movement";
 import { findSaw } from "@/db/queries/shop";
 import { freshLayout } from "@/lib/layout";
 import type { createFaceSchema, FaceRow } from "@/lib/schemas/job";
@@ -64,6 +65,7 @@ export async function removeFace(access: ShopAccess, faceId: string): Promise<vo
     const order = (await listNewestOrders(tx, access.shopId, [faceId])).get(faceId);
     if (order) throw refused(`Cut order ${order.number} was issued for this face, so it stays with the job.`);
     if (layout) await deleteLayout(tx, access.shopId, layout.id);
+    await deleteFaceMovement(tx, access.shopId, faceId);
     await deleteFace(tx, access.shopId, faceId);
     const detail = { title: found.face.title, jobId: found.face.jobId };
     await recordHistory(tx, access.shopId, { userId: access.userId, noun: "face", nounId: faceId, verb: "removed", detail }, at);

@@ -47,7 +47,7 @@ export async function readJob(access: ShopAccess, jobId: string): Promise<Job> {
   const row = await findJob(db, access.shopId, jobId);
   if (!row) throw notFound("job");
   const faceList = await faceRows(db, access.shopId, jobId);
-  return { ...jobRowOf(row, faceList.length), faceList };
+  return { ...jobRowOf(row, faceList.length), climate: row.climate, faceList };
 }
 
 /** The faces of a job in their order, each with what its layout lies on and the order issued for it. */
