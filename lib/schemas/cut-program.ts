@@ -37,6 +37,7 @@ export const cutStepSchema = z.object({
   kind: z.enum(["true", "plane", "flatten", "rip", "crosscut"]),
   stage: z.literal("rough").optional(),
   machineId: z.string().optional(),
+  blade: allowanceUmSchema.optional(),
   part: partSchema,
   fromEdge: edgeSchema,
   fromEdgeState: z.enum(["rough", "marked", "trued", "sawn"]),

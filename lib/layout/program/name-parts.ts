@@ -67,7 +67,8 @@ function isOut(region: Region): boolean {
 /** No I and no O, which are read as figures, and no C, which marks offcuts. After Z come AA, AB, … */
 const stripLetters = "ABDEFGHJKLMNPQRSTUVWXYZ";
 
-function stripLabel(index: number): string {
+/** "A" for 0, "B" for 1, "D" for 2, … */
+export function stripLabel(index: number): string {
   const letter = stripLetters[index % stripLetters.length] ?? "";
   return index < stripLetters.length ? letter : stripLabel(Math.floor(index / stripLetters.length) - 1) + letter;
 }

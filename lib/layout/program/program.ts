@@ -79,6 +79,8 @@ export interface CutStep {
   readonly stage?: "rough";
   /** Which of the program's machines makes the cut; absent where no saw does, and where the program knows saws by their kerf alone. */
   readonly machineId?: string;
+  /** How wide the blade really was, where the step is done and it was another than the program knows of the saw. */
+  readonly blade?: Um;
   /** The rectangle in hand before the cut. */
   readonly part: Part;
   /** Measured from this edge of the part in hand, which exists and is straight at that moment. Of a "true" or "plane": the edge worked. */
@@ -124,8 +126,9 @@ export interface Conservation {
 }
 
 /** How wide the blade is that makes a step, µm; 0 where no saw does. */
-export function bladeOf(step: Pick<CutStep, "kind" | "machineId">, program: Pick<CutProgram, "kerf" | "machines">): Um {
+export function bladeOf(step: Pick<CutStep, "kind" | "machineId" | "blade">, program: Pick<CutProgram, "kerf" | "machines">): Um {
   if (!isSawn(step.kind)) return um(0);
+  if (step.blade !== undefined) return step.blade;
   const machine = program.machines?.find(({ id }) => id === step.machineId);
   return machine?.kerf ?? program.kerf[step.kind];
 }
