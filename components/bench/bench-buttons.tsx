@@ -54,7 +54,16 @@ export function BenchButtons({ bench, onList }: { bench: BenchState; onList: () 
 function doneWord(step: OrderStep): string {
   switch (step.kind) {
     case "fetch":
+    case "fetch-member":
       return "Fetched";
+    case "arrange":
+      return "Laid out";
+    case "trim-edge":
+      return "Trimmed";
+    case "joint":
+      return "Jointed";
+    case "glue-up":
+      return "Glued up";
     case "mark":
       return "Marked";
     case "test-cut":

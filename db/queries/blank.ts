@@ -2,7 +2,7 @@
 import "server-only";
 import { and, asc, eq, inArray } from "drizzle-orm";
 import type { Connection } from "../client";
-import { blank, blankMember, board, straightening } from "../schema";
+import { blank, blankMember, board, orderRevisionBoard, stepTick, straightening } from "../schema";
 import type { ShopId } from "../shop-id";
 
 export type BlankMemberRow = typeof blankMember.$inferSelect;
@@ -52,4 +52,25 @@ export async function listInBlanks(db: Connection, shopId: ShopId, boardIds: rea
     .innerJoin(board, eq(board.id, blankMember.blankId))
     .where(and(eq(blankMember.shopId, shopId), inArray(blankMember.boardId, [...boardIds])))
     .orderBy(asc(blankMember.boardId));
+}
+
+/** Whether any revision of a cut order, superseded ones included, was issued from the board. */
+export async function isIssued(db: Connection, shopId: ShopId, boardId: string): Promise<boolean> {
+  const [row] = await db
+    .select({ revisionId: orderRevisionBoard.revisionId })
+    .from(orderRevisionBoard)
+    .where(and(eq(orderRevisionBoard.shopId, shopId), eq(orderRevisionBoard.boardId, boardId)))
+    .limit(1);
+  return row !== undefined;
+}
+
+/** Whether the step is ticked in any revision that cuts from the board. */
+export async function isTicked(db: Connection, shopId: ShopId, boardId: string, stepId: string): Promise<boolean> {
+  const [row] = await db
+    .select({ stepId: stepTick.stepId })
+    .from(orderRevisionBoard)
+    .innerJoin(stepTick, eq(stepTick.revisionId, orderRevisionBoard.revisionId))
+    .where(and(eq(orderRevisionBoard.shopId, shopId), eq(orderRevisionBoard.boardId, boardId), eq(stepTick.stepId, stepId)))
+    .limit(1);
+  return row !== undefined;
 }

@@ -1,12 +1,23 @@
 /** Boards of the rack, their readings, and what holds them. */
 import "server-only";
-import { and, asc, count, desc, eq, exists, gte, inArray, like, max, not, or, type SQL } from "drizzle-orm";
+import { and, asc, count, desc, eq, exists, gte, inArray, like, max, not, or, type SQL, sql } from "drizzle-orm";
 import { v7 as newId } from "uuid";
 import { um } from "@/lib/layout";
 import type { BoardQuery, boardSorts } from "@/lib/schemas/board";
 import { readTag } from "@/lib/schemas/tag";
 import type { Connection } from "../client";
-import { board, boardPicture, face, job, layout, layoutBoard, moistureReading, straightening, user } from "../schema";
+import {
+  blankMember,
+  board,
+  boardPicture,
+  face,
+  job,
+  layout,
+  layoutBoard,
+  moistureReading,
+  straightening,
+  user,
+} from "../schema";
 import type { ShopId } from "../shop-id";
 
 export type BoardFields = Omit<
@@ -14,10 +25,16 @@ export type BoardFields = Omit<
   "id" | "shopId" | "tagNumber" | "revision" | "createdAt" | "updatedAt" | "moistureTenths"
 >;
 
-const withPicture = { board, straighteningId: straightening.id, levels: straightening.levels };
+const withPicture = {
+  board,
+  straighteningId: straightening.id,
+  backStraighteningId: boardPicture.backStraighteningId,
+  levels: straightening.levels,
+};
 export type BoardWithPicture = {
   readonly board: typeof board.$inferSelect;
   readonly straighteningId: string | null;
+  readonly backStraighteningId: string | null;
   readonly levels: typeof straightening.$inferSelect.levels | null;
 };
 
@@ -114,7 +131,9 @@ function holding(db: Connection, free: "yes" | "no"): SQL {
       .innerJoin(job, eq(job.id, face.jobId))
       .where(and(eq(layoutBoard.boardId, board.id), eq(job.state, "open"))),
   );
-  return free === "yes" ? not(held) : held;
+  if (free === "no") return held;
+  const inBlank = exists(db.select({ id: blankMember.blankId }).from(blankMember).where(eq(blankMember.boardId, board.id)));
+  return not(or(held, inBlank) ?? held);
 }
 
 /** The faces of open jobs that each of these boards lies on the table of. */
@@ -182,6 +201,13 @@ export async function setBoardKind(tx: Connection, shopId: ShopId, boardId: stri
   await tx
     .update(board)
     .set({ kind, updatedAt: at })
+    .where(and(eq(board.shopId, shopId), eq(board.id, boardId)));
+}
+
+export async function setBoardState(tx: Connection, shopId: ShopId, boardId: string, state: BoardFields["state"], at: Date) {
+  await tx
+    .update(board)
+    .set({ state, revision: sql`${board.revision} + 1`, updatedAt: at })
     .where(and(eq(board.shopId, shopId), eq(board.id, boardId)));
 }
 

@@ -137,6 +137,14 @@ export async function setBoardPicture(
 type Outline = StraighteningRow["outline"];
 export type KeepClearRow = Omit<typeof keepClear.$inferInsert, "shopId" | "straighteningId">;
 
+/** The outline that a version begins with, before anybody can have drawn on it. */
+export async function setOutline(tx: Connection, shopId: ShopId, straighteningId: string, outline: Outline) {
+  await tx
+    .update(straightening)
+    .set({ outline })
+    .where(and(eq(straightening.shopId, shopId), eq(straightening.id, straighteningId)));
+}
+
 /** Saves the outline from a base revision; false when somebody saved in between. */
 export async function updateOutline(
   tx: Connection,

@@ -90,6 +90,7 @@ export type { PhotoSize } from "./picture/lens";
 export type { BoardEdge, EdgePoint, ExtraPoint, FourCorners, Marking, MarkingReference } from "./picture/marking";
 export type { CornerIndex, MarkedRectangle, MarksRefusal } from "./picture/marks-check";
 export type { OutputScale } from "./picture/output-scale";
+export { type BlankScale, blankScale, type MemberPicture, paintStrip } from "./picture/paint-strip";
 export { type PaperName, type PaperSize, paperSizes } from "./picture/paper-sizes";
 export { measureMm, type PhotoGeometry, photoFromStockMm, stockMmFromPhoto, warpMapAt } from "./picture/photo-geometry";
 export { type LevelSize, pyramidLevels } from "./picture/pyramid";

@@ -2,8 +2,9 @@
 import { z } from "zod";
 import { defineEndpoint, everyone, makers } from "./endpoint";
 import { idSchema } from "./ids";
-import { sizeUmSchema, umSchema } from "./length";
+import { rectSchema, sizeUmSchema, umSchema } from "./length";
 import { servedLevelSchema } from "./photo";
+import { boardSides } from "./straightening";
 
 /** One piece of wood, or boards glued edge to edge. */
 export const boardKinds = ["board", "blank"] as const;
@@ -29,6 +30,7 @@ export const boardHoldSchema = z.object({ faceId: idSchema, faceTitle: z.string(
 export const boardRowSchema = z.object({
   id: idSchema,
   tag: z.string(),
+  kind: z.enum(boardKinds),
   state: z.enum(boardStates),
   ...boardFields,
   /** 0 while nobody has measured. */
@@ -40,10 +42,14 @@ export const boardRowSchema = z.object({
   boardFeet: z.number(),
   /** The volume by plain measures in board feet, not rounded; 0 while not measured. */
   volumeBoardFeet: z.number(),
+  /** The picture of its face. */
   straighteningId: idSchema.nullable(),
+  backStraighteningId: idSchema.nullable(),
   /** Level small enough for the rack, or null when there is no picture. */
   picture: servedLevelSchema.nullable(),
   held: z.array(boardHoldSchema),
+  /** The planned blank that it is to be glued into: it cannot be laid out by itself. */
+  inBlank: z.object({ boardId: idSchema, tag: z.string() }).nullable(),
   revision: z.int(),
   createdAt: z.iso.datetime(),
 });
@@ -56,8 +62,35 @@ export const moistureReadingSchema = z.object({
   takenBy: z.string(),
 });
 
+/** A board of a planned blank, and where it lies there. */
+export const blankMemberSchema = z.object({
+  boardId: idSchema,
+  tag: z.string(),
+  species: z.string(),
+  place: z.string(),
+  side: z.enum(boardSides),
+  straighteningId: idSchema,
+  endForEnd: z.boolean(),
+  /** What is left of it, in the frame of the blank. */
+  rect: rectSchema,
+  /** Taken off upper and lower edge as it lies, jointing included. */
+  takes: z.object({ upper: umSchema, lower: umSchema }),
+});
+export type BlankMemberOnWire = z.output<typeof blankMemberSchema>;
+
 export const boardSchema = boardRowSchema.extend({
   readings: z.array(moistureReadingSchema),
+  /** Of a blank that was planned: what it is glued up from, from the upper edge down. */
+  blank: z
+    .object({
+      jointing: umSchema,
+      /** The bench has ticked that it is glued up. */
+      glued: z.boolean(),
+      /** A cut order was issued from it: it is not taken apart any more. */
+      issued: z.boolean(),
+      members: z.array(blankMemberSchema),
+    })
+    .nullable(),
 });
 export type Board = z.output<typeof boardSchema>;
 
@@ -123,7 +156,7 @@ export const createBoard = defineEndpoint({
 export const getBoard = defineEndpoint({
   method: "GET",
   path: "/api/boards/{boardId}",
-  summary: "One board with its readings",
+  summary: "One board with its readings and, of a planned blank, the boards in it",
   tag: "boards",
   access: everyone,
   params,

@@ -5,9 +5,11 @@
 import { z } from "zod";
 import { cuts } from "./board";
 import { cutProgramSchema } from "./cut-program";
+import { gluingSchema } from "./gluing";
 import { idSchema } from "./ids";
 import { faceLayoutSchema } from "./layout";
 import { rectSchema, sizeUmSchema, umSchema } from "./length";
+import { boardSides } from "./straightening";
 import { keepClearSchema, outlineSchema } from "./zones";
 
 const snapshotSawSchema = z.object({ name: z.string(), kerf: umSchema, cleanUp: umSchema });
@@ -22,6 +24,12 @@ export const snapshotBoardSchema = z.object({
   length: sizeUmSchema,
   width: sizeUmSchema,
   straighteningId: idSchema,
+  /** Which of its faces the picture shows and lies up; absent: the face. */
+  side: z.enum(boardSides).optional(),
+  /** Distances across from the upper edge; absent: a board in one piece. */
+  glueLines: z.array(umSchema).optional(),
+  /** Of a blank that was not glued up yet when the order was issued. */
+  gluing: gluingSchema.optional(),
   outline: outlineSchema.nullable(),
   keepClear: z.array(keepClearSchema),
   pieces: z.array(z.object({ pieceId: z.string(), label: z.string(), rect: rectSchema, turns: z.int().min(0).max(3) })),

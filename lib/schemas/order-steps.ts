@@ -2,7 +2,8 @@
  * The steps of a cut order, from its snapshot: what the bench ticks one by one and the paper prints one row each. Knows what is to be
  * done and in which order; how it is said is in `lib/words`. Step ids are stable: the same snapshot gives the same ids for ever.
  */
-import type { CleanUp, CutKind, CutStep, Edge, Part, Um } from "@/lib/layout";
+import { type CleanUp, type CutKind, type CutStep, type Edge, type Part, type Um, um } from "@/lib/layout";
+import type { Gluing, GluingMember } from "./gluing";
 import type { OrderSnapshot, SnapshotBoard } from "./order-snapshot";
 
 interface StepOf<Kind extends string> {
@@ -14,6 +15,25 @@ interface StepOf<Kind extends string> {
   readonly board: SnapshotBoard;
 }
 
+/** Of a blank that is yet to be glued up; `board` is the blank. */
+export type GluingStep =
+  /** Bring one of its boards from the rack. */
+  | (StepOf<"fetch-member"> & { readonly member: GluingMember })
+  /** Lay the boards out as they are to lie, and mark them so. */
+  | (StepOf<"arrange"> & { readonly members: readonly GluingMember[] })
+  /** Take an outer edge of the blank back, which no joint does. */
+  | (StepOf<"trim-edge"> & { readonly member: GluingMember; readonly edge: "upper" | "lower"; readonly by: Um })
+  /** The two edges of one joint. */
+  | (StepOf<"joint"> & {
+      readonly joint: number;
+      readonly above: GluingMember;
+      readonly below: GluingMember;
+      readonly jointing: Um;
+      /** The boards that have both their edges now. */
+      readonly ready: readonly GluingMember[];
+    })
+  | (StepOf<"glue-up"> & { readonly members: readonly GluingMember[] });
+
 /** Fronts of one finished size that lose the same at every edge. */
 export interface CleanUpGroup {
   readonly labels: readonly string[];
@@ -23,6 +43,7 @@ export interface CleanUpGroup {
 }
 
 export type OrderStep =
+  | GluingStep
   /** Bring the board from the rack. */
   | StepOf<"fetch">
   /** Face up, triangle on, before anything is cut. */
@@ -40,7 +61,7 @@ type Unnumbered<S> = S extends OrderStep ? Omit<S, "number"> : never;
 export function orderSteps(snapshot: OrderSnapshot): readonly OrderStep[] {
   const tests = testCuts(snapshot);
   const steps = snapshot.boards.flatMap((board, index): Unnumbered<OrderStep>[] => [
-    { id: fetchId(board.tag), kind: "fetch", board },
+    ...(board.gluing ? gluingSteps(board, board.gluing) : [{ id: fetchId(board.tag), kind: "fetch" as const, board }]),
     { id: markId(board.tag), kind: "mark", board },
     ...(index === 0 ? tests.map((test) => ({ ...test, kind: "test-cut" as const, board })) : []),
     ...board.program.steps.map((cut) => ({ id: `${board.tag}:${cut.number}`, kind: "cut" as const, board, cut })),
@@ -60,15 +81,49 @@ export function orderSteps(snapshot: OrderSnapshot): readonly OrderStep[] {
   return steps.map((step, index) => ({ ...step, number: index + 1 }));
 }
 
+/** In the order of work: everything at hand first, outer edges before joints, so that a joint leaves a board as wide as it stays. */
+function gluingSteps(board: SnapshotBoard, { members, jointing }: Gluing): Unnumbered<OrderStep>[] {
+  const [first, last] = [members[0], members.at(-1)];
+  const outer = [
+    { member: first, edge: "upper" as const },
+    { member: last, edge: "lower" as const },
+  ];
+  return [
+    ...members.map((member) => ({ id: `${board.tag}:member-${member.tag}`, kind: "fetch-member" as const, board, member })),
+    { id: `${board.tag}:arrange`, kind: "arrange" as const, board, members },
+    ...outer.flatMap(({ member, edge }) => {
+      const by = member?.takes[edge] ?? 0;
+      return member && by > 0
+        ? [{ id: `${board.tag}:trim-${edge}`, kind: "trim-edge" as const, board, member, edge, by: um(by) }]
+        : [];
+    }),
+    ...members.slice(1).flatMap((below, index) => {
+      const above = members[index];
+      if (!above) return [];
+      const ready = below === last ? [above, below] : [above];
+      return [
+        { id: `${board.tag}:joint-${index + 1}`, kind: "joint" as const, board, joint: index + 1, above, below, jointing, ready },
+      ];
+    }),
+    { id: glueUpId(board.tag), kind: "glue-up" as const, board, members },
+  ];
+}
+
+/** Ticked, the blank is glued, whichever revision the step was in. */
+export const glueUpId = (tag: string): string => `${tag}:glue-up`;
+/** Steps before there is a blank to cut: they make it what its picture shows. */
+const makesBlank = /^(?:member-B-\d+|arrange|trim-upper|trim-lower|joint-\d+|glue-up)$/;
+
 const fetchId = (tag: string) => `${tag}:fetch`;
 const markId = (tag: string) => `${tag}:mark`;
 
 /**
  * Whether wood of the board is gone once this step is ticked: a cut, or what can only be done after one. Told by the id alone, so that
- * nobody has to read a snapshot for it. Test cuts are made in scrap.
+ * nobody has to read a snapshot for it. Test cuts are made in scrap; gluing up makes the board what its picture shows.
  */
 export function takesWood(stepId: string, tag: string): boolean {
-  return stepId.startsWith(`${tag}:`) && stepId !== fetchId(tag) && stepId !== markId(tag);
+  if (!stepId.startsWith(`${tag}:`) || stepId === fetchId(tag) || stepId === markId(tag)) return false;
+  return !makesBlank.test(stepId.slice(tag.length + 1));
 }
 
 export interface TestCut {

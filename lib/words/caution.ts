@@ -14,3 +14,12 @@ export const cautionWords: Readonly<Record<Caution, string>> = {
 
 /** Printed on every order and shown with every step that has a caution. */
 export const firstOfAll = "The machine's manual, local rules and trained practice come first.";
+
+/** Jointing by machine: bridge guard and push blocks as HSE's sheet WIS17 (revision 2) on planing machines asks for. */
+export const jointingCaution = "Jointer: bridge guard over the cutter block, push blocks for short or narrow boards.";
+
+/** Said with every glue; what it is made of only its maker knows. */
+export const gluingCautions: readonly string[] = [
+  "Glue by its maker's instructions: skin, air, open time, clamping time, warmth.",
+  "Clamps are heavy and pinch: two people for a long blank.",
+];

@@ -3,29 +3,13 @@ import { type CutStep, type Edge, type LengthStyle, type Part, printedLength, ty
 import type { OrderSnapshot, SnapshotBoard } from "@/lib/schemas/order-snapshot";
 import type { CleanUpGroup, OrderStep } from "@/lib/schemas/order-steps";
 import { cautionWords } from "./caution";
-import { cutTitle, isShaving, type Title, truingNote } from "./cut-title";
+import { cutTitle, isShaving, truingNote } from "./cut-title";
 import { edgeNames, measuredFrom } from "./edge-name";
+import { gluingWords } from "./gluing-step";
 import { labelRanges, partName, sizeFigures } from "./part-name";
+import type { Gives, StepWords } from "./step-words";
 
-/** Something a step gives: "front" in words, its label for the box, its size. */
-export interface Gives {
-  readonly word: string;
-  readonly label: string | null;
-  readonly size: string | null;
-}
-
-export interface StepWords extends Title {
-  /** What to keep in mind, in the order of importance. */
-  readonly notes: readonly string[];
-  readonly cautions: readonly string[];
-  /** Where the setting is measured from; null where nothing is set. */
-  readonly from: string | null;
-  /** How it is dialled in or marked; for the bench, where there is room for it. */
-  readonly measure: string | null;
-  /** The number to set. */
-  readonly setting: Um | null;
-  readonly gives: readonly Gives[];
-}
+export type { Gives, StepWords } from "./step-words";
 
 /** The shop's way to write lengths, as frozen with the order. */
 export function styleOf({ units, inchFraction }: Pick<OrderSnapshot, "units" | "inchFraction">): LengthStyle {
@@ -35,10 +19,16 @@ export function styleOf({ units, inchFraction }: Pick<OrderSnapshot, "units" | "
 /** `before` is the step done just before, on paper the row above: it tells whether the saw stands right already. */
 export function stepWords(step: OrderStep, style: LengthStyle, before?: OrderStep): StepWords {
   switch (step.kind) {
+    case "fetch-member":
+    case "arrange":
+    case "trim-edge":
+    case "joint":
+    case "glue-up":
+      return gluingWords(step, style);
     case "fetch":
       return { ...bare, verb: "Fetch", rest: `board ${step.board.tag}${step.board.place && ` from ${step.board.place}`}` };
     case "mark":
-      return { ...bare, verb: "Mark", rest: `board ${step.board.tag}`, notes: [markNote] };
+      return { ...bare, verb: "Mark", rest: `board ${step.board.tag}`, notes: [markNoteOf(step.board)] };
     case "test-cut":
       return testCutWords(step);
     case "cut":
@@ -52,6 +42,10 @@ export function stepWords(step: OrderStep, style: LengthStyle, before?: OrderSte
 
 /** Said once above the steps, and again as a step to tick. */
 export const markNote = "Face up as in the picture. Chalk the triangle over the fronts before any cut.";
+const backUpNote =
+  "Back up as in the picture: turn the board over about its long edge, its left end stays left. Chalk the triangle over the fronts before any cut.";
+
+export const markNoteOf = ({ side }: Pick<SnapshotBoard, "side">): string => (side === "back" ? backUpNote : markNote);
 
 const bare = { notes: [], cautions: [], from: null, measure: null, setting: null, gives: [] } as const;
 

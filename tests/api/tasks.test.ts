@@ -6,6 +6,7 @@ import { recordHistory } from "@/db/queries/history";
 import { claimTask, findTask, finishTask, insertTask, requestCancel } from "@/db/queries/task";
 import { history, task } from "@/db/schema";
 import { database } from "@/lib/server/database";
+import { kinds } from "@/lib/server/tasks/kinds";
 import { runTask } from "@/lib/server/tasks/run-task";
 import type { TaskKind } from "@/lib/server/tasks/task-kind";
 import { workLoop } from "@/lib/server/tasks/work-loop";
@@ -138,7 +139,7 @@ describe("working", () => {
       await new Promise((_, reject) => signal.addEventListener("abort", () => reject(new Error("stopped"))));
       return keepRow(id);
     });
-    await workLoop(database(), { straighten: stopped }, ending.signal);
+    await workLoop(database(), { ...kinds, straighten: stopped }, ending.signal);
     expect(await state(id)).toMatchObject({ state: "queued", attempts: 0 });
 
     const done = new AbortController();
@@ -146,7 +147,7 @@ describe("working", () => {
       setTimeout(() => done.abort(), 100);
       return keepRow(id);
     });
-    await workLoop(database(), { straighten: second }, done.signal);
+    await workLoop(database(), { ...kinds, straighten: second }, done.signal);
     expect((await state(id))?.state).toBe("done");
     expect(await timesKept(id)).toBe(1);
   });

@@ -1,6 +1,7 @@
 /** Orders without a database, frozen from invented layouts by the same code that issues real ones. */
 import { v7 as newId } from "uuid";
-import { type FaceLayout, freshLayout, gridFace, pieceIdsOf, placeGroup, um, umFromMm } from "@/lib/layout";
+import { type FaceLayout, freshLayout, gridFace, pieceIdsOf, placeGroup, type Um, um, umFromMm } from "@/lib/layout";
+import type { Gluing } from "@/lib/schemas/gluing";
 import { faceLayoutSchema } from "@/lib/schemas/layout";
 import type { Order } from "@/lib/schemas/order";
 import { orderSteps } from "@/lib/schemas/order-steps";
@@ -23,6 +24,10 @@ export interface OrderWanted {
   readonly place: string;
   readonly superseded: boolean;
   readonly keepClear: readonly KeepClearArea[];
+  readonly side: "face" | "back";
+  readonly glueLines: readonly Um[];
+  /** The boards are blanks that are yet to be glued up. */
+  readonly gluing: Gluing | null;
 }
 
 const usual: OrderWanted = {
@@ -39,6 +44,9 @@ const usual: OrderWanted = {
   place: "rack 2 left",
   superseded: false,
   keepClear: [],
+  side: "face",
+  glueLines: [],
+  gluing: null,
 };
 
 /** Rows of fronts, one row on each board. */
@@ -87,13 +95,15 @@ const limits = {
   offcutWidth: umFromMm(50),
 };
 
-function boardOf({ boardMm, place, keepClear }: OrderWanted, index: number) {
+function boardOf({ boardMm, place, keepClear, side, glueLines, gluing }: OrderWanted, index: number) {
   const size = { length: umFromMm(boardMm.length), width: umFromMm(boardMm.width) };
   const id = newId();
   return {
     board: { id, tagNumber: 41 + index, species: "black walnut", cut: "flat" as const, place, thickness: umFromMm(26) },
-    straightening: { id: newId(), ...size, outline: null, zonesRevision: 0 },
+    straightening: { id: newId(), side, ...size, outline: null, zonesRevision: 0 },
     keepClear,
+    glueLines,
+    gluing,
   };
 }
 

@@ -26,7 +26,7 @@ export interface OutputScale {
 /** The scale for a board rectangle of this size with its origin at the stock's. Whole thousandths of px/mm. */
 export function outputScale(geometry: PhotoGeometry, lengthMm: number, widthMm: number): OutputScale {
   const photoPxPerMm = typicalResolution(geometry, lengthMm, widthMm);
-  const memory = Math.min(Math.sqrt(MOST_PIXELS / (lengthMm * widthMm)), LONGEST_SIDE_PX / Math.max(lengthMm, widthMm));
+  const memory = largestScale(lengthMm, widthMm);
   const photo = photoPxPerMm * GREATEST_ENLARGEMENT;
   const pxPerMm = Math.max(0.001, Math.floor(Math.min(WANTED_PX_PER_MM, photo, memory) * 1000) / 1000);
   return {
@@ -36,6 +36,11 @@ export function outputScale(geometry: PhotoGeometry, lengthMm: number, widthMm: 
     photoPxPerMm,
     limitedBy: WANTED_PX_PER_MM <= Math.min(photo, memory) ? "wanted" : photo <= memory ? "photo" : "memory",
   };
+}
+
+/** As fine as memory and browsers take a picture of a rectangle of this size, px/mm. */
+export function largestScale(lengthMm: number, widthMm: number): number {
+  return Math.min(Math.sqrt(MOST_PIXELS / (lengthMm * widthMm)), LONGEST_SIDE_PX / Math.max(lengthMm, widthMm));
 }
 
 /** The photo's px/mm (root of px² per mm²) at a place of the wood, lens included. */

@@ -1,22 +1,31 @@
 /** A board as the browser sees it, from its row. */
 import "server-only";
+import type { listInBlanks } from "@/db/queries/blank";
 import type { BoardWithPicture, listBoardHolds } from "@/db/queries/board";
 import { boardFeet, boardFeetByRule, type Um, um } from "@/lib/layout";
 import type { BoardRow } from "@/lib/schemas/board";
 import { printTag } from "@/lib/schemas/tag";
 import { servedLevel } from "../straightenings/straightening-of";
 
+type InBlank = Awaited<ReturnType<typeof listInBlanks>>[number];
 type Hold = Awaited<ReturnType<typeof listBoardHolds>>[number];
 
 /** Wide enough for a board that fills the rack's page, px. */
 const rackPicturePx = 1000;
 const umPerQuarter = 6350;
 
-export function boardRowOf({ board, straighteningId, levels }: BoardWithPicture, holds: readonly Hold[]): BoardRow {
-  const { id, state, species, cut, nominalQuarters, thickness, length, width, place, source, costMinor, note, revision } = board;
+export function boardRowOf(
+  { board, straighteningId, backStraighteningId, levels }: BoardWithPicture,
+  holds: readonly Hold[],
+  inBlanks: readonly InBlank[],
+): BoardRow {
+  const inBlank = inBlanks.find(({ boardId }) => boardId === board.id);
+  const { id, kind, state, species, cut, nominalQuarters, thickness, length, width, place, source, costMinor, note, revision } =
+    board;
   return {
     id,
     tag: printTag(board.tagNumber),
+    kind,
     state,
     species,
     cut,
@@ -32,10 +41,12 @@ export function boardRowOf({ board, straighteningId, levels }: BoardWithPicture,
     boardFeet: boardFeetByRule(width, length, tradeThickness(nominalQuarters, thickness), halfGoesOf(board.tagNumber)),
     volumeBoardFeet: boardFeet(width, length, thickness),
     straighteningId,
+    backStraighteningId,
     picture: straighteningId === null ? null : rackPicture(straighteningId, levels ?? []),
     held: holds
       .filter(({ boardId }) => boardId === id)
       .map(({ faceId, faceTitle, jobId, jobTitle }) => ({ faceId, faceTitle, jobId, jobTitle })),
+    inBlank: inBlank ? { boardId: inBlank.blankId, tag: printTag(inBlank.blankTagNumber) } : null,
     revision,
     createdAt: board.createdAt.toISOString(),
   };

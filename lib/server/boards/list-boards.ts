@@ -1,6 +1,7 @@
 /** The rack: one page of boards with all that the page shows, in a number of queries that does not grow with it. */
 import "server-only";
 import type { z } from "zod";
+import { listInBlanks } from "@/db/queries/blank";
 import { listBoardHolds, listBoards, listSpecies, sumUpBoards } from "@/db/queries/board";
 import { um } from "@/lib/layout";
 import type { BoardQuery, boardPageSchema } from "@/lib/schemas/board";
@@ -17,13 +18,11 @@ export async function readBoardPage(access: ShopAccess, query: BoardQuery): Prom
     sumUpBoards(db, access.shopId, query),
     listSpecies(db, access.shopId),
   ]);
-  const holds = await listBoardHolds(
-    db,
-    access.shopId,
-    rows.map(({ board }) => board.id),
-  );
+  const ids = rows.map(({ board }) => board.id);
+  const holds = await listBoardHolds(db, access.shopId, ids);
+  const inBlanks = await listInBlanks(db, access.shopId, ids);
   return {
-    items: rows.map((row) => boardRowOf(row, holds)),
+    items: rows.map((row) => boardRowOf(row, holds, inBlanks)),
     total,
     page: query.page,
     pageSize: query.pageSize,

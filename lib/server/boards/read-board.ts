@@ -1,9 +1,11 @@
 /** One board with its readings. */
 import "server-only";
 import type { Connection } from "@/db/client";
+import { listInBlanks } from "@/db/queries/blank";
 import { findBoard, listBoardHolds, listReadings } from "@/db/queries/board";
 import type { Board } from "@/lib/schemas/board";
 import type { ShopAccess } from "../access";
+import { readBlank } from "../blanks/read-blank";
 import { database } from "../database";
 import { notFound } from "../faults";
 import { boardRowOf } from "./board-of";
@@ -12,9 +14,12 @@ export async function readBoard(access: ShopAccess, boardId: string, db: Connect
   const found = await findBoard(db, access.shopId, boardId);
   if (!found) throw notFound("board");
   const holds = await listBoardHolds(db, access.shopId, [boardId]);
+  const inBlanks = await listInBlanks(db, access.shopId, [boardId]);
+  const row = boardRowOf(found, holds, inBlanks);
   const readings = await listReadings(db, access.shopId, boardId);
   return {
-    ...boardRowOf(found, holds),
+    ...row,
     readings: readings.map(({ id, tenths, takenOn, takenBy }) => ({ id, percent: tenths / 10, takenOn, takenBy })),
+    blank: await readBlank(db, access.shopId, boardId, row.tag),
   };
 }

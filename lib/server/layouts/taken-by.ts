@@ -4,7 +4,7 @@
  */
 import "server-only";
 import type { Connection } from "@/db/client";
-import { listRevisionsOnBoards } from "@/db/queries/order-board";
+import { listRevisionsOnBoards, listRevisionsOnPictures } from "@/db/queries/order-board";
 import { listTickedSteps } from "@/db/queries/step-tick";
 import type { ShopId } from "@/db/shop-id";
 import { takesWood } from "@/lib/schemas/order-steps";
@@ -16,7 +16,21 @@ import type { TakenBy } from "@/lib/schemas/taken-by";
  * revision takes it that has wood-taking steps ticked.
  */
 export async function takersOf(db: Connection, shopId: ShopId, layoutId: string): Promise<ReadonlyMap<string, TakenBy>> {
-  const revisions = await listRevisionsOnBoards(db, shopId, layoutId);
+  return takersAmong(db, shopId, await listRevisionsOnBoards(db, shopId, layoutId));
+}
+
+/** The same of boards that lie on no table, by the pictures of theirs that are to be used. Every order is another face's. */
+export async function takersOfPictures(
+  db: Connection,
+  shopId: ShopId,
+  straighteningIds: readonly string[],
+): Promise<ReadonlyMap<string, TakenBy>> {
+  return takersAmong(db, shopId, await listRevisionsOnPictures(db, shopId, straighteningIds));
+}
+
+type Revisions = Awaited<ReturnType<typeof listRevisionsOnBoards>>;
+
+async function takersAmong(db: Connection, shopId: ShopId, revisions: Revisions): Promise<ReadonlyMap<string, TakenBy>> {
   // After the revisions: one that is superseded gets no tick any more, so none can be missed.
   const ticks = await listTickedSteps(
     db,

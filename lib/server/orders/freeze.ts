@@ -21,9 +21,11 @@ import {
   problems,
   type QuarterTurns,
   type ShopLimits,
+  type Um,
   um,
 } from "@/lib/layout";
 import { cutProgramSchema } from "@/lib/schemas/cut-program";
+import type { Gluing } from "@/lib/schemas/gluing";
 import type { OrderSnapshot, SnapshotBoard } from "@/lib/schemas/order-snapshot";
 import { printTag } from "@/lib/schemas/tag";
 import type { KeepClearArea } from "@/lib/schemas/zones";
@@ -45,8 +47,12 @@ type BoardRow = Awaited<ReturnType<typeof listLayoutBoards>>[number];
 
 export interface LayoutBoard {
   readonly board: Pick<BoardRow["board"], "id" | "tagNumber" | "species" | "cut" | "place" | "thickness">;
-  readonly straightening: Pick<BoardRow["straightening"], "id" | "length" | "width" | "outline" | "zonesRevision">;
+  readonly straightening: Pick<BoardRow["straightening"], "id" | "side" | "length" | "width" | "outline" | "zonesRevision">;
   readonly keepClear: readonly KeepClearArea[];
+  /** From the upper edge down. */
+  readonly glueLines: readonly Um[];
+  /** Of a planned blank that is not glued up yet; null for every other board. */
+  readonly gluing: Gluing | null;
 }
 
 /** The snapshot, or a refusal that names everything in the way. */
@@ -108,9 +114,9 @@ export function refusedFor(sentences: readonly string[]) {
  * The board as its picture of that version shows it: size, outline and keep-clear areas are in the picture's frame. The order has it to
  * itself (`refuse-taken.ts`): what others have only planned for does not stand in its way.
  */
-function boardFaceOf({ board, straightening, keepClear }: LayoutBoard): BoardFace {
+function boardFaceOf({ board, straightening, keepClear, glueLines }: LayoutBoard): BoardFace {
   const { length, width, outline } = straightening;
-  return { id: board.id, length, width, thickness: board.thickness, outline, keepClear, spokenFor: [], glueLines: [] };
+  return { id: board.id, length, width, thickness: board.thickness, outline, keepClear, spokenFor: [], glueLines };
 }
 
 function cutRequestOf({ shop, face }: ToFreeze, one: LayoutBoard): CutRequest {
@@ -135,7 +141,7 @@ function edgesAsTheyCame(pieces: readonly PlacedPiece[], board: BoardFace): Boar
 }
 
 function snapshotBoard(layout: FaceLayout, one: LayoutBoard, request: CutRequest, program: CutProgram): SnapshotBoard {
-  const { board, straightening, keepClear } = one;
+  const { board, straightening, keepClear, glueLines, gluing } = one;
   const { length, width } = request.board;
   return {
     boardId: board.id,
@@ -147,6 +153,9 @@ function snapshotBoard(layout: FaceLayout, one: LayoutBoard, request: CutRequest
     length,
     width,
     straighteningId: straightening.id,
+    ...(straightening.side === "back" && { side: "back" }),
+    ...(glueLines.length > 0 && { glueLines: [...glueLines] }),
+    ...(gluing && { gluing }),
     outline: straightening.outline,
     keepClear: [...keepClear],
     pieces: request.pieces.map(({ pieceId, label, rect }) => ({ pieceId, label, rect, turns: turnsOf(layout, pieceId) })),

@@ -2,6 +2,7 @@
 import "server-only";
 import type { Connection } from "@/db/client";
 import { lockBoard } from "@/db/queries/board";
+import { listGlueLines } from "@/db/queries/glue-line";
 import { recordHistory } from "@/db/queries/history";
 import { findFace, findJob } from "@/db/queries/job";
 import { findLayout, listLayoutBoards, lockLayout } from "@/db/queries/layout";
@@ -14,6 +15,7 @@ import type { OrderRow } from "@/lib/schemas/order";
 import type { OrderSnapshot, OrderSummary } from "@/lib/schemas/order-snapshot";
 import { orderSteps } from "@/lib/schemas/order-steps";
 import type { ShopAccess } from "../access";
+import { gluingOf } from "../blanks/gluing-of";
 import { database } from "../database";
 import { conflict, notFound } from "../faults";
 import { fingerprintOf } from "./fingerprint";
@@ -55,6 +57,7 @@ export async function issueOrder(access: ShopAccess, faceId: string, layoutRevis
     const next = await nextRevision(tx, access.shopId, faceId);
     // Another face may have been issued from the same board, or the bench may have begun to cut it, while the cuts were planned.
     await refuseTaken(tx, access.shopId, layout.id, boardsUsed(given));
+    await refuseGluedMeanwhile(tx, access.shopId, given);
     return insertIssued(tx, access, snapshot, next);
   });
   return orderRow(access.shopId, orderId);
@@ -73,6 +76,14 @@ async function refuseOtherTable(tx: Connection, shopId: ShopId, layoutId: string
   throw conflict("A board of the layout was changed meanwhile. Look at it and issue it again.", {
     revision: face.layoutRevision,
   });
+}
+
+/** The bench may have glued the blank up, by an earlier revision, while the cuts were planned: its steps begin elsewhere then. */
+async function refuseGluedMeanwhile(tx: Connection, shopId: ShopId, { boards, face }: ToFreeze): Promise<void> {
+  for (const { board, gluing } of boards) {
+    if (gluing === null || (await gluingOf(tx, shopId, board))) continue;
+    throw conflict("A blank of this layout was glued up meanwhile. Issue it again.", { revision: face.layoutRevision });
+  }
 }
 
 /**
@@ -151,7 +162,12 @@ async function toFreeze(db: Connection, access: ShopAccess, faceId: string, layo
   if (!shop || !found || !job) throw notFound("face");
   const { id, number, title, client } = job;
   const rows = await listLayoutBoards(db, shopId, layout.id);
-  const boards = rows.map(async (row) => ({ ...row, keepClear: await listKeepClear(db, shopId, row.straightening.id) }));
+  const boards = rows.map(async (row) => ({
+    ...row,
+    keepClear: await listKeepClear(db, shopId, row.straightening.id),
+    glueLines: (await listGlueLines(db, shopId, row.straightening.id)).map(({ across }) => across),
+    gluing: await gluingOf(db, shopId, row.board),
+  }));
   return {
     shop,
     job: { id, number, title, client },

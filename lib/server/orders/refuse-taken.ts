@@ -1,8 +1,10 @@
-/** Refuses to issue from a board whose picture belongs to a cut order, or that was cut into since it was photographed. */
+/** Refuses to issue from a board whose picture belongs to a cut order, that was cut into since it was photographed, or that is in a blank. */
 import "server-only";
 import type { Connection } from "@/db/client";
+import { listInBlanks } from "@/db/queries/blank";
 import type { ShopId } from "@/db/shop-id";
 import { printTag } from "@/lib/schemas/tag";
+import { inBlankSentence } from "@/lib/words/in-blank";
 import { takenBySentence } from "@/lib/words/taken-by";
 import { takersOf } from "../layouts/taken-by";
 import { refusedFor } from "./freeze";
@@ -15,9 +17,16 @@ export async function refuseTaken(
   used: readonly { readonly board: { readonly id: string; readonly tagNumber: number } }[],
 ): Promise<void> {
   const takers = await takersOf(db, shopId, layoutId);
+  const ids = used.map(({ board }) => board.id);
+  const inBlanks = await listInBlanks(db, shopId, ids);
   const sentences = used.flatMap(({ board }) => {
+    const tag = printTag(board.tagNumber);
     const taker = takers.get(board.id);
-    return taker ? takenBySentence(printTag(board.tagNumber), taker) : [];
+    const inBlank = inBlanks.find(({ boardId }) => boardId === board.id);
+    return [
+      taker ? takenBySentence(tag, taker) : [],
+      inBlank ? inBlankSentence(tag, printTag(inBlank.blankTagNumber)) : [],
+    ].flat();
   });
   if (sentences.length > 0) throw refusedFor(sentences);
 }

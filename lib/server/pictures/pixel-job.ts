@@ -3,6 +3,7 @@ import "server-only";
 import type { MessagePort } from "node:worker_threads";
 import type { Marking } from "@/lib/layout";
 import type { CancelFlag } from "./cancel-flag";
+import type { ComposedPicture, ComposeRequest } from "./compose";
 import type { InspectOutcome } from "./inspect-upload";
 import type { StraightenOutcome } from "./straighten";
 import type { UprightOutcome } from "./upright";
@@ -15,6 +16,7 @@ export interface PixelJobs {
     readonly request: { readonly bytes: Uint8Array; readonly marking: Marking };
     readonly answer: StraightenOutcome;
   };
+  readonly compose: { readonly request: ComposeRequest; readonly answer: ComposedPicture };
 }
 
 export type PixelJobName = keyof PixelJobs;

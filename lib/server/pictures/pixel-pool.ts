@@ -5,6 +5,7 @@ import { MessageChannel } from "node:worker_threads";
 import Piscina from "piscina";
 import type { Marking } from "@/lib/layout";
 import { createCancelFlag, raiseCancelFlag } from "./cancel-flag";
+import type { ComposedPicture, ComposeRequest } from "./compose";
 import type { InspectOutcome } from "./inspect-upload";
 import type { PixelJobName, PixelJobs, PixelTask } from "./pixel-job";
 import type { StraightenOutcome } from "./straighten";
@@ -46,6 +47,14 @@ export interface StraightenRequest {
 /** The straightened picture in levels, or what is wrong with photo or marks. Rejects with the signal's reason when cancelled. */
 export function straighten({ source, marking, onProgress, signal }: StraightenRequest): Promise<StraightenOutcome> {
   return run("straighten", { bytes: source, marking }, { signal, onProgress });
+}
+
+/** The picture of a blank from those of its boards. Rejects with the signal's reason when cancelled. */
+export function compose(
+  request: ComposeRequest,
+  more: { signal?: AbortSignal; onProgress?: (share: number) => void },
+): Promise<ComposedPicture> {
+  return run("compose", request, more);
 }
 
 /** Ends the threads; the next job starts new ones. */

@@ -2,6 +2,7 @@
 import "server-only";
 import sharp from "sharp";
 import { stopIfCancelled } from "./cancel-flag";
+import { composeInThread } from "./compose";
 import { inspectInThread } from "./inspect-upload";
 import type { PixelJobName, PixelJobs, PixelTask } from "./pixel-job";
 import { straightenInThread } from "./straighten";
@@ -24,6 +25,12 @@ export const upright: Job<"upright"> = async ({ request, cancel }) => {
 
 export const straighten: Job<"straighten"> = ({ request, cancel, progress }) =>
   straightenInThread(request.bytes, request.marking, (share) => {
+    stopIfCancelled(cancel);
+    progress.postMessage(share);
+  });
+
+export const compose: Job<"compose"> = ({ request, cancel, progress }) =>
+  composeInThread(request, (share) => {
     stopIfCancelled(cancel);
     progress.postMessage(share);
   });

@@ -3,12 +3,9 @@
  * run clears them first. Files are removed here only by whoever holds the claim: a run that lost it may no longer touch them.
  */
 import "server-only";
-import { z } from "zod";
-import { recordHistory } from "@/db/queries/history";
 import { findPhoto, type PhotoRow } from "@/db/queries/photo";
-import { endWaitingStraightening, findStraightening, type StraighteningRow } from "@/db/queries/straightening";
+import { findStraightening, type StraighteningRow } from "@/db/queries/straightening";
 import { umFromMm } from "@/lib/layout";
-import { idSchema } from "@/lib/schemas/ids";
 import { marksRefusalWords } from "@/lib/words/marks-refusal";
 import { database } from "../database";
 import { straighten } from "../pictures/pixel-pool";
@@ -17,15 +14,14 @@ import { storage } from "../storage";
 import type { TaskContext, TaskKind } from "../tasks/task-kind";
 import { keepPicture, type MadePicture } from "./keep-picture";
 import { putStraighteningFiles, removeStraighteningFiles } from "./straightening-files";
-
-const payloadSchema = z.object({ straighteningId: idSchema });
+import { abandonPicture, pictureTask } from "./waiting-picture";
 
 /** What the maker reads where the reason is no business of theirs; the cause goes to the log. */
 const ourFault = "The picture could not be made: something went wrong on our side. Mark the photograph again to try once more.";
 
 export const straightenTask: TaskKind = {
   async work(payload, context) {
-    const { straighteningId } = payloadSchema.parse(payload);
+    const { straighteningId } = pictureTask.parse(payload);
     const { shopId, signal } = context;
     try {
       const version = await findStraightening(database(), shopId, straighteningId);
@@ -39,17 +35,7 @@ export const straightenTask: TaskKind = {
     }
   },
 
-  async abandon(payload, { shopId }, { state, message }, tx) {
-    const { straighteningId } = payloadSchema.parse(payload);
-    const version = await findStraightening(tx, shopId, straighteningId);
-    const failure = state === "failed" ? message : null;
-    if (version && (await endWaitingStraightening(tx, shopId, straighteningId, { state, failure }))) {
-      const verb = state === "failed" ? "straightening failed" : "straightening cancelled";
-      const detail = { version: version.version, straighteningId, failure };
-      await recordHistory(tx, shopId, { userId: null, noun: "board", nounId: version.boardId, verb, detail }, new Date());
-    }
-    await removeStraighteningFiles(shopId, straighteningId);
-  },
+  abandon: abandonPicture,
 };
 
 /** A reason that the maker can do something about, in words. */

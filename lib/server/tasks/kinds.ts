@@ -1,7 +1,8 @@
 /** Every kind of long work there is. */
 import "server-only";
 import type { taskKinds } from "@/lib/schemas/task";
+import { composeTask } from "../blanks/compose-task";
 import { straightenTask } from "../straightenings/straighten-task";
 import type { TaskKind } from "./task-kind";
 
-export const kinds: Record<(typeof taskKinds)[number], TaskKind> = { straighten: straightenTask };
+export const kinds: Record<(typeof taskKinds)[number], TaskKind> = { straighten: straightenTask, compose: composeTask };
