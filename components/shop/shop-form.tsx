@@ -27,6 +27,11 @@ const lengths = [
     label: "Shortest through planer and jointer",
     hint: "12 in (300 mm) is the usual least of the machines' manuals.",
   },
+  {
+    name: "jointing",
+    label: "Jointing takes off each glued edge",
+    hint: "When boards are edge-glued into a blank, unless said otherwise there.",
+  },
   { name: "offcutLength", label: "Offcuts kept from this length", hint: "Smaller ones count as waste." },
   { name: "offcutWidth", label: "Offcuts kept from this width", hint: "Smaller ones count as waste." },
 ] as const;

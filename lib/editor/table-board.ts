@@ -19,10 +19,14 @@ export interface TableBoard {
   /** The version of the picture that this layout lies on. */
   readonly straighteningId: string;
   readonly version: number;
+  readonly side: LayoutBoard["straightening"]["side"];
+  /** A newer picture of the same side. */
   readonly newerStraighteningId: string | null;
+  readonly otherSideStraighteningId: string | null;
   readonly heldBy: LayoutBoard["heldBy"];
   /** The same wood as in `face`, with whose it is. */
   readonly spokenFor: LayoutBoard["spokenFor"];
+  readonly inBlank: LayoutBoard["inBlank"];
   readonly takenBy: LayoutBoard["takenBy"];
   /** Largest first. All cover the whole board. */
   readonly levels: readonly PictureLevel[];
@@ -40,16 +44,19 @@ export function tableBoard(board: LayoutBoard): TableBoard {
       outline: straightening.zones.outline,
       keepClear: straightening.zones.keepClear,
       spokenFor: board.spokenFor,
-      glueLines: [],
+      glueLines: straightening.zones.glueLines.map(({ across }) => across),
     },
     tag: board.tag,
     species: board.species,
     place: board.place,
     straighteningId: straightening.id,
     version: straightening.version,
+    side: straightening.side,
     newerStraighteningId: board.newerStraighteningId,
+    otherSideStraighteningId: board.otherSideStraighteningId,
     heldBy: board.heldBy,
     spokenFor: board.spokenFor,
+    inBlank: board.inBlank,
     takenBy: board.takenBy,
     levels,
   };

@@ -82,6 +82,8 @@ export const layoutBoardSchema = z.object({
   ),
   /** What those on the same picture take of it. */
   spokenFor: z.array(spokenForSchema),
+  /** The planned blank it is to be glued into: no order can be issued from it by itself. */
+  inBlank: z.object({ boardId: idSchema, tag: z.string() }).nullable(),
   /** The cut order that its picture belongs to, or that has cut into the board since: no other can be issued from it. */
   takenBy: takenBySchema.nullable(),
 });

@@ -29,7 +29,14 @@ const shopFields = {
   offcutWidth: sizeUmSchema,
 };
 
-export const shopSchema = z.object({ id: idSchema, ...shopFields, revision: z.int(), saws: z.array(sawSchema) });
+export const shopSchema = z.object({
+  id: idSchema,
+  ...shopFields,
+  /** What jointing takes off each edge that is glued. */
+  jointing: allowanceUmSchema,
+  revision: z.int(),
+  saws: z.array(sawSchema),
+});
 export type Shop = z.output<typeof shopSchema>;
 
 export const getShop = defineEndpoint({
@@ -41,7 +48,12 @@ export const getShop = defineEndpoint({
   response: shopSchema,
 });
 
-export const updateShopSchema = z.object({ baseRevision: z.int(), ...shopFields });
+export const updateShopSchema = z.object({
+  baseRevision: z.int(),
+  ...shopFields,
+  /** Left as it is when not given. */
+  jointing: allowanceUmSchema.optional(),
+});
 export const updateShop = defineEndpoint({
   method: "PUT",
   path: "/api/shop",

@@ -114,9 +114,18 @@ function boardFaceOf({ boards }: Layout): BoardFace {
   const [board] = boards;
   if (!board) throw new Error("a layout of the demo has no board on its table");
   const { length, width, zones } = board.straightening;
-  const { outline, keepClear } = zones;
+  const { outline, keepClear, glueLines } = zones;
   const { spokenFor } = board;
-  return { id: board.boardId, length, width, thickness: board.thickness, outline, keepClear, spokenFor, glueLines: [] };
+  return {
+    id: board.boardId,
+    length,
+    width,
+    thickness: board.thickness,
+    outline,
+    keepClear,
+    spokenFor,
+    glueLines: glueLines.map(({ across }) => across),
+  };
 }
 
 function idOf(boardIds: ReadonlyMap<string, string>, key: string): string {

@@ -203,5 +203,14 @@ describe("made to the end", () => {
 
 function boardFaceOf({ boardId, thickness, straightening, spokenFor }: Layout["boards"][number]): BoardFace {
   const { length, width, zones } = straightening;
-  return { id: boardId, length, width, thickness, outline: zones.outline, keepClear: zones.keepClear, spokenFor, glueLines: [] };
+  return {
+    id: boardId,
+    length,
+    width,
+    thickness,
+    outline: zones.outline,
+    keepClear: zones.keepClear,
+    spokenFor,
+    glueLines: zones.glueLines.map(({ across }) => across),
+  };
 }

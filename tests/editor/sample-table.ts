@@ -64,9 +64,12 @@ export function tableBoardOf(face: BoardFace): TableBoard {
     place: "",
     straighteningId: face.id,
     version: 1,
+    side: "face",
     newerStraighteningId: null,
+    otherSideStraighteningId: null,
     heldBy: [],
     spokenFor: [],
+    inBlank: null,
     takenBy: null,
     levels: [],
   };

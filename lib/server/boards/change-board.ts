@@ -1,9 +1,13 @@
 /** Changing what is written about a board. */
 import "server-only";
+import type { Connection } from "@/db/client";
+import { findBlank, listInBlanks } from "@/db/queries/blank";
 import { findBoard, lockBoard, updateBoard } from "@/db/queries/board";
 import { recordHistory } from "@/db/queries/history";
 import type { Board, updateBoard as endpoint } from "@/lib/schemas/board";
 import type { BodyOf } from "@/lib/schemas/endpoint";
+import { printTag } from "@/lib/schemas/tag";
+import { inBlankSentence } from "@/lib/words/in-blank";
 import type { ShopAccess } from "../access";
 import { database } from "../database";
 import { conflict, notFound, refused } from "../faults";
@@ -33,6 +37,9 @@ export async function changeBoard(access: ShopAccess, boardId: string, body: Bod
     await lockBoard(tx, access.shopId, boardId);
     const found = await findBoard(tx, access.shopId, boardId);
     if (!found) throw notFound("board");
+    if (given.state !== undefined && given.state !== found.board.state)
+      await refuseBound(tx, access, boardId, found.board.tagNumber);
+    if (await findBlank(tx, access.shopId, boardId)) refuseSize(given);
     if (found.straighteningId !== null && (given.length !== undefined || given.width !== undefined)) {
       throw refused("The size comes from the straightened picture. Mark the board again to correct it.");
     }
@@ -56,4 +63,15 @@ export async function changeBoard(access: ShopAccess, boardId: string, body: Bod
 
 function valuesOf(fields: { readonly [Name in FieldName]?: string | number | null }, names: readonly FieldName[]) {
   return Object.fromEntries(names.map((name) => [name, fields[name] ?? null]));
+}
+
+/** A board that is to be glued into a blank stays in the rack. */
+async function refuseBound(tx: Connection, { shopId }: ShopAccess, boardId: string, tagNumber: number): Promise<void> {
+  const [inBlank] = await listInBlanks(tx, shopId, [boardId]);
+  if (inBlank) throw refused(inBlankSentence(printTag(tagNumber), printTag(inBlank.blankTagNumber)));
+}
+
+function refuseSize({ length, width }: Given): void {
+  if (length === undefined && width === undefined) return;
+  throw refused("The size comes from the boards that the blank is glued up from.");
 }

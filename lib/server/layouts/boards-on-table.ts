@@ -1,6 +1,8 @@
 /** Which boards lie on a layout's table, and with which version of their picture. */
 import "server-only";
 import type { Connection } from "@/db/client";
+import { listInBlanks } from "@/db/queries/blank";
+import { lockBoard } from "@/db/queries/board";
 import { recordHistory } from "@/db/queries/history";
 import {
   deleteLayoutBoard,
@@ -11,6 +13,8 @@ import {
   lockLayout,
   updateLayoutBoard,
 } from "@/db/queries/layout";
+import { printTag } from "@/lib/schemas/tag";
+import { inBlankSentence } from "@/lib/words/in-blank";
 import type { ShopAccess } from "../access";
 import { database } from "../database";
 import { notFound, refused } from "../faults";
@@ -19,6 +23,7 @@ import { type LayoutBoard, layoutBoards } from "./read-layout";
 
 export async function putBoardOnTable(access: ShopAccess, faceId: string, boardId: string): Promise<LayoutBoard> {
   return onLockedTable(access, faceId, async (tx, layoutId, at) => {
+    await refuseInBlank(tx, access, boardId);
     const straighteningId = await findCurrentStraightening(tx, access.shopId, boardId);
     if (!straighteningId) throw refused("This board has no straightened picture yet. Mark a photograph of it first.");
     const there = (await listLayoutBoards(tx, access.shopId, layoutId)).some(({ board }) => board.id === boardId);
@@ -77,6 +82,14 @@ export async function moveToVersion(
     );
     return boardOnTable(tx, access, layoutId, boardId);
   });
+}
+
+/** Locked first: who plans a blank with the board at the same moment waits, or has it already. */
+async function refuseInBlank(tx: Connection, { shopId }: ShopAccess, boardId: string): Promise<void> {
+  const board = await lockBoard(tx, shopId, boardId);
+  if (!board) throw notFound("board");
+  const [inBlank] = await listInBlanks(tx, shopId, [boardId]);
+  if (inBlank) throw refused(inBlankSentence(printTag(board.tagNumber), printTag(inBlank.blankTagNumber)));
 }
 
 type Document = NonNullable<Awaited<ReturnType<typeof lockLayout>>>["document"];

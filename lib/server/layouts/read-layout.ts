@@ -2,6 +2,7 @@
 import "server-only";
 import type { z } from "zod";
 import type { Connection } from "@/db/client";
+import { listInBlanks } from "@/db/queries/blank";
 import { findLayout, listLayoutBoards, listNewestOrders } from "@/db/queries/layout";
 import type { StraighteningRow } from "@/db/queries/straightening";
 import type { ShopId } from "@/db/shop-id";
@@ -42,12 +43,9 @@ export async function readLayout(access: ShopAccess, faceId: string): Promise<La
 /** Every board on the table, with the version of its picture used, who else counts on it and whose it is. */
 export async function layoutBoards(db: Connection, shopId: ShopId, layoutId: string): Promise<LayoutBoard[]> {
   const rows = await listLayoutBoards(db, shopId, layoutId);
-  const holders = await holdersOf(
-    db,
-    shopId,
-    rows.map(({ board }) => board.id),
-    layoutId,
-  );
+  const ids = rows.map(({ board }) => board.id);
+  const holders = await holdersOf(db, shopId, ids, layoutId);
+  const inBlanks = await listInBlanks(db, shopId, ids);
   const takers = await takersOf(db, shopId, layoutId);
   return Promise.all(
     rows.map(async ({ board, straightening, faceStraighteningId, backStraighteningId }) => ({
@@ -68,6 +66,7 @@ export async function layoutBoards(db: Connection, shopId: ShopId, layoutId: str
           samePicture: straighteningId === straightening.id,
         })),
       spokenFor: spokenForOn(holders, board.id, straightening.id),
+      inBlank: inBlankOf(inBlanks, board.id),
       takenBy: takers.get(board.id) ?? null,
     })),
   );
@@ -80,4 +79,9 @@ function otherPictures({ id, side }: StraighteningRow, present: Readonly<Record<
     newerStraighteningId: newest === id ? null : newest,
     otherSideStraighteningId: present[side === "face" ? "back" : "face"],
   };
+}
+
+function inBlankOf(inBlanks: Awaited<ReturnType<typeof listInBlanks>>, boardId: string): LayoutBoard["inBlank"] {
+  const found = inBlanks.find((one) => one.boardId === boardId);
+  return found ? { boardId: found.blankId, tag: printTag(found.blankTagNumber) } : null;
 }
