@@ -2,17 +2,18 @@
 import * as blank from "./blank";
 import * as board from "./board";
 import type { Endpoint } from "./endpoint";
+import * as figure from "./figure";
 import * as history from "./history";
 import * as job from "./job";
 import * as layout from "./layout";
-import * as order from "./order";
 import * as movement from "./movement";
+import * as order from "./order";
 import * as photo from "./photo";
 import * as service from "./service";
 import * as session from "./session";
 import * as shop from "./shop";
-import * as straightening from "./straightening";
 import * as species from "./species";
+import * as straightening from "./straightening";
 import * as task from "./task";
 
 const isEndpoint = (value: unknown): value is Endpoint =>
@@ -22,6 +23,7 @@ export const endpoints: readonly Endpoint[] = [
   service,
   session,
   shop,
+  species,
   board,
   blank,
   photo,
@@ -29,7 +31,8 @@ export const endpoints: readonly Endpoint[] = [
   task,
   job,
   layout,
+  figure,
+  movement,
   order,
   history,
-  movement,
 ].flatMap((noun) => Object.values(noun).filter(isEndpoint));

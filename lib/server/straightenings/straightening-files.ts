@@ -7,6 +7,10 @@ import { storage } from "../storage";
 
 const prefixOf = (shopId: ShopId, straighteningId: string) => `shops/${shopId}/straightenings/${straighteningId}`;
 
+/** Where something read from a finished picture is kept beside it, and goes with it. */
+export const straighteningFileKey = (shopId: ShopId, straighteningId: string, name: string) =>
+  `${prefixOf(shopId, straighteningId)}/${name}`;
+
 export async function putStraighteningFiles(
   shopId: ShopId,
   straighteningId: string,
