@@ -6,7 +6,7 @@ import { movedPolygon } from "../move-area";
 import { polygonFault } from "../polygon-fault";
 import type { BlankMember } from "./blank-plan";
 import type { StripLayout } from "./blank-strips";
-import { areaOf, mergedRings, type Ring } from "./merge-rings";
+import { areaOf, mergedRings } from "./merge-rings";
 
 export type BlankOutline =
   | {
@@ -38,7 +38,7 @@ export function blankOutline(members: readonly BlankMember[], { strips, joints, 
   return {
     ok: true,
     outline: whole ? null : largest.corners,
-    holes: holes.map(({ corners }: Ring) => corners),
+    holes: holes.map(({ corners }) => [...corners].reverse()),
     leftOut: others.length,
     soundAlong: joints.map(({ across }, index) => sound(parts[index] ?? [], parts[index + 1] ?? [], across)),
   };
