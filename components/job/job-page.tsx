@@ -4,6 +4,7 @@ import Link from "next/link";
 import { useState } from "react";
 import { toast } from "sonner";
 import { FaceDrawing } from "@/components/face/face-drawing";
+import { JobPlace } from "@/components/movement/job-place";
 import { Button, buttonClass } from "@/components/ui/button";
 import { Empty } from "@/components/ui/empty";
 import { Modal } from "@/components/ui/modal";
@@ -73,6 +74,7 @@ export function JobPage({ initial, mayEdit }: { initial: Job; mayEdit: boolean }
           ))}
         </ul>
       )}
+      <JobPlace job={job} mayEdit={mayEdit} />
       <Modal open={editing} onOpenChange={(open) => (open ? setEditing(true) : closeDialog())} title="Change job">
         <JobForm
           values={job}

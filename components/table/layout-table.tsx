@@ -18,6 +18,7 @@ import { CutsSection } from "./cuts-section";
 import { HelpDialog } from "./help-dialog";
 import { IssueButton } from "./issue-button";
 import { LiveLine } from "./live-line";
+import { MovementSection } from "./movement-section";
 import { ProblemsSection } from "./problems-section";
 import { SaveStatus } from "./save-status";
 import { SeamsSection } from "./seams-section";
@@ -40,7 +41,7 @@ interface Props {
 export function LayoutTable({ initial, shop, mayChange }: Props) {
   const table = useTable(initial, mayChange);
   return (
-    <TableProvider value={{ ...table, faceId: initial.faceId, shop, saws: shop.saws }}>
+    <TableProvider value={{ ...table, faceId: initial.faceId, jobId: initial.jobId, shop, saws: shop.saws }}>
       <TableScreen initial={initial} mayChange={mayChange} />
     </TableProvider>
   );
@@ -94,6 +95,7 @@ function TableScreen({ initial, mayChange }: Omit<Props, "shop">) {
           <BoardsSection asItStands={issuing.asItStands} />
           <CutsSection />
           <SizesSection />
+          <MovementSection />
         </aside>
       </div>
       <HelpDialog open={helping} onOpenChange={setHelping} />

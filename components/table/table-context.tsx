@@ -8,6 +8,7 @@ import type { Table } from "./use-table";
 
 export interface TableContextValue extends Table {
   readonly faceId: string;
+  readonly jobId: string;
   readonly shop: Shop;
   readonly saws: readonly Saw[];
 }

@@ -34,6 +34,7 @@ export type {
   MovementWarning,
   Season,
 } from "./movement/movement";
+export { type RecommendedGap, recommendedGap, roundedUp, withRecommendedGap } from "./movement/recommended-gap";
 export {
   COEFFICIENT_RANGE,
   coefficientAt,
@@ -44,7 +45,6 @@ export {
 } from "./movement/size-change";
 export type { Species, SpeciesSource } from "./movement/species";
 export { type Surround, sheetAtMost } from "./movement/surround";
-export { type RecommendedGap, recommendedGap, roundedUp, useRecommendedGap } from "./movement/use-recommended-gap";
 export { type BoardFacts, noWoodChoice, type WoodChoice, type WoodOfBoard, woodOfBoard } from "./movement/wood-of-board";
 export { changeAnchor } from "./pattern/change-anchor";
 export { changeCuts, changeFace, type FaceChange } from "./pattern/change-face";
@@ -163,5 +163,6 @@ export { boardFeet, boardFeetByRule } from "./units/lumber";
 export { type NominalThickness, nominalThicknesses, nominalThicknessOf } from "./units/nominal-thickness";
 export { type BareUnit, LONGEST_UM, type ParsedLength, parseLength } from "./units/parse-length";
 export { type PrintedLength, printedLength, printLength } from "./units/print-length";
+export { ruleStepOf } from "./units/rule-step";
 export type { Um } from "./units/um";
 export { mmFromUm, um, umFromMm } from "./units/um";

@@ -17,13 +17,16 @@ export type Said =
   | { readonly did: "swapped"; readonly pieces: readonly [PieceId, PieceId] }
   | { readonly did: "let-loose" | "regrouped"; readonly pieces: readonly PieceId[] }
   | { readonly did: "changed-cuts" | "changed-spacing" | "changed-anchor" | "changed-grain" }
-  | { readonly did: "changed-sizes"; readonly swapsUndone: readonly PieceId[] };
+  | { readonly did: "changed-sizes"; readonly swapsUndone: readonly PieceId[] }
+  | { readonly did: "evened-gaps"; readonly gap: Um; readonly mostGivenUp: Um };
 
 export type CommandRefusal =
   | LayoutRefusal
   | { readonly reason: "nothing-selected" }
   /** Swapping takes exactly two pieces. */
   | { readonly reason: "needs-two-pieces"; readonly selected: number }
+  /** Of gaps that were to be as wide as the wood's movement asks for. */
+  | { readonly reason: "gaps-no-gaps" | "gaps-not-known" | "gaps-no-room" }
   | { readonly reason: "nothing-changes" };
 
 export type CommandOutcome =

@@ -37,7 +37,7 @@ export function roundedUp(length: number, { um: whole, parts }: SizeStep): Um {
 /** Narrower fronts move less, so a second round seldom asks for more; a few are enough. */
 const MOST_ROUNDS = 8;
 
-export function useRecommendedGap(request: MovementRequest, runs: FaceGap["runs"], step: SizeStep): RecommendedGap {
+export function withRecommendedGap(request: MovementRequest, runs: FaceGap["runs"], step: SizeStep): RecommendedGap {
   const { face } = request.layout;
   const { evenGaps } = rulesOf(face);
   if (evenGaps === undefined) return { ok: false, reason: "no-gaps" };
