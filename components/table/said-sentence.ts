@@ -59,8 +59,6 @@ function saidSentence(said: Said, style: LengthStyle, tagOf: TagOf): string {
       return said.swapsUndone.length === 0
         ? "Sizes changed."
         : `Sizes changed. ${fronts(said.swapsUndone)} went back to their own places, no longer being of one size.`;
-    case "evened-gaps":
-      return `Gaps are ${printLength(said.gap, style)} now. ${givenUp(said.mostGivenUp, style)}`;
   }
 }
 
@@ -72,12 +70,6 @@ function refusalSentence(refusal: CommandRefusal, style: LengthStyle): string {
       return `Choose two fronts to swap; ${refusal.selected} ${refusal.selected === 1 ? "is" : "are"} chosen. Shift and click adds one.`;
     case "nothing-changes":
       return "That changes nothing.";
-    case "gaps-no-gaps":
-      return "There are no gaps that way.";
-    case "gaps-not-known":
-      return "What the wood will do is not known yet: see the warnings of its movement.";
-    case "gaps-no-room":
-      return "So wide a gap would leave nothing of a front.";
     case "unknown-piece":
       return `This face has no front ${refusal.piece.replace(/^p/, "")}.`;
     case "unknown-group":
@@ -90,6 +82,8 @@ function refusalSentence(refusal: CommandRefusal, style: LengthStyle): string {
       return `${fronts([refusal.piece])} is in the set already.`;
     case "same-piece":
       return "A front cannot change places with itself.";
+    case "roles-differ":
+      return "A front cannot change places with a part of the rail.";
     case "sizes-differ": {
       const [p, q] = refusal.sizes;
       const size = (of: typeof p) => `${printLength(of.width, style)} × ${printLength(of.height, style)}`;
@@ -106,13 +100,6 @@ export function fronts(pieces: readonly PieceId[]): string {
 
 function way({ x, y }: { readonly x: Um; readonly y: Um }, style: LengthStyle): string {
   const print = (length: number) => printLength(um(Math.abs(length)), style);
-function givenUp(most: Um, style: LengthStyle): string {
-  const length = printLength(um(Math.abs(most)), style);
-  return most < 0
-    ? `Fronts grow by up to ${length}; the face keeps its size.`
-    : `Fronts give up ${length} at most; the face keeps its size.`;
-}
-
   const parts = [];
   if (x !== 0) parts.push(`${print(x)} ${x > 0 ? "right" : "left"}`);
   if (y !== 0) parts.push(`${print(y)} ${y > 0 ? "down" : "up"}`);

@@ -50,7 +50,27 @@ export { changeAnchor } from "./pattern/change-anchor";
 export { changeCuts, changeFace, type FaceChange } from "./pattern/change-face";
 export { faceSize, seamPlaces } from "./pattern/charts";
 export { cleanUpEdges } from "./pattern/clean-up-edges";
-export type { Face, Grain, GridFace, Pattern } from "./pattern/face";
+export {
+  addDivider,
+  type CutOutChange,
+  type CutOutRefusal,
+  LEAST_LEFT,
+  moveDivider,
+  moveRow,
+  moveStrip,
+  type PartPlace,
+  removePart,
+} from "./pattern/cut-out/change-cut-out";
+export {
+  type CutOutCrosscut,
+  type CutOutOpening,
+  type CutOutPlan,
+  cutOutPlan,
+  type GluingShift,
+  type TrimmedFront,
+} from "./pattern/cut-out/cut-out-plan";
+export { type CutOutWish, type FreshCutOut, freshCutOut } from "./pattern/cut-out/fresh-cut-out";
+export type { CutOutFace, CutOutPart, CutOutRow, EdgeAmounts, Face, Grain, GridFace, Pattern } from "./pattern/face";
 export type { FaceFault } from "./pattern/face-fault";
 export type {
   AnchorX,
@@ -74,15 +94,16 @@ export {
 } from "./pattern/graduate";
 export { type FacePiece, facePieces, layOut, unplacedPieces } from "./pattern/lay-out";
 export { groupById, type LayoutChange, type LayoutRefusal, type PieceSize } from "./pattern/layout-change";
-export { type LayoutFault, layoutFaults } from "./pattern/layout-faults";
+export { faceFaults, type LayoutFault, layoutFaults } from "./pattern/layout-faults";
 export { letLoose, regroup } from "./pattern/let-loose";
 export { type CutDirection, cutBetween, jumpAcrossGap, lossOf, sliverOf, spacingOf } from "./pattern/loss";
-export type { EdgeAmounts, HungPiece, Mirrored, SeamPlace } from "./pattern/pattern-rules";
+export type { HungPiece, Mirrored, SeamPlace } from "./pattern/pattern-rules";
 export { pieceCount, pieceIdsOf, readingIndexOf } from "./pattern/piece-ids";
 export { labelAt, pieceIdAt } from "./pattern/piece-names";
 export { groupBounds, liftGroup, moveGroup, placeGroup, turnGroup, turnsAlongGrain } from "./pattern/place-group";
 export { groupOf } from "./pattern/slots";
 export { swapPieces } from "./pattern/swap-pieces";
+export { type WoodNeeded, woodNeeded } from "./pattern/wood-needed";
 export type { LensOutcome } from "./picture/fit-lens";
 export { fitMarking, type MarkingFit, type MarkResidual } from "./picture/fit-marking";
 export type { MmPoint, PhotoPoint } from "./picture/homography";

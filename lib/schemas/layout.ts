@@ -1,6 +1,6 @@
 /** The layout document on the wire: the core's FaceLayout, checked. */
 import { z } from "zod";
-import type { Face, FaceLayout } from "@/lib/layout";
+import { type Face, type FaceLayout, faceFaults } from "@/lib/layout";
 import { defineEndpoint, everyone, makers } from "./endpoint";
 import { idSchema } from "./ids";
 import { allowanceUmSchema, pointSchema, sizeUmSchema } from "./length";
@@ -24,8 +24,43 @@ export const gridFaceSchema = z
     message: "there is one gap fewer than columns, and one fewer than rows",
   });
 
+const edgeAmountsSchema = z.object({
+  left: allowanceUmSchema,
+  right: allowanceUmSchema,
+  top: allowanceUmSchema,
+  bottom: allowanceUmSchema,
+});
+
+export const cutOutFaceSchema = z
+  .object({
+    pattern: z.literal("cutOut"),
+    grain: z.enum(["horizontal", "vertical"]),
+    strips: z.array(sizeUmSchema).min(2).max(21),
+    rows: z
+      .array(
+        z.object({
+          height: sizeUmSchema,
+          parts: z
+            .array(z.object({ kind: z.enum(["fixed", "front"]), width: sizeUmSchema }))
+            .min(3)
+            .max(81),
+        }),
+      )
+      .min(1)
+      .max(20),
+    gap: edgeAmountsSchema,
+    fitting: allowanceUmSchema,
+    rails: z.enum(["jointed", "fromSaw"]),
+  })
+  .superRefine(refuseFaults);
+
+/** What the core finds wrong with a face is wrong on the wire, too. */
+function refuseFaults(face: Face, context: z.core.$RefinementCtx): void {
+  for (const { fault } of faceFaults(face)) context.addIssue(`the face does not hold together (${fault})`);
+}
+
 /** A face by its pattern. */
-export const faceSchema = z.discriminatedUnion("pattern", [gridFaceSchema]);
+export const faceSchema = z.discriminatedUnion("pattern", [gridFaceSchema, cutOutFaceSchema]);
 
 /** Fails to compile when the wire and the core drift apart. */
 export const faceForCore = (face: z.output<typeof faceSchema>): Face => face;

@@ -2,7 +2,7 @@
 import { eq } from "drizzle-orm";
 import { beforeAll, describe, expect, it } from "vitest";
 import { history } from "@/db/schema";
-import { umFromMm } from "@/lib/layout";
+import { type FaceLayout, umFromMm } from "@/lib/layout";
 import { faceLayoutSchema } from "@/lib/schemas/layout";
 import type { ShopAccess } from "@/lib/server/access";
 import { database } from "@/lib/server/database";
@@ -38,6 +38,10 @@ const rowOfFour = (sawId: string) => ({
   ripSawId: sawId,
   spacing: "followGap" as const,
 });
+
+function gapsOf({ face }: FaceLayout): readonly number[] {
+  return face.pattern === "grid" ? face.columnGaps : [];
+}
 
 async function newFace(access: ShopAccess = shop.maker, sawId = shop.sawId) {
   const job = await openJob(access, fields);
@@ -136,10 +140,10 @@ describe("faces", () => {
 describe("saving a layout", () => {
   const save = async (access: ShopAccess, faceId: string, baseRevision: number, gapMm: number) => {
     const { document, crosscutSawId, ripSawId } = await readLayout(shop.maker, faceId);
-    const columnGaps = document.face.columnGaps.map(() => umFromMm(gapMm));
+    const columnGaps = gapsOf(document).map(() => umFromMm(gapMm));
     return saveLayout(access, faceId, {
       baseRevision,
-      document: { ...document, face: { ...document.face, columnGaps } },
+      document: faceLayoutSchema.parse({ ...document, face: { ...document.face, columnGaps } }),
       crosscutSawId,
       ripSawId,
     });
@@ -149,7 +153,7 @@ describe("saving a layout", () => {
     const { face } = await newFace();
     expect(await save(shop.maker, face.id, 1, 2.5)).toMatchObject({ revision: 2 });
     const layout = await readLayout(shop.maker, face.id);
-    expect(layout.document.face.columnGaps).toEqual([2500, 2500, 2500]);
+    expect(gapsOf(layout.document)).toEqual([2500, 2500, 2500]);
     expect(await verbsOf(layout.id)).toEqual(["saved"]);
   });
 

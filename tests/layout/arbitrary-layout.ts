@@ -8,7 +8,10 @@ import {
   type AnchorY,
   type BoardFace,
   type CutLoss,
+  type CutOutFace,
+  type CutOutPart,
   changeAnchor,
+  type Face,
   type FaceLayout,
   freshLayout,
   type Grain,
@@ -44,8 +47,8 @@ export const arbitraryCut: fc.Arbitrary<CutLoss> = fc.record({
 export const arbitraryGrain = fc.constantFrom<Grain>("horizontal", "vertical");
 export const arbitrarySpacing = fc.constantFrom<Spacing>("followGap", "tight");
 
-/** Faces of up to four by four fronts; sizes come from a short list so that equal fronts to swap are common. */
-export const arbitraryFace: fc.Arbitrary<GridFace> = fc
+/** Grids of up to four by four fronts; sizes come from a short list so that equal fronts to swap are common. */
+export const arbitraryGridFace: fc.Arbitrary<GridFace> = fc
   .tuple(fc.integer({ min: 1, max: 4 }), fc.integer({ min: 1, max: 4 }), arbitraryGrain)
   .chain(([columns, rows, grain]) => {
     const size = fc.constantFrom(120_000, 120_001, 233_333, 90_007).map(um);
@@ -61,6 +64,55 @@ export const arbitraryFace: fc.Arbitrary<GridFace> = fc
     });
   });
 
+/** Rails of up to two rows with up to three fronts each, some of them without a divider between. */
+export const arbitraryCutOutFace: fc.Arbitrary<CutOutFace> = fc
+  .record({
+    grain: arbitraryGrain,
+    rows: fc.array(
+      fc.record({
+        height: fc.constantFrom(60_000, 75_001).map(um),
+        end: fc.constantFrom(30_000, 41_003).map(um),
+        fronts: fc.array(
+          fc.record({ width: fc.constantFrom(90_000, 90_001, 133_333).map(um), after: fc.constantFrom(0, 22_000, 22_001) }),
+          { minLength: 1, maxLength: 3 },
+        ),
+      }),
+      { minLength: 1, maxLength: 2 },
+    ),
+    strips: fc.array(fc.constantFrom(25_000, 40_001).map(um), { minLength: 3, maxLength: 3 }),
+    gap: fc.record({
+      left: umBetween(0, 4_000),
+      right: umBetween(0, 4_000),
+      top: umBetween(0, 4_000),
+      bottom: umBetween(0, 4_000),
+    }),
+    fitting: umBetween(0, 3_000),
+    rails: fc.constantFrom("jointed" as const, "fromSaw" as const),
+  })
+  .map(({ rows, strips, ...face }) => {
+    const parts = rows.map(({ end, fronts }) => [
+      { kind: "fixed" as const, width: end },
+      ...fronts.flatMap(({ width, after }, index): CutOutPart[] => {
+        const divided = after > 0 && index + 1 < fronts.length;
+        return [{ kind: "front", width }, ...(divided ? [{ kind: "fixed" as const, width: um(after) }] : [])];
+      }),
+    ]);
+    const lengths = parts.map((row) => row.reduce((sum, { width }) => sum + width, 0));
+    const longest = Math.max(...lengths) + 35_000;
+    return {
+      pattern: "cutOut",
+      ...face,
+      strips: strips.slice(0, rows.length + 1),
+      rows: rows.map(({ height }, row) => {
+        const end: CutOutPart = { kind: "fixed", width: um(longest - (lengths[row] ?? 0)) };
+        return { height, parts: [...(parts[row] ?? []), end] };
+      }),
+    };
+  });
+
+/** Every pattern. */
+export const arbitraryFace: fc.Arbitrary<Face> = fc.oneof(arbitraryGridFace, arbitraryCutOutFace);
+
 const arbitraryTurns = fc.constantFrom<QuarterTurns>(0, 1, 2, 3);
 
 export function arbitraryAnchors(layout: FaceLayout): fc.Arbitrary<readonly [AnchorX, AnchorY]> {
@@ -72,24 +124,35 @@ export function arbitraryAnchors(layout: FaceLayout): fc.Arbitrary<readonly [Anc
 }
 
 /** A set on board "b1", not disturbed: no loose pieces, no swaps. */
-export const arbitrarySet: fc.Arbitrary<FaceLayout> = fc
-  .tuple(
-    arbitraryFace,
-    arbitraryCut,
-    arbitraryCut,
-    arbitrarySpacing,
-    fc.boolean(),
-    umBetween(-50_000, 500_000),
-    umBetween(-50_000, 500_000),
-  )
-  .chain(([face, crosscut, rip, spacing, turned, x, y]) => {
-    const turns = turnsAlongGrain(face.grain)[turned ? 1 : 0];
-    const placed = accepted(placeGroup(freshLayout(face, { crosscut, rip, spacing }), "set", "b1", { x, y }, turns));
-    return arbitraryAnchors(placed).map(([anchorX, anchorY]) => accepted(changeAnchor(placed, anchorX, anchorY)));
-  });
+export const arbitrarySetOf = <F extends Face>(faces: fc.Arbitrary<F>): fc.Arbitrary<FaceLayout & { readonly face: F }> =>
+  fc
+    .tuple(
+      faces,
+      arbitraryCut,
+      arbitraryCut,
+      arbitrarySpacing,
+      fc.boolean(),
+      umBetween(-50_000, 500_000),
+      umBetween(-50_000, 500_000),
+    )
+    .chain(([face, crosscut, rip, spacing, turned, x, y]) => {
+      const turns = turnsAlongGrain(face.grain)[turned ? 1 : 0];
+      const fresh = freshLayout(face, { crosscut, rip, spacing });
+      return arbitraryAnchors(fresh).map(([anchorX, anchorY]) => {
+        const anchored = accepted(changeAnchor(fresh, anchorX, anchorY));
+        return { ...accepted(placeGroup(anchored, "set", "b1", { x, y }, turns)), face };
+      });
+    });
+
+export const arbitrarySet: fc.Arbitrary<FaceLayout> = arbitrarySetOf(arbitraryFace);
 
 /** A layout after some pieces were let loose, slid, put on another board or turned any way, and some have changed places. */
-export const arbitraryLayout: fc.Arbitrary<FaceLayout> = arbitrarySet.chain((set) => {
+export const arbitraryLayoutOf = <F extends Face>(faces: fc.Arbitrary<F>) =>
+  arbitrarySetOf(faces).chain((set) => disturbed(set).map((layout) => ({ ...layout, face: set.face })));
+
+export const arbitraryLayout: fc.Arbitrary<FaceLayout> = arbitrarySet.chain(disturbed);
+
+function disturbed(set: FaceLayout): fc.Arbitrary<FaceLayout> {
   const id = fc.constantFrom(...pieceIdsOf(set.face));
   const loosening = fc.tuple(
     id,
@@ -116,7 +179,7 @@ export const arbitraryLayout: fc.Arbitrary<FaceLayout> = arbitrarySet.chain((set
     }
     return layout;
   });
-});
+}
 
 export const arbitraryKeepClear: fc.Arbitrary<KeepClear["area"]> = fc.oneof(
   fc.record({

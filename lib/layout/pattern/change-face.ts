@@ -27,6 +27,15 @@ export function changeCuts(layout: FaceLayout, cuts: Partial<CutChoices>): FaceL
  * swap refers to and is no longer there is given up.
  */
 export function changeFace(layout: FaceLayout, face: Face): FaceChange {
+  return changeFaceRenaming(layout, face, (id) => id);
+}
+
+/** The new name of a piece, or null where it is no longer there. */
+export type Renaming = (id: PieceId) => PieceId | null;
+
+/** The same where pieces are put in or taken out before others, so that the rest are numbered anew. */
+export function changeFaceRenaming(before: FaceLayout, face: Face, renaming: Renaming): FaceChange {
+  const layout = renamed(before, renaming);
   const ids = pieceIdsOf(face);
   const present = new Set(ids);
   const held = new Set(layout.groups.flatMap((group) => group.pieceIds));
@@ -48,6 +57,31 @@ export function changeFace(layout: FaceLayout, face: Face): FaceChange {
     layout: { ...resized, groups: groups.filter((group, index) => index === 0 || group.pieceIds.length > 0) },
     swapsUndone: ids.filter((id) => swapsUndone.has(id)),
   };
+}
+
+/** The same groups and anchors under the new names; a swap that a piece without a new name had a part in is undone. */
+function renamed(layout: FaceLayout, renaming: Renaming): FaceLayout {
+  const next = new Map(layout.groups.flatMap((group) => group.pieceIds.map((id) => [id, slotOf(group, id)] as const)));
+  const broken = new Set(
+    [...next.keys()]
+      .map((id) => cycleFrom(next, id))
+      .flatMap((cycle) => (cycle.some((id) => renaming(id) === null) ? cycle : [])),
+  );
+  const groups = layout.groups.map((group) => {
+    const pairs = group.pieceIds.flatMap((id) => {
+      const [name, slot] = [renaming(id), renaming(broken.has(id) ? id : slotOf(group, id))];
+      return name === null || slot === null ? [] : [[name, slot] as const];
+    });
+    const takesPlaceOf = Object.fromEntries(pairs.filter(([name, slot]) => name !== slot));
+    return { ...group, pieceIds: pairs.map(([name]) => name), takesPlaceOf };
+  });
+  const { anchorX, anchorY } = layout;
+  const anchor = <A extends AnchorX | AnchorY>(one: A): A | "centre" | { readonly piece: PieceId } => {
+    if (typeof one !== "object") return one;
+    const piece = renaming(one.piece);
+    return piece === null ? "centre" : { piece };
+  };
+  return { ...layout, groups, anchorX: anchor(anchorX), anchorY: anchor(anchorY) };
 }
 
 /**

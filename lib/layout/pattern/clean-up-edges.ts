@@ -2,8 +2,8 @@
 import type { Isometry } from "../frame/isometry";
 import type { Piece, PieceId } from "../piece";
 import type { Edge } from "../program/program";
+import type { EdgeAmounts } from "./face";
 import type { FaceLayout } from "./face-layout";
-import type { EdgeAmounts } from "./pattern-rules";
 import { ofPiece } from "./piece-ids";
 import { rulesOf } from "./rules-of";
 

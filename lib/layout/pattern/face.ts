@@ -2,7 +2,11 @@
  * What a face is made of, by pattern. Plain immutable JSON with finished sizes as hung; the tag `pattern` says which rules
  * (`rules-of.ts`) turn it into pieces. Lengths in µm.
  */
+import type { Edge } from "../program/program";
 import type { Um } from "../units/um";
+
+/** A length, in µm, for each edge of a piece. */
+export type EdgeAmounts = Readonly<Record<Edge, Um>>;
 
 /** How the grain runs on the face. Horizontal: columns are parted by crosscuts and rows by rips; vertical: the other way. */
 export type Grain = "horizontal" | "vertical";
@@ -20,5 +24,39 @@ export interface GridFace {
   readonly grain: Grain;
 }
 
-export type Face = GridFace;
+/** A part of a row of a cut-out: wood that is glued back between the strips, or a front that hangs in an opening of this width. */
+export interface CutOutPart {
+  readonly kind: "fixed" | "front";
+  readonly width: Um;
+}
+
+/** Parts in order along the grain; a row starts and ends with a fixed one. `height` is that of its openings, across the grain. */
+export interface CutOutRow {
+  readonly height: Um;
+  readonly parts: readonly CutOutPart[];
+}
+
+/**
+ * Fronts cut out of a solid rail or panel and set back into it. The board is ripped into strips that stay whole and the rows between
+ * them; each row is crosscut into fixed parts and fronts; the fixed parts are moved together by what the saw took and glued back
+ * between the strips. All sizes are finished sizes of the glued-up rail.
+ *
+ * Strips and rows follow each other across the grain, parts along it: with horizontal grain from top to bottom and from left to
+ * right, with vertical grain from left to right and from top to bottom. Reading order: strip, the parts of a row, strip, …
+ */
+export interface CutOutFace {
+  readonly pattern: "cutOut";
+  readonly grain: Grain;
+  /** Across the grain; one more than rows. */
+  readonly strips: readonly Um[];
+  readonly rows: readonly CutOutRow[];
+  /** Round each front, between it and the edges of its opening. */
+  readonly gap: EdgeAmounts;
+  /** Taken off each end of a front when it is fitted, beyond the saw. */
+  readonly fitting: Um;
+  /** Whether the edges between strips and rows are jointed before gluing (`rip`'s clean-up), or glued as they come from the saw. */
+  readonly rails: "jointed" | "fromSaw";
+}
+
+export type Face = GridFace | CutOutFace;
 export type Pattern = Face["pattern"];

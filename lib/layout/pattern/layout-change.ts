@@ -20,6 +20,8 @@ export type LayoutRefusal =
   | { readonly reason: "already-loose"; readonly piece: PieceId }
   | { readonly reason: "already-in-set"; readonly piece: PieceId }
   | { readonly reason: "same-piece"; readonly piece: PieceId }
+  /** A front cannot take the place of a part of the rail. */
+  | { readonly reason: "roles-differ"; readonly pieces: readonly [PieceId, PieceId] }
   /** Two pieces can change places only when they are of one size. */
   | {
       readonly reason: "sizes-differ";

@@ -4,6 +4,7 @@
  */
 import type { PieceId } from "../piece";
 import { hungChart } from "./charts";
+import type { Face } from "./face";
 import type { FaceFault } from "./face-fault";
 import type { FaceLayout } from "./face-layout";
 import { ofPiece, pieceIdsOf } from "./piece-ids";
@@ -23,9 +24,14 @@ export type LayoutFault =
 
 /** Everything that is wrong with the shape of a layout; empty when `layOut` may be called. */
 export function layoutFaults(layout: FaceLayout): LayoutFault[] {
-  const faults = [...rulesOf(layout.face).faults(layout.face), ...lossFaults(layout)];
+  const faults = [...faceFaults(layout.face), ...lossFaults(layout)];
   // The rest counts pieces by the face, which has to be sound first.
   return faults.length > 0 ? faults : groupFaults(layout);
+}
+
+/** What is wrong with the face alone; empty when its pieces may be asked for. */
+export function faceFaults(face: Face): readonly FaceFault[] {
+  return rulesOf(face).faults(face);
 }
 
 function lossFaults(layout: FaceLayout): LayoutFault[] {

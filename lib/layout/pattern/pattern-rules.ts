@@ -6,9 +6,8 @@
  */
 import type { FacePoint, FaceRect } from "../frame/point";
 import type { PieceId, PieceRole } from "../piece";
-import type { Edge } from "../program/program";
 import type { Um } from "../units/um";
-import type { Face } from "./face";
+import type { EdgeAmounts, Face } from "./face";
 import type { FaceFault } from "./face-fault";
 import type { FaceLayout } from "./face-layout";
 
@@ -31,9 +30,6 @@ export interface ChartPlace {
   /** Whether the anchor of a group is found from this place; where a group has none that says so, from all of its places. */
   readonly anchors: boolean;
 }
-
-/** µm taken off each edge after sawing. */
-export type EdgeAmounts = Readonly<Record<Edge, Um>>;
 
 /** Where two pieces meet on the face as hung. */
 export interface SeamPlace {
@@ -62,7 +58,7 @@ export interface PatternRules<F extends Face = Face> {
   /** Outer edge to outer edge, as hung. */
   readonly size: (face: F) => { readonly width: Um; readonly height: Um };
   readonly places: (layout: CutSettings<F>) => readonly ChartPlace[];
-  /** By edge as the piece hangs. */
+  /** Taken off each edge after sawing, by edge as the piece hangs. */
   readonly cleanUps: (layout: CutSettings<F>) => readonly EdgeAmounts[];
   /** In reading order of the first piece, the seam on its right before the one below it. */
   readonly seams: (face: F) => readonly SeamPlace[];

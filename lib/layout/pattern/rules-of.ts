@@ -1,4 +1,5 @@
 /** The table of patterns: the only place in the core that tells them apart. */
+import { cutOutRules } from "./cut-out/cut-out-rules";
 import type { Face, Pattern } from "./face";
 import { gridRules } from "./grid/grid-rules";
 import type { PatternRules } from "./pattern-rules";
@@ -7,6 +8,7 @@ type FaceOf<P extends Pattern> = Extract<Face, { readonly pattern: P }>;
 
 const rules: { readonly [P in Pattern]: PatternRules<FaceOf<P>> } = {
   grid: gridRules,
+  cutOut: cutOutRules,
 };
 
 /** The rules of a face's own pattern. */

@@ -1,5 +1,5 @@
 /**
- * Two pieces of one size change places in the wood: each takes the other's slot and the other's group, so that no wood moves
+ * Two pieces of one size and role change places in the wood: each takes the other's slot and the other's group, so that no wood moves
  * and only the labels on it change.
  */
 import type { PieceId } from "../piece";
@@ -7,6 +7,7 @@ import { hungChart } from "./charts";
 import type { FaceLayout, PieceGroup } from "./face-layout";
 import { groupAt, originOf } from "./group-origin";
 import { changed, type LayoutChange, type PieceSize, refused, withGroup } from "./layout-change";
+import type { HungPiece } from "./pattern-rules";
 import { ofPiece } from "./piece-ids";
 import { groupOf, groupWith, slotOf, slotsOf } from "./slots";
 
@@ -16,7 +17,9 @@ export function swapPieces(layout: FaceLayout, p: PieceId, q: PieceId): LayoutCh
   if (groupP === null) return refused({ reason: "unknown-piece", piece: p });
   if (groupQ === null) return refused({ reason: "unknown-piece", piece: q });
   if (p === q) return refused({ reason: "same-piece", piece: p });
-  const sizes = [sizeOf(layout, p), sizeOf(layout, q)] as const;
+  const hung = hungChart(layout.face);
+  if (ofPiece(hung, p).role !== ofPiece(hung, q).role) return refused({ reason: "roles-differ", pieces: [p, q] });
+  const sizes = [sizeOf(hung, p), sizeOf(hung, q)] as const;
   if (sizes[0].width !== sizes[1].width || sizes[0].height !== sizes[1].height) {
     return refused({ reason: "sizes-differ", pieces: [p, q], sizes });
   }
@@ -41,7 +44,7 @@ function withSlots(layout: FaceLayout, group: PieceGroup, slots: ReadonlyMap<Pie
   return withGroup(layout, groupAt(layout, groupWith(layout, group, slots), originOf(layout, group)));
 }
 
-function sizeOf(layout: FaceLayout, id: PieceId): PieceSize {
-  const { width, height } = ofPiece(hungChart(layout.face), id).rect;
+function sizeOf(hung: readonly HungPiece[], id: PieceId): PieceSize {
+  const { width, height } = ofPiece(hung, id).rect;
   return { width, height };
 }

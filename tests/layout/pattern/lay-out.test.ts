@@ -16,7 +16,7 @@ import {
   um,
   unplacedPieces,
 } from "@/lib/layout";
-import { accepted, arbitraryLayout, arbitrarySet } from "../arbitrary-layout";
+import { accepted, arbitraryGridFace, arbitraryLayout, arbitraryLayoutOf, arbitrarySetOf } from "../arbitrary-layout";
 
 const cut = { kerf: um(2_400), cleanUpBefore: um(200), cleanUpAfter: um(200) };
 const cuts = { crosscut: cut, rip: cut, spacing: "followGap" as const };
@@ -77,9 +77,9 @@ describe("layOut", () => {
     ]);
   });
 
-  test("the face assembled from its pieces has the finished size, every gap as specified, and nothing overlaps", () => {
+  test("a grid assembled from its pieces has the finished size, every gap as specified, and nothing overlaps", () => {
     fc.assert(
-      fc.property(arbitraryLayout, (layout) => {
+      fc.property(arbitraryLayoutOf(arbitraryGridFace), (layout) => {
         const pieces = layOut(layout);
         const rects = pieces.map(({ outline }) => rectOnFace(outline));
         const size = faceSize(layout.face);
@@ -115,9 +115,9 @@ describe("layOut", () => {
     );
   });
 
-  test("the pieces of an undisturbed set lie exactly at the spacing of their cuts", () => {
+  test("the pieces of an undisturbed grid lie exactly at the spacing of their cuts", () => {
     fc.assert(
-      fc.property(arbitrarySet, (layout) => {
+      fc.property(arbitrarySetOf(arbitraryGridFace), (layout) => {
         const rects = new Map<PieceId, { x: number; y: number; width: number; height: number }>();
         for (const { id, outline, stockFromFace } of layOut(layout))
           rects.set(id, rectToStock(stockFromFace, rectOnFace(outline)));
