@@ -59,6 +59,8 @@ function saidSentence(said: Said, style: LengthStyle, tagOf: TagOf): string {
       return said.swapsUndone.length === 0
         ? "Sizes changed."
         : `Sizes changed. ${fronts(said.swapsUndone)} went back to their own places, no longer being of one size.`;
+    case "evened-gaps":
+      return `Gaps are ${printLength(said.gap, style)} now. ${givenUp(said.mostGivenUp, style)}`;
   }
 }
 
@@ -70,6 +72,12 @@ function refusalSentence(refusal: CommandRefusal, style: LengthStyle): string {
       return `Choose two fronts to swap; ${refusal.selected} ${refusal.selected === 1 ? "is" : "are"} chosen. Shift and click adds one.`;
     case "nothing-changes":
       return "That changes nothing.";
+    case "gaps-no-gaps":
+      return "There are no gaps that way.";
+    case "gaps-not-known":
+      return "What the wood will do is not known yet: see the warnings of its movement.";
+    case "gaps-no-room":
+      return "So wide a gap would leave nothing of a front.";
     case "unknown-piece":
       return `This face has no front ${refusal.piece.replace(/^p/, "")}.`;
     case "unknown-group":
@@ -96,6 +104,13 @@ function refusalSentence(refusal: CommandRefusal, style: LengthStyle): string {
 export function fronts(pieces: readonly PieceId[]): string {
   const labels = pieces.map((id) => id.replace(/^p/, ""));
   return `${labels.length === 1 ? "Front" : "Fronts"} ${labelRanges(labels)}`;
+}
+
+function givenUp(most: Um, style: LengthStyle): string {
+  const length = printLength(um(Math.abs(most)), style);
+  return most < 0
+    ? `Fronts grow by up to ${length}; the face keeps its size.`
+    : `Fronts give up ${length} at most; the face keeps its size.`;
 }
 
 function way({ x, y }: { readonly x: Um; readonly y: Um }, style: LengthStyle): string {
