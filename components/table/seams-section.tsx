@@ -1,19 +1,36 @@
 "use client";
+import { useState } from "react";
 import { useUnits } from "@/components/shell/units";
 import { factsOf } from "@/lib/editor/selectors/facts";
-import { type SeamRelation, seamRelation } from "@/lib/editor/selectors/seam-relation";
-import { jumpOf } from "@/lib/editor/view/jump-chips";
-import { cutBetween, type Drift, type Face, printedLength, type Seam, type UmRange } from "@/lib/layout";
+import { seamRelation } from "@/lib/editor/selectors/seam-relation";
+import type { Seam } from "@/lib/layout";
+import { seamFigures } from "@/lib/words/seam-reading";
 import { PanelSection } from "./panel-section";
+import { SeamDialog } from "./seam-dialog";
+import { SeamRow } from "./seam-row";
 import { useTableContext } from "./table-context";
 import { useLiveLayout } from "./use-live-layout";
+import { useSeamReadings } from "./use-seam-readings";
 
+/** Every seam of the face: what the cuts do to the figure there, and what the photographs say. */
 export function SeamsSection() {
   const { editor } = useTableContext();
-  const { style, units } = useUnits();
+  const { units } = useUnits();
   const layout = useLiveLayout();
-  const { seams, drifts, pieceById } = factsOf(layout);
-  const figure = (range: UmRange) => printedLength(jumpOf(range), style).figure;
+  const { seams, pieceById } = factsOf(layout);
+  const readings = useSeamReadings();
+  const [open, setOpen] = useState<number | null>(null);
+  const shown = open === null ? null : (seams[open] ?? null);
+  const show = (index: number, { a, b }: Seam) => {
+    setOpen(index);
+    editor.select([a, b]);
+  };
+  const step = (by: 1 | -1) => {
+    if (open === null) return;
+    const next = (open + by + seams.length) % seams.length;
+    const seam = seams[next];
+    if (seam) show(next, seam);
+  };
   return (
     <PanelSection title="Seams" beside={units === "mm" ? "mm" : "inches"}>
       {seams.length === 0 ? (
@@ -24,65 +41,52 @@ export function SeamsSection() {
             <thead className="sticky top-0 bg-sheet text-left text-pencil">
               <tr>
                 <th className="py-1 font-normal">between</th>
-                <th className="py-1 text-right font-normal">gap</th>
-                <th className="py-1 text-right font-normal">along</th>
-                <th className="py-1 text-right font-normal">across</th>
-                <th className="py-1 text-right font-normal">drift</th>
+                {["gap", "along", "across", "step", "match", "tone"].map((name) => (
+                  <th key={name} className="py-1 pl-1.5 text-right font-normal">
+                    {name}
+                  </th>
+                ))}
               </tr>
             </thead>
             <tbody className="measure">
-              {seams.map((seam) => (
-                <tr key={`${seam.a} ${seam.b}`} className="border-t border-rule hover:bg-chalk-wash">
-                  <td className="py-0.5">
-                    <button
-                      type="button"
-                      onClick={() => editor.select([seam.a, seam.b])}
-                      className="min-h-8 text-left font-sans font-normal text-chalk underline-offset-2 hover:underline"
-                    >
-                      {seam.a.slice(1)} and {seam.b.slice(1)}
-                    </button>
-                  </td>
-                  <td className="text-right">{printedLength(seam.gap, style).figure}</td>
-                  <JumpCells seam={seam} relation={seamRelation(seam, pieceById)} figure={figure} />
-                  <td className="text-right">{driftFigure(seam, layout.face, drifts.get(seam.b) ?? null)}</td>
-                </tr>
+              {seams.map((seam, index) => (
+                <SeamRow
+                  key={`${seam.a} ${seam.b}`}
+                  seam={seam}
+                  relation={seamRelation(seam, pieceById)}
+                  reading={readings.of(seam)}
+                  fresh={readings.fresh}
+                  onOpen={() => show(index, seam)}
+                />
               ))}
             </tbody>
           </table>
         </div>
       )}
-      <p className="text-xs text-pencil">
-        Along and across the grain: how far the figure jumps at the seam. Drift: how far the second front’s figure has wandered
-        from the anchor in the direction of the seam.
+      <p aria-live="polite" className="text-xs text-pencil">
+        {readings.failed
+          ? "The photographs could not be read. Step, match and tone are missing."
+          : !readings.fresh && seams.length > 0 && "Reading the photographs…"}
       </p>
+      <details className="text-xs text-pencil">
+        <summary className="min-h-6 cursor-pointer text-chalk">What these figures mean</summary>
+        <dl className="mt-1 flex flex-col gap-1">
+          {seamFigures.map(({ name, means }) => (
+            <div key={name}>
+              <dt className="inline font-semibold">{name}: </dt>
+              <dd className="inline">{means}</dd>
+            </div>
+          ))}
+        </dl>
+      </details>
+      <SeamDialog
+        layout={layout}
+        seam={shown}
+        relation={shown ? seamRelation(shown, pieceById) : "no-wood"}
+        reading={shown ? readings.of(shown) : null}
+        onClose={() => setOpen(null)}
+        onStep={step}
+      />
     </PanelSection>
-  );
-
-  function driftFigure({ normal }: Seam, face: Face, drift: Drift["drift"]): string {
-    if (drift === null) return "–";
-    const cut = cutBetween(normal === "right" ? "columns" : "rows", face.grain);
-    return printedLength(cut === "crosscut" ? drift.along : drift.across, style).figure;
-  }
-}
-
-const sayings: Readonly<Record<Exclude<SeamRelation, "runs-on">, string>> = {
-  "no-wood": "no wood yet",
-  "other-wood": "other wood",
-  turned: "turned",
-};
-
-function JumpCells({ seam, relation, figure }: { seam: Seam; relation: SeamRelation; figure: (range: UmRange) => string }) {
-  if (relation !== "runs-on" || seam.jump === null) {
-    return (
-      <td colSpan={2} className="text-right font-normal text-pencil">
-        {sayings[relation === "runs-on" ? "other-wood" : relation]}
-      </td>
-    );
-  }
-  return (
-    <>
-      <td className="text-right">{figure(seam.jump.along)}</td>
-      <td className="text-right">{figure(seam.jump.across)}</td>
-    </>
   );
 }

@@ -45,9 +45,9 @@ export class LayoutTablePage {
     return Number(/([\d.]+) mm from the left end/.exec(text)?.[1]);
   }
 
-  /** A seam's row as the panel shows it: between, gap, along, across, drift. */
+  /** What the cuts do to a seam, as its row in the panel shows it: between, gap, along, across. */
   async seam(between: string): Promise<string[]> {
-    return this.page.getByRole("row").filter({ hasText: between }).getByRole("cell").allInnerTexts();
+    return this.page.getByRole("row").filter({ hasText: between }).locator("td:not([data-read])").allInnerTexts();
   }
 
   /** Where a front lies on the screen, px of the page: the middle of its rectangle on the first board. */
