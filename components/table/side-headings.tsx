@@ -4,6 +4,7 @@ import type { ReactNode } from "react";
 import { tableGeometry } from "@/lib/editor/view/geometry";
 import { NudgePad } from "./nudge-pad";
 import { useEditorState, useTableContext, useViewState } from "./table-context";
+import { useGrains } from "./use-grains";
 
 export function ShowHeading() {
   const scale = useScale("show");
@@ -17,8 +18,10 @@ export function ShowHeading() {
 export function StockHeading() {
   const { editor } = useTableContext();
   const scale = useScale("stock");
+  const { reading, failed } = useGrains();
+  const grain = failed ? ", the grain could not be read" : reading ? ", reading the grain…" : "";
   return (
-    <Heading title="Stock side" told={scale}>
+    <Heading title="Stock side" told={`${scale}${grain}`}>
       {editor.mayChange && <NudgePad />}
     </Heading>
   );

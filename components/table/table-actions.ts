@@ -38,6 +38,7 @@ export interface TableActions {
   readonly layOn: (board: BoardFace) => void;
   readonly turnGrain: () => void;
   readonly toggleTriangle: () => void;
+  readonly toggleGrain: () => void;
   readonly seeAll: () => void;
 }
 
@@ -73,6 +74,7 @@ function tableActions(editor: Editor, viewState: Store<ViewState>, style: Length
       editor.run((document) => changeGrain(document, document.layout.face.grain === "horizontal" ? "vertical" : "horizontal"));
     },
     toggleTriangle: () => viewState.set({ ...viewState.get(), showTriangle: !viewState.get().showTriangle }),
+    toggleGrain: () => viewState.set({ ...viewState.get(), showGrain: !viewState.get().showGrain }),
     seeAll: () => viewState.set({ ...viewState.get(), view: wholeView }),
   };
 }

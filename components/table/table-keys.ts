@@ -21,6 +21,7 @@ export const keyHelp: readonly KeyHelp[] = [
   { keys: "L", does: "let loose" },
   { keys: "B", does: "back into the set" },
   { keys: "M", does: "carpenter's triangle on or off" },
+  { keys: "G", does: "direction of the grain on or off" },
   { keys: "+  −  0", does: "nearer, further, everything" },
   { keys: "Escape", does: "drop a drag, or choose nothing" },
   { keys: "Ctrl Z, Ctrl Shift Z", does: "undo, redo" },
@@ -78,6 +79,7 @@ export function pressKey(press: KeyPress, { actions, editor, zoomBy, cancelDrag,
     l: actions.letLoose,
     b: actions.takeBack,
     m: actions.toggleTriangle,
+    g: actions.toggleGrain,
   };
   const letter = letters[press.key.toLowerCase()];
   letter?.();

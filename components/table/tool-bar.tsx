@@ -16,6 +16,7 @@ export function ToolBar({ viewRef, onHelp }: { viewRef: RefObject<TableView | nu
   const selection = useEditorState((state) => state.selection);
   const layout = useEditorState((state) => state.document.layout);
   const triangle = useViewState((state) => state.showTriangle);
+  const grain = useViewState((state) => state.showGrain);
   const someLoose = selection.some((id) => groupOf(layout, id)?.id !== SET_ID);
   return (
     <div
@@ -49,6 +50,9 @@ export function ToolBar({ viewRef, onHelp }: { viewRef: RefObject<TableView | nu
       )}
       <Tool onClick={actions.toggleTriangle} pressed={triangle}>
         Triangle
+      </Tool>
+      <Tool onClick={actions.toggleGrain} pressed={grain}>
+        Grain
       </Tool>
       <span className="ml-auto flex items-center gap-1">
         <Tool onClick={() => viewRef.current?.zoomBy(1 / ZOOM_STEP)} name="Further away">

@@ -4,6 +4,8 @@ import { type LengthStyle, printLength } from "@/lib/layout";
 import { tapeMarks } from "@/lib/words/tape-marks";
 import type { TableBoard } from "../table-board";
 import { BOARD_SPACE_PX, TAPE_PX, type TableGeometry } from "../view/geometry";
+import type { ViewState } from "../view/view-state";
+import { paintGrain } from "./marks/grain";
 import { paintSpokenFor } from "./marks/spoken-for";
 import { paintTape } from "./marks/tape-strip";
 import { paintBoard } from "./marks/wood";
@@ -15,6 +17,8 @@ import { Sketches } from "./sketches";
 export interface BoardsLook {
   readonly style: LengthStyle;
   readonly palette: Palette;
+  /** By version of a board's picture; drawn over every board that has one. */
+  readonly grains: ViewState["grains"];
 }
 
 export class BoardsLayer {
@@ -39,6 +43,8 @@ export class BoardsLayer {
       const box = { left: originX, top, width: (length / 1000) * scale, height: (width / 1000) * scale };
       const picture = pictures.at(board, scale * window.devicePixelRatio);
       this.#sketches.named(`${id} wood`).put(box, paintBoard(picture, visible, palette));
+      const grain = look.grains.get(board.straighteningId);
+      if (grain) this.#sketches.named(`${id} grain`).put(box, paintGrain(grain, scale, palette));
       this.#sketches.named(`${id} zones`).put(box, paintZones(board.face, scale, palette));
       this.#sketches.named(`${id} spoken for`).put(box, paintSpokenFor(board.spokenFor, scale, palette));
       const marks = tapeMarks(length, scale, style.unit);

@@ -12,6 +12,8 @@ import { Pictures } from "./pictures";
 import { PiecesLayer } from "./pieces-layer";
 import { ShowLayer } from "./show-layer";
 
+const noGrains: ViewState["grains"] = new Map();
+
 export class TablePainter {
   readonly #style: LengthStyle;
   readonly #palette = readPalette();
@@ -21,7 +23,11 @@ export class TablePainter {
   readonly #pieces: PiecesLayer;
   readonly #pictures: Pictures;
   /** What the boards were last painted from; null when a picture has come in since. */
-  #boardsPainted: { readonly geometry: TableGeometry; readonly boards: EditorState["boards"] } | null = null;
+  #boardsPainted: {
+    readonly geometry: TableGeometry;
+    readonly boards: EditorState["boards"];
+    readonly grains: ViewState["grains"];
+  } | null = null;
 
   /** `onPicture`: a picture has come in, and painting again would show more. */
   constructor(hosts: Readonly<Record<Side, HTMLElement>>, style: LengthStyle, onPicture: () => void) {
@@ -43,13 +49,15 @@ export class TablePainter {
     this.#boardsPainted = null;
   }
 
-  paint(state: EditorState, { showTriangle }: ViewState, geometry: TableGeometry): void {
+  paint(state: EditorState, { showTriangle, showGrain, grains: read }: ViewState, geometry: TableGeometry): void {
     const { boards, boardFaces, selection, preview } = state;
     const layout = shownLayout(state);
     const [style, palette] = [this.#style, this.#palette];
-    if (this.#boardsPainted?.geometry !== geometry || this.#boardsPainted.boards !== boards) {
-      this.#boardsPainted = { geometry, boards };
-      this.#boards.sync(boards, geometry, this.#pictures, { style, palette });
+    const grains = showGrain ? read : noGrains;
+    const painted = this.#boardsPainted;
+    if (painted?.geometry !== geometry || painted.boards !== boards || painted.grains !== grains) {
+      this.#boardsPainted = { geometry, boards, grains };
+      this.#boards.sync(boards, geometry, this.#pictures, { style, palette, grains });
       this.#canvases.boards.renderAll();
     }
     const trouble = new Set(problemsOf(layout, boardFaces).flatMap(piecesOfProblem));
