@@ -150,6 +150,29 @@ export {
 export { type ReplayFault, type ReplayOutcome, replay } from "./program/replay";
 export { cutRequestFor, type PieceOnBoard, piecesOnBoard } from "./program/request-for-board";
 export { type Verdict, verifyProgram } from "./program/verify-program";
+export type { AsCutEntry, EntryFault, KerfReach } from "./replan/as-cut";
+export { assessRest, type RestAssessment, type RestOutcome } from "./replan/assess-rest";
+export type { RestFault } from "./replan/carry-out";
+export type { Missing } from "./replan/fit-in-part";
+export {
+  type PartInHand,
+  type RestLimits,
+  type RestPiece,
+  type RestRequest,
+  wholeBoardInHand,
+} from "./replan/part-in-hand";
+export { planRest, type RestPlan, type RestPlanOutcome } from "./replan/plan-rest";
+export {
+  type PieceChange,
+  type PieceName,
+  type Rescue,
+  type RescueChoices,
+  type RescueKind,
+  rescueKinds,
+  type Trouble,
+  type TroubleFact,
+} from "./replan/trouble";
+export { type RestVerdict, verifyRest } from "./replan/verify-rest";
 export { type Drift, drifts } from "./seam/drift";
 export type { Seam, UmRange } from "./seam/seam";
 export { seams } from "./seam/seams";
