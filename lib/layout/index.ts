@@ -70,7 +70,18 @@ export {
   type TrimmedFront,
 } from "./pattern/cut-out/cut-out-plan";
 export { type CutOutWish, type FreshCutOut, freshCutOut } from "./pattern/cut-out/fresh-cut-out";
-export type { CutOutFace, CutOutPart, CutOutRow, EdgeAmounts, Face, Grain, GridFace, Pattern } from "./pattern/face";
+export type {
+  CutOutFace,
+  CutOutPart,
+  CutOutRow,
+  EdgeAmounts,
+  Face,
+  Grain,
+  GridFace,
+  Pattern,
+  WrapCorner,
+  WrapFace,
+} from "./pattern/face";
 export type { FaceFault } from "./pattern/face-fault";
 export type {
   AnchorX,
@@ -104,6 +115,9 @@ export { groupBounds, liftGroup, moveGroup, placeGroup, turnGroup, turnsAlongGra
 export { groupOf } from "./pattern/slots";
 export { swapPieces } from "./pattern/swap-pieces";
 export { type WoodNeeded, woodNeeded } from "./pattern/wood-needed";
+export type { FoldedSide, PlanPoint } from "./pattern/wrap/fold";
+export { freshWrap } from "./pattern/wrap/fresh-wrap";
+export { type WrapCornerPlan, type WrapEnd, type WrapPlan, type WrapSidePlan, wrapPlan } from "./pattern/wrap/wrap-plan";
 export type { LensOutcome } from "./picture/fit-lens";
 export { fitMarking, type MarkingFit, type MarkResidual } from "./picture/fit-marking";
 export type { MmPoint, PhotoPoint } from "./picture/homography";

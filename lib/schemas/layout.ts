@@ -1,6 +1,6 @@
 /** The layout document on the wire: the core's FaceLayout, checked. */
 import { z } from "zod";
-import { type Face, type FaceLayout, faceFaults } from "@/lib/layout";
+import { type Face, type FaceLayout, faceFaults, um } from "@/lib/layout";
 import { defineEndpoint, everyone, makers } from "./endpoint";
 import { idSchema } from "./ids";
 import { allowanceUmSchema, pointSchema, sizeUmSchema } from "./length";
@@ -54,13 +54,33 @@ export const cutOutFaceSchema = z
   })
   .superRefine(refuseFaults);
 
+const turnDegSchema = z.number().min(1).max(179);
+
+const wrapCornerSchema = z.discriminatedUnion("kind", [
+  z.object({ kind: z.literal("gap"), turnDeg: turnDegSchema, gap: allowanceUmSchema }),
+  z.object({ kind: z.literal("butt"), turnDeg: turnDegSchema, covers: z.enum(["before", "after"]) }),
+  z.object({ kind: z.literal("mitre"), turnDeg: turnDegSchema, parting: z.enum(["squareThenBevels", "oneBevel"]) }),
+]);
+
+export const wrapFaceSchema = z
+  .object({
+    pattern: z.literal("wrap"),
+    grain: z.enum(["horizontal", "vertical"]),
+    sides: z.array(sizeUmSchema).min(1).max(40),
+    height: sizeUmSchema,
+    thickness: z.int().min(1).max(300_000).transform(um).meta({ description: "micrometres, up to 300 mm" }),
+    corners: z.array(wrapCornerSchema).max(40),
+    closed: z.boolean(),
+  })
+  .superRefine(refuseFaults);
+
 /** What the core finds wrong with a face is wrong on the wire, too. */
 function refuseFaults(face: Face, context: z.core.$RefinementCtx): void {
   for (const { fault } of faceFaults(face)) context.addIssue(`the face does not hold together (${fault})`);
 }
 
 /** A face by its pattern. */
-export const faceSchema = z.discriminatedUnion("pattern", [gridFaceSchema, cutOutFaceSchema]);
+export const faceSchema = z.discriminatedUnion("pattern", [gridFaceSchema, cutOutFaceSchema, wrapFaceSchema]);
 
 /** Fails to compile when the wire and the core drift apart. */
 export const faceForCore = (face: z.output<typeof faceSchema>): Face => face;

@@ -28,6 +28,8 @@ import {
   turnGroup,
   turnsAlongGrain,
   um,
+  type WrapCorner,
+  type WrapFace,
 } from "@/lib/layout";
 
 /** The layout of a change that must succeed. */
@@ -110,8 +112,35 @@ export const arbitraryCutOutFace: fc.Arbitrary<CutOutFace> = fc
     };
   });
 
+const arbitraryTurn = fc.constantFrom(90, 90, 60, 45, 120, 30.5);
+
+export const arbitraryCorner: fc.Arbitrary<WrapCorner> = fc.oneof(
+  fc.record({ kind: fc.constant("gap" as const), turnDeg: arbitraryTurn, gap: umBetween(0, 6_000) }),
+  fc.record({ kind: fc.constant("butt" as const), turnDeg: arbitraryTurn, covers: fc.constantFrom("before" as const, "after") }),
+  fc.record({
+    kind: fc.constant("mitre" as const),
+    turnDeg: arbitraryTurn,
+    parting: fc.constantFrom("squareThenBevels" as const, "oneBevel"),
+  }),
+);
+
+/** Runs of up to four sides, open or closed; a closed one need not come back to its start. */
+export const arbitraryWrapFace: fc.Arbitrary<WrapFace> = fc
+  .record({
+    grain: arbitraryGrain,
+    sides: fc.array(fc.constantFrom(120_000, 120_001, 96_007).map(um), { minLength: 1, maxLength: 4 }),
+    corners: fc.array(arbitraryCorner, { minLength: 4, maxLength: 4 }),
+    height: fc.constantFrom(70_000, 110_001).map(um),
+    thickness: fc.constantFrom(12_000, 24_500).map(um),
+    closed: fc.boolean(),
+  })
+  .map(({ corners, closed, ...face }) => {
+    const closes = closed && face.sides.length > 2;
+    return { pattern: "wrap", ...face, corners: corners.slice(0, face.sides.length - (closes ? 0 : 1)), closed: closes };
+  });
+
 /** Every pattern. */
-export const arbitraryFace: fc.Arbitrary<Face> = fc.oneof(arbitraryGridFace, arbitraryCutOutFace);
+export const arbitraryFace: fc.Arbitrary<Face> = fc.oneof(arbitraryGridFace, arbitraryCutOutFace, arbitraryWrapFace);
 
 const arbitraryTurns = fc.constantFrom<QuarterTurns>(0, 1, 2, 3);
 

@@ -1,7 +1,7 @@
 /** What makes a face mean nothing, by pattern: mistakes of a program, not of a maker. */
 import type { Um } from "../units/um";
 
-export type FaceFault = GridFault | CutOutFault;
+export type FaceFault = GridFault | CutOutFault | WrapFault;
 
 export type GridFault =
   | { readonly fault: "empty-face" }
@@ -26,3 +26,16 @@ export type CutOutFault =
   /** All rows have the finished length of the first; this one is longer by so much, or shorter where negative. */
   | { readonly fault: "row-length-differs"; readonly row: number; readonly by: Um }
   | { readonly fault: "negative-length"; readonly where: "gap" | "fitting" };
+
+/** Sides and corners are counted from 0. */
+export type WrapFault =
+  | { readonly fault: "empty-face" }
+  /** A closed run has three sides at least. */
+  | { readonly fault: "too-few-sides"; readonly sides: number }
+  | { readonly fault: "corner-count"; readonly corners: number; readonly needed: number }
+  | { readonly fault: "side-not-positive"; readonly side: number }
+  | { readonly fault: "size-not-positive"; readonly axis: "height" | "thickness"; readonly index: 0 }
+  | { readonly fault: "turn-out-of-range"; readonly corner: number }
+  | { readonly fault: "negative-length"; readonly where: "gap" }
+  /** The bevels of its two ends meet before the inner face: it is this much too short. */
+  | { readonly fault: "no-inner-face"; readonly side: number; readonly by: Um };

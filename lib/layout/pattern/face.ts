@@ -58,5 +58,34 @@ export interface CutOutFace {
   readonly rails: "jointed" | "fromSaw";
 }
 
-export type Face = GridFace | CutOutFace;
+/**
+ * A corner that a run goes round. `turnDeg`: by how much the run turns there, more than 0 and less than 180; a square corner turns
+ * by 90. Butt: the side that `covers` runs on to the corner and hides the end of the other, so that its own end is seen. Mitre: both
+ * ends are bevelled by half the turn; either a square cut parts the two sides and each is bevelled up to its arris, or one bevel
+ * cut serves the first and the second is cut again from its arris.
+ */
+export type WrapCorner =
+  | { readonly kind: "gap"; readonly turnDeg: number; readonly gap: Um }
+  | { readonly kind: "butt"; readonly turnDeg: number; readonly covers: "before" | "after" }
+  | { readonly kind: "mitre"; readonly turnDeg: number; readonly parting: "squareThenBevels" | "oneBevel" };
+
+/**
+ * A run that goes round corners: the sides and top of a case, an apron, a box. The face is the run unfolded, left to right as seen
+ * from the side that shows, which is the outside of its corners. Reading order: along the run.
+ */
+export interface WrapFace {
+  readonly pattern: "wrap";
+  readonly grain: Grain;
+  /** What is seen of each side along the run. */
+  readonly sides: readonly Um[];
+  /** Upright to the run. */
+  readonly height: Um;
+  /** Of the finished stock. */
+  readonly thickness: Um;
+  /** One fewer than sides; as many where the run is closed, the last between the last side and the first. */
+  readonly corners: readonly WrapCorner[];
+  readonly closed: boolean;
+}
+
+export type Face = GridFace | CutOutFace | WrapFace;
 export type Pattern = Face["pattern"];

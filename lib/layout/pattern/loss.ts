@@ -22,7 +22,11 @@ export function lossOf(cut: CutLoss): Um {
 
 /** Distance in the wood between the show edges of neighbours. */
 export function spacingOf(cut: CutLoss, gap: Um, spacing: Spacing): Um {
-  const loss = lossOf(cut);
+  return spacingAt(lossOf(cut), gap, spacing);
+}
+
+/** The same where the loss is known. */
+export function spacingAt(loss: Um, gap: Um, spacing: Spacing): Um {
   return spacing === "followGap" ? um(Math.max(loss, gap)) : loss;
 }
 

@@ -3,12 +3,14 @@ import { cutOutRules } from "./cut-out/cut-out-rules";
 import type { Face, Pattern } from "./face";
 import { gridRules } from "./grid/grid-rules";
 import type { PatternRules } from "./pattern-rules";
+import { wrapRules } from "./wrap/wrap-rules";
 
 type FaceOf<P extends Pattern> = Extract<Face, { readonly pattern: P }>;
 
 const rules: { readonly [P in Pattern]: PatternRules<FaceOf<P>> } = {
   grid: gridRules,
   cutOut: cutOutRules,
+  wrap: wrapRules,
 };
 
 /** The rules of a face's own pattern. */

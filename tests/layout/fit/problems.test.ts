@@ -196,7 +196,7 @@ describe("problems", () => {
     );
   });
 
-  test("24 pieces among 40 areas take well under 2 ms, so that it can run while dragging", () => {
+  test("judging 24 pieces among 40 areas takes no more than 40 times of laying them out, so that it can run while dragging", () => {
     const face = gridFace(
       Array.from({ length: 8 }, () => um(150_000)),
       Array.from({ length: 3 }, () => um(100_000)),
@@ -215,13 +215,18 @@ describe("problems", () => {
     };
     expect(layOut(layout)).toHaveLength(24);
     expect(problems(layout, [board]).length).toBeGreaterThan(10);
-    const times = Array.from({ length: 60 }, () => {
+    const timed = (work: () => unknown) => {
       const start = performance.now();
-      problems(layout, [board]);
+      work();
       return performance.now() - start;
-    }).sort((p, q) => p - q);
-    // The sixth fastest of sixty: other work on the machine can only make a run slower.
-    expect(times[5]).toBeLessThan(2);
+    };
+    const times = Array.from(
+      { length: 60 },
+      () => [timed(() => problems(layout, [board])), timed(() => layOut(layout))] as const,
+    );
+    // The sixth fastest of sixty, side by side: other work on the machine can only make a run slower. Measured at about 12.
+    const sixth = (which: 0 | 1) => times.map((pair) => pair[which]).sort((p, q) => p - q)[5] ?? Number.NaN;
+    expect(sixth(0) / sixth(1)).toBeLessThan(40);
   });
 });
 
