@@ -128,8 +128,10 @@ export type { OutputScale } from "./picture/output-scale";
 export { type BlankScale, blankScale, type MemberPicture, paintStrip } from "./picture/paint-strip";
 export { type PaperName, type PaperSize, paperSizes } from "./picture/paper-sizes";
 export { measureMm, type PhotoGeometry, photoFromStockMm, stockMmFromPhoto, warpMapAt } from "./picture/photo-geometry";
+export { type PhotoPart, photoPartFor, windowOf } from "./picture/photo-part";
 export { type LevelSize, pyramidLevels } from "./picture/pyramid";
-export { type Pixels, type WarpMap, warpInBands } from "./picture/warp";
+export { plainSampler, type Sampler, stepped } from "./picture/sampler";
+export { LARGEST_ROOM, type Pixels, type WarpMap, warpInBands } from "./picture/warp";
 export type { Piece, PieceId, PieceRole, StockId } from "./piece";
 export { type ConservationLine, conservationLine, type WoodSum } from "./program/conservation-line";
 export {

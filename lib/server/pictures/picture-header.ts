@@ -1,6 +1,7 @@
 /** What a file says about itself before any pixel is decoded: kind, size, turn, profile; and whether it may be decoded at all. */
 import "server-only";
 import sharp, { type Metadata } from "sharp";
+import type { PhotoSize } from "@/lib/layout";
 import { maxUploadBytes, maxUploadPixels } from "@/lib/schemas/upload-limits";
 import { isCutOff } from "./cut-off";
 import { identifyKind, type PictureKind } from "./picture-kind";
@@ -60,6 +61,12 @@ async function judge(bytes: Uint8Array, kind: PictureKind): Promise<HeaderOutcom
       profile: icc,
     },
   };
+}
+
+/** The upright picture's size, px, as the header tells it. */
+export function uprightSize({ storedWidth, storedHeight, orientation }: PictureHeader): PhotoSize {
+  // Orientations from 5 on lie on their side (EXIF 2.3, tag 274).
+  return orientation >= 5 ? { width: storedHeight, height: storedWidth } : { width: storedWidth, height: storedHeight };
 }
 
 /** The decoders' words for a file that ends too early. */
