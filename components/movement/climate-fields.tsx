@@ -97,7 +97,7 @@ function AirFields({
         onChange={(humidity) => humidity !== null && onChange({ ...air, humidity })}
       />
       <NumberField
-        label={`${name}: ${celsius ? "°C" : "°F"}`}
+        label={`${name}: temperature, ${celsius ? "°C" : "°F"}`}
         value={Math.round(shown * 10) / 10}
         min={celsius ? -10 : 14}
         max={celsius ? 50 : 122}

@@ -42,7 +42,7 @@ export function MovementDiagram({ gap, figures, movement: { request } }: Props) 
           <>
             <line x1={scale.left} x2={scale.right} y1={least} y2={least} className="stroke-pencil" strokeDasharray="4 3" />
             <text x={scale.left - 4} y={least + (closed - least < 14 ? -2 : 4)} textAnchor="end" className="fill-pencil">
-              least
+              least {figure(leastGap)}
             </text>
           </>
         )}

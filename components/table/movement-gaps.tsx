@@ -4,7 +4,7 @@ import { useState } from "react";
 import { useUnits } from "@/components/shell/units";
 import { Button } from "@/components/ui/button";
 import { evenGaps } from "@/lib/editor/commands/even-gaps";
-import { type FaceGap, printedLength, recommendedGap, roundedUp, ruleStepOf, sheetAtMost, type Um, um } from "@/lib/layout";
+import { facePieces, printedLength, recommendedGap, roundedUp, ruleStepOf, sheetAtMost, type Um, um } from "@/lib/layout";
 import { betweenText } from "@/lib/words/movement";
 import { type GapRow, gapRows } from "./gap-rows";
 import { MovementDiagram } from "./movement-diagram";
@@ -17,7 +17,14 @@ export function MovementGaps({ movement }: { movement: Movement }) {
   const [chosenKey, choose] = useState<string | null>(null);
   const chosen = rows.find(({ key }) => key === chosenKey) ?? tightest(rows);
   if (rows.length === 0) {
-    return <p className="text-sm text-pencil">No gaps between the fronts. Enter the gap round them to see that.</p>;
+    const fronts = facePieces(movement.request.layout).some(({ role }) => role === "front");
+    return (
+      <p className="text-sm text-pencil">
+        {fronts
+          ? "No gaps between the fronts. Enter the gap round them to see that."
+          : "This face has no gaps that open and close: its pieces meet at joints and corners."}
+      </p>
+    );
   }
   return (
     <>
@@ -133,11 +140,14 @@ function UseRecommended({ movement: { request, outcome } }: { movement: Movement
   const step = ruleStepOf(style);
   const offers = lines.flatMap(({ runs, name }) => {
     const gap = recommendedGap(outcome, runs, step);
-    return gap === null || !differs(outcome.gaps, runs, gap) ? [] : [{ runs, name, gap }];
+    const between = outcome.gaps.filter((one) => one.runs === runs && "piece" in one.b);
+    // What is left over in a last gap does not count.
+    const differs = gap !== null && between.some((one) => Math.abs(one.gap - gap) > between.length);
+    return differs ? [{ runs, name, gap, wider: between.some((one) => one.gap < gap) }] : [];
   });
   if (!editor.mayChange || offers.length === 0) return null;
   const { layout: _, ...ground } = request;
-  return offers.map(({ runs, name, gap }) => (
+  return offers.map(({ runs, name, gap, wider }) => (
     <div key={runs} className="flex flex-col gap-1">
       <Button
         size="small"
@@ -146,15 +156,11 @@ function UseRecommended({ movement: { request, outcome } }: { movement: Movement
       >
         Make gaps {name} {print(gap)}
       </Button>
-      <p className="text-xs text-pencil">The face keeps its size; the fronts give up what the gaps take.</p>
+      <p className="text-xs text-pencil">
+        {wider ? "The face keeps its size; the fronts give up what the gaps take." : "The face keeps its size; the fronts grow."}
+      </p>
     </div>
   ));
-}
-
-/** Whether one of the gaps along the line would change by it; the remainder in a last gap does not count. */
-function differs(gaps: readonly FaceGap[], runs: FaceGap["runs"], gap: Um): boolean {
-  const between = gaps.filter((one) => one.runs === runs && "piece" in one.b);
-  return between.some((one) => Math.abs(one.gap - gap) > between.length);
 }
 
 function tightest(rows: readonly GapRow[]): GapRow | undefined {

@@ -10,7 +10,7 @@ export interface DiagramScale {
   readonly y: (mm: number) => number;
 }
 
-const box = { width: 320, height: 150, left: 46, right: 308, top: 18, bottom: 124 };
+const box = { width: 320, height: 150, left: 58, right: 308, top: 18, bottom: 124 };
 
 /** Room for every width and for nothing at all; for today's moisture too, where it lies outside the year's. */
 export function diagramScale(

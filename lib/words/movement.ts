@@ -16,8 +16,8 @@ import {
 import type { TagOf } from "./layout-problem";
 import { labelRanges } from "./part-name";
 
-/** A moisture as meters show it: `8.2 %`. */
-export const percentText = (percent: number): string => `${percent.toFixed(1)} %`;
+/** A moisture as meters show it: `8.2 %`, never parted at the end of a line. */
+export const percentText = (percent: number): string => `${percent.toFixed(1)}\u00a0%`;
 
 /** What the sentences take that the warnings do not hold. */
 export type MovementGround = Pick<MovementRequest, "year" | "leastGap" | "moistureLimit">;

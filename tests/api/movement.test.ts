@@ -7,16 +7,18 @@ import { GET as getSettings, PUT as putSettings } from "@/app/api/shop/movement/
 import { DELETE as deleteOne, PUT as putOne } from "@/app/api/species/[speciesId]/route";
 import { GET as getSpecies, POST as postSpecies } from "@/app/api/species/route";
 import { history } from "@/db/schema";
-import { umFromMm } from "@/lib/layout";
+import { stackFace, umFromMm } from "@/lib/layout";
 import type { Role } from "@/lib/schemas/endpoint";
 import * as movement from "@/lib/schemas/movement";
 import { type MovementChoices, saveFaceMovement, updateMovementSettings } from "@/lib/schemas/movement";
+import { movementSheet, movementSheetSchema } from "@/lib/schemas/movement-sheet";
 import * as speciesEndpoints from "@/lib/schemas/species";
 import type { ShopAccess } from "@/lib/server/access";
 import { addReading } from "@/lib/server/boards/add-reading";
 import { database } from "@/lib/server/database";
 import { removeFace } from "@/lib/server/jobs/faces";
 import { changeJob, readJob } from "@/lib/server/jobs/jobs";
+import { readLayout } from "@/lib/server/layouts/read-layout";
 import { chooseFaceMovement, readFaceMovement } from "@/lib/server/movement/face-movement";
 import { movementSettings, saveMovementSettings } from "@/lib/server/movement/settings";
 import { addSpecies, changeSpecies, ownSpecies, removeSpecies } from "@/lib/server/species";
@@ -191,6 +193,32 @@ describe("a face", () => {
     expect((await ask(putFaceMovement, saveFaceMovement, { params, body })).status).toBe(404);
     await actAs(shop.maker);
     expect((await ask(putFaceMovement, saveFaceMovement, { params, body })).status).toBe(200);
+  });
+
+  it("of fronts stacked in plywood: its sheet has the moisture they are cut at and every gap through the year", async () => {
+    const { maker } = await makeShop();
+    const face = stackFace([180, 180].map(umFromMm), umFromMm(600), umFromMm(3), "horizontal");
+    const { faceId, boardId } = await makeLayout(maker, { face, boardMm: { length: 2350, width: 420 } });
+    await addReading(maker, boardId, { percent: 8, takenOn: "2031-06-02" });
+    const choices: MovementChoices = { surround: { kind: "sheet" }, around: umFromMm(2), woods: {} };
+    await chooseFaceMovement(maker, faceId, { baseRevision: 0, ...choices });
+    await saveMovementSettings(maker, {
+      baseRevision: 0,
+      climate: { kind: "moisture", driest: 6, dampest: 12 },
+      leastGap: umFromMm(1),
+      moistureLimit: 2,
+    });
+    const facts = await readFaceMovement(maker.shopId, faceId);
+    const sheet = movementSheetSchema.parse(movementSheet((await readLayout(maker, faceId)).document, facts));
+    expect(sheet.boards).toMatchObject([
+      { boardId, reading: { percent: 8 }, species: { name: "Walnut, black", source: expect.stringContaining("Table 13-5") } },
+    ]);
+    // 180 mm · 0.00274 a percent: 0.986 mm less at 6 %, 1.973 mm more at 12 %. At the top edge, half of that.
+    expect(sheet.gaps.filter(({ runs }) => runs === "upright")).toMatchObject([
+      { a: "p1", b: "p2", today: 3_000, figures: { driest: 3_986, dampest: 1_027, toCut: 2_973 } },
+      { a: "p1", b: "top", today: 2_000, figures: { driest: 2_493, dampest: 1_014, toCut: 1_987 } },
+      { a: "p2", b: "bottom", today: 2_000, figures: { driest: 2_493, dampest: 1_014, toCut: 1_987 } },
+    ]);
   });
 
   it("goes with what was chosen for it", async () => {

@@ -50,9 +50,8 @@ export async function chooseFaceMovement(
     if (!(await saveFaceMovement(tx, access.shopId, faceId, baseRevision, change))) {
       throw conflict("Somebody else chose for this face meanwhile. It shows what they chose; repeat your change.");
     }
-    const { surround, around } = choices;
-    const entry = { userId: access.userId, noun: "face", nounId: faceId, verb: "movement chosen", detail: { surround, around } };
-    await recordHistory(tx, access.shopId, { ...entry, noun: "face" }, at);
+    const entry = { userId: access.userId, noun: "face", nounId: faceId, verb: "movement chosen", detail: choices } as const;
+    await recordHistory(tx, access.shopId, entry, at);
   });
   return readFaceMovement(access.shopId, faceId);
 }

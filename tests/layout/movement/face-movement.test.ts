@@ -143,7 +143,7 @@ describe("of any face", () => {
           if (toCut > 3) expect(leastOf(request, gap, toCut - 3)).toBeLessThan(request.leastGap);
         },
       ),
-      { numRuns: 60 },
+      { numRuns: 40 },
     );
   });
 
@@ -154,7 +154,7 @@ describe("of any face", () => {
           if (figures !== null && rail === null) expect(figures.dampest).toBeLessThanOrEqual(figures.driest);
         }
       }),
-      { numRuns: 60 },
+      { numRuns: 40 },
     );
   });
 
@@ -173,7 +173,7 @@ describe("of any face", () => {
           }
         }
       }),
-      { numRuns: 60 },
+      { numRuns: 40 },
     );
   });
 
@@ -187,7 +187,7 @@ describe("of any face", () => {
           if (figures !== null) expect([figures.driest, figures.dampest]).toEqual([gap, gap]);
         }
       }),
-      { numRuns: 60 },
+      { numRuns: 40 },
     );
   });
 

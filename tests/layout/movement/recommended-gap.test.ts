@@ -76,7 +76,7 @@ describe("in any face", () => {
         for (const { gap, figures } of made) expect(figures?.toCut).toBeLessThanOrEqual(gap);
         if (made.length > 0) expect(recommendedGap(movement, runs, tenthMm)).toBeLessThanOrEqual(outcome.gap);
       }),
-      { numRuns: 60 },
+      { numRuns: 40 },
     );
   });
 
@@ -89,7 +89,7 @@ describe("in any face", () => {
         const axis = runs === "sideways" ? "columns" : "rows";
         expect(new Set(after[axis].map((size, index) => size - (before[axis][index] ?? 0))).size).toBe(1);
       }),
-      { numRuns: 60 },
+      { numRuns: 40 },
     );
   });
 });
