@@ -1,6 +1,6 @@
 /** Blanks that are planned, and the boards they are glued up from. */
 import "server-only";
-import { and, asc, eq, inArray } from "drizzle-orm";
+import { and, asc, eq, inArray, isNull } from "drizzle-orm";
 import type { Connection } from "../client";
 import { blank, blankMember, board, orderRevisionBoard, stepTick, straightening } from "../schema";
 import type { ShopId } from "../shop-id";
@@ -73,4 +73,22 @@ export async function isTicked(db: Connection, shopId: ShopId, boardId: string, 
     .where(and(eq(orderRevisionBoard.shopId, shopId), eq(orderRevisionBoard.boardId, boardId), eq(stepTick.stepId, stepId)))
     .limit(1);
   return row !== undefined;
+}
+
+/** Of these boards, those that were planned as blanks and taken apart: they have a composed picture, and there is no such wood. */
+export async function listTakenApart(db: Connection, shopId: ShopId, boardIds: readonly string[]): Promise<ReadonlySet<string>> {
+  if (boardIds.length === 0) return new Set();
+  const rows = await db
+    .selectDistinct({ boardId: straightening.boardId })
+    .from(straightening)
+    .leftJoin(blank, eq(blank.boardId, straightening.boardId))
+    .where(
+      and(
+        eq(straightening.shopId, shopId),
+        inArray(straightening.boardId, [...boardIds]),
+        isNull(straightening.photoId),
+        isNull(blank.boardId),
+      ),
+    );
+  return new Set(rows.map(({ boardId }) => boardId));
 }

@@ -1,6 +1,7 @@
 /** Boards of the rack, their readings, and what holds them. */
 import "server-only";
 import { and, asc, count, desc, eq, exists, gte, inArray, like, max, not, or, type SQL, sql } from "drizzle-orm";
+import { alias } from "drizzle-orm/mysql-core";
 import { v7 as newId } from "uuid";
 import { um } from "@/lib/layout";
 import type { BoardQuery, boardSorts } from "@/lib/schemas/board";
@@ -25,17 +26,24 @@ export type BoardFields = Omit<
   "id" | "shopId" | "tagNumber" | "revision" | "createdAt" | "updatedAt" | "moistureTenths"
 >;
 
+/** The blank that a board is to be glued into. */
+const intoBlank = alias(board, "into_blank");
+
 const withPicture = {
   board,
   straighteningId: straightening.id,
   backStraighteningId: boardPicture.backStraighteningId,
   levels: straightening.levels,
+  inBlankId: intoBlank.id,
+  inBlankTagNumber: intoBlank.tagNumber,
 };
 export type BoardWithPicture = {
   readonly board: typeof board.$inferSelect;
   readonly straighteningId: string | null;
   readonly backStraighteningId: string | null;
   readonly levels: typeof straightening.$inferSelect.levels | null;
+  readonly inBlankId: string | null;
+  readonly inBlankTagNumber: number | null;
 };
 
 /** The column each order of the rack goes by, with the index that holds it in that order. */
@@ -66,6 +74,8 @@ export function boardPageOf(db: Connection, shopId: ShopId, query: BoardQuery) {
       .from(board, { forceIndex: [index] })
       .leftJoin(boardPicture, eq(boardPicture.boardId, board.id))
       .leftJoin(straightening, eq(straightening.id, boardPicture.straighteningId))
+      .leftJoin(blankMember, eq(blankMember.boardId, board.id))
+      .leftJoin(intoBlank, eq(intoBlank.id, blankMember.blankId))
       .where(matching(db, shopId, query))
       // A tag has no equal; elsewhere the id breaks ties. The unique index would not serve an order that names the id as well.
       .orderBy(...(query.sort === "tag" ? [towards(column)] : [towards(column), towards(board.id)]))
@@ -155,6 +165,8 @@ export async function findBoard(db: Connection, shopId: ShopId, boardId: string)
     .from(board)
     .leftJoin(boardPicture, eq(boardPicture.boardId, board.id))
     .leftJoin(straightening, eq(straightening.id, boardPicture.straighteningId))
+    .leftJoin(blankMember, eq(blankMember.boardId, board.id))
+    .leftJoin(intoBlank, eq(intoBlank.id, blankMember.blankId))
     .where(and(eq(board.shopId, shopId), eq(board.id, boardId)));
   return row;
 }

@@ -285,11 +285,27 @@ describe("zones", () => {
   const revision = async () => (await readStraightening(maker, id)).zones.revision;
 
   test("are saved as one, and read back as they were drawn", async () => {
-    const zones = { outline, keepClear: [knot()], revision: await revision() };
+    const glueLines = [70, 120].map((mm) => ({ id: newId(), across: umFromMm(mm), aboveBoardId: null, belowBoardId: null }));
+    const zones = { outline, keepClear: [knot()], glueLines, revision: await revision() };
     const saved = await saveZones(maker, id, zones);
     expect(saved.revision).toBe(zones.revision + 1);
     expect((await readStraightening(maker, id)).zones).toEqual({ ...zones, revision: zones.revision + 1 });
     expect((await verbsOf(maker, boardId)).at(-1)).toBe("areas drawn");
+  });
+
+  test("with glue lines make the board a blank; without any, a board again; lines that are not sent stay", async () => {
+    const line = { id: newId(), across: umFromMm(90), aboveBoardId: boardId, belowBoardId: null };
+    await saveZones(maker, id, { outline: null, keepClear: [], glueLines: [line], revision: await revision() });
+    expect((await readBoard(maker, boardId)).kind).toBe("blank");
+    await saveZones(maker, id, { outline: null, keepClear: [], revision: await revision() });
+    // Which board lies where is known from gluing it up only, not from what is sent.
+    expect((await readStraightening(maker, id)).zones.glueLines).toEqual([{ ...line, aboveBoardId: null }]);
+    await saveZones(maker, id, { outline: null, keepClear: [], glueLines: [], revision: await revision() });
+    expect(await readBoard(maker, boardId)).toMatchObject({ kind: "board", blank: null });
+    const off = { ...line, id: newId(), across: umFromMm(200) };
+    await expect(
+      saveZones(maker, id, { outline: null, keepClear: [], glueLines: [off], revision: await revision() }),
+    ).rejects.toMatchObject({ code: "refused", message: expect.stringContaining("Glue line 1 lies off the board") });
   });
 
   test("from an old revision are a conflict that names the present one, and change nothing", async () => {

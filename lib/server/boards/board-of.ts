@@ -1,13 +1,11 @@
 /** A board as the browser sees it, from its row. */
 import "server-only";
-import type { listInBlanks } from "@/db/queries/blank";
 import type { BoardWithPicture, listBoardHolds } from "@/db/queries/board";
 import { boardFeet, boardFeetByRule, type Um, um } from "@/lib/layout";
 import type { BoardRow } from "@/lib/schemas/board";
 import { printTag } from "@/lib/schemas/tag";
 import { servedLevel } from "../straightenings/straightening-of";
 
-type InBlank = Awaited<ReturnType<typeof listInBlanks>>[number];
 type Hold = Awaited<ReturnType<typeof listBoardHolds>>[number];
 
 /** Wide enough for a board that fills the rack's page, px. */
@@ -15,11 +13,10 @@ const rackPicturePx = 1000;
 const umPerQuarter = 6350;
 
 export function boardRowOf(
-  { board, straighteningId, backStraighteningId, levels }: BoardWithPicture,
+  { board, straighteningId, backStraighteningId, levels, inBlankId, inBlankTagNumber }: BoardWithPicture,
   holds: readonly Hold[],
-  inBlanks: readonly InBlank[],
 ): BoardRow {
-  const inBlank = inBlanks.find(({ boardId }) => boardId === board.id);
+  const inBlank = inBlankId !== null && inBlankTagNumber !== null;
   const { id, kind, state, species, cut, nominalQuarters, thickness, length, width, place, source, costMinor, note, revision } =
     board;
   return {
@@ -46,7 +43,7 @@ export function boardRowOf(
     held: holds
       .filter(({ boardId }) => boardId === id)
       .map(({ faceId, faceTitle, jobId, jobTitle }) => ({ faceId, faceTitle, jobId, jobTitle })),
-    inBlank: inBlank ? { boardId: inBlank.blankId, tag: printTag(inBlank.blankTagNumber) } : null,
+    inBlank: inBlank ? { boardId: inBlankId, tag: printTag(inBlankTagNumber) } : null,
     revision,
     createdAt: board.createdAt.toISOString(),
   };

@@ -1,7 +1,6 @@
 /** The rack: one page of boards with all that the page shows, in a number of queries that does not grow with it. */
 import "server-only";
 import type { z } from "zod";
-import { listInBlanks } from "@/db/queries/blank";
 import { listBoardHolds, listBoards, listSpecies, sumUpBoards } from "@/db/queries/board";
 import { um } from "@/lib/layout";
 import type { BoardQuery, boardPageSchema } from "@/lib/schemas/board";
@@ -20,9 +19,8 @@ export async function readBoardPage(access: ShopAccess, query: BoardQuery): Prom
   ]);
   const ids = rows.map(({ board }) => board.id);
   const holds = await listBoardHolds(db, access.shopId, ids);
-  const inBlanks = await listInBlanks(db, access.shopId, ids);
   return {
-    items: rows.map((row) => boardRowOf(row, holds, inBlanks)),
+    items: rows.map((row) => boardRowOf(row, holds)),
     total,
     page: query.page,
     pageSize: query.pageSize,

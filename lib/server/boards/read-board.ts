@@ -1,7 +1,6 @@
 /** One board with its readings. */
 import "server-only";
 import type { Connection } from "@/db/client";
-import { listInBlanks } from "@/db/queries/blank";
 import { findBoard, listBoardHolds, listReadings } from "@/db/queries/board";
 import type { Board } from "@/lib/schemas/board";
 import type { ShopAccess } from "../access";
@@ -14,8 +13,7 @@ export async function readBoard(access: ShopAccess, boardId: string, db: Connect
   const found = await findBoard(db, access.shopId, boardId);
   if (!found) throw notFound("board");
   const holds = await listBoardHolds(db, access.shopId, [boardId]);
-  const inBlanks = await listInBlanks(db, access.shopId, [boardId]);
-  const row = boardRowOf(found, holds, inBlanks);
+  const row = boardRowOf(found, holds);
   const readings = await listReadings(db, access.shopId, boardId);
   return {
     ...row,

@@ -1,7 +1,7 @@
 /** Which boards lie on a layout's table, and with which version of their picture. */
 import "server-only";
 import type { Connection } from "@/db/client";
-import { listInBlanks } from "@/db/queries/blank";
+import { listInBlanks, listTakenApart } from "@/db/queries/blank";
 import { lockBoard } from "@/db/queries/board";
 import { recordHistory } from "@/db/queries/history";
 import {
@@ -14,7 +14,7 @@ import {
   updateLayoutBoard,
 } from "@/db/queries/layout";
 import { printTag } from "@/lib/schemas/tag";
-import { inBlankSentence } from "@/lib/words/in-blank";
+import { inBlankSentence, takenApartSentence } from "@/lib/words/in-blank";
 import type { ShopAccess } from "../access";
 import { database } from "../database";
 import { notFound, refused } from "../faults";
@@ -89,7 +89,9 @@ async function refuseInBlank(tx: Connection, { shopId }: ShopAccess, boardId: st
   const board = await lockBoard(tx, shopId, boardId);
   if (!board) throw notFound("board");
   const [inBlank] = await listInBlanks(tx, shopId, [boardId]);
-  if (inBlank) throw refused(inBlankSentence(printTag(board.tagNumber), printTag(inBlank.blankTagNumber)));
+  const tag = printTag(board.tagNumber);
+  if (inBlank) throw refused(inBlankSentence(tag, printTag(inBlank.blankTagNumber)));
+  if ((await listTakenApart(tx, shopId, [boardId])).has(boardId)) throw refused(takenApartSentence(tag));
 }
 
 type Document = NonNullable<Awaited<ReturnType<typeof lockLayout>>>["document"];

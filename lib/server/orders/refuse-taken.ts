@@ -1,10 +1,10 @@
 /** Refuses to issue from a board whose picture belongs to a cut order, that was cut into since it was photographed, or that is in a blank. */
 import "server-only";
 import type { Connection } from "@/db/client";
-import { listInBlanks } from "@/db/queries/blank";
+import { listInBlanks, listTakenApart } from "@/db/queries/blank";
 import type { ShopId } from "@/db/shop-id";
 import { printTag } from "@/lib/schemas/tag";
-import { inBlankSentence } from "@/lib/words/in-blank";
+import { inBlankSentence, takenApartSentence } from "@/lib/words/in-blank";
 import { takenBySentence } from "@/lib/words/taken-by";
 import { takersOf } from "../layouts/taken-by";
 import { refusedFor } from "./freeze";
@@ -19,14 +19,14 @@ export async function refuseTaken(
   const takers = await takersOf(db, shopId, layoutId);
   const ids = used.map(({ board }) => board.id);
   const inBlanks = await listInBlanks(db, shopId, ids);
+  const takenApart = await listTakenApart(db, shopId, ids);
   const sentences = used.flatMap(({ board }) => {
     const tag = printTag(board.tagNumber);
     const taker = takers.get(board.id);
     const inBlank = inBlanks.find(({ boardId }) => boardId === board.id);
-    return [
-      taker ? takenBySentence(tag, taker) : [],
-      inBlank ? inBlankSentence(tag, printTag(inBlank.blankTagNumber)) : [],
-    ].flat();
+    if (takenApart.has(board.id)) return takenApartSentence(tag);
+    const taken = taker ? [takenBySentence(tag, taker)] : [];
+    return inBlank ? [...taken, inBlankSentence(tag, printTag(inBlank.blankTagNumber))] : taken;
   });
   if (sentences.length > 0) throw refusedFor(sentences);
 }
