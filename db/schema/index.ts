@@ -1,4 +1,5 @@
 /** All tables, for the client and for the migration generator. */
+export * from "./as-cut";
 export * from "./blank";
 export * from "./board";
 export * from "./history";

@@ -22,7 +22,8 @@ export const machineSchema = z.object({
   limits: machineLimitsSchema,
 });
 
-const edgeSchema = z.enum(["left", "right", "top", "bottom"]);
+export const edgeSchema = z.enum(["left", "right", "top", "bottom"]);
+export const edgeStateSchema = z.enum(["rough", "marked", "trued", "sawn"]);
 
 export const partSchema = z.object({
   id: z.string(),
@@ -40,7 +41,7 @@ export const cutStepSchema = z.object({
   blade: allowanceUmSchema.optional(),
   part: partSchema,
   fromEdge: edgeSchema,
-  fromEdgeState: z.enum(["rough", "marked", "trued", "sawn"]),
+  fromEdgeState: edgeStateSchema,
   setting: umSchema,
   bladeSide: z.enum(["near", "far"]),
   kerf: rectSchema,
