@@ -56,7 +56,8 @@ function wayOut(blank: Spans, wood: Spans): number {
   return Math.min(-along.from, along.to, -across.from, across.to);
 }
 
-function grownByCut({ rect, kerfs }: SpokenFor, mine: Kerfs): Spans {
+/** The wood and the cut around it: what is sawn for a piece with these kerfs has to keep out of. */
+export function grownByCut({ rect, kerfs }: SpokenFor, mine: Kerfs): Spans {
   const { along, across } = spansOf(rect);
   return {
     along: grownBy(along, Math.max(mine.along, kerfs.along)),
