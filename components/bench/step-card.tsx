@@ -2,7 +2,9 @@
 /** What to do now: the drawing, the setting as the largest thing, what comes of it, and the cautions. */
 import type { ReactNode } from "react";
 import { mmFromUm, printedLength } from "@/lib/layout";
+import type { GluingMember } from "@/lib/schemas/gluing";
 import type { Order } from "@/lib/schemas/order";
+import type { SnapshotBoard } from "@/lib/schemas/order-snapshot";
 import type { OrderStep } from "@/lib/schemas/order-steps";
 import { firstOfAll } from "@/lib/words/caution";
 import { type StepWords, stepWords, styleOf } from "@/lib/words/order-step";
@@ -62,14 +64,15 @@ function Drawing({ order: { snapshot }, step, title }: Pick<Props, "order" | "st
   const { board } = step;
   if (step.kind === "cut") return <CutDrawing snapshot={snapshot} board={board} cut={step.cut} title={title} />;
   if (step.kind === "test-cut" || step.kind === "clean-up") return null;
-  const whole = { x: 0, y: 0, width: mmFromUm(board.length), height: mmFromUm(board.width) };
+  const shown = step.kind === "fetch-member" ? memberAsBoard(board, step.member) : board;
+  const whole = { x: 0, y: 0, width: mmFromUm(shown.length), height: mmFromUm(shown.width) };
   return (
     <>
       <WoodView
         snapshot={snapshot}
-        board={board}
+        board={shown}
         window={whole}
-        label={`Board ${board.tag} with its fronts`}
+        label={step.kind === "fetch-member" ? `Board ${shown.tag}` : `Board ${shown.tag} with its fronts`}
         className="rounded-sm"
       />
       {step.kind === "mark" &&
@@ -78,6 +81,12 @@ function Drawing({ order: { snapshot }, step, title }: Pick<Props, "order" | "st
         ))}
     </>
   );
+}
+
+/** A board of a blank by itself, before anything is done to it. */
+function memberAsBoard(blank: SnapshotBoard, member: GluingMember): SnapshotBoard {
+  const { glueLines: _lines, gluing: _gluing, ...rest } = blank;
+  return { ...rest, ...member, outline: null, keepClear: [], pieces: [] };
 }
 
 function Setting({ words, style }: { words: StepWords; style: ReturnType<typeof styleOf> }) {
@@ -95,8 +104,8 @@ function Setting({ words, style }: { words: StepWords; style: ReturnType<typeof 
 
 /** Of a cut every part with what becomes of it; of other steps what they are about. */
 function Results({ step, words, style }: { step: OrderStep; words: StepWords; style: ReturnType<typeof styleOf> }) {
-  if (step.kind === "fetch") {
-    const { board } = step;
+  if (step.kind === "fetch" || step.kind === "fetch-member") {
+    const board = step.kind === "fetch" ? step.board : step.member;
     const size = `${sizeFigures({ width: board.length, height: board.width }, style)} × ${printedLength(board.thickness, style).figure}`;
     return (
       <Box label={`${board.species}, ${size}`}>

@@ -11,10 +11,20 @@ export function boardEventWords({ verb, detail }: Row): string {
       return `Changed ${changedNames(detail.after)}`;
     case "moisture read":
       return `Moisture read: ${String(detail.percent)} %`;
+    case "planned":
+      return `Planned as a blank of ${listed(detail.members)}`;
+    case "put in blank":
+      return `Put into blank ${String(detail.tag)}`;
+    case "taken apart":
+      return `Taken apart; free again: ${listed(detail.members)}`;
+    case "out of blank":
+      return `Free again: blank ${String(detail.tag)} was taken apart`;
+    case "composed":
+      return `Version ${String(detail.version)} composed from the pictures of its boards`;
     case "marked":
-      return `Marked a photograph for version ${String(detail.version)}`;
+      return `Marked a photograph${ofSide(detail)} for version ${String(detail.version)}`;
     case "straightened":
-      return `Version ${String(detail.version)} done${carriedWords(detail)}`;
+      return `Version ${String(detail.version)}${ofSide(detail)} done${carriedWords(detail)}`;
     case "straightening failed":
       return `Version ${String(detail.version)} failed`;
     case "straightening cancelled":
@@ -49,3 +59,10 @@ function carriedWords({ areasFrom, outline, areasKept, areasDropped }: Row["deta
 }
 
 const areas = (count: number, fate: string) => `${count} keep-clear ${count === 1 ? "area" : "areas"} ${fate}`;
+
+/** Rows of earlier versions tell no side: there were pictures of the face only. */
+const ofSide = ({ side }: Row["detail"]) => (side === "back" ? " of the back" : "");
+
+function listed(names: unknown): string {
+  return Array.isArray(names) ? names.map(String).join(", ") : "its boards";
+}

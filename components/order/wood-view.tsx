@@ -42,6 +42,7 @@ export function WoodView({ snapshot, board, window, label, children, className =
     >
       {picture && <image href={picture.url} x="0" y="0" {...size} preserveAspectRatio="none" />}
       <rect x="0" y="0" {...size} fill="none" stroke="#20262a" strokeWidth="1" vectorEffect="non-scaling-stroke" />
+      <GlueLines board={board} window={window} />
       <Fronts snapshot={snapshot} board={board} window={window} />
       {children}
     </svg>
@@ -52,6 +53,47 @@ export function WoodView({ snapshot, board, window, label, children, className =
 function levelFor(levels: readonly ServedLevel[], wantedPx: number): ServedLevel | undefined {
   const bySize = [...levels].sort((a, b) => a.widthPx - b.widthPx);
   return bySize.find(({ widthPx }) => widthPx >= wantedPx) ?? bySize.at(-1);
+}
+
+/** Quiet, because nothing is cut along them; of a blank yet to be glued up, each strip says at its right end whose it is. */
+function GlueLines({ board, window }: Pick<Props, "board" | "window">) {
+  const letter = Math.min(window.height * 0.11, window.width * 0.04);
+  const length = mmFromUm(board.length);
+  return (
+    <>
+      {board.glueLines?.map((across) => {
+        const line = {
+          x1: 0,
+          x2: length,
+          y1: mmFromUm(across),
+          y2: mmFromUm(across),
+          vectorEffect: "non-scaling-stroke",
+        } as const;
+        return (
+          <g key={across}>
+            <line {...line} stroke="#20262a" strokeOpacity="0.5" strokeWidth="3" />
+            <line {...line} stroke="#fff" strokeWidth="1.2" strokeDasharray="2 5" />
+          </g>
+        );
+      })}
+      {board.gluing?.members.map(({ tag, rect }) => (
+        <text
+          key={tag}
+          x={mmFromUm(rect.x) + mmFromUm(rect.width) - letter * 0.4}
+          y={mmFromUm(rect.y) + mmFromUm(rect.height) / 2 + letter * 0.35}
+          fontSize={letter}
+          textAnchor="end"
+          className="measure"
+          fill="#fff"
+          stroke="#20262a"
+          strokeWidth={letter * 0.16}
+          paintOrder="stroke"
+        >
+          {tag}
+        </text>
+      ))}
+    </>
+  );
 }
 
 /** Outlines, labels and each front's part of the triangle, light on a dark rim so that they show on any wood. */

@@ -31,12 +31,12 @@ export function gluingWords(step: GluingStep, style: LengthStyle): StepWords {
         notes: [
           ...step.members.slice(1).map((below, index) => jointNote(step.members[index], below)),
           placesNote(step.members, style),
-          "Scrape off what is squeezed out before the blank is planed.",
+          "scrape off what is squeezed out before the blank is planed",
         ],
         cautions: gluingCautions,
         gives: [
           {
-            word: "blank",
+            word: "",
             label: step.board.tag,
             size: sizeFigures({ width: step.board.length, height: step.board.width }, style),
           },
@@ -54,38 +54,39 @@ function fetchWords({ tag, place, species }: GluingMember, blankTag: string): St
   };
 }
 
-/** "B-042, back up, turned end for end". */
+/** "B-042 (back up, turned end for end)". */
 export function memberWords({ tag, side, endForEnd }: Pick<GluingMember, "tag" | "side" | "endForEnd">): string {
-  return [tag, side === "back" && "back up", endForEnd && "turned end for end"].filter((part) => part !== false).join(", ");
+  const how = [side === "back" && "back up", endForEnd && "turned end for end"].filter((part) => part !== false);
+  return how.length > 0 ? `${tag} (${how.join(", ")})` : tag;
 }
 
 function arrangeNotes(members: readonly GluingMember[], style: LengthStyle): string[] {
-  const others = members.some(({ side }) => side === "back") ? "the others face up" : "all face up";
   return [
-    `From the upper edge down: ${members.map(memberWords).join("; ")}; ${others}.`,
+    `from the upper edge down: ${members.map(memberWords).join(", ")}`,
+    members.some(({ side }) => side === "back") ? "the others face up" : "all face up",
     placesNote(members, style),
-    "Chalk a triangle across all boards: it tells which edge meets which.",
+    "chalk a triangle across all boards: it tells which edge meets which",
   ];
 }
 
 /** Where the left ends lie: flush, or so far in from the one that lies farthest left. */
 function placesNote(members: readonly GluingMember[], style: LengthStyle): string {
-  if (members.every(({ rect }) => rect.x === 0)) return "Left ends flush.";
+  if (members.every(({ rect }) => rect.x === 0)) return "left ends flush";
   const places = members.map(({ tag, rect }) =>
     rect.x === 0 ? `${tag} at the left end` : `${tag} ${printLength(rect.x, style)} in`,
   );
-  return `Left ends: ${places.join(", ")}.`;
+  return `left ends: ${places.join(", ")}`;
 }
 
 const jointNote = (above: GluingMember | undefined, below: GluingMember) =>
-  `Lower edge of ${above?.tag ?? ""} to the upper edge of ${below.tag}.`;
+  `lower edge of ${above?.tag ?? ""} to the upper edge of ${below.tag}`;
 
 function trimWords({ member, edge, by }: Extract<GluingStep, { kind: "trim-edge" }>): StepWords {
   return {
     ...bare,
     verb: "Trim",
     rest: `the ${edge} edge of ${member.tag}`,
-    notes: ["As it lies. This edge is not glued: it becomes an edge of the blank."],
+    notes: ["as it lies; this edge is not glued, it becomes an edge of the blank"],
     from: `${edge} edge`,
     measure: `Take so much off the ${edge} edge`,
     setting: by,
@@ -101,10 +102,10 @@ function jointWords(
     verb: "Joint",
     rest: `the lower edge of ${above.tag} and the upper edge of ${below.tag}`,
     notes: [
-      `Joint ${joint}, edges as the boards lie.`,
+      `joint ${joint}, edges as the boards lie`,
       takesNote(above.tag, "lower", above.takes.lower, jointing, style),
       takesNote(below.tag, "upper", below.takes.upper, jointing, style),
-      "Straight and square, so that they close without force.",
+      "straight and square, so that they close without force",
     ],
     cautions: [jointingCaution],
     gives: ready.map((member) => givesOf(member, style)),
@@ -116,11 +117,11 @@ function takesNote(tag: string, edge: "upper" | "lower", takes: Um, jointing: Um
   const figure = (length: number) => printLength(um(length), style);
   const trimmed = takes - jointing;
   const how = trimmed > 0 ? `, of it ${figure(trimmed)} with the saw` : "";
-  return `${figure(takes)} off the ${edge} edge of ${tag}${how}.`;
+  return `${figure(takes)} off the ${edge} edge of ${tag}${how}`;
 }
 
 function givesOf({ tag, rect }: GluingMember, style: LengthStyle): Gives {
-  return { word: "board", label: tag, size: sizeFigures(rect, style) };
+  return { word: "", label: tag, size: sizeFigures(rect, style) };
 }
 
 /** "B-041, B-042 and B-043". */

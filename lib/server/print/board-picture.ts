@@ -13,6 +13,7 @@ import { black, putText, widthOfText } from "./typeface";
 const highest = 170;
 /** Right of the board, for the numbers of the rips. */
 const numberRoom = 18;
+const tagStyle = { face: "measure", size: 8 } as const;
 const numberStyle = { face: "measure", size: 7.5 } as const;
 /** Two rows of numbers above the board, so that two close crosscuts can both have theirs. */
 const numberRows = [0, 8] as const;
@@ -51,6 +52,7 @@ export function drawBoardPicture(
   if (picture) doc.image(Buffer.from(picture.jpeg), drawing.x, drawing.y, size);
   doc.lineWidth(0.7).rect(drawing.x, drawing.y, size.width, size.height).stroke(black);
   drawZones(drawing, board);
+  drawGlueLines(drawing, board);
   drawCuts(drawing, steps);
   drawFronts(drawing, snapshot, board);
   const place = { x: left, y: drawing.y + size.height + 3, pointsPerWoodMm: pointsPerUm * 1000 };
@@ -74,6 +76,20 @@ function drawZones(drawing: Drawing, board: SnapshotBoard): void {
       drawCasedLine(doc, corner, corners[(i + 1) % corners.length] ?? corner, 0.5, 1.5);
   }
   doc.restore();
+}
+
+/** Dotted and thin, because nothing is cut along them; of a blank yet to be glued up, each strip says whose it is. */
+function drawGlueLines(drawing: Drawing, { glueLines = [], gluing, length }: SnapshotBoard): void {
+  const { doc } = drawing;
+  for (const across of glueLines)
+    drawCasedLine(doc, pageFrom(drawing, { x: 0, y: across }), pageFrom(drawing, { x: length, y: across }), 0.6, 1.2);
+  for (const { tag, rect } of gluing?.members ?? []) {
+    const corner = pageFrom(drawing, { x: rect.x + rect.width, y: rect.y + rect.height / 2 });
+    const wide = widthOfText(doc, tag, tagStyle) + 5;
+    // At the right end, where the labels of the fronts do not stand.
+    doc.rect(corner.x - wide - 2, corner.y - 5, wide, 10).fillAndStroke("#ffffff", black);
+    putText(doc, tag, tagStyle, { x: corner.x - wide + 0.5, y: corner.y - 4, width: wide });
+  }
 }
 
 type Ellipse = Extract<SnapshotBoard["keepClear"][number]["area"], { shape: "ellipse" }>;

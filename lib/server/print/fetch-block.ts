@@ -1,10 +1,10 @@
 /** What to bring and to do before the first cut, beside the drawing of the face. */
 import "server-only";
-import { printedLength } from "@/lib/layout";
-import type { OrderSnapshot } from "@/lib/schemas/order-snapshot";
+import { type LengthStyle, printedLength } from "@/lib/layout";
+import type { OrderSnapshot, SnapshotBoard } from "@/lib/schemas/order-snapshot";
 import { testCuts } from "@/lib/schemas/order-steps";
 import { firstOfAll } from "@/lib/words/caution";
-import { markNote, styleOf } from "@/lib/words/order-step";
+import { markNote, markNoteOf, styleOf } from "@/lib/words/order-step";
 import { sizeFigures } from "@/lib/words/part-name";
 import { drawFace } from "./face-diagram";
 import { makeRoom, type Sheet } from "./sheet";
@@ -51,18 +51,34 @@ export function drawFetchBlock(sheet: Sheet, snapshot: OrderSnapshot): void {
 
 function rows(snapshot: OrderSnapshot): Row[] {
   const style = styleOf(snapshot);
-  const boards = snapshot.boards.map(({ tag, species, length, width, thickness, place }): string => {
-    const size = `${sizeFigures({ width: length, height: width }, style)} × ${printedLength(thickness, style).figure}`;
-    return [`Board ${tag}`, species, size, place].filter((part) => part !== "").join(", ");
-  });
+  const boards = snapshot.boards.flatMap((board) =>
+    board.gluing
+      ? board.gluing.members.map((member) => `${fetched(member, style)}, for blank ${board.tag}`)
+      : fetched(board, style),
+  );
   const unit = style.unit === "mm" ? "millimetres" : "inches";
   return [
     ...boards.map((value, i) => ({ label: i === 0 ? "Fetch" : "", value, style: measures })),
     ...sawRows(snapshot),
-    { label: "Mark first", value: markNote, style: sentence },
+    ...markRows(snapshot),
     { label: "Measures", value: `In ${unit}. Sizes are along the grain × across it.`, style: sentence },
     { label: "Before all", value: firstOfAll, style: sentence },
   ];
+}
+
+type Fetched = Pick<SnapshotBoard, "tag" | "species" | "length" | "width" | "thickness" | "place">;
+
+function fetched({ tag, species, length, width, thickness, place }: Fetched, style: LengthStyle): string {
+  const size = `${sizeFigures({ width: length, height: width }, style)} × ${printedLength(thickness, style).figure}`;
+  return [`Board ${tag}`, species, size, place].filter((part) => part !== "").join(", ");
+}
+
+/** Once for all boards that lie face up; boards that lie back up are named. */
+function markRows({ boards }: OrderSnapshot): Row[] {
+  const backUp = boards.filter(({ side }) => side === "back");
+  const usual = backUp.length < boards.length ? [markNote] : [];
+  const turned = backUp.map((board) => `${boards.length > 1 ? `Board ${board.tag}: ` : ""}${markNoteOf(board)}`);
+  return [...usual, ...turned].map((value, i) => ({ label: i === 0 ? "Mark first" : "", value, style: sentence }));
 }
 
 /** Each with a place for what the test cut shows. */
