@@ -59,6 +59,8 @@ function saidSentence(said: Said, style: LengthStyle, tagOf: TagOf): string {
       return said.swapsUndone.length === 0
         ? "Sizes changed."
         : `Sizes changed. ${fronts(said.swapsUndone)} went back to their own places, no longer being of one size.`;
+    case "moved-part":
+      return `Part ${said.piece.replace(/^p/, "")} moved ${way(said.axis === "x" ? { x: said.by, y: um(0) } : { x: um(0), y: said.by }, style)}.`;
     case "evened-gaps":
       return `Gaps are ${printLength(said.gap, style)} now. ${givenUp(said.mostGivenUp, style)}`;
   }
@@ -72,6 +74,21 @@ function refusalSentence(refusal: CommandRefusal, style: LengthStyle): string {
       return `Choose two fronts to swap; ${refusal.selected} ${refusal.selected === 1 ? "is" : "are"} chosen. Shift and click adds one.`;
     case "nothing-changes":
       return "That changes nothing.";
+    case "not-a-cut-out":
+    case "no-such-place":
+      return "This face has no such part.";
+    case "not-a-divider":
+      return "Only a fixed part between two fronts can be moved or taken out.";
+    case "not-a-front":
+      return "Choose a front: a divider can only stand in one.";
+    case "outer-strip":
+      return "The outer strips have fronts on one side only. Move the row instead.";
+    case "no-room":
+      return `There is room for ${printLength(um(-refusal.least), style)} one way and ${printLength(refusal.most, style)} the other.`;
+    case "opening-too-short":
+      return `The opening is ${printLength(refusal.missing, style)} too short for two fronts and a divider.`;
+    case "last-front":
+      return "A row keeps one front at least.";
     case "gaps-no-gaps":
       return "There are no gaps that way.";
     case "gaps-not-known":
@@ -90,6 +107,8 @@ function refusalSentence(refusal: CommandRefusal, style: LengthStyle): string {
       return `${fronts([refusal.piece])} is in the set already.`;
     case "same-piece":
       return "A front cannot change places with itself.";
+    case "one-blank":
+      return `${fronts(refusal.pieces)} are sawn as one blank and stay together.`;
     case "roles-differ":
       return "A front cannot change places with a part of the rail.";
     case "sizes-differ": {

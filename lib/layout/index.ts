@@ -69,6 +69,7 @@ export {
   type GluingShift,
   type TrimmedFront,
 } from "./pattern/cut-out/cut-out-plan";
+export { type CutOutPiece, piecesOfCutOut } from "./pattern/cut-out/cut-out-pieces";
 export { type CutOutWish, type FreshCutOut, freshCutOut } from "./pattern/cut-out/fresh-cut-out";
 export type {
   CutOutFace,

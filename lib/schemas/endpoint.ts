@@ -46,7 +46,14 @@ export type QueryOf<E extends Endpoint> = Out<E["query"]>;
 export type BodyOf<E extends Endpoint> = Out<E["body"]>;
 export type ParamsSent<E extends Endpoint> = In<E["params"]>;
 export type QuerySent<E extends Endpoint> = In<E["query"]>;
-export type BodySent<E extends Endpoint> = In<E["body"]>;
+/** Read-only all the way down: what is sent is often a document of the core, which nobody may write to. */
+export type BodySent<E extends Endpoint> = ReadonlyDeep<In<E["body"]>>;
+
+type ReadonlyDeep<T> = T extends readonly (infer Item)[]
+  ? readonly ReadonlyDeep<Item>[]
+  : T extends object
+    ? { readonly [Key in keyof T]: ReadonlyDeep<T[Key]> }
+    : T;
 /** What the browser gets, parsed. */
 export type ResponseOf<E extends Endpoint> = Out<E["response"]>;
 /** What the server answers with, before it is parsed and written. */

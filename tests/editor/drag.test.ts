@@ -128,7 +128,7 @@ describe("pointers", () => {
 
   it("a tap selects and moves nothing, however the hand trembles", () => {
     const { effects, state } = play([
-      { kind: "press", pointer: at(100), piece: "p2" },
+      { kind: "press", pointer: at(100), piece: "p2", part: false },
       { kind: "move", pointer: at(102) },
       { kind: "release", pointer: at(103) },
     ]);
@@ -138,7 +138,7 @@ describe("pointers", () => {
 
   it("a drag previews from the point of the press and commits once", () => {
     const { effects } = play([
-      { kind: "press", pointer: at(100), piece: "p2" },
+      { kind: "press", pointer: at(100), piece: "p2", part: false },
       { kind: "move", pointer: at(120) },
       { kind: "move", pointer: at(150) },
       { kind: "release", pointer: at(151) },
@@ -149,7 +149,7 @@ describe("pointers", () => {
 
   it("Escape drops a drag; what the pointer does afterwards means nothing", () => {
     const { effects } = play([
-      { kind: "press", pointer: at(100), piece: "p2" },
+      { kind: "press", pointer: at(100), piece: "p2", part: false },
       { kind: "move", pointer: at(120) },
       { kind: "cancel" },
       { kind: "move", pointer: at(180) },
@@ -160,7 +160,7 @@ describe("pointers", () => {
 
   it("a press beside the pieces moves the view, or selects nothing when it does not move", () => {
     const pan = play([
-      { kind: "press", pointer: at(100), piece: null },
+      { kind: "press", pointer: at(100), piece: null, part: false },
       { kind: "move", pointer: at(110) },
       { kind: "move", pointer: at(130) },
       { kind: "release", pointer: at(130) },
@@ -168,7 +168,7 @@ describe("pointers", () => {
     const total = pan.effects.reduce((sum, effect) => sum + (effect.do === "pan" ? effect.by.x : 0), 0);
     expect(total).toBe(30);
     const tap = play([
-      { kind: "press", pointer: at(100), piece: null },
+      { kind: "press", pointer: at(100), piece: null, part: false },
       { kind: "release", pointer: at(100) },
     ]);
     expect(tap.effects).toEqual([{ do: "select-nothing" }]);
@@ -177,7 +177,7 @@ describe("pointers", () => {
   it("pieces on the show side are selected but not dragged", () => {
     const show = { side: "show" } as const;
     const { effects } = play([
-      { kind: "press", pointer: at(100, show), piece: "p1" },
+      { kind: "press", pointer: at(100, show), piece: "p1", part: false },
       { kind: "move", pointer: at(140, show) },
       { kind: "release", pointer: at(140, show) },
     ]);
@@ -186,9 +186,9 @@ describe("pointers", () => {
 
   it("a second finger does not disturb a drag", () => {
     const { effects } = play([
-      { kind: "press", pointer: at(100), piece: "p1" },
+      { kind: "press", pointer: at(100), piece: "p1", part: false },
       { kind: "move", pointer: at(140) },
-      { kind: "press", pointer: at(300, { pointerId: 2 }), piece: "p3" },
+      { kind: "press", pointer: at(300, { pointerId: 2 }), piece: "p3", part: false },
       { kind: "move", pointer: at(310, { pointerId: 2 }) },
       { kind: "release", pointer: at(310, { pointerId: 2 }) },
       { kind: "release", pointer: at(141) },

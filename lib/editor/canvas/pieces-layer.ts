@@ -2,7 +2,7 @@
 import type { StaticCanvas } from "fabric";
 import { boundsOf, cleanUpEdges, type EdgeAmounts, type PieceId, polygonToStock, type StockRect } from "@/lib/layout";
 import { factsOf } from "../selectors/facts";
-import type { Preview } from "../tools/drag";
+import type { Preview, SlidePreview } from "../tools/drag";
 import type { TableGeometry } from "../view/geometry";
 import { type LossBand, paintLoss } from "./marks/loss-bands";
 import { type LinePx, paintPiece } from "./marks/piece-mark";
@@ -61,12 +61,12 @@ export class PiecesLayer {
       );
       this.#sketches.named(piece.id).put(box, paint);
     }
-    if (look.preview) this.#guides(look.preview, geometry, palette);
+    if (look.preview?.kind === "slide") this.#guides(look.preview, geometry, palette);
     this.#sketches.settle();
   }
 
   /** A line through the whole board where the edge of a piece has snapped to something. */
-  #guides({ along, across, stockId }: Preview, geometry: TableGeometry, palette: Palette): void {
+  #guides({ along, across, stockId }: SlidePreview, geometry: TableGeometry, palette: Palette): void {
     const place = geometry.boards.find((board) => board.stockId === stockId);
     if (!place) return;
     const px = geometry.stockPxPerMm / 1000;

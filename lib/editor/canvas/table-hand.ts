@@ -4,6 +4,7 @@ import { groupsOfPieces } from "../commands/targets";
 import { type Editor, type EditorState, shownLayout } from "../editor";
 import type { Store } from "../store";
 import { previewAt } from "../tools/drag";
+import { movablePart, partPreviewAt } from "../tools/part-drag";
 import { idleTool, type PointerAt, type PointerInput, type ToolEffect, type ToolState, toolStep } from "../tools/pointer-tool";
 import type { CurrentGeometry } from "../view/current-geometry";
 import { type TableGeometry, tablePointAt } from "../view/geometry";
@@ -38,7 +39,10 @@ export class TableHand implements PointerListener {
 
   onPress(pressed: SidePointer): void {
     const pointer = this.#toolPointer(pressed);
-    if (pointer) this.#play({ kind: "press", pointer, piece: this.#pieceUnder(pressed) });
+    if (!pointer) return;
+    const piece = this.#pieceUnder(pressed);
+    const { document } = this.#given.editor.get();
+    this.#play({ kind: "press", pointer, piece, part: piece !== null && movablePart(document.layout, piece) !== null });
   }
 
   onMove(moved: SidePointer): void {
@@ -101,6 +105,7 @@ export class TableHand implements PointerListener {
     else if (effect.do === "select") editor.select([effect.piece]);
     else if (effect.do === "select-nothing") editor.select([]);
     else if (effect.do === "preview") this.#showPreview(effect);
+    else if (effect.do === "preview-part") this.#showPart(effect);
     else if (effect.do === "commit-preview") editor.commitPreview();
     else if (effect.do === "drop-preview") editor.dropPreview();
     else this.onPan(effect.side, effect.by);
@@ -118,6 +123,15 @@ export class TableHand implements PointerListener {
     editor.showPreview(previewAt(document.layout, table, drag, at, { snapWithin, straight }));
   }
 
+  #showPart({ piece, by }: Extract<ToolEffect, { do: "preview-part" }>): void {
+    const { editor, geometry, hosts } = this.#given;
+    const now = geometry.now();
+    if (!now || !editor.mayChange) return;
+    const umPerPx = 1000 / now.showPxPerMm;
+    hosts.show.style.cursor = "grabbing";
+    editor.showPreview(partPreviewAt(editor.get().document.layout, piece, { x: by.x * umPerPx, y: by.y * umPerPx }));
+  }
+
   #toolPointer(pointer: SidePointer): PointerAt | null {
     const now = this.#given.geometry.now();
     return now && { ...pointer, point: tablePointAt(now, pointer.px) };
@@ -129,8 +143,15 @@ export class TableHand implements PointerListener {
   }
 
   #showCursor(pointer: SidePointer): void {
-    const over = this.#pieceUnder(pointer) !== null;
-    this.#given.hosts[pointer.side].style.cursor = !over ? "default" : pointer.side === "stock" ? "grab" : "pointer";
+    this.#given.hosts[pointer.side].style.cursor = this.#cursorOver(this.#pieceUnder(pointer), pointer.side);
+  }
+
+  #cursorOver(piece: PieceId | null, side: Side): string {
+    if (piece === null) return "default";
+    if (side === "stock") return "grab";
+    const part = movablePart(this.#given.editor.get().document.layout, piece);
+    if (part === null) return "pointer";
+    return part.axis === "x" ? "ew-resize" : "ns-resize";
   }
 }
 

@@ -1,5 +1,5 @@
 /** What a command comes to: one diff and what there is to say about it, or a refusal. Commands are pure: `(document, args) → outcome`. */
-import type { FaceLayout, LayoutChange, LayoutRefusal, PieceId, StockId, Um } from "@/lib/layout";
+import type { CutOutRefusal, FaceLayout, LayoutChange, LayoutRefusal, PieceId, StockId, Um } from "@/lib/layout";
 import { type Diff, diffBetween, isEmptyDiff } from "../diff";
 import type { TableDocument } from "../document";
 
@@ -18,10 +18,13 @@ export type Said =
   | { readonly did: "let-loose" | "regrouped"; readonly pieces: readonly PieceId[] }
   | { readonly did: "changed-cuts" | "changed-spacing" | "changed-anchor" | "changed-grain" }
   | { readonly did: "changed-sizes"; readonly swapsUndone: readonly PieceId[] }
+  /** A divider or a strip of a cut-out, on the show side. */
+  | { readonly did: "moved-part"; readonly piece: PieceId; readonly by: Um; readonly axis: "x" | "y" }
   | { readonly did: "evened-gaps"; readonly gap: Um; readonly mostGivenUp: Um };
 
 export type CommandRefusal =
   | LayoutRefusal
+  | CutOutRefusal
   | { readonly reason: "nothing-selected" }
   /** Swapping takes exactly two pieces. */
   | { readonly reason: "needs-two-pieces"; readonly selected: number }

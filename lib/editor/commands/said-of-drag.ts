@@ -6,6 +6,7 @@ import type { Said } from "./outcome";
 import { piecesOfGroups } from "./targets";
 
 export function saidOfDrag({ layout }: TableDocument, preview: Preview): Said {
+  if (preview.kind === "part") return { did: "moved-part", piece: preview.piece, by: preview.by, axis: preview.axis };
   const pieces = piecesOfGroups(layout, preview.groupIds);
   const [first] = preview.groupIds;
   const before = first === undefined ? null : (groupById(layout, first)?.placement ?? null);

@@ -14,6 +14,7 @@ import {
   um,
 } from "@/lib/layout";
 import { type BoardPlace, boardNear, type TablePoint } from "../view/geometry";
+import type { PartPreview } from "./part-drag";
 
 export interface Drag {
   /** All on wood when the drag began. */
@@ -34,8 +35,9 @@ export interface DragWish {
   readonly straight: boolean;
 }
 
-/** The layout as it would be if the pointer were let go now. */
-export interface Preview {
+/** Groups that slide: the layout as it would be if the pointer were let go now. */
+export interface SlidePreview {
+  readonly kind: "slide";
   readonly layout: FaceLayout;
   readonly groupIds: readonly string[];
   /** The board the groups would lie on. */
@@ -44,8 +46,11 @@ export interface Preview {
   readonly across: Snap | null;
 }
 
+/** A drag in progress: groups that slide on the wood, or a part of the face that is moved on the show side. */
+export type Preview = SlidePreview | PartPreview;
+
 /** Null when the groups lie on no board of the table. */
-export function previewAt(layout: FaceLayout, table: DragTable, drag: Drag, at: TablePoint, wish: DragWish): Preview | null {
+export function previewAt(layout: FaceLayout, table: DragTable, drag: Drag, at: TablePoint, wish: DragWish): SlidePreview | null {
   const total = straightened({ x: at.x - drag.start.x, y: at.y - drag.start.y }, wish.straight);
   const source = placeOfGroups(layout, table, drag.groupIds);
   const grabbed = boardNear(table.places, table.boards, drag.start.y);
@@ -64,6 +69,7 @@ export function previewAt(layout: FaceLayout, table: DragTable, drag: Drag, at: 
       : snapSlide(lifted, board, drag.groupIds, delta, wish.snapWithin);
   const by = wish.straight ? keptStraight(snapped.delta, total) : snapped.delta;
   return {
+    kind: "slide",
     layout: slid(lifted, drag.groupIds, by),
     groupIds: drag.groupIds,
     stockId: target.stockId,

@@ -19,14 +19,16 @@ export interface PointerAt {
 }
 
 export type PointerInput =
-  | { readonly kind: "press"; readonly pointer: PointerAt; readonly piece: PieceId | null }
+  /** `part`: a piece that is moved by itself on the show side, such as a divider. */
+  | { readonly kind: "press"; readonly pointer: PointerAt; readonly piece: PieceId | null; readonly part: boolean }
   | { readonly kind: "move" | "release"; readonly pointer: PointerAt }
   | { readonly kind: "cancel" };
 
 export type ToolState =
   | { readonly kind: "idle" }
-  | { readonly kind: "pressed"; readonly from: PointerAt; readonly piece: PieceId | null }
-  | { readonly kind: "dragging"; readonly from: PointerAt }
+  | { readonly kind: "pressed"; readonly from: PointerAt; readonly piece: PieceId | null; readonly part: boolean }
+  /** `part`: moved by itself on the show side; null: what is selected slides on the stock side. */
+  | { readonly kind: "dragging"; readonly from: PointerAt; readonly part: PieceId | null }
   | { readonly kind: "panning"; readonly from: PointerAt; readonly last: Pan };
 
 export type ToolEffect =
@@ -40,6 +42,8 @@ export type ToolEffect =
       readonly straight: boolean;
       readonly snap: boolean;
     }
+  /** Move one part of the face by this much on the show side. */
+  | { readonly do: "preview-part"; readonly piece: PieceId; readonly by: Pan }
   | { readonly do: "commit-preview" }
   | { readonly do: "drop-preview" }
   | { readonly do: "pan"; readonly side: Side; readonly by: Pan };
@@ -56,14 +60,17 @@ export const DRAG_STARTS_PX = 4;
 
 export function toolStep(state: ToolState, input: PointerInput, isSelected: (piece: PieceId) => boolean): ToolStep {
   if (input.kind === "cancel") return cancelled(state);
-  if (input.kind === "press") return state.kind === "idle" ? pressed(input.pointer, input.piece, isSelected) : only(state);
+  if (input.kind === "press") return state.kind === "idle" ? pressed(input, isSelected) : only(state);
   // A second finger is no part of this gesture.
   if (state.kind === "idle" || state.from.pointerId !== input.pointer.pointerId) return only(state);
   return input.kind === "move" ? moved(state, input.pointer) : released(state, input.pointer);
 }
 
-function pressed(from: PointerAt, piece: PieceId | null, isSelected: (piece: PieceId) => boolean): ToolStep {
-  const state: ToolState = { kind: "pressed", from, piece };
+function pressed(
+  { pointer: from, piece, part }: Extract<PointerInput, { kind: "press" }>,
+  isSelected: (piece: PieceId) => boolean,
+): ToolStep {
+  const state: ToolState = { kind: "pressed", from, piece, part };
   if (piece === null || (isSelected(piece) && !from.shift)) return only(state);
   return { state, effects: [{ do: "select", piece, add: from.shift }] };
 }
@@ -72,17 +79,20 @@ function moved(state: Exclude<ToolState, { kind: "idle" }>, at: PointerAt): Tool
   switch (state.kind) {
     case "pressed": {
       if (Math.hypot(at.px.x - state.from.px.x, at.px.y - state.from.px.y) < DRAG_STARTS_PX) return only(state);
-      const drags = state.piece !== null && state.from.side === "stock";
-      return moved(
-        drags ? { kind: "dragging", from: state.from } : { kind: "panning", from: state.from, last: state.from.px },
-        at,
-      );
+      const { from, piece } = state;
+      const part = state.part && from.side === "show" ? piece : null;
+      const drags = piece !== null && (from.side === "stock" || part !== null);
+      return moved(drags ? { kind: "dragging", from, part } : { kind: "panning", from, last: from.px }, at);
     }
-    case "dragging":
+    case "dragging": {
+      const { from, part } = state;
+      const by = { x: at.px.x - from.px.x, y: at.px.y - from.px.y };
+      if (part !== null) return { state, effects: [{ do: "preview-part", piece: part, by }] };
       return {
         state,
         effects: [{ do: "preview", from: state.from.point, at: at.point, straight: at.shift, snap: !at.alt }],
       };
+    }
     case "panning": {
       const by = { x: at.px.x - state.last.x, y: at.px.y - state.last.y };
       return { state: { ...state, last: at.px }, effects: [{ do: "pan", side: state.from.side, by }] };
