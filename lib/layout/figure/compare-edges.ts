@@ -20,16 +20,18 @@ const FIGURE_MM = 20;
  * tail of 3.5 σ), the best of some ten independent lags within reach once in 400; edges of different trees measured: once in 90.
  */
 const CHANCE_DEVIATIONS = 3.5;
-/** Least coherence of either side. At 0.25 the contrast along the grain is three fifths of that across it: no direction to speak of. */
-const LEAST_COHERENCE = 0.25;
+/** Least peak. At 0.4 a sixth (0.4²) of what is seen on one side is seen on the other: however surely, that is no figure running on. */
+const LEAST_PEAK = 0.4;
+/** Least coherence of either side. Noise alone gives up to 0.1 over the shortest edge that is compared. */
+const LEAST_COHERENCE = 0.15;
 /** Grain within 30° of the seam runs along it: 4 mm into the wood a line has then wandered 7 mm, as far as the reach itself. */
 const ALONG_RAD = Math.PI / 6;
 /** Another peak is one that lies further off than this; nearer ones are ripples on one peak, since no ring is so narrow. */
 const APART_MM = 1;
 
-/** Whether lines of this direction (0 along the seam) run along the seam. */
+/** Whether lines of this direction (0 square to the seam) run along it. */
 export function runsAlong(direction: number): boolean {
-  return Math.abs(Math.sin(direction)) < Math.sin(ALONG_RAD);
+  return Math.abs(Math.cos(direction)) < Math.sin(ALONG_RAD);
 }
 
 /** Both sides must be equally long. */
@@ -40,7 +42,7 @@ export function compareEdges(a: EdgeProfile, b: EdgeProfile): SeamFigure {
   const reach = (likeness.length - 1) / 2;
   const at = (i: number) => likeness[i] as number;
   const peak = at(best);
-  if (peak < CHANCE_DEVIATIONS * chance) return { kind: "cannotTell", why: "noLikeness" };
+  if (peak < Math.max(LEAST_PEAK, CHANCE_DEVIATIONS * chance)) return { kind: "cannotTell", why: "noLikeness" };
   if (best === 0 || best === likeness.length - 1) return { kind: "cannotTell", why: "beyondReach" };
   if (peak - nextPeak(likeness, best) < chance) return { kind: "cannotTell", why: "twoAnswers" };
   const lag = best - reach + vertex(at(best - 1), peak, at(best + 1));

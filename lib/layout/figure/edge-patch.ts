@@ -1,31 +1,25 @@
 /**
  * The wood beside one edge of a piece, resampled so that seams read alike however the piece lies in its board: turned, mirrored,
- * finer or coarser. One row of the patch is one line parallel to the edge.
+ * finer or coarser.
  */
 import type { Isometry } from "../frame/isometry";
+import type { Grey } from "./cell-tensor";
 import { LUMINANCE, type StockPicture } from "./stock-picture";
 
 /** Samples are this far apart in mm along the edge and into the piece: one pixel of the finest picture that is stored (4 px/mm). */
 export const SAMPLE_MM = 0.25;
 
-/** A place beside an edge on the face, in mm: along the edge from its first point, and into the piece from the edge. */
+/** An edge on the face. */
 export interface EdgeFrame {
-  /** First point of the edge on the face, µm. */
+  /** Its first point, µm. */
   readonly x: number;
   readonly y: number;
-  /** Unit vectors on the face. */
+  /** Unit vectors on the face: along the edge, and into the piece. */
   readonly along: { readonly x: number; readonly y: number };
   readonly into: { readonly x: number; readonly y: number };
 }
 
-/** Luminance 0…255 at (i + ½, j + ½)·SAMPLE_MM along the edge and into the piece, row by row; `columns` runs along the edge. */
-export interface EdgePatch {
-  readonly light: Float32Array;
-  readonly columns: number;
-  readonly rows: number;
-}
-
-/** Picture pixels from millimetres along an edge and into its piece. */
+/** Picture pixels from millimetres along an edge and into its piece: (x, y) + along·(alongX, alongY) + into·(intoX, intoY). */
 export interface EdgeMap {
   readonly x: number;
   readonly y: number;
@@ -48,17 +42,20 @@ export function edgeMap(edge: EdgeFrame, { a, b, c, d, tx, ty }: Isometry, pxPer
   };
 }
 
-/** A patch from `fromMm` along the edge, `columns` long and `rows` deep. Beyond the picture's rim the rim's pixels go on. */
-export function edgePatch({ pixels }: StockPicture, map: EdgeMap, fromMm: number, columns: number, rows: number): EdgePatch {
+/**
+ * Luminance beside an edge from `fromMm` on: x runs into the piece, `depth` samples; y along the edge, `length` samples. Sample
+ * (i, k) is the place (i + ½)·SAMPLE_MM in and fromMm + (k + ½)·SAMPLE_MM along. Beyond the picture's rim the rim's pixels go on.
+ */
+export function edgePatch({ pixels }: StockPicture, map: EdgeMap, fromMm: number, length: number, depth: number): Grey {
   const { data, width, height, channels } = pixels;
-  const light = new Float32Array(columns * rows);
+  const light = new Float32Array(length * depth);
   const stride = width * channels;
   const lightAt = (at: number) =>
     LUMINANCE.r * (data[at] as number) + LUMINANCE.g * (data[at + 1] as number) + LUMINANCE.b * (data[at + 2] as number);
-  for (let j = 0, i = 0; j < rows; j++) {
-    const into = (j + 0.5) * SAMPLE_MM;
-    for (let k = 0; k < columns; k++, i++) {
-      const along = fromMm + (k + 0.5) * SAMPLE_MM;
+  for (let k = 0, to = 0; k < length; k++) {
+    const along = fromMm + (k + 0.5) * SAMPLE_MM;
+    for (let i = 0; i < depth; i++, to++) {
+      const into = (i + 0.5) * SAMPLE_MM;
       // Pixel centres lie at +½.
       const u = Math.min(width - 1, Math.max(0, map.x + map.alongX * along + map.intoX * into - 0.5));
       const v = Math.min(height - 1, Math.max(0, map.y + map.alongY * along + map.intoY * into - 0.5));
@@ -69,8 +66,8 @@ export function edgePatch({ pixels }: StockPicture, map: EdgeMap, fromMm: number
       const down = row + 1 < height ? stride : 0;
       const top = lightAt(at) * (1 - u + column) + lightAt(at + right) * (u - column);
       const bottom = lightAt(at + down) * (1 - u + column) + lightAt(at + down + right) * (u - column);
-      light[i] = top + (bottom - top) * (v - row);
+      light[to] = top + (bottom - top) * (v - row);
     }
   }
-  return { light, columns, rows };
+  return { light, width: depth, height: length };
 }

@@ -2,13 +2,15 @@
  * The figure as it arrives at an edge: luminance along the edge, averaged over the first few millimetres of wood along the local
  * direction of the grain, so that lines which meet the edge askew stay sharp and are read where they reach it.
  */
-import { type EdgePatch, SAMPLE_MM } from "./edge-patch";
-import { coherenceOf, lineDirection, type Tensor } from "./structure-tensor";
+import { type CellTensor, cellTensor, type Grey } from "./cell-tensor";
+import { SAMPLE_MM } from "./edge-patch";
+import { CELL_MM, SMOOTHED_MM } from "./grain-field";
+import { coherenceOf, lineDirection, type Tensor, tensorSum } from "./structure-tensor";
 
 /** Depth of wood that a profile is the mean of. */
 export const PROFILE_MM = 4;
-/** Direction is taken over this much wood, along the edge and into the piece: the cell of the grain field. */
-export const CELL_MM = 10;
+/** Depth of wood that the direction is taken from: a cell of the grain field and what its smoothing takes at both ends. */
+export const DIRECTION_MM = CELL_MM + SMOOTHED_MM;
 /** Lines that lie flatter to the edge than this are not followed: 4 mm in, they would come from 7 mm along. */
 const FLATTEST_FOLLOWED = Math.tan((60 * Math.PI) / 180);
 /**
@@ -17,64 +19,40 @@ const FLATTEST_FOLLOWED = Math.tan((60 * Math.PI) / 180);
  */
 const SHARE_OF_WHOLE = 0.1;
 
-/** The tensor of every cell along a patch, each with x along the edge and y into the piece. */
-export function tensorsAlong(patch: EdgePatch): Tensor[] {
-  const { light, columns, rows } = patch;
-  const cellColumns = CELL_MM / SAMPLE_MM;
-  const cells = Math.max(1, Math.round(columns / cellColumns));
-  const sums = Array.from({ length: cells }, () => ({ xx: 0, yy: 0, xy: 0 }));
-  for (let j = 1; j < rows - 1; j++) {
-    for (let k = 1; k < columns - 1; k++) {
-      const at = j * columns + k;
-      const value = (offset: number) => light[at + offset] as number;
-      // Scharr's 3 × 3 weights (3, 10, 3) favour no direction; the factor is common to both and drops out.
-      const dx =
-        3 * (value(1 - columns) - value(-1 - columns)) +
-        10 * (value(1) - value(-1)) +
-        3 * (value(1 + columns) - value(-1 + columns));
-      const dy =
-        3 * (value(columns - 1) - value(-columns - 1)) +
-        10 * (value(columns) - value(-columns)) +
-        3 * (value(columns + 1) - value(1 - columns));
-      const sum = sums[Math.min(cells - 1, Math.floor((k * cells) / columns))] as { xx: number; yy: number; xy: number };
-      sum.xx += dx * dx;
-      sum.yy += dy * dy;
-      sum.xy += dx * dy;
-    }
-  }
-  return sums;
-}
-
-/** Sum of tensors. */
-export function tensorSum(tensors: readonly Tensor[]): Tensor {
-  return tensors.reduce((sum, { xx, yy, xy }) => ({ xx: sum.xx + xx, yy: sum.yy + yy, xy: sum.xy + xy }), {
-    xx: 0,
-    yy: 0,
-    xy: 0,
-  });
-}
-
 export interface EdgeProfile {
+  /** One value a sample of the edge. */
   readonly light: Float64Array;
-  /** Direction of the grain against the edge over its whole length: 0 along the edge, ±π/2 square to it. */
+  /** Direction of the grain over the whole edge, in (−π/2, π/2]: 0 straight into the piece, ±π/2 along the edge. */
   readonly direction: number;
   readonly coherence: number;
 }
 
-/** The profile of a patch that is at least `PROFILE_MM` deep. One value a sample of the edge. */
-export function edgeProfile(patch: EdgePatch): EdgeProfile {
-  const tensors = tensorsAlong(patch);
+/** The profile of a patch `DIRECTION_MM` deep. */
+export function edgeProfile(patch: Grey): EdgeProfile {
+  const cells = tensorsAlong(halved(patch));
+  const tensors = cells.map(({ tensor }) => tensor);
   const whole = tensorSum(tensors);
+  const noise = tensorSum(cells.map((cell) => cell.noise));
   const slopes = slopesOf(tensors, whole);
-  const depth = Math.min(patch.rows, Math.round(PROFILE_MM / SAMPLE_MM));
-  const light = new Float64Array(patch.columns);
-  for (let k = 0; k < patch.columns; k++) {
-    const slope = between(slopes, ((k + 0.5) * slopes.length) / patch.columns - 0.5);
+  const depth = Math.min(patch.width, Math.round(PROFILE_MM / SAMPLE_MM));
+  const light = new Float64Array(patch.height);
+  for (let k = 0; k < patch.height; k++) {
+    const slope = between(slopes, ((k + 0.5) * slopes.length) / patch.height - 0.5, 0, 1, slopes.length);
     let sum = 0;
-    for (let j = 0; j < depth; j++) sum += between(patch.light, k + slope * (j + 0.5), j * patch.columns, patch.columns);
+    for (let i = 0; i < depth; i++) sum += between(patch.light, k + slope * (i + 0.5), i, patch.width, patch.height);
     light[k] = sum / depth;
   }
-  return { light, direction: lineDirection(whole), coherence: coherenceOf(whole) };
+  return { light, direction: lineDirection(whole), coherence: coherenceOf(whole, noise) };
+}
+
+/** The tensors of even cells along the edge, each about `CELL_MM` long and as deep as the patch. */
+function tensorsAlong(grey: Grey): CellTensor[] {
+  const count = Math.max(1, Math.round((grey.height * 2 * SAMPLE_MM) / CELL_MM));
+  const edge = (i: number) => Math.round((i * grey.height) / count);
+  const reach = Math.round(SMOOTHED_MM / (4 * SAMPLE_MM));
+  return Array.from({ length: count }, (_, i) =>
+    cellTensor(grey, { fromX: 0, toX: grey.width, fromY: edge(i), toY: edge(i + 1) }, reach),
+  );
 }
 
 /** How far along the edge a line wanders a step into the piece, cell by cell, smoothed over neighbours with weights 1, 2, 1. */
@@ -83,16 +61,27 @@ function slopesOf(tensors: readonly Tensor[], whole: Tensor): number[] {
   return tensors.map((tensor, i) => {
     const near = tensorSum([tensors[i - 1] ?? tensor, tensor, tensor, tensors[i + 1] ?? tensor]);
     const held = { xx: near.xx / 4 + share * whole.xx, yy: near.yy / 4 + share * whole.yy, xy: near.xy / 4 + share * whole.xy };
-    const slope = 1 / Math.tan(lineDirection(held));
-    return Math.max(-FLATTEST_FOLLOWED, Math.min(FLATTEST_FOLLOWED, slope));
+    return Math.max(-FLATTEST_FOLLOWED, Math.min(FLATTEST_FOLLOWED, Math.tan(lineDirection(held))));
   });
 }
 
-/** The value between two neighbours of a run of numbers; the first and last go on beyond it. */
-function between(values: ArrayLike<number>, at: number, start = 0, count = values.length): number {
+/** Mean of squares of four: the scale at which direction is read (`GRAIN_PX_PER_MM`). */
+function halved({ light, width, height }: Grey): Grey {
+  const half = { width: Math.floor(width / 2), height: Math.floor(height / 2) };
+  const mean = new Float32Array(half.width * half.height);
+  for (let y = 0; y < 2 * half.height; y++) {
+    for (let x = 0; x < 2 * half.width; x++) {
+      const at = (y >> 1) * half.width + (x >> 1);
+      mean[at] = (mean[at] as number) + (light[y * width + x] as number) / 4;
+    }
+  }
+  return { light: mean, ...half };
+}
+
+/** The value between two neighbours of `count` numbers `stride` apart; the first and last go on beyond them. */
+function between(values: ArrayLike<number>, at: number, start: number, stride: number, count: number): number {
   const held = Math.max(0, Math.min(count - 1, at));
-  const below = Math.min(count - 2, Math.floor(held));
-  if (below < 0) return values[start] as number;
-  const low = values[start + below] as number;
-  return low + ((values[start + below + 1] as number) - low) * (held - below);
+  const below = Math.min(Math.max(0, count - 2), Math.floor(held));
+  const low = values[start + below * stride] as number;
+  return count === 1 ? low : low + ((values[start + (below + 1) * stride] as number) - low) * (held - below);
 }

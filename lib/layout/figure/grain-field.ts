@@ -2,6 +2,7 @@
  * The direction of the grain over a board, from its straightened picture: structure tensor on luminance, one cell every 10 mm.
  * Directions are averaged in doubled angles by summing tensors.
  */
+import { cellTensor } from "./cell-tensor";
 import { greyPicture } from "./grey-picture";
 import type { StockPicture } from "./stock-picture";
 import { coherenceOf, lineDirection } from "./structure-tensor";
@@ -18,45 +19,28 @@ export interface GrainField {
 }
 
 /** A few rings wide, and finer than a knot's surroundings. */
-const CELL_MM = 10;
+export const CELL_MM = 10;
 /** The finest rings are about 1 mm; at this scale they still have a dark and a light pixel, and sensor noise is averaged away. */
-const GRAIN_PX_PER_MM = 2;
+export const GRAIN_PX_PER_MM = 2;
+/** Length of wood averaged along the expected grain: most of the distance between two marks of a saw's teeth or a planer's knives. */
+export const SMOOTHED_MM = 3;
 
 /** Direction and coherence of every cell. */
 export function grainField(picture: StockPicture): GrainField {
-  const { light, width, height, pxPerMm } = greyPicture(picture, GRAIN_PX_PER_MM);
-  const columns = Math.max(1, Math.ceil(width / (CELL_MM * pxPerMm) - 1e-6));
-  const rows = Math.max(1, Math.ceil(height / (CELL_MM * pxPerMm) - 1e-6));
-  const columnOf = Uint16Array.from({ length: width }, (_, x) =>
-    Math.min(columns - 1, Math.floor((x + 0.5) / (CELL_MM * pxPerMm))),
-  );
-  const xx = new Float64Array(columns * rows);
-  const yy = new Float64Array(columns * rows);
-  const xy = new Float64Array(columns * rows);
-  for (let y = 1; y < height - 1; y++) {
-    const first = Math.min(rows - 1, Math.floor((y + 0.5) / (CELL_MM * pxPerMm))) * columns;
-    for (let x = 1, at = y * width + 1; x < width - 1; x++, at++) {
-      const above = at - width;
-      const below = at + width;
-      const nw = light[above - 1] as number;
-      const ne = light[above + 1] as number;
-      const sw = light[below - 1] as number;
-      const se = light[below + 1] as number;
-      // Scharr's weights (3, 10, 3) favour no direction; their factor drops out.
-      const dx = 3 * (ne - nw + se - sw) + 10 * ((light[at + 1] as number) - (light[at - 1] as number));
-      const dy = 3 * (sw - nw + se - ne) + 10 * ((light[below] as number) - (light[above] as number));
-      const cell = first + (columnOf[x] as number);
-      xx[cell] = (xx[cell] as number) + dx * dx;
-      yy[cell] = (yy[cell] as number) + dy * dy;
-      xy[cell] = (xy[cell] as number) + dx * dy;
-    }
-  }
+  const grey = greyPicture(picture, GRAIN_PX_PER_MM);
+  const columns = Math.max(1, Math.ceil(grey.width / (CELL_MM * grey.pxPerMm) - 1e-6));
+  const rows = Math.max(1, Math.ceil(grey.height / (CELL_MM * grey.pxPerMm) - 1e-6));
+  const edge = (cell: number) => Math.round(cell * CELL_MM * grey.pxPerMm);
+  const reach = Math.round((SMOOTHED_MM * grey.pxPerMm) / 2);
   const direction = new Float32Array(columns * rows);
   const coherence = new Float32Array(columns * rows);
-  for (let cell = 0; cell < direction.length; cell++) {
-    const tensor = { xx: xx[cell] as number, yy: yy[cell] as number, xy: xy[cell] as number };
-    direction[cell] = lineDirection(tensor);
-    coherence[cell] = coherenceOf(tensor);
+  for (let row = 0, i = 0; row < rows; row++) {
+    for (let column = 0; column < columns; column++, i++) {
+      const cell = { fromX: edge(column), toX: edge(column + 1), fromY: edge(row), toY: edge(row + 1) };
+      const { tensor, noise } = cellTensor(grey, cell, reach);
+      direction[i] = lineDirection(tensor);
+      coherence[i] = coherenceOf(tensor, noise);
+    }
   }
   return { cellMm: CELL_MM, columns, rows, direction, coherence };
 }

@@ -6,7 +6,7 @@ import type { Piece, StockId } from "../piece";
 import type { Seam } from "../seam/seam";
 import { compareEdges, runsAlong } from "./compare-edges";
 import { type EdgeMap, edgeMap, edgePatch, SAMPLE_MM } from "./edge-patch";
-import { CELL_MM, type EdgeProfile, edgeProfile, PROFILE_MM } from "./edge-profile";
+import { DIRECTION_MM, type EdgeProfile, edgeProfile, PROFILE_MM } from "./edge-profile";
 import { meanColour } from "./mean-colour";
 import type { CannotTell, SeamFigure, SeamReading } from "./seam-reading";
 import type { StockPicture } from "./stock-picture";
@@ -42,7 +42,12 @@ interface Side {
 
 type SideOrReason = Side | Extract<CannotTell, "notLaid" | "noPicture">;
 
-function sideOf({ from, to, gap, normal }: Seam, piece: Piece | undefined, pictureOf: PictureOf, which: "a" | "b"): SideOrReason {
+function sideOf(
+  { from, to, facing, normal }: Seam,
+  piece: Piece | undefined,
+  pictureOf: PictureOf,
+  which: "a" | "b",
+): SideOrReason {
   if (piece === undefined) return "notLaid";
   const picture = pictureOf(piece.stockId);
   if (picture === null) return "noPicture";
@@ -50,9 +55,7 @@ function sideOf({ from, to, gap, normal }: Seam, piece: Piece | undefined, pictu
   const length = Math.hypot(to.x - from.x, to.y - from.y);
   const along = length > 0 ? { x: (to.x - from.x) / length, y: (to.y - from.y) / length } : { x: n.y, y: n.x };
   const edge =
-    which === "a"
-      ? { x: from.x, y: from.y, along, into: { x: -n.x, y: -n.y } }
-      : { x: from.x + n.x * gap, y: from.y + n.y * gap, along, into: n };
+    which === "a" ? { x: from.x, y: from.y, along, into: { x: -n.x, y: -n.y } } : { x: facing.x, y: facing.y, along, into: n };
   const map = edgeMap(edge, piece.stockFromFace, picture.pxPerMm);
   const whole = { fromMm: 0, toMm: length / 1000 };
   return { picture, map, whole, shown: stretchInside(whole, map, PROFILE_MM, picture.pixels) };
@@ -67,7 +70,7 @@ function figureOf(a: SideOrReason, b: SideOrReason): SeamFigure {
   if (typeof b === "string") return cannotTell(b);
   if (a.whole.toMm < LEAST_MM) return cannotTell("tooShort");
   // The stock's x axis is the grain, so a seam along it is one whatever the picture seems to show.
-  if ([a, b].some(({ map }) => runsAlong(Math.atan2(map.alongY, map.alongX)))) return cannotTell("grainAlongSeam");
+  if ([a, b].some(({ map }) => runsAlong(Math.atan2(map.alongX, map.alongY)))) return cannotTell("grainAlongSeam");
   const fromMm = Math.max(a.shown.fromMm, b.shown.fromMm);
   const toMm = Math.min(a.shown.toMm, b.shown.toMm);
   if (toMm - fromMm < LEAST_MM) return cannotTell("outsidePicture");
@@ -75,8 +78,8 @@ function figureOf(a: SideOrReason, b: SideOrReason): SeamFigure {
 }
 
 function profileOf({ picture, map }: Side, fromMm: number, toMm: number): EdgeProfile {
-  const columns = Math.floor((toMm - fromMm) / SAMPLE_MM);
-  return edgeProfile(edgePatch(picture, map, fromMm, columns, CELL_MM / SAMPLE_MM));
+  const length = Math.floor((toMm - fromMm) / SAMPLE_MM);
+  return edgeProfile(edgePatch(picture, map, fromMm, length, DIRECTION_MM / SAMPLE_MM));
 }
 
 function cannotTell(why: CannotTell): SeamFigure {

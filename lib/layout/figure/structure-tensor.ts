@@ -20,8 +20,26 @@ export function lineDirection({ xx, yy, xy }: Tensor): number {
   return gradient > 0 ? gradient - Math.PI / 2 : gradient + Math.PI / 2;
 }
 
-/** 0: no direction at all, or an even place; 1: every line runs the same way. */
-export function coherenceOf({ xx, yy, xy }: Tensor): number {
-  const trace = xx + yy;
-  return trace > 0 ? Math.hypot(xx - yy, 2 * xy) / trace : 0;
+/** What white noise gives: gradients of every direction, none favoured. */
+export const EVEN_NOISE: Tensor = { xx: 1, yy: 1, xy: 0 };
+
+/**
+ * 0: no direction at all, or an even place; 1: every line runs the same way. Where the picture was averaged along one direction before,
+ * noise looks like lines too; `noise` is the tensor that white noise would then give, and what it gives counts as no direction: the
+ * eigenvalues of noise⁻¹·tensor take the place of the tensor's own.
+ */
+export function coherenceOf({ xx, yy, xy }: Tensor, noise: Tensor = EVEN_NOISE): number {
+  const whole = noise.xx * noise.yy - noise.xy * noise.xy;
+  const trace = (noise.yy * xx + noise.xx * yy - 2 * noise.xy * xy) / whole;
+  const product = (xx * yy - xy * xy) / whole;
+  return trace > 0 ? Math.sqrt(Math.max(0, 1 - (4 * product) / (trace * trace))) : 0;
+}
+
+/** Sum of tensors: their directions averaged, by contrast. */
+export function tensorSum(tensors: readonly Tensor[]): Tensor {
+  return tensors.reduce((sum, { xx, yy, xy }) => ({ xx: sum.xx + xx, yy: sum.yy + yy, xy: sum.xy + xy }), {
+    xx: 0,
+    yy: 0,
+    xy: 0,
+  });
 }
