@@ -41,10 +41,18 @@ function sizeText({ length, width }: Pick<BoardRow, "length" | "width">, style: 
 
 const badge = "rounded-sm border px-1.5 text-xs leading-5";
 
-export function BoardBadges({ board }: { board: Pick<BoardRow, "held" | "state"> }) {
+type Badged = Pick<BoardRow, "held" | "state" | "kind" | "inBlank">;
+
+/** Whether there is anything to say beside the facts. */
+export const hasBadges = ({ held, state, kind, inBlank }: Badged): boolean =>
+  held.length > 0 || state !== "rack" || kind === "blank" || inBlank !== null;
+
+export function BoardBadges({ board }: { board: Badged }) {
   const jobs = [...new Set(board.held.map(({ jobTitle }) => jobTitle))];
   return (
     <>
+      {board.kind === "blank" && <span className={`${badge} border-line bg-sheet text-graphite`}>blank</span>}
+      {board.inBlank && <span className={`${badge} border-chalk bg-sheet text-chalk`}>in blank {board.inBlank.tag}</span>}
       {jobs.map((title) => (
         <span key={title} className={`${badge} border-chalk bg-sheet text-chalk`}>
           held, {title}

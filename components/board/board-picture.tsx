@@ -1,25 +1,72 @@
 "use client";
 import Image from "next/image";
 import { WoodStrip } from "@/components/picture/wood-strip";
+import { mmFromUm, um } from "@/lib/layout";
 import type { Board } from "@/lib/schemas/board";
 import type { Straightening } from "@/lib/schemas/straightening";
+import { SidesNotice } from "./sides-notice";
 import { ZonesOverlay, zonesWords } from "./zones-overlay";
 
-/** The board as it lies in the rack: its straightened picture under the tape, with what was drawn on it. */
-export function BoardPicture({ board, version }: { board: Board; version: Straightening }) {
+interface Props {
+  board: Board;
+  face: Straightening;
+  back: Straightening | null;
+}
+
+/**
+ * The board as it lies in the rack under the tape, with what was drawn on it; below it its back, at the same scale, as it lies once the
+ * board is turned over about its long edge.
+ */
+export function BoardPicture({ board, face, back }: Props) {
+  const longest = um(Math.max(face.length, back?.length ?? 0));
+  const widest = um(Math.max(face.width, back?.width ?? 0));
   return (
-    <figure>
-      <WoodStrip label={`${board.tag} under the tape`} length={version.length} width={version.width}>
-        {({ width, height }) => (
-          <div className="relative" style={{ width, height }}>
-            <VersionImage version={version} width={width} height={height} tag={board.tag} />
-            <ZonesOverlay length={version.length} width={version.width} zones={version.zones} />
-          </div>
+    <div className="flex flex-col gap-2">
+      <WoodStrip label={`${board.tag} under the tape`} length={longest} width={widest}>
+        {({ pxPerMm }) => (
+          <>
+            <Side board={board} version={face} pxPerMm={pxPerMm} />
+            {back && (
+              <>
+                <p className="sticky left-0 w-fit py-1 text-sm text-pencil">
+                  The back, turned over about the long edge: its upper edge is the face's lower one.
+                </p>
+                <Side board={board} version={back} pxPerMm={pxPerMm} />
+              </>
+            )}
+          </>
         )}
       </WoodStrip>
-      <figcaption className="mt-1 text-sm text-pencil">
-        Version {version.version}. {zonesWords(version.zones)}.
-      </figcaption>
+      <p className="text-sm text-pencil">
+        {back && "Face: "}Version {face.version}. {zonesWords(face.zones)}.
+        {back && (
+          <span className="block">
+            Back: Version {back.version}. {zonesWords(back.zones)}.
+          </span>
+        )}
+      </p>
+      {back && <SidesNotice face={face} back={back} />}
+    </div>
+  );
+}
+
+interface SideProps {
+  board: Board;
+  version: Straightening;
+  pxPerMm: number;
+}
+
+function Side({ board, version, pxPerMm }: SideProps) {
+  const size = { width: mmFromUm(version.length) * pxPerMm, height: mmFromUm(version.width) * pxPerMm };
+  const name = version.side === "back" ? `the back of ${board.tag}` : board.tag;
+  return (
+    <figure
+      className="relative"
+      style={size}
+      aria-label={version.side === "back" ? `Back of ${board.tag}` : `Face of ${board.tag}`}
+    >
+      <VersionImage version={version} {...size} name={name} />
+      <ZonesOverlay length={version.length} width={version.width} zones={version.zones} />
     </figure>
   );
 }
@@ -28,11 +75,11 @@ interface ImageProps {
   version: Straightening;
   width: number;
   height: number;
-  tag: string;
+  name: string;
 }
 
 /** The smallest level that still has a pixel for every pixel of the screen. */
-function VersionImage({ version, width, height, tag }: ImageProps) {
+function VersionImage({ version, width, height, name }: ImageProps) {
   const wanted = width * window.devicePixelRatio;
   const level = version.levels.findLast(({ widthPx }) => widthPx >= wanted) ?? version.levels[0];
   if (!level) return null;
@@ -41,7 +88,7 @@ function VersionImage({ version, width, height, tag }: ImageProps) {
       unoptimized
       priority
       src={level.url}
-      alt={`${tag}, straightened`}
+      alt={`${name}, straightened`}
       width={level.widthPx}
       height={level.heightPx}
       className="block max-w-none"

@@ -1,21 +1,22 @@
 "use client";
-/** One board: its picture under the tape, what is written about it, how it came here and what holds it. */
+/** One board: its pictures under the tape, what is written about it, how it came here and what holds it. */
 import Link from "next/link";
 import { type ReactNode, useState } from "react";
-import { Button, buttonClass } from "@/components/ui/button";
+import { Button } from "@/components/ui/button";
+import { Notice } from "@/components/ui/notice";
 import { PageTitle } from "@/components/ui/page-title";
 import type { Board } from "@/lib/schemas/board";
 import type { HistoryRow } from "@/lib/schemas/history";
 import type { Straightening } from "@/lib/schemas/straightening";
-import { BoardBadges } from "./board-facts";
+import { BlankBoards } from "./blank-boards";
+import { BoardActions } from "./board-actions";
+import { BoardBadges, hasBadges } from "./board-facts";
 import { BoardPicture } from "./board-picture";
 import { BoardStory } from "./board-story";
 import { BoardStrip } from "./board-strip";
 import { ChangeBoardForm } from "./change-board-form";
-import { ChoosePhoto } from "./choose-photo";
 import { FactList } from "./fact-list";
 import { Readings } from "./readings";
-import { UseInJob } from "./use-in-job";
 import { VersionProgress } from "./version-progress";
 import { Versions } from "./versions";
 
@@ -30,7 +31,8 @@ interface Props {
 
 export function BoardScreen({ board, versions, story, species, mayEdit }: Props) {
   const [editing, setEditing] = useState(false);
-  const shown = versions.find(({ id }) => id === board.straighteningId);
+  const face = versions.find(({ id }) => id === board.straighteningId);
+  const back = versions.find(({ id }) => id === board.backStraighteningId) ?? null;
   const newest = versions[0];
   return (
     <>
@@ -42,16 +44,17 @@ export function BoardScreen({ board, versions, story, species, mayEdit }: Props)
           </Link>
         }
       >
-        {mayEdit && <BoardActions board={board} lastPhotoId={newest?.photoId ?? null} />}
+        {mayEdit && <BoardActions board={board} versions={versions} />}
       </PageTitle>
       <div className="flex flex-col gap-6 p-4 md:p-5">
-        {board.held.length + (board.state === "rack" ? 0 : 1) > 0 && (
+        {hasBadges(board) && (
           <p className="flex flex-wrap gap-2">
             <BoardBadges board={board} />
           </p>
         )}
-        {newest && newest.id !== shown?.id && <VersionProgress version={newest} mayEdit={mayEdit} />}
-        {shown ? <BoardPicture board={board} version={shown} /> : <NoPicture board={board} mayEdit={mayEdit} />}
+        {board.inBlank && <InBlank tag={board.tag} into={board.inBlank} />}
+        {newest && newest.id !== face?.id && newest.id !== back?.id && <VersionProgress version={newest} mayEdit={mayEdit} />}
+        {face ? <BoardPicture board={board} face={face} back={back} /> : <NoPicture board={board} mayEdit={mayEdit} />}
         <div className="grid gap-x-10 gap-y-8 lg:grid-cols-2">
           <Section
             title="Facts"
@@ -70,14 +73,19 @@ export function BoardScreen({ board, versions, story, species, mayEdit }: Props)
               <FactList board={board} />
             )}
           </Section>
+          {board.blank && (
+            <Section title="Glued up from">
+              <BlankBoards board={board} blank={board.blank} mayEdit={mayEdit} />
+            </Section>
+          )}
           <Section title="Moisture">
             <Readings board={board} />
           </Section>
           <Section title="Held for">
             <Holds board={board} />
           </Section>
-          <Section title="Versions of the picture">
-            <Versions versions={versions} currentId={board.straighteningId} />
+          <Section title="Versions of the pictures">
+            <Versions versions={versions} faceId={board.straighteningId} backId={board.backStraighteningId} />
           </Section>
           <Section title="History">
             <BoardStory rows={story} />
@@ -100,28 +108,15 @@ function Section({ title, action, children }: { title: string; action?: ReactNod
   );
 }
 
-function BoardActions({ board, lastPhotoId }: { board: Board; lastPhotoId: string | null }) {
-  const [open, setOpen] = useState<"photo" | "job" | null>(null);
-  const close = (isOpen: boolean) => setOpen(isOpen ? open : null);
-  const marked = board.straighteningId !== null;
+function InBlank({ tag, into }: { tag: string; into: NonNullable<Board["inBlank"]> }) {
   return (
-    <>
-      <Button kind={marked ? "plain" : "primary"} onClick={() => setOpen("photo")}>
-        {marked ? "Mark again" : "Mark a photograph"}
-      </Button>
-      {marked && (
-        <>
-          <Link href={`/rack/${board.id}/zones`} className={buttonClass()}>
-            Outline and areas
-          </Link>
-          <Button kind="primary" onClick={() => setOpen("job")}>
-            Use in a job
-          </Button>
-        </>
-      )}
-      <ChoosePhoto boardId={board.id} lastPhotoId={lastPhotoId} open={open === "photo"} onOpenChange={close} />
-      <UseInJob board={board} open={open === "job"} onOpenChange={close} />
-    </>
+    <Notice>
+      {tag} is to be glued into blank{" "}
+      <Link href={`/rack/${into.boardId}`} className="measure text-base text-chalk underline">
+        {into.tag}
+      </Link>
+      : it cannot be laid out by itself. Take the blank apart to have it back.
+    </Notice>
   );
 }
 
@@ -133,7 +128,11 @@ function NoPicture({ board, mayEdit }: { board: Board; mayEdit: boolean }) {
       </div>
       <p className="text-pencil">
         No picture yet.{" "}
-        {mayEdit ? "Mark a photograph of it: then it can be laid out." : "A maker marks a photograph of it first."}
+        {board.blank
+          ? "It is composed of the pictures of its boards."
+          : mayEdit
+            ? "Mark a photograph of it: then it can be laid out."
+            : "A maker marks a photograph of it first."}
       </p>
     </div>
   );

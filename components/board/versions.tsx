@@ -6,13 +6,14 @@ import type { Straightening } from "@/lib/schemas/straightening";
 
 interface Props {
   versions: readonly Straightening[];
-  currentId: string | null;
+  faceId: string | null;
+  backId: string | null;
 }
 
 const stateWords = { waiting: "in the making", done: "", failed: "failed", cancelled: "stopped" } as const;
 
-/** Every version of the picture. Layouts stay on the one they were made on. */
-export function Versions({ versions, currentId }: Props) {
+/** Every version of the pictures of both sides. Layouts stay on the one they were made on. */
+export function Versions({ versions, faceId, backId }: Props) {
   const { print, style } = useUnits();
   if (versions.length === 0) return <p className="text-pencil">None yet.</p>;
   return (
@@ -20,7 +21,10 @@ export function Versions({ versions, currentId }: Props) {
       {versions.map((version) => (
         <li key={version.id} className="flex flex-wrap items-baseline gap-x-4 py-1.5">
           <span className="measure text-base">Version {version.version}</span>
-          {version.id === currentId && <span className="text-moss">shown in the rack</span>}
+          {version.side === "back" && <span>back</span>}
+          {version.photoId === null && <span>composed</span>}
+          {version.id === faceId && <span className="text-moss">shown in the rack</span>}
+          {version.id === backId && <span className="text-moss">shown as its back</span>}
           <span className="text-pencil">{stateWords[version.state]}</span>
           {version.state === "done" && (
             <span className="measure">

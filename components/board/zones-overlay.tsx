@@ -1,4 +1,4 @@
-/** Outline and keep-clear areas drawn over a board's picture, in the stock frame's own millimetres. Shows only; drawing them is elsewhere. */
+/** Outline, keep-clear areas and glue lines drawn over a board's picture, in the stock frame's own millimetres. Shows only; drawing them is elsewhere. */
 import { useId } from "react";
 import { mmFromUm, type StockPoint, type Um } from "@/lib/layout";
 import type { KeepClearArea, Zones } from "@/lib/schemas/zones";
@@ -38,10 +38,24 @@ export function ZonesOverlay({ length, width, zones }: Props) {
           vectorEffect="non-scaling-stroke"
         />
       )}
+      {zones.glueLines.map(({ id, across }) => (
+        <GlueLine key={id} y={mmFromUm(across)} length={lengthMm} />
+      ))}
       {zones.keepClear.map((area) => (
         <Area key={area.id} area={area} fill={`url(#${hatch})`} />
       ))}
     </svg>
+  );
+}
+
+/** Quiet: it says where the wood is joined, and asks for nothing. */
+function GlueLine({ y, length }: { y: number; length: number }) {
+  const line = { x1: 0, x2: length, y1: y, y2: y, vectorEffect: "non-scaling-stroke" } as const;
+  return (
+    <>
+      <line {...line} className="stroke-graphite/50" strokeWidth="3" />
+      <line {...line} stroke="#fff" strokeWidth="1.2" strokeDasharray="2 5" />
+    </>
   );
 }
 
@@ -61,8 +75,8 @@ function Area({ area: { area }, fill }: { area: KeepClearArea; fill: string }) {
   );
 }
 
-/** "Outline drawn; keep clear: 2 knots, 1 check". */
-export function zonesWords({ outline, keepClear }: Zones): string {
+/** "Usable outline drawn; keep clear: 2 knots, 1 check; 1 glue line". */
+export function zonesWords({ outline, keepClear, glueLines }: Zones): string {
   const kinds = [...new Set(keepClear.map(({ kind }) => kind))].map((kind) => {
     const count = keepClear.filter((area) => area.kind === kind).length;
     return `${count} ${kind}${count > 1 && kind !== "other" && kind !== "sapwood" ? "s" : ""}`;
@@ -70,5 +84,6 @@ export function zonesWords({ outline, keepClear }: Zones): string {
   return [
     outline ? "Usable outline drawn" : "Whole rectangle usable",
     kinds.length > 0 ? `keep clear: ${kinds.join(", ")}` : "nothing to keep clear",
+    ...(glueLines.length > 0 ? [glueLines.length === 1 ? "1 glue line" : `${glueLines.length} glue lines`] : []),
   ].join("; ");
 }

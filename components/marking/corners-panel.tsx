@@ -1,5 +1,6 @@
 "use client";
 import { Check } from "lucide-react";
+import type { BoardSide } from "@/lib/schemas/straightening";
 import { Button } from "../ui/button";
 import { PanelSection } from "../ui/panel-section";
 import { cornerNames } from "./mark-words";
@@ -8,17 +9,18 @@ import type { MarkingState } from "./use-marking";
 
 interface Props {
   marking: MarkingState;
+  side: BoardSide;
   /** Shows the mark in the middle of the photograph and selects it. */
   onShow: (mark: MarkId) => void;
 }
 
 /** The corners one by one, which of them still waits, and the way to each. */
-export function CornersPanel({ marking, onShow }: Props) {
+export function CornersPanel({ marking, side, onShow }: Props) {
   const { draft, change } = marking;
   return (
     <PanelSection
       title="Corners"
-      lead="The long edge with the grain is the upper or lower edge. Drag every handle to its corner, or choose one here to go there."
+      lead={`The long edge with the grain is the upper or lower edge. ${side === "back" ? "The left end is the face's left end: turned over about its long edge, the board keeps it. " : ""}Drag every handle to its corner, or choose one here to go there.`}
     >
       {draft.reference === "sheet" && (
         <CornerList title="Sheet" of="sheet" names={["1", "2", "3", "4"]} marking={marking} onShow={onShow} />
@@ -31,7 +33,7 @@ export function CornersPanel({ marking, onShow }: Props) {
   );
 }
 
-interface ListProps extends Props {
+interface ListProps extends Omit<Props, "side"> {
   title: string;
   of: "board" | "sheet";
   names: readonly string[];

@@ -4,7 +4,7 @@ import Link from "next/link";
 import { useEffect, useMemo, useState } from "react";
 import type { Board } from "@/lib/schemas/board";
 import type { Photo } from "@/lib/schemas/photo";
-import type { Straightening } from "@/lib/schemas/straightening";
+import type { BoardSide, Straightening } from "@/lib/schemas/straightening";
 import { useImage } from "../picture/use-image";
 import { useStageView } from "../picture/use-stage-view";
 import { Notice } from "../ui/notice";
@@ -24,6 +24,7 @@ import { type MarkId, markAt } from "./marks";
 import { PhotoWithMarks } from "./photo-with-marks";
 import { Preview } from "./preview";
 import { ReferencePanel } from "./reference-panel";
+import { SidePanel } from "./side-panel";
 import { StraightenRun } from "./straighten-run";
 import { type Adding, type MarkingState, useMarking } from "./use-marking";
 
@@ -39,9 +40,12 @@ interface Props {
   photo: Photo;
   /** The version to start from; its marks hold only on the photograph they were made on. */
   previous: Straightening | null;
+  /** Which face of the board the photograph is thought to show. */
+  side: BoardSide;
 }
 
-export function MarkingScreen({ board, photo, previous }: Props) {
+export function MarkingScreen({ board, photo, previous, side: givenSide }: Props) {
+  const [side, setSide] = useState(givenSide);
   const size = useMemo(() => ({ width: photo.widthPx, height: photo.heightPx }), [photo.widthPx, photo.heightPx]);
   const marking = useMarking(size, () =>
     previous?.photoId === photo.id && previous.marking ? draftFrom(previous.marking, size, board) : freshDraft(size, board),
@@ -68,7 +72,7 @@ export function MarkingScreen({ board, photo, previous }: Props) {
   return (
     <>
       <PageTitle
-        title={`Mark ${board.tag}`}
+        title={side === "back" ? `Mark the back of ${board.tag}` : `Mark ${board.tag}`}
         above={
           <Link href={`/rack/${board.id}`} className="underline">
             {board.tag}, {board.species}
@@ -100,13 +104,15 @@ export function MarkingScreen({ board, photo, previous }: Props) {
         </div>
         <div className="border-rule bg-sheet lg:border-l">
           <SelectedMark marking={marking} image={image} />
+          <SidePanel board={board} side={side} onSide={setSide} />
           <ReferencePanel marking={marking} />
-          <CornersPanel marking={marking} onShow={show} />
+          <CornersPanel marking={marking} side={side} onShow={show} />
           {/* Before what is optional: four corners are enough for most boards. */}
           <FinishPanel
             board={board}
             photo={photo}
             marking={marking}
+            side={side}
             onStarted={(version) => {
               setSent(marking.draft);
               setStarted(version);

@@ -9,6 +9,7 @@ import { messageOf } from "@/lib/client/fault-from-server";
 import { straighteningQuery } from "@/lib/client/straightening";
 import { cancelTask, taskEnded, taskQuery } from "@/lib/client/task";
 import type { Straightening } from "@/lib/schemas/straightening";
+import { zonesAddress } from "../board/board-address";
 import { WoodStrip } from "../picture/wood-strip";
 import { Button, buttonClass } from "../ui/button";
 import { Notice } from "../ui/notice";
@@ -63,7 +64,10 @@ export function StraightenRun({ started, onAgain }: Props) {
 function Finished({ version, onAgain }: { version: Straightening; onAgain: () => void }) {
   return (
     <div className="flex flex-col gap-3">
-      <Notice kind="sound">Version {version.version} of the picture is done.</Notice>
+      <Notice kind="sound">
+        Version {version.version}
+        {version.side === "back" ? ", the picture of the back, is done." : " of the picture is done."}
+      </Notice>
       <WoodStrip label="Straightened picture" length={version.length} width={version.width}>
         {({ width, height }) => {
           const wanted = width * window.devicePixelRatio;
@@ -84,7 +88,7 @@ function Finished({ version, onAgain }: { version: Straightening; onAgain: () =>
         }}
       </WoodStrip>
       <div className="flex flex-wrap gap-2">
-        <Link href={`/rack/${version.boardId}/zones`} className={buttonClass("primary")}>
+        <Link href={zonesAddress(version.boardId, version.side)} className={buttonClass("primary")}>
           Draw outline and keep-clear areas
         </Link>
         <Link href={`/rack/${version.boardId}`} className={buttonClass()}>

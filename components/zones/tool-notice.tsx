@@ -7,6 +7,7 @@ import type { ZonesState } from "./use-zones";
 const words = {
   outline: "Tap the corners of the usable wood one after the other. Near the board's edges they snap.",
   polygon: "Tap the corners of the area one after the other.",
+  "glue-line": "Tap where the boards are glued together. The line goes through the whole blank.",
   ellipse: "Drag a box around the area, or tap its middle.",
 } as const;
 
@@ -22,7 +23,7 @@ export function ToolNotice({ zones }: { zones: ZonesState }) {
         <span className="pointer-fine:hidden">Two fingers move the picture.</span>
       </p>
       <div className="mt-2 flex flex-wrap gap-2">
-        {tool !== "ellipse" && (
+        {tool !== "ellipse" && tool !== "glue-line" && (
           <>
             <Button size="small" kind="primary" disabled={traced.length < FEWEST_CORNERS} onClick={zones.closeTrace}>
               Close it, {traced.length} corners

@@ -32,7 +32,12 @@ export function useSaveZones(straightening: Straightening, zones: ZonesState): Z
   const query = straighteningQuery(straightening.id);
   const save = useMutation({
     mutationFn: ({ doc, revision }: Sent) =>
-      saveZones(straightening.id, { outline: doc.outline && [...doc.outline], keepClear: [...doc.keepClear], revision }),
+      saveZones(straightening.id, {
+        outline: doc.outline && [...doc.outline],
+        keepClear: [...doc.keepClear],
+        glueLines: [...doc.glueLines],
+        revision,
+      }),
     onSuccess: (saved, { doc }) => {
       zones.saved(doc, saved.revision);
       setTheirs(null);

@@ -3,16 +3,20 @@
 import { useEffect, useState } from "react";
 import { v7 as newId } from "uuid";
 import { type StockPoint, um } from "@/lib/layout";
-import type { KeepClearArea, Zones } from "@/lib/schemas/zones";
+import { type GlueLine, type KeepClearArea, mostGlueLines, type Zones } from "@/lib/schemas/zones";
 import { areaAt } from "./area-at";
 import { ellipseInBox } from "./ellipse-edit";
 import { commit, redo, startHistory, undo } from "./history";
 import { FEWEST_CORNERS, MOST_CORNERS, snapped } from "./polygon-edit";
-import { docOf, type PictureSize, withArea, withoutArea, type ZonesDoc } from "./zones-doc";
+import { docOf, type PictureSize, withArea, withGlueLine, withoutArea, type ZonesDoc } from "./zones-doc";
 
-/** "outline" and "polygon" put down corners, tap by tap; "ellipse" is drawn by dragging a box. */
-export type Tool = "select" | "outline" | "ellipse" | "polygon";
-export type Selection = { readonly what: "outline" } | { readonly what: "area"; readonly id: string } | null;
+/** "outline" and "polygon" put down corners, tap by tap; "ellipse" is drawn by dragging a box; "glue-line" is one tap. */
+export type Tool = "select" | "outline" | "ellipse" | "polygon" | "glue-line";
+export type Selection =
+  | { readonly what: "outline" }
+  | { readonly what: "area"; readonly id: string }
+  | { readonly what: "glue-line"; readonly id: string }
+  | null;
 
 /** µm. */
 interface Place {
@@ -87,6 +91,14 @@ export function useZones(start: Zones, size: PictureSize): ZonesState {
     select({ what: "area", id: made.id });
     take("select");
   };
+  const addGlueLine = ({ y }: Place) => {
+    if (history.now.glueLines.length >= mostGlueLines) return;
+    const across = um(Math.round(Math.min(Math.max(y, 1), size.width - 1)));
+    const made: GlueLine = { id: newId(), across, aboveBoardId: null, belowBoardId: null };
+    change(withGlueLine(history.now, made));
+    select({ what: "glue-line", id: made.id });
+    take("select");
+  };
   const closeTrace = () => {
     if (traced.length < FEWEST_CORNERS) return;
     if (tool === "polygon") return add({ shape: "polygon", points: [...traced] });
@@ -98,6 +110,8 @@ export function useZones(start: Zones, size: PictureSize): ZonesState {
     if (tool === "select") {
       const area = areaAt(history.now.keepClear, at, reach);
       select(area ? { what: "area", id: area.id } : null);
+    } else if (tool === "glue-line") {
+      addGlueLine(at);
     } else if (tool === "ellipse") {
       // A tap, or Enter, cannot draw a box: it puts down an ellipse of the size of a middling knot, to be sized by its handles.
       add({ shape: "ellipse", centre: snapped(at, size, 0, false), radiusX: um(20_000), radiusY: um(12_000), turnDeg: 0 });

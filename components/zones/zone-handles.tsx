@@ -1,7 +1,7 @@
 "use client";
 /** Handles of what is selected: corners and the places for new ones, or the radii and the turn of an ellipse. */
 import { Plus } from "lucide-react";
-import type { StockPoint } from "@/lib/layout";
+import { printLength, type StockPoint, um } from "@/lib/layout";
 import type { KeepClearArea } from "@/lib/schemas/zones";
 import { Handle, type MovePhase } from "../picture/handle";
 import { type Place, toScreen, type View } from "../picture/view";
@@ -12,7 +12,7 @@ import { insertCorner, middleOfEdge, moveCorner, removeCorner, snapped } from ".
 import { selectedPolygon } from "./selected-polygon";
 import type { ZonesState } from "./use-zones";
 import { handleNames, kindNames, placeWords } from "./zone-words";
-import { withArea, type ZonesDoc } from "./zones-doc";
+import { withArea, withGlueLine, withoutGlueLine, type ZonesDoc } from "./zones-doc";
 
 /** Snaps from this near, CSS px. */
 const SNAP_PX = 8;
@@ -34,7 +34,8 @@ export function ZoneHandles({ zones, view }: Props) {
   const polygon = selectedPolygon(zones);
   // Only the outline must stay on the board; a knot may hang over its edge.
   if (polygon) return <Corners {...polygon} bound={zones.selection?.what === "outline"} zones={zones} view={view} />;
-  const { selectedArea } = zones;
+  const { selectedArea, selection } = zones;
+  if (selection?.what === "glue-line") return <GlueLineHandle id={selection.id} zones={zones} view={view} />;
   return selectedArea && <EllipseHandles area={selectedArea} zones={zones} view={view} />;
 }
 
@@ -47,6 +48,36 @@ function settle(zones: ZonesState, next: ZonesDoc, phase: MovePhase, key: string
 
 const toMm = ({ x, y }: StockPoint): Place => ({ x: x / 1000, y: y / 1000 });
 const toUm = ({ x, y }: Place): Place => ({ x: x * 1000, y: y * 1000 });
+
+/** In the middle of the line's length; only across does it move. */
+function GlueLineHandle({ id, zones, view }: Props & { id: string }) {
+  const { style } = useUnits();
+  const { doc, size } = zones;
+  const index = doc.glueLines.findIndex((line) => line.id === id);
+  const line = doc.glueLines[index];
+  if (!line) return null;
+  return (
+    <Handle
+      name={`Glue line ${index + 1}`}
+      position={`${printLength(line.across, style)} from the upper edge`}
+      at={{ x: size.length / 2000, y: line.across / 1000 }}
+      view={view}
+      fineStep={FINE_STEP_MM}
+      selected
+      onSelect={() => undefined}
+      onMove={({ y }, phase) => {
+        const across = um(Math.round(Math.min(Math.max(y * 1000, 1), size.width - 1)));
+        settle(zones, withGlueLine(zones.doc, { ...line, across }), phase, `${id} across`);
+      }}
+      onRemove={() => {
+        zones.change(withoutGlueLine(zones.doc, id));
+        zones.select(null);
+      }}
+    >
+      <HandleLook shape="middle" selected />
+    </Handle>
+  );
+}
 
 interface CornersProps extends Props {
   name: string;

@@ -22,6 +22,9 @@ export const handleNames: Readonly<Record<EllipseHandle, string>> = {
 
 export function faultWords(fault: DocFault, style: LengthStyle): string {
   if (fault.of === "outline") return polygonFaultWords("The outline", fault.fault, style);
+  if (fault.of === "glue-line") {
+    return `Glue line ${fault.index + 1} lies off the board. Move it between its edges or remove it.`;
+  }
   const name = `Area ${fault.index + 1}`;
   if (fault.fault) return polygonFaultWords(name, fault.fault, style);
   return `${name} lies wholly off the board. Move it onto the wood or remove it.`;

@@ -50,6 +50,21 @@ export function ZonesDrawing({ zones, view, fault }: Props) {
           />
         </>
       )}
+      {doc.glueLines.map(({ id, across }) => {
+        const y = onScreen(view, { x: 0, y: across }).y;
+        const chosen = selection?.what === "glue-line" && selection.id === id;
+        return (
+          <g key={id}>
+            <path d={`M${from.x} ${y}H${to.x}`} stroke="#fff" strokeWidth={chosen ? 5 : 3} />
+            <path
+              d={`M${from.x} ${y}H${to.x}`}
+              className="stroke-chalk"
+              strokeWidth={chosen ? 2.5 : 1.5}
+              strokeDasharray={chosen ? undefined : "2 5"}
+            />
+          </g>
+        );
+      })}
       {doc.keepClear.map((area) => (
         <Area
           key={area.id}

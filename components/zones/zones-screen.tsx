@@ -20,6 +20,8 @@ import { useUnsavedWarning } from "../ui/use-unsaved-warning";
 import { AreaList } from "./area-list";
 import { ConflictDialog } from "./conflict-dialog";
 import { CornerBar } from "./corner-bar";
+import { GlueLinePanel } from "./glue-line-panel";
+import { OtherSidePanel } from "./other-side-panel";
 import { OutlinePanel } from "./outline-panel";
 import { Rulers, TAPE_PX } from "./rulers";
 import { ToolNotice } from "./tool-notice";
@@ -39,7 +41,14 @@ const REACH_PX = 14;
 
 const toUm = ({ x, y }: Place): Place => ({ x: x * 1000, y: y * 1000 });
 
-export function ZonesScreen({ board, straightening }: { board: Board; straightening: Straightening }) {
+interface Props {
+  board: Board;
+  straightening: Straightening;
+  /** The present picture of the board's other side, if there is one. */
+  otherSide: Straightening | null;
+}
+
+export function ZonesScreen({ board, straightening, otherSide }: Props) {
   const { style } = useUnits();
   const { length, width } = straightening;
   const size = useMemo(() => ({ width: mmFromUm(length), height: mmFromUm(width) }), [length, width]);
@@ -66,7 +75,7 @@ export function ZonesScreen({ board, straightening }: { board: Board; straighten
   return (
     <>
       <PageTitle
-        title={`Outline and keep-clear areas of ${board.tag}`}
+        title={`Outline and keep-clear areas of ${straightening.side === "back" ? "the back of " : ""}${board.tag}`}
         above={
           <Link href={`/rack/${board.id}`} className="underline">
             {board.tag}, {board.species}
@@ -89,7 +98,7 @@ export function ZonesScreen({ board, straightening }: { board: Board; straighten
       <div className="lg:grid lg:grid-cols-[minmax(0,1fr)_23rem]">
         <div className="min-w-0 lg:sticky lg:top-0 lg:self-start">
           <PictureStage
-            label={`Straightened picture of ${board.tag}`}
+            label={`Straightened picture of ${straightening.side === "back" ? "the back of " : ""}${board.tag}`}
             stage={stage}
             size={size}
             levels={straightening.levels}
@@ -123,6 +132,8 @@ export function ZonesScreen({ board, straightening }: { board: Board; straighten
             </div>
             <AreaList zones={zones} onShow={show} />
           </PanelSection>
+          {otherSide && <OtherSidePanel zones={zones} from={otherSide} />}
+          <GlueLinePanel board={board} zones={zones} onTool={take} />
         </div>
       </div>
       <ConflictDialog saving={saving} mine={zones.doc} />

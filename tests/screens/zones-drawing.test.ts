@@ -21,7 +21,7 @@ const ellipse = (x: number, y: number, radiusX: number, radiusY: number, turnDeg
 
 describe("the outline", () => {
   test("starts as the whole board, which is sound", () => {
-    expect(docFault({ outline: wholeBoard(size), keepClear: [] }, size)).toBeNull();
+    expect(docFault({ outline: wholeBoard(size), keepClear: [], glueLines: [] }, size)).toBeNull();
   });
 
   test("snaps to edges and corners within reach, is kept on the board, and else stays where it is put", () => {
@@ -36,7 +36,7 @@ describe("the outline", () => {
     const board = wholeBoard(size);
     expect(insertCorner(board, 0)[1]).toEqual(at(1_000_000, 0));
     expect(insertCorner(board, 3)[4]).toEqual(at(0, 100_000));
-    expect(docFault({ outline: insertCorner(board, 3), keepClear: [] }, size)).toBeNull();
+    expect(docFault({ outline: insertCorner(board, 3), keepClear: [], glueLines: [] }, size)).toBeNull();
   });
 
   test("a triangle keeps its corners", () => {
@@ -47,11 +47,13 @@ describe("the outline", () => {
 
   test("that crosses itself is refused with the place", () => {
     const crossed = [at(0, 0), at(1_000_000, 100_000), at(1_000_000, 0), at(0, 100_000)];
-    expect(docFault({ outline: crossed, keepClear: [] }, size)).toMatchObject({
+    expect(docFault({ outline: crossed, keepClear: [], glueLines: [] }, size)).toMatchObject({
       of: "outline",
       fault: { fault: "crosses", at: { x: 500_000, y: 50_000 } },
     });
-    expect(docFault({ outline: moveCorner(wholeBoard(size), 1, at(2_100_000, 0)), keepClear: [] }, size)).toMatchObject({
+    expect(
+      docFault({ outline: moveCorner(wholeBoard(size), 1, at(2_100_000, 0)), keepClear: [], glueLines: [] }, size),
+    ).toMatchObject({
       fault: { fault: "outside", by: 100_000 },
     });
   });
@@ -60,9 +62,13 @@ describe("the outline", () => {
 describe("keep-clear areas", () => {
   test("may hang over the edge, but not lie off the board", () => {
     const over = knot("a", ellipse(0, 0, 10_000, 10_000));
-    expect(docFault({ outline: null, keepClear: [over] }, size)).toBeNull();
+    expect(docFault({ outline: null, keepClear: [over], glueLines: [] }, size)).toBeNull();
     const off = knot("b", ellipse(-50_000, 0, 10_000, 10_000));
-    expect(docFault({ outline: null, keepClear: [over, off] }, size)).toEqual({ of: "area", index: 1, fault: null });
+    expect(docFault({ outline: null, keepClear: [over, off], glueLines: [] }, size)).toEqual({
+      of: "area",
+      index: 1,
+      fault: null,
+    });
   });
 
   test("a box drawn from any corner gives the ellipse in it; a twitch gives none", () => {
@@ -102,7 +108,7 @@ describe("keep-clear areas", () => {
 
   test("are replaced by id, added at the end, and taken away", () => {
     const a = knot("a", ellipse(0, 0, 1000, 1000));
-    const doc = withArea({ outline: null, keepClear: [] }, a);
+    const doc = withArea({ outline: null, keepClear: [], glueLines: [] }, a);
     expect(withArea(doc, { ...a, kind: "stain" }).keepClear).toEqual([{ ...a, kind: "stain" }]);
     expect(withArea(doc, { ...a, id: "b" }).keepClear.map(({ id }) => id)).toEqual(["a", "b"]);
     expect(withoutArea(doc, "a").keepClear).toEqual([]);
