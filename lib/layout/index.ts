@@ -3,6 +3,7 @@ export { type GrainField, grainField } from "./figure/grain-field";
 export { type PictureOf, readSeams } from "./figure/read-seams";
 export type { CannotTell, MeanColour, SeamFigure, SeamReading } from "./figure/seam-reading";
 export type { StockPicture } from "./figure/stock-picture";
+export { type KeepClearSuggestion, suggestKeepClear } from "./figure/suggest-keep-clear";
 export { type Kerfs, kerfsOf } from "./fit/apart";
 export { type Clearance, clearances } from "./fit/clearance";
 export { type LyingPiece, lyingPieces } from "./fit/lying-piece";
