@@ -3,6 +3,7 @@ import Link from "next/link";
 import { useRouter } from "next/navigation";
 import { useCallback, useOptimistic, useState, useTransition } from "react";
 import type { z } from "zod";
+import { blankAddress } from "@/components/board/board-address";
 import { Button, buttonClass } from "@/components/ui/button";
 import { Empty } from "@/components/ui/empty";
 import { PageTitle } from "@/components/ui/page-title";
@@ -60,6 +61,11 @@ export function RackScreen({ page, state: arrived, mayEdit }: Props) {
         <ViewSwitch state={state} onChange={change} />
         <RackSearch state={state} text={text} onText={setText} onChange={change} />
         <FilterButton state={state} open={filtering} onToggle={() => setFiltering(!filtering)} />
+        {mayEdit && (
+          <Link href={blankAddress()} className={buttonClass()}>
+            Glue up a blank
+          </Link>
+        )}
         {takeIn}
       </PageTitle>
       {filtering && <RackFilters state={state} species={page.species} onChange={change} />}

@@ -12,6 +12,7 @@ import { takerOf } from "@/lib/editor/selectors/taken-boards";
 import { type TableBoard, tableBoard } from "@/lib/editor/table-board";
 import type { TakenBy } from "@/lib/schemas/taken-by";
 import { heldBySentence } from "@/lib/words/held-by";
+import { inBlankSentence } from "@/lib/words/in-blank";
 import { takenBySentence } from "@/lib/words/taken-by";
 import { AddBoardDialog } from "./add-board-dialog";
 import { PanelSection } from "./panel-section";
@@ -62,11 +63,13 @@ function BoardOnTable({ board, taker }: { board: TableBoard; taker: TakenBy | nu
     mutationFn: (straighteningId: string) => moveToVersion(faceId, id, straighteningId),
     onSuccess: (moved) => {
       editor.setBoards(editor.get().boards.map((other) => (other.face.id === id ? tableBoard(moved) : other)));
-      toast.success(`Board ${moved.tag} is on its newest picture. Look over where the fronts lie.`);
+      const picture = moved.straightening.id === newer ? "on its newest picture" : `${moved.straightening.side} up`;
+      toast.success(`Board ${moved.tag} is ${picture}. Look over where the fronts lie.`);
     },
     onError: (error) => toast.error(messageOf(error)),
   });
   const newer = board.newerStraighteningId;
+  const otherSide = board.otherSideStraighteningId;
   return (
     <li className="flex flex-col gap-1.5 text-sm">
       <p>
@@ -74,6 +77,7 @@ function BoardOnTable({ board, taker }: { board: TableBoard; taker: TakenBy | nu
           {board.tag}
         </Link>{" "}
         {board.species}
+        {board.side === "back" && ", back up"}
         <span className="block text-pencil">
           <span className="measure">
             {print(length)} × {print(width)}
@@ -81,6 +85,7 @@ function BoardOnTable({ board, taker }: { board: TableBoard; taker: TakenBy | nu
           {board.place && `, ${board.place}`}
         </span>
       </p>
+      {board.inBlank && <Notice kind="care">{inBlankSentence(board.tag, board.inBlank.tag)}</Notice>}
       {taker && <Notice kind="care">{takenBySentence(board.tag, taker)}</Notice>}
       {board.heldBy.map((holder) => (
         <Notice key={holder.faceId} kind="care">
@@ -105,6 +110,11 @@ function BoardOnTable({ board, taker }: { board: TableBoard; taker: TakenBy | nu
           <Button size="small" onClick={() => layOn(board.face)}>
             Lay fronts here
           </Button>
+          {otherSide !== null && (
+            <Button size="small" disabled={moveOver.isPending} onClick={() => moveOver.mutate(otherSide)}>
+              {board.side === "back" ? "Lay on its face" : "Lay on its back"}
+            </Button>
+          )}
           <Button
             size="small"
             disabled={used || takeOff.isPending}

@@ -5,6 +5,7 @@ import { tapeMarks } from "@/lib/words/tape-marks";
 import type { TableBoard } from "../table-board";
 import { BOARD_SPACE_PX, TAPE_PX, type TableGeometry } from "../view/geometry";
 import type { ViewState } from "../view/view-state";
+import { paintGlueLines } from "./marks/glue-lines";
 import { paintGrain } from "./marks/grain";
 import { paintSpokenFor } from "./marks/spoken-for";
 import { paintTape } from "./marks/tape-strip";
@@ -45,6 +46,9 @@ export class BoardsLayer {
       this.#sketches.named(`${id} wood`).put(box, paintBoard(picture, visible, palette));
       const grain = look.grains.get(board.straighteningId);
       if (grain) this.#sketches.named(`${id} grain`).put(box, paintGrain(grain, scale, palette));
+      if (board.face.glueLines.length > 0) {
+        this.#sketches.named(`${id} glue lines`).put(box, paintGlueLines(board.face.glueLines, scale, palette));
+      }
       this.#sketches.named(`${id} zones`).put(box, paintZones(board.face, scale, palette));
       this.#sketches.named(`${id} spoken for`).put(box, paintSpokenFor(board.spokenFor, scale, palette));
       const marks = tapeMarks(length, scale, style.unit);
@@ -55,7 +59,7 @@ export class BoardsLayer {
     this.#sketches.settle();
   }
 
-  #name({ face, tag, species, place }: TableBoard, top: number, left: number, { palette, style }: BoardsLook): void {
+  #name({ face, tag, side, species, place }: TableBoard, top: number, left: number, { palette, style }: BoardsLook): void {
     const size = `${printLength(face.length, style)} × ${printLength(face.width, style)} × ${printLength(face.thickness, style)}`;
     const roomy = this.#canvas.width > 560;
     const rest = (roomy ? [species, size, place] : [species]).filter((part) => part !== "").join(", ");
@@ -64,7 +68,7 @@ export class BoardsLayer {
       context.textBaseline = "alphabetic";
       context.fillStyle = palette.graphite;
       context.font = `700 16px ${palette.measure}`;
-      const bold = `Board ${tag}`;
+      const bold = `Board ${tag}${side === "back" ? ", back up" : ""}`;
       context.fillText(bold, 0, 22);
       const after = context.measureText(bold).width + 8;
       context.font = `500 15px ${palette.measure}`;

@@ -1,11 +1,13 @@
 /** The show side: the face as it will hang, every piece painted from the photograph of its board. A piece whose wood has not moved keeps its picture. */
 import type { StaticCanvas } from "fabric";
-import { type FaceLayout, faceSize, type LengthStyle, type Piece, type PieceId, rectToStock } from "@/lib/layout";
+import { type FaceLayout, faceSize, type LengthStyle, type Piece, type PieceId, rectToStock, type Seam } from "@/lib/layout";
 import { factsOf } from "../selectors/facts";
 import type { TableBoard } from "../table-board";
 import type { TableGeometry } from "../view/geometry";
+import { glueSegments } from "../view/glue-segments";
 import { CHIP_SIZE, chipHeight, jumpChips } from "../view/jump-chips";
 import { chip } from "./marks/chip";
+import { glueLine } from "./marks/glue-lines";
 import { paintJump } from "./marks/jump-chip";
 import { chalkLines } from "./marks/piece-mark";
 import { paintPatch } from "./marks/wood";
@@ -57,7 +59,15 @@ export class ShowLayer {
     const chosen = facePieces.filter(({ id }) => look.selection.includes(id));
     // A line around every front would hide the seams, which are what one looks at.
     const outlined = look.dragging || chosen.length === facePieces.length ? [] : chosen;
+    const joined = facePieces.flatMap(({ id, rect }) => {
+      const piece = pieceById.get(id);
+      const board = piece && look.boards.find(({ face }) => face.id === piece.stockId);
+      return piece && board ? glueSegments(piece, rect, board.face.glueLines) : [];
+    });
     this.#sketches.named("overlay").put(overlay, (context) => {
+      for (const { from, to } of joined) {
+        glueLine(context, { x1: from.x * px, y1: from.y * px, x2: to.x * px, y2: to.y * px }, palette);
+      }
       for (const { rect } of outlined) {
         context.strokeStyle = palette.white;
         context.lineWidth = 4;
@@ -83,7 +93,13 @@ export class ShowLayer {
         );
       }
     });
-    for (const [index, { x, y, lines, jumps }] of jumpChips(seams, pieceById, size, geometry, look.style).entries()) {
+    for (const [index, { x, y, lines, jumps }] of jumpChips(
+      told(seams, look, facePieces.length),
+      pieceById,
+      size,
+      geometry,
+      look.style,
+    ).entries()) {
       const tall = chipHeight({ lines });
       const box = { left: left + x - CHIP_SIZE.width / 2, top: top + y - tall / 2, width: CHIP_SIZE.width, height: tall };
       this.#sketches.named(`jump ${index}`).put(box, paintJump(lines, jumps, palette));
@@ -128,6 +144,16 @@ export class ShowLayer {
     this.#pictureNumbers.set(bitmap, this.#pictures);
     return this.#pictures;
   }
+}
+
+/**
+ * The seams whose jump is written down. A cut-out has a dozen on a hand's breadth of wood, and chips on all of them would hide it: there only those
+ * of the parts that are chosen, and none while everything is.
+ */
+function told(seams: readonly Seam[], { layout, selection }: ShowLook, count: number): readonly Seam[] {
+  if (layout.face.pattern !== "cutOut") return seams;
+  if (selection.length === count) return [];
+  return seams.filter(({ a, b }) => selection.includes(a) || selection.includes(b));
 }
 
 /** A piece that has no wood yet. */
