@@ -24,6 +24,7 @@ import { GlueLinePanel } from "./glue-line-panel";
 import { OtherSidePanel } from "./other-side-panel";
 import { OutlinePanel } from "./outline-panel";
 import { Rulers, TAPE_PX } from "./rulers";
+import { SuggestionPanel } from "./suggestion-panel";
 import { ToolNotice } from "./tool-notice";
 import { useSaveZones } from "./use-save-zones";
 import { type Tool, useUndoKeys, useZones } from "./use-zones";
@@ -66,9 +67,13 @@ export function ZonesScreen({ board, straightening, otherSide }: Props) {
     zones.take(tool);
     stage.reveal();
   };
-  const show = (area: KeepClearArea) => {
+  const look = (area: KeepClearArea) => {
     const { x, y } = middleOf(area);
     stage.lookAt({ x: x / 1000, y: y / 1000 }, SCALE_AT_AREA);
+    stage.reveal();
+  };
+  const show = (area: KeepClearArea) => {
+    look(area);
     zones.take("select");
     zones.select({ what: "area", id: area.id });
   };
@@ -132,6 +137,7 @@ export function ZonesScreen({ board, straightening, otherSide }: Props) {
             </div>
             <AreaList zones={zones} onShow={show} />
           </PanelSection>
+          <SuggestionPanel straighteningId={straightening.id} zones={zones} onLook={look} />
           {otherSide && <OtherSidePanel zones={zones} from={otherSide} />}
           <GlueLinePanel board={board} zones={zones} onTool={take} />
         </div>

@@ -18,3 +18,10 @@ export const grainQuery = (straighteningId: string) =>
     queryFn: ({ signal }) => call(endpoint.getGrain, { params: { straighteningId } }, signal),
     staleTime: Number.POSITIVE_INFINITY,
   });
+
+export const suggestionsQuery = (straighteningId: string) =>
+  queryOptions({
+    queryKey: ["suggestions", straighteningId] as const,
+    queryFn: ({ signal }) => call(endpoint.getSuggestions, { params: { straighteningId } }, signal),
+    staleTime: Number.POSITIVE_INFINITY,
+  });

@@ -3,6 +3,7 @@ import { z } from "zod";
 import { defineEndpoint, everyone } from "./endpoint";
 import { idSchema } from "./ids";
 import { umSchema } from "./length";
+import { keepClearKinds, keepClearShapeSchema } from "./zones";
 
 export const cannotTellReasons = [
   "notLaid",
@@ -70,4 +71,28 @@ export const getGrain = defineEndpoint({
   access: everyone,
   params: z.object({ straighteningId: idSchema }),
   response: grainFieldSchema,
+});
+
+export const suggestionsSchema = z.object({
+  /** From the surest down. */
+  items: z.array(
+    z.object({
+      kind: z.enum(keepClearKinds),
+      area: keepClearShapeSchema,
+      /** 0 to 1. */
+      score: z.number(),
+    }),
+  ),
+});
+export type SuggestionsOnWire = z.output<typeof suggestionsSchema>;
+export type SuggestedArea = SuggestionsOnWire["items"][number];
+
+export const getSuggestions = defineEndpoint({
+  method: "GET",
+  path: "/api/straightenings/{straighteningId}/suggestions",
+  summary: "Areas that look as if they should be kept clear, for a maker to take up or leave",
+  tag: "figure",
+  access: everyone,
+  params: z.object({ straighteningId: idSchema }),
+  response: suggestionsSchema,
 });

@@ -1,6 +1,6 @@
 /** What the figure threads are asked and what they answer. Plain values that survive being copied between threads. */
 import "server-only";
-import type { FaceLayout, GrainField, SeamReading, StockId } from "@/lib/layout";
+import type { FaceLayout, GrainField, KeepClearSuggestion, SeamReading, StockId } from "@/lib/layout";
 
 /** A stored level of a straightened picture. */
 export interface StoredPicture {
@@ -16,6 +16,7 @@ export interface FigureJobs {
     };
     readonly answer: readonly SeamReading[];
   };
+  readonly suggest: { readonly request: StoredPicture; readonly answer: readonly KeepClearSuggestion[] };
   readonly readGrain: { readonly request: StoredPicture; readonly answer: GrainField };
 }
 

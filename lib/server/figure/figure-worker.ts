@@ -1,7 +1,7 @@
 /** The program of a figure thread: one exported function per job. Bundled on its own, because threads load plain JavaScript. */
 import "server-only";
 import sharp from "sharp";
-import { grainField, layOut, readSeams, type StockId, type StockPicture, seams } from "@/lib/layout";
+import { grainField, layOut, readSeams, type StockId, type StockPicture, seams, suggestKeepClear } from "@/lib/layout";
 import { decodedPicture } from "./decoded-pictures";
 import type { FigureJobName, FigureJobs } from "./figure-job";
 
@@ -18,3 +18,5 @@ export const readSeamsOf: Job<"readSeamsOf"> = async ({ layout, pictures }) => {
 };
 
 export const readGrain: Job<"readGrain"> = async (picture) => grainField(await decodedPicture(picture));
+
+export const suggest: Job<"suggest"> = async (picture) => suggestKeepClear(await decodedPicture(picture));

@@ -54,6 +54,11 @@ export function handle<E extends Endpoint>(endpoint: E, act: (call: Call<E>) => 
       log().info({ ...line, status: response.status, ms: Math.round(performance.now() - started) }, "answered");
       return response;
     } catch (error) {
+      // Work that was dropped because nobody waits for it any more is no failure, and nobody reads the answer.
+      if (request.signal.aborted && isAbort(error)) {
+        log().info(line, "left by the caller");
+        return new Response(null, { status: 499, headers: { "x-request-id": requestId } });
+      }
       const fault =
         error instanceof FaultError ? error : new FaultError("unexpected", "Something went wrong on our side. Try again.");
       if (fault.code === "unexpected") log().error({ ...line, err: error }, "failed");
@@ -83,6 +88,8 @@ async function readCall<E extends Endpoint>(
   // The conditional types of Call follow the endpoint's literal type, which the checker cannot see through here.
   return read as Call<E>;
 }
+
+const isAbort = (error: unknown): boolean => error instanceof Error && error.name === "AbortError";
 
 function parse(schema: z.ZodType, value: unknown, where: "address" | "body"): unknown {
   const result = schema.safeParse(value);
