@@ -81,6 +81,7 @@ export type {
   Grain,
   GridFace,
   Pattern,
+  ResawnFace,
   WrapCorner,
   WrapFace,
 } from "./pattern/face";
@@ -115,6 +116,9 @@ export { pieceCount, pieceIdsOf, readingIndexOf } from "./pattern/piece-ids";
 export { labelAt, pieceIdAt } from "./pattern/piece-names";
 export { groupBounds, liftGroup, moveGroup, placeGroup, turnGroup, turnsAlongGrain } from "./pattern/place-group";
 export { groupOf } from "./pattern/slots";
+export { acrossProfile } from "./pattern/resawn/across-profile";
+export { type AcrossProfile, type LeanReading, leanFromFaces } from "./pattern/resawn/lean-from-faces";
+export { type ResawnPlan, resawnPlan } from "./pattern/resawn/resawn-plan";
 export { swapPieces } from "./pattern/swap-pieces";
 export { type WoodNeeded, woodNeeded } from "./pattern/wood-needed";
 export type { FoldedSide, PlanPoint } from "./pattern/wrap/fold";

@@ -54,6 +54,8 @@ export const cutOutFaceSchema = z
   })
   .superRefine(refuseFaults);
 
+const thicknessUmSchema = z.int().min(1).max(300_000).transform(um).meta({ description: "micrometres, up to 300 mm" });
+
 const turnDegSchema = z.number().min(1).max(179);
 
 const wrapCornerSchema = z.discriminatedUnion("kind", [
@@ -68,9 +70,20 @@ export const wrapFaceSchema = z
     grain: z.enum(["horizontal", "vertical"]),
     sides: z.array(sizeUmSchema).min(1).max(40),
     height: sizeUmSchema,
-    thickness: z.int().min(1).max(300_000).transform(um).meta({ description: "micrometres, up to 300 mm" }),
+    thickness: thicknessUmSchema,
     corners: z.array(wrapCornerSchema).max(40),
     closed: z.boolean(),
+  })
+  .superRefine(refuseFaults);
+
+export const resawnFaceSchema = z
+  .object({
+    pattern: z.literal("resawn"),
+    grain: z.enum(["horizontal", "vertical"]),
+    leaf: z.object({ width: sizeUmSchema, height: sizeUmSchema, thickness: thicknessUmSchema }),
+    opens: z.enum(["side", "over"]),
+    resaw: z.object({ kerf: allowanceUmSchema, planing: allowanceUmSchema }),
+    leanDeg: z.number().min(-85).max(85).nullable(),
   })
   .superRefine(refuseFaults);
 
@@ -80,7 +93,7 @@ function refuseFaults(face: Face, context: z.core.$RefinementCtx): void {
 }
 
 /** A face by its pattern. */
-export const faceSchema = z.discriminatedUnion("pattern", [gridFaceSchema, cutOutFaceSchema, wrapFaceSchema]);
+export const faceSchema = z.discriminatedUnion("pattern", [gridFaceSchema, cutOutFaceSchema, wrapFaceSchema, resawnFaceSchema]);
 
 /** Fails to compile when the wire and the core drift apart. */
 export const faceForCore = (face: z.output<typeof faceSchema>): Face => face;

@@ -23,6 +23,7 @@ import {
   pieceIdsOf,
   placeGroup,
   type QuarterTurns,
+  type ResawnFace,
   type Spacing,
   swapPieces,
   turnGroup,
@@ -139,8 +140,29 @@ export const arbitraryWrapFace: fc.Arbitrary<WrapFace> = fc
     return { pattern: "wrap", ...face, corners: corners.slice(0, face.sides.length - (closes ? 0 : 1)), closed: closes };
   });
 
+export const arbitraryResawnFace: fc.Arbitrary<ResawnFace> = fc.record({
+  pattern: fc.constant("resawn" as const),
+  grain: arbitraryGrain,
+  leaf: fc.record({
+    width: fc.constantFrom(150_000, 150_001).map(um),
+    height: fc.constantFrom(120_000, 233_333).map(um),
+    thickness: umBetween(4_000, 20_000),
+  }),
+  opens: fc.constantFrom("side" as const, "over" as const),
+  resaw: fc.record({ kerf: umBetween(0, 3_000), planing: umBetween(0, 2_000) }),
+  leanDeg: fc.option(fc.double({ min: -70, max: 70, noNaN: true }), { nil: null }),
+});
+
+/** The patterns whose pieces show the face of the board that was photographed. */
+export const arbitraryOuterFace: fc.Arbitrary<Face> = fc.oneof(arbitraryGridFace, arbitraryCutOutFace, arbitraryWrapFace);
+
 /** Every pattern. */
-export const arbitraryFace: fc.Arbitrary<Face> = fc.oneof(arbitraryGridFace, arbitraryCutOutFace, arbitraryWrapFace);
+export const arbitraryFace: fc.Arbitrary<Face> = fc.oneof(
+  arbitraryGridFace,
+  arbitraryCutOutFace,
+  arbitraryWrapFace,
+  arbitraryResawnFace,
+);
 
 const arbitraryTurns = fc.constantFrom<QuarterTurns>(0, 1, 2, 3);
 

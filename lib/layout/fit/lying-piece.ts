@@ -3,6 +3,7 @@ import { boundsOf, polygonToStock } from "../frame/apply-isometry";
 import { cleanUpEdges } from "../pattern/clean-up-edges";
 import type { FaceLayout } from "../pattern/face-layout";
 import { layOut } from "../pattern/lay-out";
+import { blankOwners } from "../pattern/one-blank";
 import type { Piece, PieceId, PieceRole, StockId } from "../piece";
 import type { Edge } from "../program/program";
 import type { Um } from "../units/um";
@@ -13,6 +14,8 @@ export interface LyingPiece {
   readonly role: PieceRole;
   readonly groupId: string;
   readonly stockId: StockId;
+  /** The piece that names the blank it is sawn in: another one's where several come from one blank, lying in the same place. */
+  readonly blankId: PieceId;
   /** Finished size. */
   readonly spans: Spans;
   /** As it must leave the saw: finished size and clean-up. */
@@ -25,13 +28,14 @@ export interface LyingPiece {
 export function lyingPieces(layout: FaceLayout, pieces: readonly Piece[] = layOut(layout)): LyingPiece[] {
   const groupById = new Map(layout.groups.flatMap((group) => group.pieceIds.map((id) => [id, group] as const)));
   const cleanUps = cleanUpEdges(layout, pieces);
+  const ownerOf = blankOwners(layout.face);
   return pieces.flatMap(({ id, role, stockId, outline, stockFromFace }): LyingPiece[] => {
     const group = groupById.get(id);
     if (group === undefined) return [];
     const cleanUp = cleanUps.get(id);
     if (cleanUp === undefined) return [];
     const spans = spansOf(boundsOf(polygonToStock(stockFromFace, outline)));
-    return [{ id, role, groupId: group.id, stockId, spans, blank: grownBy(spans, cleanUp), cleanUp }];
+    return [{ id, role, groupId: group.id, stockId, blankId: ownerOf(id), spans, blank: grownBy(spans, cleanUp), cleanUp }];
   });
 }
 

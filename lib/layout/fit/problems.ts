@@ -22,7 +22,9 @@ import { missingToSpokenFor, overSpokenFor } from "./spoken-for";
 export function problems(layout: FaceLayout, boards: readonly BoardFace[]): Problem[] {
   const boardById = new Map(boards.map((board) => [board.id, board]));
   const lying = lyingPieces(layout, layOut(layout));
-  const known = lying.filter(({ stockId }) => boardById.has(stockId));
+  // What is wrong with the wood of one blank is said once, of the first piece that comes from it.
+  const blanks = lying.filter(({ id, blankId }) => id === blankId);
+  const known = blanks.filter(({ stockId }) => boardById.has(stockId));
   const slideOf = slidesByGroup(layout, lying);
   return [
     ...notPlaced(layout),
@@ -30,7 +32,7 @@ export function problems(layout: FaceLayout, boards: readonly BoardFace[]): Prob
     ...againstGrain(layout),
     ...known.flatMap((piece) => outside(piece, boardById)),
     ...inKeepClear(known, boardById, slideOf),
-    ...tooClose(layout, lying),
+    ...tooClose(layout, blanks),
     ...onSpokenFor(layout, known, boardById, slideOf),
   ];
 }

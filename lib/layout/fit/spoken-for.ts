@@ -6,6 +6,7 @@
 import type { StockRect } from "../frame/point";
 import type { FaceLayout } from "../pattern/face-layout";
 import { layOut } from "../pattern/lay-out";
+import { blankOwners } from "../pattern/one-blank";
 import type { PieceId, StockId } from "../piece";
 import type { SpokenFor } from "../stock/board";
 import { um } from "../units/um";
@@ -20,14 +21,15 @@ export interface WoodTaken extends Omit<SpokenFor, "id"> {
   readonly label: string;
 }
 
-/** What the pieces of a layout take of one board, in reading order. */
+/** What the pieces of a layout take of one board, in reading order; pieces of one blank take it together. */
 export function woodTaken(layout: FaceLayout, stockId: StockId): WoodTaken[] {
   const pieces = layOut(layout);
-  const labelOf = new Map(pieces.map(({ id, label }) => [id, label]));
+  const ownerOf = blankOwners(layout.face);
+  const labelOf = (id: PieceId) => pieces.flatMap((piece) => (ownerOf(piece.id) === id ? piece.label : [])).join("+");
   const kerfs = { along: layout.crosscut.kerf, across: layout.rip.kerf };
   return lyingPieces(layout, pieces)
-    .filter((piece) => piece.stockId === stockId)
-    .map(({ id, blank }) => ({ piece: id, label: labelOf.get(id) ?? "", rect: rectOf(blank), kerfs }));
+    .filter((piece) => piece.stockId === stockId && piece.blankId === piece.id)
+    .map(({ id, blank }) => ({ piece: id, label: labelOf(id), rect: rectOf(blank), kerfs }));
 }
 
 /** Moves of a piece along one axis that bring it too near for the cut between; none while the two pass each other. */

@@ -46,8 +46,10 @@ interface Ground {
 function anchorPoint(layout: FaceLayout, group: PieceGroup, places: readonly ChartPlace[], ground: Ground): FacePoint {
   const guides = group.pieceIds.filter((id) => ofPiece(places, slotOf(group, id)).anchors);
   const box = boxOf(guides.length > 0 ? guides : group.pieceIds, ground.slotRect);
+  // Of a mirrored piece one point of the face is another of the wood, so it can hold nothing in its place.
+  const canAnchor = (id: PieceId) => group.pieceIds.includes(id) && ofPiece(places, slotOf(group, id)).mirrored === "no";
   const own = (anchor: AnchorX | AnchorY) =>
-    typeof anchor === "object" && group.pieceIds.includes(anchor.piece) ? ground.ownRect(anchor.piece) : box;
+    typeof anchor === "object" && canAnchor(anchor.piece) ? ground.ownRect(anchor.piece) : box;
   const forX = own(layout.anchorX);
   const forY = own(layout.anchorY);
   return { x: pointOn(layout.anchorX, forX.x, forX.width), y: pointOn(layout.anchorY, forY.y, forY.height) };

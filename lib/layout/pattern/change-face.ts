@@ -7,6 +7,7 @@ import { hungChart } from "./charts";
 import type { Face } from "./face";
 import type { AnchorX, AnchorY, FaceLayout } from "./face-layout";
 import type { CutChoices } from "./fresh-layout";
+import { oneBlankSets } from "./one-blank";
 import { ofPiece, pieceIdsOf } from "./piece-ids";
 import { groupWith, slotOf } from "./slots";
 
@@ -47,16 +48,31 @@ export function changeFaceRenaming(before: FaceLayout, face: Face, renaming: Ren
     anchorX: stillThere(layout.anchorX, present),
     anchorY: stillThere(layout.anchorY, present),
   };
-  const groups = layout.groups.map((group, index) => {
+  const slotsByGroup = layout.groups.map((group, index) => {
     const slots = new Map<PieceId, PieceId>();
     for (const id of group.pieceIds) if (present.has(id)) slots.set(id, swapsUndone.has(id) ? id : slotOf(group, id));
     if (index === 0) for (const id of added) slots.set(id, id);
-    return groupWith(resized, group, slots);
+    return slots;
   });
+  for (const ids of oneBlankSets(face)) bringTogether(slotsByGroup, ids);
+  const groups = layout.groups.map((group, index) => groupWith(resized, group, slotsByGroup[index] ?? new Map()));
   return {
     layout: { ...resized, groups: groups.filter((group, index) => index === 0 || group.pieceIds.length > 0) },
     swapsUndone: ids.filter((id) => swapsUndone.has(id)),
   };
+}
+
+/** What is sawn as one blank goes to the group of its first piece. */
+function bringTogether(slotsByGroup: readonly Map<PieceId, PieceId>[], ids: readonly PieceId[]): void {
+  const home = slotsByGroup.find((slots) => slots.has(ids[0] ?? ""));
+  for (const slots of slotsByGroup) {
+    for (const id of ids) {
+      const slot = slots.get(id);
+      if (home === undefined || slots === home || slot === undefined) continue;
+      slots.delete(id);
+      home.set(id, slot);
+    }
+  }
 }
 
 /** The same groups and anchors under the new names; a swap that a piece without a new name had a part in is undone. */

@@ -2,15 +2,34 @@
 import type { Isometry } from "../frame/isometry";
 import type { Piece, PieceId } from "../piece";
 import type { Edge } from "../program/program";
+import { um } from "../units/um";
 import type { EdgeAmounts } from "./face";
 import type { FaceLayout } from "./face-layout";
+import { oneBlankSets } from "./one-blank";
 import { ofPiece } from "./piece-ids";
 import { rulesOf } from "./rules-of";
 
-/** Clean-up by stock edge of each of these pieces of a layout, as they lie on wood. */
+/** Clean-up by stock edge of each of these pieces of a layout, as they lie on wood. What comes from one blank has the blank's. */
 export function cleanUpEdges(layout: FaceLayout, pieces: readonly Piece[]): ReadonlyMap<PieceId, EdgeAmounts> {
   const onFace = rulesOf(layout.face).cleanUps(layout);
-  return new Map(pieces.map(({ id, stockFromFace }) => [id, onStock(ofPiece(onFace, id), stockFromFace)]));
+  const found = new Map(pieces.map(({ id, stockFromFace }) => [id, onStock(ofPiece(onFace, id), stockFromFace)]));
+  for (const ids of oneBlankSets(layout.face)) {
+    const blank = largest(ids.flatMap((id) => found.get(id) ?? []));
+    for (const id of ids) if (blank !== null && found.has(id)) found.set(id, blank);
+  }
+  return found;
+}
+
+function largest(amounts: readonly EdgeAmounts[]): EdgeAmounts | null {
+  return amounts.reduce<EdgeAmounts | null>(
+    (most, { left, right, top, bottom }) => ({
+      left: um(Math.max(left, most?.left ?? 0)),
+      right: um(Math.max(right, most?.right ?? 0)),
+      top: um(Math.max(top, most?.top ?? 0)),
+      bottom: um(Math.max(bottom, most?.bottom ?? 0)),
+    }),
+    null,
+  );
 }
 
 /** Right for quarter turns and mirrors, which take edges to edges. */

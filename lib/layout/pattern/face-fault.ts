@@ -1,7 +1,7 @@
 /** What makes a face mean nothing, by pattern: mistakes of a program, not of a maker. */
 import type { Um } from "../units/um";
 
-export type FaceFault = GridFault | CutOutFault | WrapFault;
+export type FaceFault = GridFault | CutOutFault | WrapFault | ResawnFault;
 
 export type GridFault =
   | { readonly fault: "empty-face" }
@@ -39,3 +39,9 @@ export type WrapFault =
   | { readonly fault: "negative-length"; readonly where: "gap" }
   /** The bevels of its two ends meet before the inner face: it is this much too short. */
   | { readonly fault: "no-inner-face"; readonly side: number; readonly by: Um };
+
+export type ResawnFault =
+  | { readonly fault: "size-not-positive"; readonly axis: "width" | "height" | "thickness"; readonly index: 0 }
+  | { readonly fault: "negative-length"; readonly where: "resaw" }
+  /** A surface that leans by a right angle or more shows on no two faces. */
+  | { readonly fault: "lean-out-of-range" };

@@ -87,5 +87,26 @@ export interface WrapFace {
   readonly closed: boolean;
 }
 
-export type Face = GridFace | CutOutFace | WrapFace;
+/**
+ * Thick stock sawn through its thickness and opened like a book, so that the two sawn faces show as mirror images. Both leaves come
+ * from one rectangle of the board: the first shows it as photographed and comes from behind, the second shows it mirrored and
+ * comes from the leaf at the photographed face. Changing places opens the book at the other edge.
+ */
+export interface ResawnFace {
+  readonly pattern: "resawn";
+  readonly grain: Grain;
+  /** Each leaf as finished. */
+  readonly leaf: { readonly width: Um; readonly height: Um; readonly thickness: Um };
+  /** The second leaf hangs beside the first, or below it. */
+  readonly opens: "side" | "over";
+  /** `planing`: taken off each face of each leaf. */
+  readonly resaw: { readonly kerf: Um; readonly planing: Um };
+  /**
+   * By how much the surfaces of the figure lean from the face's normal across the grain, degrees: positive where they lie farther
+   * from the top edge of the photograph the deeper they are. null while nobody knows.
+   */
+  readonly leanDeg: number | null;
+}
+
+export type Face = GridFace | CutOutFace | WrapFace | ResawnFace;
 export type Pattern = Face["pattern"];

@@ -18,6 +18,8 @@ export type LayoutRefusal =
   | { readonly reason: "not-placed"; readonly groupId: string }
   /** The piece is a group of its own already, or the only piece of the set. */
   | { readonly reason: "already-loose"; readonly piece: PieceId }
+  /** These are sawn as one blank: none of them goes without the others. */
+  | { readonly reason: "one-blank"; readonly pieces: readonly PieceId[] }
   | { readonly reason: "already-in-set"; readonly piece: PieceId }
   | { readonly reason: "same-piece"; readonly piece: PieceId }
   /** A front cannot take the place of a part of the rail. */

@@ -7,6 +7,7 @@ import { hungChart } from "./charts";
 import type { Face } from "./face";
 import type { FaceFault } from "./face-fault";
 import type { FaceLayout } from "./face-layout";
+import { oneBlankSets } from "./one-blank";
 import { ofPiece, pieceIdsOf } from "./piece-ids";
 import { rulesOf } from "./rules-of";
 import { slotOf } from "./slots";
@@ -20,6 +21,8 @@ export type LayoutFault =
   /** Every piece is in one group, and every slot gives one piece. */
   | { readonly fault: "piece-not-once"; readonly piece: PieceId; readonly times: number }
   | { readonly fault: "slot-not-once"; readonly piece: PieceId; readonly times: number }
+  /** What is sawn as one blank lies in one group. */
+  | { readonly fault: "one-blank-parted"; readonly pieces: readonly PieceId[] }
   | { readonly fault: "swap-of-unequal"; readonly piece: PieceId; readonly slot: PieceId };
 
 /** Everything that is wrong with the shape of a layout; empty when `layOut` may be called. */
@@ -67,6 +70,11 @@ function groupFaults(layout: FaceLayout): LayoutFault[] {
     if (times !== 1) faults.push({ fault: "piece-not-once", piece, times });
     const slots = slotTimes.get(piece) ?? 0;
     if (slots !== 1) faults.push({ fault: "slot-not-once", piece, times: slots });
+  }
+
+  for (const pieces of oneBlankSets(layout.face)) {
+    const together = layout.groups.some(({ pieceIds }) => pieces.every((id) => pieceIds.includes(id)));
+    if (!together) faults.push({ fault: "one-blank-parted", pieces });
   }
 
   const hung = hungChart(layout.face);

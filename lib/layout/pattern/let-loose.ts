@@ -6,6 +6,7 @@ import type { PieceId } from "../piece";
 import type { FaceLayout, PieceGroup } from "./face-layout";
 import { groupAt, originOf } from "./group-origin";
 import { changed, type LayoutChange, refused, withGroup } from "./layout-change";
+import { oneBlankSets } from "./one-blank";
 import { groupOf, groupWith, slotOf, slotsOf } from "./slots";
 
 /** The piece becomes a group of one that lies where it lay. */
@@ -13,6 +14,9 @@ export function letLoose(layout: FaceLayout, piece: PieceId): LayoutChange {
   const group = groupOf(layout, piece);
   if (group === null) return refused({ reason: "unknown-piece", piece });
   if (group.pieceIds.length === 1) return refused({ reason: "already-loose", piece });
+
+  const mates = oneBlankSets(layout.face).find((ids) => ids.includes(piece));
+  if (mates !== undefined) return refused({ reason: "one-blank", pieces: mates });
 
   const origin = originOf(layout, group);
   const slots = slotsOf(group);

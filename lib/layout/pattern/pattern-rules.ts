@@ -69,4 +69,13 @@ export interface PatternRules<F extends Face = Face> {
   readonly evenGaps?: (face: F, axis: "columns" | "rows", gap: Um) => F | null;
   /** Everything that makes the face mean nothing; the others may only be asked when there is none. */
   readonly faults: (face: F) => readonly FaceFault[];
+  /** Sets of pieces, by place in reading order, that are sawn as one blank and parted through its thickness. Absent: none. */
+  readonly oneBlank?: (face: F) => readonly (readonly number[])[];
+  /** What the stock has to measure through its thickness. Absent: nothing that is known of. */
+  readonly stockThickness?: (face: F) => Um;
+  /**
+   * Where the photograph has the figure that a place shows, µm across the grain from the place itself, for wood that shows below the
+   * photographed face; null where it is not known. Absent: at the place.
+   */
+  readonly figureOffsets?: (face: F) => readonly (Um | null)[];
 }

@@ -3,6 +3,7 @@ import { cutOutRules } from "./cut-out/cut-out-rules";
 import type { Face, Pattern } from "./face";
 import { gridRules } from "./grid/grid-rules";
 import type { PatternRules } from "./pattern-rules";
+import { resawnRules } from "./resawn/resawn-rules";
 import { wrapRules } from "./wrap/wrap-rules";
 
 type FaceOf<P extends Pattern> = Extract<Face, { readonly pattern: P }>;
@@ -11,6 +12,7 @@ const rules: { readonly [P in Pattern]: PatternRules<FaceOf<P>> } = {
   grid: gridRules,
   cutOut: cutOutRules,
   wrap: wrapRules,
+  resawn: resawnRules,
 };
 
 /** The rules of a face's own pattern. */

@@ -9,6 +9,6 @@ export interface UmRange {
 }
 
 export interface Seam extends SeamPlace {
-  /** Jump in the wood, or null where the two pieces come from unrelated stock. */
+  /** Jump in the wood; null where the two pieces come from unrelated stock, and between leaves whose figure leans no one knows how. */
   readonly jump: { readonly along: UmRange; readonly across: UmRange } | null;
 }

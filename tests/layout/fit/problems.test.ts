@@ -175,7 +175,7 @@ describe("problems", () => {
         const found = problems(layout, [{ ...board, outline: null }]);
         expect(found.filter(({ kind }) => kind === "too-close" || kind === "grain")).toEqual([]);
         const outside = new Set(found.flatMap((one) => (one.kind === "outside" ? [one.piece] : [])));
-        for (const { id, spans, cleanUp } of lyingPieces(layout)) {
+        for (const { blankId: id, spans, cleanUp } of lyingPieces(layout)) {
           const { along, across } = spans;
           const inside =
             along.from >= cleanUp.left &&

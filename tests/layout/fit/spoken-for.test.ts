@@ -121,7 +121,8 @@ describe("wood that is spoken for", () => {
     fc.assert(
       fc.property(arbitraryLayout, arbitrarySpokenFor, (layout, spokenFor) => {
         const found = onSpokenFor(layout, [{ ...plain, spokenFor }]);
-        for (const { id, stockId, blank } of lyingPieces(layout)) {
+        for (const { id: own, blankId: id, stockId, blank } of lyingPieces(layout)) {
+          if (own !== id) continue;
           for (const wood of spokenFor) {
             const problem = found.find((one) => one.piece === id && one.spokenForId === wood.id);
             const meets = (x: number, y: number, kerfs: { along: number; across: number }) =>
