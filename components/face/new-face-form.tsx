@@ -4,6 +4,7 @@ import { useRouter } from "next/navigation";
 import { type FormEvent, useState } from "react";
 import { useUnits } from "@/components/shell/units";
 import { Button } from "@/components/ui/button";
+import { Choice } from "@/components/ui/choice";
 import { SelectField, TextField } from "@/components/ui/field";
 import { Notice } from "@/components/ui/notice";
 import { messageOf } from "@/lib/client/fault-from-server";
@@ -13,10 +14,17 @@ import type { Job } from "@/lib/schemas/job";
 import type { Saw } from "@/lib/schemas/shop";
 import { type AxisDraft, axisSizes, startingDraft } from "./axis-draft";
 import { AxisForm } from "./axis-form";
+import { cutOutFace, startingCutOut } from "./cut-out-draft";
+import { CutOutFields } from "./cut-out-fields";
+import { type DraftedFace, type FaceKind, faceKinds } from "./face-draft";
 import { FaceDrawing } from "./face-drawing";
 import { lossOfSaw } from "./loss-of-saw";
+import { resawnFace, startingResawn } from "./resawn-draft";
+import { ResawnFields } from "./resawn-fields";
+import { startingWrap, wrapFace } from "./wrap-draft";
+import { WrapFields } from "./wrap-fields";
 
-/** Describes a face of fronts: sizes across and down, which way the grain runs, and the saws that part them. */
+/** Describes a face: how its pieces go together, their sizes, which way the grain runs, and the saws that part them. */
 export function NewFaceForm({ job, saws }: { job: Job; saws: readonly Saw[] }) {
   const router = useRouter();
   const { units } = useUnits();
@@ -24,6 +32,10 @@ export function NewFaceForm({ job, saws }: { job: Job; saws: readonly Saw[] }) {
   const [grain, setGrain] = useState<GridFace["grain"]>("horizontal");
   const [columns, setColumns] = useState<AxisDraft>(() => startingDraft("columns", units));
   const [rows, setRows] = useState<AxisDraft>(() => startingDraft("rows", units));
+  const [kind, setKind] = useState<FaceKind>("grid");
+  const [cutOut, setCutOut] = useState(() => startingCutOut(units));
+  const [wrap, setWrap] = useState(() => startingWrap(units));
+  const [resawn, setResawn] = useState(() => startingResawn(units));
   const [crosscutSawId, setCrosscutSawId] = useState(() => usualSaw(saws));
   const [ripSawId, setRipSawId] = useState(() => usualSaw(saws));
   const create = useMutation({
@@ -32,19 +44,19 @@ export function NewFaceForm({ job, saws }: { job: Job; saws: readonly Saw[] }) {
     onSuccess: (face) => router.replace(`/jobs/${job.id}/faces/${face.id}`),
   });
 
-  const face = faceOf(columns, rows, grain);
+  const drafted: Readonly<Record<FaceKind, () => DraftedFace>> = {
+    grid: () => gridOf(columns, rows, grain),
+    cutOut: () => cutOutFace(cutOut, grain),
+    wrap: () => wrapFace(wrap, grain),
+    resawn: () => resawnFace(resawn, grain),
+  };
+  const result = drafted[kind]();
   const submit = (event: FormEvent) => {
     event.preventDefault();
-    if (!face) return;
+    if (!result.ok) return;
     create.mutate({
       title,
-      face: {
-        ...face,
-        columns: [...face.columns],
-        rows: [...face.rows],
-        columnGaps: [...face.columnGaps],
-        rowGaps: [...face.rowGaps],
-      },
+      face: result.face,
       crosscut: lossOfSaw(saws.find(({ id }) => id === crosscutSawId)),
       rip: lossOfSaw(saws.find(({ id }) => id === ripSawId)),
       crosscutSawId: crosscutSawId || null,
@@ -64,8 +76,17 @@ export function NewFaceForm({ job, saws }: { job: Job; saws: readonly Saw[] }) {
           value={title}
           onChange={(event) => setTitle(event.target.value)}
         />
-        <AxisForm axis="columns" draft={columns} onChange={setColumns} />
-        <AxisForm axis="rows" draft={rows} onChange={setRows} />
+        <Choice legend="How the pieces go together" value={kind} options={faceKinds} onChange={setKind} />
+        <p className="-mt-2 text-sm text-pencil">{faceKinds.find(({ value }) => value === kind)?.hint}</p>
+        {kind === "grid" && (
+          <>
+            <AxisForm axis="columns" draft={columns} onChange={setColumns} />
+            <AxisForm axis="rows" draft={rows} onChange={setRows} />
+          </>
+        )}
+        {kind === "cutOut" && <CutOutFields draft={cutOut} onChange={setCutOut} />}
+        {kind === "resawn" && <ResawnFields draft={resawn} onChange={setResawn} />}
+        {kind === "wrap" && <WrapFields draft={wrap} onChange={setWrap} />}
         <SelectField
           label="Grain runs"
           value={grain}
@@ -77,16 +98,16 @@ export function NewFaceForm({ job, saws }: { job: Job; saws: readonly Saw[] }) {
         <SawSelect label="Crosscuts made with" saws={saws} value={crosscutSawId} onChange={setCrosscutSawId} />
         <SawSelect label="Rips made with" saws={saws} value={ripSawId} onChange={setRipSawId} />
         {create.isError && <Notice kind="stop">{messageOf(create.error)}</Notice>}
-        <Button type="submit" kind="primary" disabled={!face || create.isPending || create.isSuccess}>
+        <Button type="submit" kind="primary" disabled={!result.ok || create.isPending || create.isSuccess}>
           Add face
         </Button>
       </div>
       <div className="lg:sticky lg:top-5 lg:self-start">
         <h2 className="mb-2 text-lg">As it will stand</h2>
-        {face ? (
-          <FaceDrawing face={face} className="aspect-5/2 max-h-[60dvh] w-full" />
+        {result.ok ? (
+          <FaceDrawing face={result.face} className="aspect-5/2 max-h-[60dvh] w-full" />
         ) : (
-          <p className="text-pencil">Nothing to draw until the sizes fit.</p>
+          <p className="text-pencil">{result.message}</p>
         )}
       </div>
     </form>
@@ -119,9 +140,12 @@ function SawSelect({
   );
 }
 
-function faceOf(columns: AxisDraft, rows: AxisDraft, grain: GridFace["grain"]): GridFace | null {
+function gridOf(columns: AxisDraft, rows: AxisDraft, grain: GridFace["grain"]): DraftedFace {
   const across = axisSizes(columns);
   const down = axisSizes(rows);
-  if (!across.ok || !down.ok) return null;
-  return { pattern: "grid", columns: across.sizes, rows: down.sizes, columnGaps: across.gaps, rowGaps: down.gaps, grain };
+  if (!across.ok || !down.ok) return { ok: false, message: "Nothing to draw until the sizes fit." };
+  return {
+    ok: true,
+    face: { pattern: "grid", columns: across.sizes, rows: down.sizes, columnGaps: across.gaps, rowGaps: down.gaps, grain },
+  };
 }

@@ -15,11 +15,14 @@ import type { Shop } from "@/lib/schemas/shop";
 import { BoardsSection } from "./boards-section";
 import { ConflictDialog } from "./conflict-dialog";
 import { CutsSection } from "./cuts-section";
+import { GluingSection } from "./gluing-section";
 import { HelpDialog } from "./help-dialog";
 import { IssueButton } from "./issue-button";
+import { LeavesSection } from "./leaves-section";
 import { LiveLine } from "./live-line";
 import { MovementSection } from "./movement-section";
 import { ProblemsSection } from "./problems-section";
+import { RunSection } from "./run-section";
 import { SaveStatus } from "./save-status";
 import { SeamsSection } from "./seams-section";
 import { SizesSection } from "./sizes-section";
@@ -94,6 +97,9 @@ function TableScreen({ initial, mayChange }: Omit<Props, "shop">) {
           <SeamsSection />
           <BoardsSection asItStands={issuing.asItStands} />
           <CutsSection />
+          <GluingSection />
+          <RunSection />
+          <LeavesSection />
           <SizesSection />
           <MovementSection />
         </aside>

@@ -5,8 +5,11 @@ import { Button } from "@/components/ui/button";
 import { LengthField } from "@/components/ui/length-field";
 import { changeSizes } from "@/lib/editor/commands/change-sizes";
 import { faceSize, type GridFace, type Um, um } from "@/lib/layout";
+import { LeafFields } from "./leaf-fields";
 import { OpeningDialog } from "./opening-dialog";
 import { PanelSection } from "./panel-section";
+import { RailFields } from "./rail-fields";
+import { RunFields } from "./run-fields";
 import { useEditorState, useTableContext } from "./table-context";
 
 export function SizesSection() {
@@ -17,6 +20,9 @@ export function SizesSection() {
   const { width, height } = faceSize(face);
   return (
     <PanelSection title="Sizes" beside={<span className="measure">{`${print(width)} × ${print(height)}`}</span>} open={false}>
+      {face.pattern === "cutOut" && <RailFields face={face} />}
+      {face.pattern === "wrap" && <RunFields face={face} />}
+      {face.pattern === "resawn" && <LeafFields face={face} />}
       {face.pattern === "grid" && (
         <>
           <fieldset className="flex flex-col gap-3" disabled={!editor.mayChange}>

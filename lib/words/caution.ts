@@ -23,3 +23,16 @@ export const gluingCautions: readonly string[] = [
   "Glue by its maker's instructions: skin, air, open time, clamping time, warmth.",
   "Clamps are heavy and pinch: two people for a long blank.",
 ];
+
+/** Common practice, no source, but for the guard and riving knife, which HSE's sheet WIS16 (revision 2) asks for at every job. */
+export const bevelCautions: readonly string[] = [
+  "Guard and riving knife set for the tilted blade.",
+  "Show face up where the blade tilts away from the fence, and no fence where the offcut could be caught under the blade.",
+  "Short part: clamp it to the gauge, hands well clear of the blade.",
+];
+
+/** Common practice, no source. */
+export const resawCautions: readonly string[] = [
+  "Resawing: high fence, feather board, guides down to the wood, push block at the end of the cut.",
+  "Check that blade and motor take this height, and let the blade set the pace.",
+];
