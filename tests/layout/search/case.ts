@@ -15,8 +15,6 @@ import { sceneGround } from "@/lib/layout/search/place-request";
 import { makeScene, type Scene } from "@/lib/layout/search/scene";
 import { arbitrarySmallBoard, arbitraryTask, arbitraryWeights, woodPicture } from "./arbitrary-search";
 
-export const leastOffcut = { along: um(12_000), across: um(5_000) };
-
 export interface Case {
   readonly layout: FaceLayout;
   readonly board: BoardFace;
@@ -45,7 +43,7 @@ export function requestOf({ layout, board, weights, seed, elsewhere }: Case): Pl
     neighbours: elsewhere ? [{ stockId: "b2", picture: woodPicture(100_000, 60_000, seed + 1) }] : [],
     weights,
     stock: 0.37,
-    leastOffcut,
+    leastOffcut: { along: um(12_000), across: um(5_000) },
     count: 5,
     apart: { along: 9_000, across: 4_000 },
   };
@@ -56,5 +54,5 @@ export function sceneOf(request: PlaceRequest, turns: QuarterTurns): Scene {
   if (side === undefined) throw new Error("no side");
   const others = lyingPieces(request.layout).filter(({ groupId, stockId }) => groupId !== "set" && stockId === "b1");
   const kerfs = { along: request.layout.crosscut.kerf, across: request.layout.rip.kerf };
-  return makeScene(sceneGround(request), runSlices(sideTables(side, others, kerfs, leastOffcut)), turns);
+  return makeScene(sceneGround(request), runSlices(sideTables(side, others, kerfs, request.leastOffcut)), turns);
 }

@@ -36,7 +36,7 @@ describe("which places are allowed", () => {
         }
         expect(wrong).toEqual([]);
       }),
-      { numRuns: 10 },
+      { numRuns: 7 },
     );
   });
 });
@@ -59,7 +59,7 @@ describe("what a place is worth", () => {
           expect({ total, parts, marks: marksOf(scene, column, row).along }).toEqual(brute);
         }
       }),
-      { numRuns: 12 },
+      { numRuns: 8 },
     );
   });
 });
