@@ -63,8 +63,8 @@ export function useBench(order: Order) {
 
 export type BenchState = ReturnType<typeof useBench>;
 
-function progressOf({ ticks, superseded, revisions, revision }: Order): OrderProgress {
-  return { ticks, superseded, newestRevision: revisions[0]?.revision ?? revision };
+function progressOf({ ticks, asCut, superseded, revisions, revision }: Order): OrderProgress {
+  return { ticks, asCut, superseded, newestRevision: revisions[0]?.revision ?? revision };
 }
 
 function firstOpen(done: readonly boolean[], otherwise = done.length - 1): number {

@@ -35,6 +35,7 @@ export function OrderPage({ initial, revision, paper, qr }: Props) {
     ...progressQuery(order.id, order.revisionId),
     initialData: {
       ticks: order.ticks,
+      asCut: order.asCut,
       superseded: order.superseded,
       newestRevision: order.revisions[0]?.revision ?? order.revision,
     },

@@ -52,6 +52,7 @@ async function revisionsOn(db: Connection, shopId: ShopId, onPictures: SQL, face
       revision: orderRevision.revision,
       supersededAt: orderRevision.supersededAt,
       summary: orderRevision.summary,
+      orderId: cutOrder.id,
       orderNumber: cutOrder.number,
       state: cutOrder.state,
       ofThisFace: isNotNull(cutOrderFace.faceId).mapWith(Boolean),

@@ -14,6 +14,19 @@ export async function listTicks(db: Connection, shopId: ShopId, revisionId: stri
     .orderBy(asc(stepTick.tickedAt), asc(stepTick.stepId));
 }
 
+/** The rows as they are, to be carried over to the next revision. */
+export async function listTickRows(db: Connection, shopId: ShopId, revisionId: string) {
+  return db
+    .select()
+    .from(stepTick)
+    .where(and(eq(stepTick.shopId, shopId), eq(stepTick.revisionId, revisionId)));
+}
+
+/** Of a revision that nobody has seen yet. */
+export async function insertTicks(tx: Connection, rows: readonly (typeof stepTick.$inferInsert & { shopId: ShopId })[]) {
+  if (rows.length > 0) await tx.insert(stepTick).values([...rows]);
+}
+
 /** The ticked steps of several revisions. */
 export async function listTickedSteps(db: Connection, shopId: ShopId, revisionIds: readonly string[]) {
   if (revisionIds.length === 0) return [];

@@ -174,8 +174,9 @@ export { cutRequestFor, type PieceOnBoard, piecesOnBoard } from "./program/reque
 export { type Verdict, verifyProgram } from "./program/verify-program";
 export type { AsCutEntry, EntryFault, KerfReach } from "./replan/as-cut";
 export { assessRest, type RestAssessment, type RestOutcome } from "./replan/assess-rest";
-export type { RestFault } from "./replan/carry-out";
+export { carryOut, type RestFault } from "./replan/carry-out";
 export type { Missing } from "./replan/fit-in-part";
+export { followWood, type WoodMove } from "./replan/follow-rest";
 export {
   type PartInHand,
   type RestLimits,

@@ -1,12 +1,16 @@
 /** What the bench enters while it cuts: a true kerf, a true size, a spoiled front. */
 import { z } from "zod";
+import { um } from "@/lib/layout";
 import { edgeSchema } from "./cut-program";
 import { defineEndpoint, everyone } from "./endpoint";
 import { idSchema } from "./ids";
-import { allowanceUmSchema, sizeUmSchema, umSchema } from "./length";
+import { sizeUmSchema, umSchema } from "./length";
 
 const stepIdSchema = z.string().min(1).max(40);
 const partIdSchema = z.string().min(1).max(40);
+
+/** Thinner than 0.1 mm is no blade, wider than 20 mm no saw's. */
+const kerfSchema = z.int().min(100).max(20_000).transform(um).meta({ description: "micrometres, 0.1 to 20 mm" });
 
 /** How many cuts of the same saw a kerf holds for: all of the revision, from this one on, this one only. */
 export const kerfReaches = ["all", "on", "only"] as const;
@@ -16,7 +20,7 @@ export const asCutEntrySchema = z.discriminatedUnion("kind", [
     kind: z.literal("kerf"),
     /** A cut, or a test cut, which tells it of all. */
     stepId: stepIdSchema,
-    kerf: allowanceUmSchema,
+    kerf: kerfSchema,
     reach: z.enum(kerfReaches),
   }),
   z.object({

@@ -1,4 +1,5 @@
 /** Every endpoint there is, for the OpenAPI document. A test holds this list against the route files. */
+import * as asCut from "./as-cut";
 import * as blank from "./blank";
 import * as board from "./board";
 import type { Endpoint } from "./endpoint";
@@ -9,6 +10,7 @@ import * as layout from "./layout";
 import * as movement from "./movement";
 import * as order from "./order";
 import * as photo from "./photo";
+import * as rest from "./rest";
 import * as service from "./service";
 import * as session from "./session";
 import * as shop from "./shop";
@@ -34,5 +36,7 @@ export const endpoints: readonly Endpoint[] = [
   figure,
   movement,
   order,
+  asCut,
+  rest,
   history,
 ].flatMap((noun) => Object.values(noun).filter(isEndpoint));

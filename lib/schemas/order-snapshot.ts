@@ -4,13 +4,16 @@
  */
 import { z } from "zod";
 import { cuts } from "./board";
-import { cutProgramSchema } from "./cut-program";
+import { cutProgramSchema, edgeStateSchema } from "./cut-program";
 import { gluingSchema } from "./gluing";
 import { idSchema } from "./ids";
 import { faceLayoutSchema } from "./layout";
 import { rectSchema, sizeUmSchema, umSchema } from "./length";
+import { boardAsCutSchema, snapshotRestSchema } from "./rest-snapshot";
 import { boardSides } from "./straightening";
 import { keepClearSchema, outlineSchema } from "./zones";
+
+const boardEdge = edgeStateSchema.exclude(["sawn"]);
 
 const snapshotSawSchema = z.object({ name: z.string(), kerf: umSchema, cleanUp: umSchema });
 
@@ -34,6 +37,10 @@ export const snapshotBoardSchema = z.object({
   keepClear: z.array(keepClearSchema),
   pieces: z.array(z.object({ pieceId: z.string(), label: z.string(), rect: rectSchema, turns: z.int().min(0).max(3) })),
   program: cutProgramSchema,
+  /** The board's own edges before any work; absent in orders issued before it was kept. */
+  edges: z.object({ left: boardEdge, right: boardEdge, top: boardEdge, bottom: boardEdge }).optional(),
+  /** What was cut of it before this revision; absent: nothing. */
+  asCut: boardAsCutSchema.optional(),
 });
 export type SnapshotBoard = z.output<typeof snapshotBoardSchema>;
 
@@ -47,6 +54,8 @@ export const orderSnapshotSchema = z.object({
   crosscutSaw: snapshotSawSchema,
   ripSaw: snapshotSawSchema,
   boards: z.array(snapshotBoardSchema).min(1),
+  /** Of a revision issued after the bench had begun. */
+  rest: snapshotRestSchema.optional(),
 });
 export type OrderSnapshot = z.output<typeof orderSnapshotSchema>;
 

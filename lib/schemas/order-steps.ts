@@ -65,8 +65,8 @@ export function orderSteps(snapshot: OrderSnapshot): readonly OrderStep[] {
     { id: markId(board.tag), kind: "mark", board },
     ...(index === 0 ? tests.map((test) => ({ ...test, kind: "test-cut" as const, board })) : []),
     ...board.program.steps.map((cut) => ({ id: `${board.tag}:${cut.number}`, kind: "cut" as const, board, cut })),
-    ...cleanUpGroups(board).map((group, i) => ({
-      id: `${board.tag}:clean-up-${i + 1}`,
+    ...cleanUps(board).map(({ number, group }) => ({
+      id: `${board.tag}:clean-up-${number}`,
       kind: "clean-up" as const,
       board,
       group,
@@ -79,6 +79,15 @@ export function orderSteps(snapshot: OrderSnapshot): readonly OrderStep[] {
     })),
   ]);
   return steps.map((step, index) => ({ ...step, number: index + 1 }));
+}
+
+/** Ids of the cuts and clean-ups that were done before this revision was issued. */
+export function doneBefore({ boards }: OrderSnapshot): ReadonlySet<string> {
+  const ids = boards.flatMap(({ tag, asCut }) => [
+    ...(asCut?.done ?? []).map((number) => `${tag}:${number}`),
+    ...(asCut?.cleanedUp ?? []).map(({ number }) => `${tag}:clean-up-${number}`),
+  ]);
+  return new Set(ids);
 }
 
 /** In the order of work: everything at hand first, outer edges before joints, so that a joint leaves a board as wide as it stays. */
@@ -142,10 +151,22 @@ export function testCuts({ boards, ripSaw, crosscutSaw }: OrderSnapshot): readon
   return cuts.map((cut) => ({ id: `test-cut:${cut}`, saw: cut === "rip" ? ripSaw : crosscutSaw, cuts: [cut] }));
 }
 
+/** Those ticked before this revision was issued keep their numbers; the others go on from there. */
+export function cleanUps(board: SnapshotBoard): readonly { readonly number: number; readonly group: CleanUpGroup }[] {
+  const before = board.asCut?.cleanedUp ?? [];
+  const cleaned = new Set(before.flatMap(({ labels }) => labels));
+  const last = Math.max(0, ...before.map(({ number }) => number));
+  return [
+    ...before.map(({ number, ...group }) => ({ number, group })),
+    ...cleanUpGroups(board, cleaned).map((group, i) => ({ number: last + i + 1, group })),
+  ];
+}
+
 /** In the order in which the first front of each group comes off the saw. */
-function cleanUpGroups({ program }: SnapshotBoard): CleanUpGroup[] {
+function cleanUpGroups({ program }: SnapshotBoard, cleaned: ReadonlySet<string>): CleanUpGroup[] {
   const groups = new Map<string, CleanUpGroup>();
   for (const piece of program.pieces) {
+    if (cleaned.has(piece.label ?? "")) continue;
     const takes = takesOf(program.cleanUps.filter(({ partId }) => partId === piece.id));
     if (Object.keys(takes).length === 0) continue;
     const { width: length, height: width } = piece.rect;

@@ -1,5 +1,6 @@
 /** Cut orders: issue, read, print, tick. */
 import { z } from "zod";
+import { asCutSchema } from "./as-cut";
 import { defineEndpoint, everyone, makers } from "./endpoint";
 import { idSchema } from "./ids";
 import { orderSnapshotSchema } from "./order-snapshot";
@@ -29,6 +30,8 @@ export const orderSchema = orderRowSchema.extend({
   fingerprint: z.string(),
   snapshot: orderSnapshotSchema,
   ticks: z.array(tickSchema),
+  /** What the bench entered of this revision, oldest first. */
+  asCut: z.array(asCutSchema),
   revisions: z.array(
     z.object({
       id: idSchema,
@@ -83,6 +86,7 @@ export const getOrder = defineEndpoint({
 /** What changes while an order is worked off; small, because benches ask for it every few seconds. */
 export const orderProgressSchema = z.object({
   ticks: z.array(tickSchema),
+  asCut: z.array(asCutSchema),
   /** Of the revision asked about. */
   superseded: z.boolean(),
   newestRevision: z.int(),

@@ -25,10 +25,15 @@ const sayings: Readonly<Record<string, string>> = {
   "face removed": "removed a face",
   "face movement chosen": "chose what stands round the fronts of",
   "layout saved": "worked on",
+  "layout followed the cutting": "moved what was left to cut of",
   "layout board put on": "put a board on the table of",
   "layout board taken off": "took a board off the table of",
   "layout moved to version": "moved to a newer picture",
   "order issued": "issued",
+  "order rest issued": "issued the rest of",
+  "order as-cut entered": "entered what was cut of",
+  "order as-cut corrected": "corrected what was cut of",
+  "order as-cut taken back": "took back an entry of",
   "order ticked": "ticked a step of",
   "order unticked": "took back a tick of",
   "saw added": "added the saw",
@@ -63,6 +68,7 @@ const reasons = {
   "picture changed": "moved the layout to another picture",
   "areas drawn": "changed what is marked on its board",
   "issued again": "issued the layout again",
+  "rest issued": "issued the rest around what is cut",
 } as const;
 export type SupersedeReason = keyof typeof reasons;
 

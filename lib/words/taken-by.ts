@@ -6,8 +6,8 @@ export function takenBySentence(tag: string, taken: TakenBy): string {
   const { orderNumber, faceTitle, by, cutInto, unfinished } = taken;
   if (by === "this-order") {
     return (
-      `${tag} was already cut into by ${orderName(taken)} of this face, and the rest cannot be planned around what is cut yet. ` +
-      "Photograph what is left and mark it anew, and lay the fronts that are still to be cut there as a face of their own."
+      `${tag} was already cut into by ${orderName(taken)} of this face. ` +
+      "Issue the rest on the page of that order: it is planned around what is cut, with the fronts that are not cut yet where they lie here."
     );
   }
   if (unfinished) {

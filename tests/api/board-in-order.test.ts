@@ -245,8 +245,8 @@ describe("a face's own order", () => {
     expect(takenBy).toMatchObject({ by: "this-order", cutInto: true, revision: 1 });
     await expect(issue(one)).rejects.toMatchObject(
       refusal(
-        `${tag} was already cut into by cut order ${number} A of this face, and the rest cannot be planned around what is cut yet. ` +
-          "Photograph what is left and mark it anew, and lay the fronts that are still to be cut there as a face of their own.",
+        `${tag} was already cut into by cut order ${number} A of this face. ` +
+          "Issue the rest on the page of that order: it is planned around what is cut, with the fronts that are not cut yet where they lie here.",
       ),
     );
     expect((await readOrder(maker.shopId, id)).revisions).toHaveLength(1);

@@ -83,6 +83,7 @@ export async function makeOrder(change: Partial<OrderWanted> = {}): Promise<Orde
     fingerprint: fingerprintOf(snapshot),
     snapshot,
     ticks: [],
+    asCut: [],
     revisions: [{ id: revisionId, revision: 1, issuedAt, issuedBy: "Mats Lind", supersededAt }],
   };
 }

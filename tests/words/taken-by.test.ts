@@ -36,7 +36,7 @@ test.each<[string, TakenBy, string]>([
   [
     "begun by the order that would get its next revision",
     { ...cut, by: "this-order" },
-    "B-003 was already cut into by cut order 2 A of this face, and the rest cannot be planned around what is cut yet. Photograph what is left and mark it anew, and lay the fronts that are still to be cut there as a face of their own.",
+    "B-003 was already cut into by cut order 2 A of this face. Issue the rest on the page of that order: it is planned around what is cut, with the fronts that are not cut yet where they lie here.",
   ],
 ])("a board that is %s: whose it is and the way out", (_, taken, words) => {
   expect(takenBySentence("B-003", taken)).toBe(words);

@@ -12,7 +12,7 @@ export interface KerfsAsCut {
   readonly at: (step: CutStep) => Um;
   /** What has to be planed off an edge that the step leaves: of a saw that the layout was not made for. */
   readonly owedAfter: (step: CutStep) => Um;
-  /** For cuts still to be planned. What was entered last, by the place of the cut in the program, holds on. */
+  /** For cuts still to be planned. What was entered last holds on: by the place of its cut in the program, then in the list. */
   readonly kerf: Readonly<Record<CutKind, Um>>;
   /** The shop's saws with the blades they turned out to have. */
   readonly machines: CutMachines | undefined;
@@ -23,15 +23,15 @@ export function kerfsAsCut(request: RestRequest): KerfsAsCut {
   const steps = openSteps(request);
   const place = new Map(steps.map(({ number }, i) => [number, i]));
   const sawOf = ({ kind, machineId }: CutStep): string | null => (isSawn(kind) ? (machineId ?? saws[kind]) : null);
-  const kerfs = entries.flatMap((entry) => {
+  const kerfs = entries.flatMap((entry, order) => {
     const step = entry.kind === "kerf" ? steps.find(({ number }) => number === entry.step) : undefined;
-    return entry.kind === "kerf" && step ? [{ ...entry, saw: sawOf(step) }] : [];
+    return entry.kind === "kerf" && step ? [{ ...entry, saw: sawOf(step), order }] : [];
   });
   /** From which place on an entry holds. */
   const since = ({ step, reach }: KerfEntry): number => (reach === "all" ? -1 : (place.get(step) ?? 0));
   const holding = (saw: string | null, planned: Um, until = Number.POSITIVE_INFINITY): Um => {
     const lasting = kerfs.filter((entry) => entry.saw === saw && entry.reach !== "only" && since(entry) <= until);
-    const [newest] = lasting.sort((a, b) => since(b) - since(a) || a.step - b.step);
+    const [newest] = lasting.sort((a, b) => since(b) - since(a) || b.order - a.order);
     return newest?.kerf ?? planned;
   };
   const asItIs = (machine: Machine): Machine => ({ ...machine, kerf: holding(machine.id, machine.kerf) });

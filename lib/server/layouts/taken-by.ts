@@ -19,6 +19,21 @@ export async function takersOf(db: Connection, shopId: ShopId, layoutId: string)
   return takersAmong(db, shopId, await listRevisionsOnBoards(db, shopId, layoutId));
 }
 
+/** The same, but for one order: its own rest is planned around what it has cut itself. */
+export async function takersBesides(
+  db: Connection,
+  shopId: ShopId,
+  layoutId: string,
+  orderId: string,
+): Promise<ReadonlyMap<string, TakenBy>> {
+  const revisions = await listRevisionsOnBoards(db, shopId, layoutId);
+  return takersAmong(
+    db,
+    shopId,
+    revisions.filter((revision) => revision.orderId !== orderId),
+  );
+}
+
 /** The same of boards that lie on no table, by the pictures of theirs that are to be used. Every order is another face's. */
 export async function takersOfPictures(
   db: Connection,

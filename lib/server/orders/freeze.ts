@@ -27,6 +27,7 @@ import {
 import { cutProgramSchema } from "@/lib/schemas/cut-program";
 import type { Gluing } from "@/lib/schemas/gluing";
 import type { OrderSnapshot, SnapshotBoard } from "@/lib/schemas/order-snapshot";
+import { standsInTheWay } from "@/lib/schemas/spoken-for";
 import { printTag } from "@/lib/schemas/tag";
 import type { KeepClearArea } from "@/lib/schemas/zones";
 import { cutRefusalSentence, problemSentence } from "@/lib/words/layout-problem";
@@ -94,12 +95,12 @@ function refuseProblems({ shop, face, boards }: ToFreeze): void {
   };
   // No board face has wood spoken for.
   const woodOf = () => undefined;
-  const found = problems(face.layout, boards.map(boardFaceOf));
+  const found = problems(face.layout, boards.map(boardFaceOf)).filter(standsInTheWay);
   if (found.length === 0) return;
   throw refusedFor(found.map((problem) => problemSentence(problem, styleOf(unitsOf(shop)), { tagOf, woodOf })));
 }
 
-function unitsOf({ units, inchFraction }: ToFreeze["shop"]): Pick<OrderSnapshot, "units" | "inchFraction"> {
+export function unitsOf({ units, inchFraction }: ToFreeze["shop"]): Pick<OrderSnapshot, "units" | "inchFraction"> {
   return { units, inchFraction: inchFraction === 32 ? 32 : 64 };
 }
 
@@ -114,12 +115,12 @@ export function refusedFor(sentences: readonly string[]) {
  * The board as its picture of that version shows it: size, outline and keep-clear areas are in the picture's frame. The order has it to
  * itself (`refuse-taken.ts`): what others have only planned for does not stand in its way.
  */
-function boardFaceOf({ board, straightening, keepClear, glueLines }: LayoutBoard): BoardFace {
+export function boardFaceOf({ board, straightening, keepClear, glueLines }: LayoutBoard): BoardFace {
   const { length, width, outline } = straightening;
   return { id: board.id, length, width, thickness: board.thickness, outline, keepClear, spokenFor: [], glueLines };
 }
 
-function cutRequestOf({ shop, face }: ToFreeze, one: LayoutBoard): CutRequest {
+export function cutRequestOf({ shop, face }: ToFreeze, one: LayoutBoard): CutRequest {
   const board = boardFaceOf(one);
   return cutRequestFor(face.layout, board, {
     boardEdges: edgesAsTheyCame(piecesOnBoard(face.layout, board.id), board),
@@ -140,7 +141,12 @@ function edgesAsTheyCame(pieces: readonly PlacedPiece[], board: BoardFace): Boar
   return { ...boardEdges(false, true), ...(flushLeft && { left: "rough" }), ...(flushRight && { right: "rough" }) };
 }
 
-function snapshotBoard(layout: FaceLayout, one: LayoutBoard, request: CutRequest, program: CutProgram): SnapshotBoard {
+export function snapshotBoard(
+  layout: FaceLayout,
+  one: LayoutBoard,
+  request: Pick<CutRequest, "board" | "pieces" | "boardEdges">,
+  program: CutProgram,
+): SnapshotBoard {
   const { board, straightening, keepClear, glueLines, gluing } = one;
   const { length, width } = request.board;
   return {
@@ -160,6 +166,7 @@ function snapshotBoard(layout: FaceLayout, one: LayoutBoard, request: CutRequest
     keepClear: [...keepClear],
     pieces: request.pieces.map(({ pieceId, label, rect }) => ({ pieceId, label, rect, turns: turnsOf(layout, pieceId) })),
     program: cutProgramSchema.parse(program),
+    edges: request.boardEdges,
   };
 }
 

@@ -69,7 +69,12 @@ function refuseOther(present: number, asked: number): void {
 }
 
 /** While the cuts were planned the layout was moved to another version of a board's picture, or the areas on it were drawn anew. */
-async function refuseOtherTable(tx: Connection, shopId: ShopId, layoutId: string, { boards, face }: ToFreeze): Promise<void> {
+export async function refuseOtherTable(
+  tx: Connection,
+  shopId: ShopId,
+  layoutId: string,
+  { boards, face }: ToFreeze,
+): Promise<void> {
   const key = (rows: readonly Pick<LayoutBoard, "straightening">[]) =>
     rows.map(({ straightening: { id, zonesRevision } }) => `${id} ${zonesRevision}`).join();
   if (key(await listLayoutBoards(tx, shopId, layoutId)) === key(boards)) return;
@@ -79,7 +84,7 @@ async function refuseOtherTable(tx: Connection, shopId: ShopId, layoutId: string
 }
 
 /** The bench may have glued the blank up, by an earlier revision, while the cuts were planned: its steps begin elsewhere then. */
-async function refuseGluedMeanwhile(tx: Connection, shopId: ShopId, { boards, face }: ToFreeze): Promise<void> {
+export async function refuseGluedMeanwhile(tx: Connection, shopId: ShopId, { boards, face }: ToFreeze): Promise<void> {
   for (const { board, gluing } of boards) {
     if (gluing === null || (await gluingOf(tx, shopId, board))) continue;
     throw conflict("A blank of this layout was glued up meanwhile. Issue it again.", { revision: face.layoutRevision });
@@ -90,7 +95,7 @@ async function refuseGluedMeanwhile(tx: Connection, shopId: ShopId, { boards, fa
  * Two that issue from one board follow one another: the second sees what the first was given. In the order of ids, so that they do
  * not wait for each other crosswise.
  */
-async function lockInOrder(tx: Connection, shopId: ShopId, boards: readonly LayoutBoard[]): Promise<void> {
+export async function lockInOrder(tx: Connection, shopId: ShopId, boards: readonly LayoutBoard[]): Promise<void> {
   const ids = boards.map(({ board }) => board.id).sort();
   for (const id of ids) await lockBoard(tx, shopId, id);
 }
@@ -154,7 +159,7 @@ async function newOrder(tx: Connection, access: ShopAccess, snapshot: OrderSnaps
 
 type LayoutRow = NonNullable<Awaited<ReturnType<typeof lockLayout>>>;
 
-async function toFreeze(db: Connection, access: ShopAccess, faceId: string, layout: LayoutRow): Promise<ToFreeze> {
+export async function toFreeze(db: Connection, access: ShopAccess, faceId: string, layout: LayoutRow): Promise<ToFreeze> {
   const { shopId } = access;
   const shop = await readShop(db, shopId);
   const found = await findFace(db, shopId, faceId);
@@ -185,7 +190,7 @@ async function sawOf(db: Connection, shopId: ShopId, sawId: string | null, unnam
   return { name: saw?.name ?? unnamed, kerf: loss.kerf, cleanUp };
 }
 
-function summaryOf(snapshot: OrderSnapshot): OrderSummary {
+export function summaryOf(snapshot: OrderSnapshot): OrderSummary {
   return {
     faceTitles: snapshot.faces.map(({ title }) => title),
     boards: snapshot.boards.map(({ tag }) => tag),

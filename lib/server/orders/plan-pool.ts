@@ -2,8 +2,8 @@
 import "server-only";
 import path from "node:path";
 import Piscina from "piscina";
-import type { CutProgramOutcome } from "@/lib/layout";
-import type { Planner } from "./plan-cuts";
+import type { CutProgramOutcome, RestPlanOutcome } from "@/lib/layout";
+import type { Planner, RestPlanner } from "./plan-cuts";
 
 /** Orders are issued now and then: after so long without one the thread ends and gives its memory back. */
 const idleMs = 60_000;
@@ -15,6 +15,11 @@ declare global {
 
 export const planInThread: Planner = async (request) => {
   const outcome: CutProgramOutcome = await planPool().run(request);
+  return outcome;
+};
+
+export const planRestInThread: RestPlanner = async (task) => {
+  const outcome: RestPlanOutcome = await planPool().run(task, { name: "planRestAndVerify" });
   return outcome;
 };
 

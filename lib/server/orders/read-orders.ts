@@ -9,6 +9,7 @@ import type { Order, OrderProgress, OrderRow } from "@/lib/schemas/order";
 import { orderSteps } from "@/lib/schemas/order-steps";
 import { database } from "../database";
 import { notFound } from "../faults";
+import { asCutOf } from "./as-cut";
 
 export async function orderPage(shopId: ShopId, { state, page, pageSize }: QueryOf<typeof endpoint.listOrders>) {
   const rows = await listOrders(database(), shopId, { state, limit: pageSize, offset: (page - 1) * pageSize });
@@ -45,6 +46,7 @@ export async function readOrder(shopId: ShopId, orderId: string, revision?: numb
     fingerprint: frozen.fingerprint,
     snapshot: frozen.snapshot,
     ticks: ticks.map((tick) => ({ ...tick, at: tick.at.toISOString() })),
+    asCut: await asCutOf(db, shopId, frozen.id),
     revisions: revisions.map(({ id, revision: number, issuedAt, issuedBy, supersededAt }) => ({
       id,
       revision: number,
@@ -64,6 +66,7 @@ export async function orderProgress(shopId: ShopId, orderId: string, revisionId:
   const ticks = await listTicks(database(), shopId, revisionId);
   return {
     ticks: ticks.map((tick) => ({ ...tick, at: tick.at.toISOString() })),
+    asCut: await asCutOf(database(), shopId, revisionId),
     superseded: asked.supersededAt !== null,
     newestRevision: newest.revision,
   };

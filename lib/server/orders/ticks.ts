@@ -2,14 +2,14 @@
 import "server-only";
 import type { Connection } from "@/db/client";
 import { recordHistory } from "@/db/queries/history";
-import { findOrder, lockOrder, lockRevision, setOrderState } from "@/db/queries/order";
+import { lockOrder, lockRevision, setOrderState } from "@/db/queries/order";
 import { deleteTick, insertTick, listTicks } from "@/db/queries/step-tick";
-import { orderSteps } from "@/lib/schemas/order-steps";
-import { revisionLetter } from "@/lib/words/revision-letter";
-import { supersededWhy } from "@/lib/words/superseded";
+import type { OrderSnapshot } from "@/lib/schemas/order-snapshot";
+import { doneBefore, orderSteps } from "@/lib/schemas/order-steps";
 import type { ShopAccess } from "../access";
 import { database } from "../database";
-import { conflict, notFound } from "../faults";
+import { notFound, refused } from "../faults";
+import { supersededConflict } from "./superseded-conflict";
 
 /** Names one step of one revision. */
 export interface StepAddress {
@@ -34,6 +34,12 @@ export async function untickStep(access: ShopAccess, step: StepAddress) {
   return onLockedRevision(access, step, "unticked", (tx) => deleteTick(tx, access.shopId, step.revisionId, step.stepId));
 }
 
+/** What was cut before the revision was issued is what it is planned around. */
+function refuseBegun(snapshot: OrderSnapshot, stepId: string): void {
+  if (!doneBefore(snapshot).has(stepId)) return;
+  throw refused("This was done before the revision was issued, and the rest is planned around it. Enter what is there instead.");
+}
+
 /** Answers with all ticks of the revision, so that the screen also learns what others did. `act` says whether anything changed. */
 async function onLockedRevision(
   access: ShopAccess,
@@ -49,7 +55,8 @@ async function onLockedRevision(
     if (!revision) throw notFound("revision of this cut order");
     const steps = orderSteps(revision.snapshot);
     if (!steps.some(({ id }) => id === stepId)) throw notFound("step of this cut order");
-    if (revision.supersededAt !== null) throw await supersededConflict(tx, access, orderId, revision.revision);
+    if (verb === "unticked") refuseBegun(revision.snapshot, stepId);
+    if (revision.supersededAt !== null) throw await supersededConflict(tx, shopId, orderId, revision.revision);
 
     const at = new Date();
     const changed = await act(tx, at);
@@ -61,15 +68,4 @@ async function onLockedRevision(
     }
     return { ticks: ticks.map((tick) => ({ ...tick, at: tick.at.toISOString() })) };
   });
-}
-
-/** Stops the work and says what to do instead; the detail carries the newest revision for the screen. */
-async function supersededConflict(tx: Connection, access: ShopAccess, orderId: string, revision: number) {
-  const order = await findOrder(tx, access.shopId, orderId);
-  const newer = order && order.revision > revision;
-  const way = newer
-    ? `Go on with revision ${revisionLetter(order.revision)}.`
-    : "Ask the maker to issue the layout again before anything more is cut.";
-  const message = `Revision ${revisionLetter(revision)} is superseded: ${supersededWhy}. ${way}`;
-  return conflict(message, { newestRevision: order?.revision ?? revision });
 }
