@@ -10,7 +10,7 @@ import { type Movement, useChoose } from "./use-movement";
 
 export function MovementSurround({ movement: { facts, outcome } }: { movement: Movement }) {
   const { editor } = useTableContext();
-  const choose = useChoose(facts);
+  const choose = useChoose();
   const { surround, around } = facts.choices;
   const chosen = surroundChoiceOf(surround);
   // A rail that the fronts are cut from is part of the layout and moves as its own wood does.
@@ -25,7 +25,7 @@ export function MovementSurround({ movement: { facts, outcome } }: { movement: M
         value={chosen}
         onChange={(event) => {
           const choice = surroundChoices.find(({ value }) => value === event.target.value);
-          if (choice) choose.mutate({ surround: surroundOf(choice.value, surround) });
+          if (choice) choose.mutate(() => ({ surround: surroundOf(choice.value, surround) }));
         }}
       >
         {surroundChoices.map(({ value, label }) => (
@@ -39,7 +39,7 @@ export function MovementSurround({ movement: { facts, outcome } }: { movement: M
           label="Gap round the fronts"
           hint="Empty: none"
           value={around}
-          onChange={(length) => (length === null || length >= 0) && choose.mutate({ around: length })}
+          onChange={(length) => (length === null || length >= 0) && choose.mutate(() => ({ around: length }))}
         />
         {surround.kind === "sameWood" && (
           <NumberField
@@ -48,7 +48,7 @@ export function MovementSurround({ movement: { facts, outcome } }: { movement: M
             value={surround.moisture}
             min={0}
             max={FIBRE_SATURATION}
-            onChange={(moisture) => choose.mutate({ surround: { ...surround, moisture } })}
+            onChange={(moisture) => choose.mutate(() => ({ surround: { ...surround, moisture } }))}
           />
         )}
       </div>

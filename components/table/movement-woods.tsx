@@ -1,11 +1,13 @@
 "use client";
 /** Which wood each board is: species, ring angle, and the moisture it was last read at. */
 import { useMutation, useQueryClient } from "@tanstack/react-query";
-import { useState } from "react";
+import Link from "next/link";
+import { type FormEvent, useState } from "react";
+import { readPercent } from "@/components/board/read-percent";
 import { todayIn } from "@/components/board/today";
 import { useUnits } from "@/components/shell/units";
 import { Button } from "@/components/ui/button";
-import { SelectField } from "@/components/ui/field";
+import { SelectField, TextField } from "@/components/ui/field";
 import { Notice } from "@/components/ui/notice";
 import { NumberField } from "@/components/ui/number-field";
 import { addMoistureReading } from "@/lib/client/board";
@@ -26,16 +28,18 @@ const sawn = { flat: "flat sawn", rift: "rift", quarter: "quarter sawn" } as con
 
 function BoardWoodPart({ board, movement: { facts, woods } }: { board: BoardWoodRow; movement: Movement }) {
   const { editor } = useTableContext();
-  const choose = useChoose(facts);
+  const choose = useChoose();
   const known = woods.byBoard.get(board.boardId);
   const choice = facts.choices.woods[board.boardId] ?? noWoodChoice;
   const change = (part: Partial<typeof choice>) =>
-    choose.mutate({ woods: { ...facts.choices.woods, [board.boardId]: { ...choice, ...part } } });
+    choose.mutate(({ woods: present }) => ({ woods: { ...present, [board.boardId]: { ...choice, ...part } } }));
   return (
-    <fieldset className="flex flex-col gap-2 border-t border-rule pt-2" disabled={!editor.mayChange}>
-      <legend className="sr-only">Wood of board {board.tag}</legend>
+    <div className="flex flex-col gap-2 border-t border-rule pt-2">
       <p className="text-sm">
-        <span className="measure text-base">{board.tag}</span> {known?.species?.name ?? board.species}, {sawn[board.cut]},{" "}
+        <Link href={`/rack/${board.boardId}`} className="measure text-base text-chalk underline-offset-2 hover:underline">
+          {board.tag}
+        </Link>{" "}
+        {known?.species?.name ?? board.species}, {sawn[board.cut]},{" "}
         {board.reading ? (
           <>
             <span className="measure">{percentText(board.reading.percent)}</span> on {dayText(board.reading.takenOn)}
@@ -44,7 +48,8 @@ function BoardWoodPart({ board, movement: { facts, woods } }: { board: BoardWood
           "moisture not read"
         )}
       </p>
-      <div className="grid grid-cols-[minmax(0,1fr)_6rem] items-start gap-2">
+      <fieldset className="grid grid-cols-[minmax(0,1fr)_6rem] items-start gap-2" disabled={!editor.mayChange}>
+        <legend className="sr-only">Wood of board {board.tag}</legend>
         <SelectField
           label={`Species of ${board.tag}`}
           hint={known?.species ? sourceText(known.species) : `“${board.species}” is not in the table.`}
@@ -63,9 +68,9 @@ function BoardWoodPart({ board, movement: { facts, woods } }: { board: BoardWood
           digits={0}
           onChange={(ringAngle) => change({ ringAngle })}
         />
-      </div>
+      </fieldset>
       {!board.reading && <FirstReading board={board} />}
-    </fieldset>
+    </div>
   );
 }
 
@@ -104,17 +109,32 @@ function FirstReading({ board }: { board: BoardWoodRow }) {
   const { faceId } = useTableContext();
   const { timeZone } = useUnits();
   const client = useQueryClient();
-  const [percent, setPercent] = useState<number | null>(null);
+  const [text, setText] = useState("");
+  const [wrong, setWrong] = useState(false);
   const add = useMutation({
-    mutationFn: (read: number) => addMoistureReading(board.boardId, { percent: read, takenOn: todayIn(timeZone) }),
+    mutationFn: (percent: number) => addMoistureReading(board.boardId, { percent, takenOn: todayIn(timeZone) }),
     onSuccess: () => client.invalidateQueries({ queryKey: movementKeys.face(faceId) }),
   });
+  const submit = (event: FormEvent) => {
+    event.preventDefault();
+    const percent = readPercent(text);
+    setWrong(typeof percent !== "number");
+    if (typeof percent === "number") add.mutate(percent);
+  };
   return (
-    <div className="flex flex-wrap items-end gap-2">
+    <form noValidate onSubmit={submit} className="flex flex-wrap items-start gap-2">
       <div className="w-36">
-        <NumberField label="Read today, %" value={percent} min={0} max={100} onChange={setPercent} />
+        <TextField
+          label="Read today, %"
+          inputMode="decimal"
+          className="measure"
+          autoComplete="off"
+          error={wrong ? "Such as 8.5" : undefined}
+          value={text}
+          onChange={(event) => setText(event.target.value)}
+        />
       </div>
-      <Button disabled={percent === null || add.isPending} onClick={() => percent !== null && add.mutate(percent)}>
+      <Button type="submit" className="mt-6" disabled={add.isPending}>
         Add reading
       </Button>
       {add.isError && (
@@ -122,6 +142,6 @@ function FirstReading({ board }: { board: BoardWoodRow }) {
           <Notice kind="stop">{messageOf(add.error)}</Notice>
         </div>
       )}
-    </div>
+    </form>
   );
 }

@@ -3,7 +3,7 @@
 import { useMutation, useQuery, useQueryClient } from "@tanstack/react-query";
 import { useMemo } from "react";
 import { toast } from "sonner";
-import { FaultFromServer, messageOf } from "@/lib/client/fault-from-server";
+import { messageOf } from "@/lib/client/fault-from-server";
 import { faceMovementQuery, movementKeys, saveFaceMovement } from "@/lib/client/movement";
 import { type FaceMovement, faceMovement, type MovementRequest } from "@/lib/layout";
 import type { FaceMovementFacts, MovementChoices } from "@/lib/schemas/movement";
@@ -20,11 +20,8 @@ export interface Movement {
 
 /** Null until the server has answered; an error where it does not. */
 export function useMovement(): { readonly movement: Movement | null; readonly error: Error | null } {
-  const { faceId } = useTableContext();
   const layout = useLiveLayout();
-  const boards = useEditorState((state) => state.boards);
-  const boardIds = useMemo(() => boards.map(({ face }) => face.id), [boards]);
-  const { data: facts, error } = useQuery(faceMovementQuery(faceId, boardIds));
+  const { data: facts, error } = useQuery(useFactsQuery());
   const woods = useMemo(() => (facts ? faceWoods(facts) : null), [facts]);
   const movement = useMemo(() => {
     if (!facts || !woods) return null;
@@ -34,21 +31,46 @@ export function useMovement(): { readonly movement: Movement | null; readonly er
   return { movement, error };
 }
 
-/** Saves a change of what was chosen for the face. One after another: each starts from what the last one left. */
-export function useChoose(facts: FaceMovementFacts) {
+function useFactsQuery() {
+  const { faceId } = useTableContext();
+  const boards = useEditorState((state) => state.boards);
+  return useMemo(
+    () =>
+      faceMovementQuery(
+        faceId,
+        boards.map(({ face }) => face.id),
+      ),
+    [faceId, boards],
+  );
+}
+
+/**
+ * Changes what was chosen for the face: shown at once, sent one after another, each from the revision that the last one left. What the
+ * server does not take is read anew.
+ */
+export function useChoose() {
   const { faceId } = useTableContext();
   const client = useQueryClient();
-  const queryKey = movementKeys.face(faceId);
+  const { queryKey } = useFactsQuery();
+  const set = (change: (facts: FaceMovementFacts) => FaceMovementFacts) =>
+    client.setQueryData<FaceMovementFacts>(queryKey, (facts) => facts && change(facts));
   return useMutation({
     scope: { id: `movement of ${faceId}` },
-    mutationFn: (change: Partial<MovementChoices>) => {
-      const [, present = facts] = client.getQueriesData<FaceMovementFacts>({ queryKey }).at(-1) ?? [];
-      return saveFaceMovement(faceId, { ...present.choices, ...change, baseRevision: present.revision });
+    onMutate: async (change: (present: MovementChoices) => Partial<MovementChoices>) => {
+      // An answer that is on its way would undo what is shown.
+      await client.cancelQueries({ queryKey });
+      set((facts) => ({ ...facts, choices: { ...facts.choices, ...change(facts.choices) } }));
     },
-    onSuccess: (saved) => client.setQueriesData({ queryKey }, saved),
+    mutationFn: async () => {
+      const facts = client.getQueryData<FaceMovementFacts>(queryKey);
+      if (!facts) throw new Error("a choice was made before there was anything to choose from");
+      return saveFaceMovement(faceId, { ...facts.choices, baseRevision: facts.revision });
+    },
+    // Choices that are on their way already stay as they are shown.
+    onSuccess: (saved) => set(({ choices }) => ({ ...saved, choices })),
     onError: (error) => {
       toast.error(messageOf(error));
-      if (error instanceof FaultFromServer && error.fault.code === "conflict") void client.invalidateQueries({ queryKey });
+      void client.invalidateQueries({ queryKey: movementKeys.face(faceId) });
     },
   });
 }

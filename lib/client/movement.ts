@@ -21,6 +21,8 @@ export const faceMovementQuery = (faceId: string, boardIds: readonly string[]) =
     queryKey: [...movementKeys.face(faceId), boardIds],
     queryFn: ({ signal }) => call(endpoint.getFaceMovement, { params: { faceId } }, signal),
     placeholderData: keepPreviousData,
+    // Readings, climates and species change on other pages.
+    staleTime: 0,
   });
 
 export const saveFaceMovement = (faceId: string, body: BodySent<typeof endpoint.saveFaceMovement>) =>
