@@ -6,11 +6,12 @@ export type { StockPicture } from "./figure/stock-picture";
 export { type KeepClearSuggestion, suggestKeepClear } from "./figure/suggest-keep-clear";
 export { type Kerfs, kerfsOf } from "./fit/apart";
 export { type Clearance, clearances } from "./fit/clearance";
+export { LEAST_GLUE_LINE } from "./fit/glue-line";
 export { type LyingPiece, lyingPieces } from "./fit/lying-piece";
 export { overBoardBy } from "./fit/on-board";
 export { outsideBy, usableOutline } from "./fit/outline";
 export type { Problem } from "./fit/problem";
-export { problems } from "./fit/problems";
+export { problems, type ShopAsks } from "./fit/problems";
 export { leastSlide } from "./fit/slide";
 export { type Snap, type SnappedSlide, type SnapTarget, snapSlide } from "./fit/snap";
 export { type Spans, spansOf } from "./fit/span";
@@ -196,6 +197,7 @@ export {
   type TroubleFact,
 } from "./replan/trouble";
 export { type RestVerdict, verifyRest } from "./replan/verify-rest";
+export { crossesGlueLine, type GlueLineCrossing } from "./seam/crosses-glue-line";
 export { type Drift, drifts } from "./seam/drift";
 export type { Seam, UmRange } from "./seam/seam";
 export { seams } from "./seam/seams";

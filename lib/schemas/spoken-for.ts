@@ -23,7 +23,10 @@ export type SpokenForPiece = z.output<typeof spokenForSchema>;
 /** Wood spoken for by its id; undefined where it no longer is. */
 export type WoodOf = (spokenForId: string) => Pick<SpokenForPiece, "label" | "faceTitle" | "jobTitle" | "issued"> | undefined;
 
-/** Whether a layout with this problem may not be issued. Wood spoken for is none by itself: once it is issued, the whole board is taken. */
+/**
+ * Whether a layout with this problem may not be issued. Wood spoken for is none by itself: once it is issued, the whole board is taken.
+ * A glue line near an edge is for the maker to judge.
+ */
 export function standsInTheWay(problem: Problem): boolean {
-  return problem.kind !== "spoken-for";
+  return problem.kind !== "spoken-for" && problem.kind !== "glue-line";
 }

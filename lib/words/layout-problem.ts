@@ -31,6 +31,10 @@ export function problemSentence(problem: Problem, style: LengthStyle, { tagOf, w
       return `${spokenForSentence(problem, woodOf, print)} ${slideSentence(problem.slide, print)}`;
     case "blocked":
       return blockedSentence(problem.pieces, tagOf(problem.stockId));
+    case "too-thin":
+      return `${fronts(problem.pieces)} ${needsOrNeed(problem.pieces)} stock ${print(problem.missing)} thicker than board ${tagOf(problem.stockId)}.`;
+    case "glue-line":
+      return `${fronts([problem.piece])} has a glue line ${print(problem.fromEdge)} from its long edge, where so narrow a strip may part. Slide it across the board, or leave it.`;
     case "grain":
       return `${fronts(problem.pieces)} ${liesOrLie(problem.pieces)} across the grain that the face asks for. Turn the grain, and they lie along it.`;
   }
@@ -57,6 +61,7 @@ function fronts(pieces: readonly PieceId[]): string {
 }
 
 const isOrAre = (pieces: readonly PieceId[]) => (pieces.length === 1 ? "is" : "are");
+const needsOrNeed = (pieces: readonly PieceId[]) => (pieces.length === 1 ? "needs" : "need");
 const liesOrLie = (pieces: readonly PieceId[]) => (pieces.length === 1 ? "lies" : "lie");
 
 const outsideSentence = (piece: PieceId, by: string) =>

@@ -71,3 +71,13 @@ describe("a board that other faces have too", () => {
     );
   });
 });
+
+test("stock too thin is said with the board; a glue line near an edge leaves the choice to the maker", () => {
+  const print = (problem: Problem) => sentence(problem, null);
+  expect(print({ kind: "too-thin", stockId: "b", pieces: ["p1", "p2"], missing: um(3_000) })).toBe(
+    "Fronts 1–2 need stock 3.0 mm thicker than board B-007.",
+  );
+  expect(print({ kind: "glue-line", piece: "p4", at: um(80_000), fromEdge: um(6_000) })).toBe(
+    "Front 4 has a glue line 6.0 mm from its long edge, where so narrow a strip may part. Slide it across the board, or leave it.",
+  );
+});

@@ -33,5 +33,9 @@ export type Problem =
     }
   /** The pieces on this board cannot be parted by straight cuts from edge to edge. */
   | { readonly kind: "blocked"; readonly stockId: StockId; readonly pieces: readonly PieceId[] }
+  /** Laid on stock that is thinner than what its pattern asks for; `missing` is by how much. */
+  | { readonly kind: "too-thin"; readonly stockId: StockId; readonly pieces: readonly PieceId[]; readonly missing: Um }
+  /** A warning, nothing in the way: a glue line of the blank lies in the piece, this near its long edge; `at` from the board's top edge. */
+  | { readonly kind: "glue-line"; readonly piece: PieceId; readonly at: Um; readonly fromEdge: Um }
   /** Runs with the grain the wrong way: the placement's turns do not fit the grain of the face. */
   | { readonly kind: "grain"; readonly pieces: readonly PieceId[] };

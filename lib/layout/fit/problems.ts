@@ -6,10 +6,12 @@ import type { FaceLayout } from "../pattern/face-layout";
 import { layOut, unplacedPieces } from "../pattern/lay-out";
 import { readingIndexOf } from "../pattern/piece-ids";
 import { turnsAlongGrain } from "../pattern/place-group";
+import { rulesOf } from "../pattern/rules-of";
 import type { PieceId, StockId } from "../piece";
 import type { BoardFace } from "../stock/board";
 import { type Um, um } from "../units/um";
 import { kerfsOf, missingBetween } from "./apart";
+import { LEAST_GLUE_LINE, nearGlueLines } from "./glue-line";
 import { middleAlong, reachInto } from "./keep-clear";
 import { type LyingPiece, lyingPieces } from "./lying-piece";
 import { wholeDepth } from "./noise";
@@ -18,8 +20,19 @@ import type { Problem } from "./problem";
 import { leastSlide } from "./slide";
 import { missingToSpokenFor, overSpokenFor } from "./spoken-for";
 
-/** Problems by kind, then by piece in reading order, then by area or wood spoken for in the order of the board, or by the second piece. */
-export function problems(layout: FaceLayout, boards: readonly BoardFace[]): Problem[] {
+/** What the shop asks for beyond what can be cut at all. */
+export interface ShopAsks {
+  /** Nearest that a glue line may come to the long edge of a piece that it runs through. */
+  readonly glueLineFromEdge: Um;
+}
+
+const usualAsks: ShopAsks = { glueLineFromEdge: LEAST_GLUE_LINE };
+
+/**
+ * Problems by kind, then by piece in reading order, then by area, wood spoken for or glue line in the order of the board, or by the
+ * second piece.
+ */
+export function problems(layout: FaceLayout, boards: readonly BoardFace[], asks: ShopAsks = usualAsks): Problem[] {
   const boardById = new Map(boards.map((board) => [board.id, board]));
   const lying = lyingPieces(layout, layOut(layout));
   // What is wrong with the wood of one blank is said once, of the first piece that comes from it.
@@ -30,10 +43,12 @@ export function problems(layout: FaceLayout, boards: readonly BoardFace[]): Prob
     ...notPlaced(layout),
     ...unknownStock(lying, boardById),
     ...againstGrain(layout),
+    ...tooThin(layout, lying, boardById),
     ...known.flatMap((piece) => outside(piece, boardById)),
     ...inKeepClear(known, boardById, slideOf),
     ...tooClose(layout, blanks),
     ...onSpokenFor(layout, known, boardById, slideOf),
+    ...nearGlueLine(known, boardById, asks),
   ];
 }
 
@@ -62,6 +77,27 @@ function againstGrain(layout: FaceLayout): Problem[] {
     .flatMap((group) => group.pieceIds)
     .sort((p, q) => (readingIndexOf(layout.face, p) ?? 0) - (readingIndexOf(layout.face, q) ?? 0));
   return pieces.length === 0 ? [] : [{ kind: "grain", pieces }];
+}
+
+function tooThin({ face }: FaceLayout, lying: readonly LyingPiece[], boards: BoardsById): Problem[] {
+  const needed = rulesOf(face).stockThickness?.(face);
+  if (needed === undefined) return [];
+  const stocks = [...new Set(lying.map(({ stockId }) => stockId))];
+  return stocks.flatMap((stockId): Problem[] => {
+    const missing = needed - (boards.get(stockId)?.thickness ?? needed);
+    const pieces = lying.filter((piece) => piece.stockId === stockId).map(({ id }) => id);
+    return missing > 0 ? [{ kind: "too-thin", stockId, pieces, missing: um(missing) }] : [];
+  });
+}
+
+function nearGlueLine(lying: readonly LyingPiece[], boards: BoardsById, asks: ShopAsks): Problem[] {
+  return lying.flatMap((piece) => {
+    const board = boards.get(piece.stockId);
+    if (board === undefined) return [];
+    return nearGlueLines(piece, board, asks.glueLineFromEdge).map(({ at, fromEdge }): Problem => {
+      return { kind: "glue-line", piece: piece.id, at, fromEdge };
+    });
+  });
 }
 
 function outside(piece: LyingPiece, boards: BoardsById): Problem[] {

@@ -58,6 +58,8 @@ function standsInTheWay(problem: Problem, own: ReadonlySet<PieceId>): boolean {
     case "not-placed":
     case "unknown-stock":
     case "blocked":
+    case "too-thin":
+    case "glue-line":
       return false;
   }
 }

@@ -21,6 +21,7 @@ export const wrapRules: PatternRules<WrapFace> = {
   cleanUps: (layout) => layout.face.sides.map((_, side) => cleanUpOf(layout, side)),
   seams: seamsOfWrap,
   faults: wrapFaults,
+  stockThickness: ({ thickness }) => thickness,
 };
 
 /** The corners between neighbours of the unfolded run: all but the one that closes it. */
