@@ -5,7 +5,8 @@ import path from "node:path";
 import { build } from "esbuild";
 import { inData, inProject, root } from "./ground/project.mjs";
 
-const programs = ["migrate", "seed", "worker"].map((name) => `scripts/${name}.ts`);
+/** What the commands start; further ones, by their paths, where a command asks for them. */
+const programs = ["migrate", "seed", "worker"].map((name) => `scripts/${name}.ts`).concat(process.argv.slice(2));
 
 /** Every file of these rooms named …-worker.ts runs in a worker thread under its own name: pixel-worker.ts becomes pixel-worker.mjs. */
 const threads = ["lib/server", "scripts/demo"]

@@ -1,4 +1,4 @@
-// What package.json's commands call: node scripts/run.mjs start | dev | test | worker | check | database.
+// What package.json's commands call: node scripts/run.mjs start | dev | test | bench | worker | check | database.
 // Until `npm ci` has run there are no packages, so everything reached from here imports node: builtins alone.
 import { isNodeSupported } from "./ground/node-version.mjs";
 import { end, endOnSignals, isEnding } from "./ground/processes.mjs";
@@ -9,6 +9,7 @@ const commands = {
   start: () => import("./commands/start.mjs"),
   dev: () => import("./commands/dev.mjs"),
   test: () => import("./commands/test.mjs"),
+  bench: () => import("./commands/bench.mjs"),
   check: () => import("./commands/check.mjs"),
   worker: () => import("./commands/worker.mjs"),
   database: () => import("./commands/database.mjs"),

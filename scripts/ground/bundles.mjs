@@ -3,9 +3,10 @@ import { launch, run } from "./processes.mjs";
 import { inData, inProject } from "./project.mjs";
 import { Refusal } from "./say.mjs";
 
-export async function buildBundles() {
+/** @param {string[]} [further] programs beside the usual ones, by their paths */
+export async function buildBundles(further = []) {
   // A process of its own: esbuild is there only once the packages are installed, and this file is loaded before.
-  const code = await run(process.execPath, [inProject("scripts", "bundle.mjs")], { cwd: inProject() });
+  const code = await run(process.execPath, [inProject("scripts", "bundle.mjs"), ...further], { cwd: inProject() });
   if (code !== 0)
     throw new Refusal("The programs under scripts/ could not be bundled (the reason stands above).", "Mend the source it names.");
 }
@@ -26,9 +27,10 @@ export async function migrate(env) {
  * Runs a bundled program to its end and returns its exit code.
  * @param {string} name
  * @param {NodeJS.ProcessEnv} env
+ * @param {string[]} [args]
  */
-export function runBundle(name, env) {
-  return run(process.execPath, bundleArgs(name), { cwd: inProject(), env });
+export function runBundle(name, env, args = []) {
+  return run(process.execPath, [...bundleArgs(name), ...args], { cwd: inProject(), env });
 }
 
 /**

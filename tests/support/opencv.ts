@@ -9,6 +9,7 @@ export interface OpenCv {
   readonly CV_8UC3: number;
   readonly CV_64FC1: number;
   readonly INTER_LINEAR: number;
+  readonly INTER_AREA: number;
   readonly BORDER_REPLICATE: number;
   matFromArray(rows: number, columns: number, type: number, values: ArrayLike<number>): OpenCvMat;
   warpPerspective(
@@ -20,6 +21,7 @@ export interface OpenCv {
     border: number,
     value: object,
   ): void;
+  resize(from: OpenCvMat, to: OpenCvMat, size: object, scaleX: number, scaleY: number, flags: number): void;
 }
 
 export interface OpenCvMat {
