@@ -16,3 +16,4 @@ export * from "./species";
 export * from "./straightening";
 export * from "./task";
 export * from "./user";
+export * from "./wood-search";

@@ -17,6 +17,7 @@ import * as shop from "./shop";
 import * as species from "./species";
 import * as straightening from "./straightening";
 import * as task from "./task";
+import * as woodSearch from "./wood-search";
 
 const isEndpoint = (value: unknown): value is Endpoint =>
   typeof value === "object" && value !== null && "method" in value && "path" in value && "access" in value;
@@ -38,5 +39,6 @@ export const endpoints: readonly Endpoint[] = [
   order,
   asCut,
   rest,
+  woodSearch,
   history,
 ].flatMap((noun) => Object.values(noun).filter(isEndpoint));

@@ -3,7 +3,7 @@ import { z } from "zod";
 import { defineEndpoint, everyone, makers } from "./endpoint";
 import { idSchema } from "./ids";
 
-export const taskKinds = ["straighten", "compose"] as const;
+export const taskKinds = ["straighten", "compose", "search"] as const;
 export const taskStates = ["queued", "running", "done", "failed", "cancelled"] as const;
 
 export const taskSchema = z.object({
