@@ -4,7 +4,17 @@ import { useState } from "react";
 import { useUnits } from "@/components/shell/units";
 import { Button } from "@/components/ui/button";
 import { evenGaps } from "@/lib/editor/commands/even-gaps";
-import { facePieces, printedLength, recommendedGap, roundedUp, ruleStepOf, sheetAtMost, type Um, um } from "@/lib/layout";
+import {
+  canEvenGaps,
+  facePieces,
+  printedLength,
+  recommendedGap,
+  roundedUp,
+  ruleStepOf,
+  sheetAtMost,
+  type Um,
+  um,
+} from "@/lib/layout";
 import { betweenText } from "@/lib/words/movement";
 import { type GapRow, gapRows } from "./gap-rows";
 import { MovementDiagram } from "./movement-diagram";
@@ -145,7 +155,7 @@ function UseRecommended({ movement: { request, outcome } }: { movement: Movement
     const differs = gap !== null && between.some((one) => Math.abs(one.gap - gap) > between.length);
     return differs ? [{ runs, name, gap, wider: between.some((one) => one.gap < gap) }] : [];
   });
-  if (!editor.mayChange || offers.length === 0) return null;
+  if (!editor.mayChange || !canEvenGaps(request.layout.face)) return null;
   const { layout: _, ...ground } = request;
   return offers.map(({ runs, name, gap, wider }) => (
     <div key={runs} className="flex flex-col gap-1">

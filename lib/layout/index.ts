@@ -36,7 +36,7 @@ export type {
   MovementWarning,
   Season,
 } from "./movement/movement";
-export { type RecommendedGap, recommendedGap, roundedUp, withRecommendedGap } from "./movement/recommended-gap";
+export { canEvenGaps, type RecommendedGap, recommendedGap, roundedUp, withRecommendedGap } from "./movement/recommended-gap";
 export {
   COEFFICIENT_RANGE,
   coefficientAt,

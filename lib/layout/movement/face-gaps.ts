@@ -1,12 +1,14 @@
 /**
- * The gaps of a face that may open and close: between two fronts, between a front and the rail it was cut from, and, where a gap round
- * the fronts is given, between the outermost fronts and what stands round them. Joints without a gap move as one, and runs round
- * corners and resawn pairs have none that open and close like these.
+ * The gaps of a face that may open and close: between two fronts or two sides of a run, between a front and the rail it was cut from,
+ * and, where a gap round the fronts is given, between the outermost fronts and what stands round them. Joints move as one. A gap at a
+ * corner is taken as on the unfolded run, along which its two sides move.
  */
+
+import { seamPlaces } from "../pattern/charts";
 import type { FaceLayout } from "../pattern/face-layout";
 import { type FacePiece, facePieces } from "../pattern/lay-out";
+import { rulesOf } from "../pattern/rules-of";
 import type { PieceId } from "../piece";
-import { seams } from "../seam/seams";
 import { type Um, um } from "../units/um";
 
 export type FaceSide = "left" | "right" | "top" | "bottom";
@@ -30,9 +32,10 @@ export interface FaceGap {
 export function faceGaps(layout: FaceLayout, around: Um | null): FaceGap[] {
   const pieces = facePieces(layout);
   const byId = new Map(pieces.map((piece) => [piece.id, piece]));
-  const between = seams(layout).flatMap(({ a, b, gap, normal }) => {
+  const open = rulesOf(layout.face).openSeams?.(layout.face);
+  const between = seamPlaces(layout.face).flatMap(({ a, b, gap, normal }, index) => {
     const [first, second] = [byId.get(a), byId.get(b)];
-    if (gap <= 0 || first === undefined || second === undefined) return [];
+    if (gap <= 0 || open?.[index] === false || first === undefined || second === undefined) return [];
     return gapBetween(first, second, gap, normal === "right" ? "sideways" : "upright");
   });
   return around === null ? between : [...between, ...gapsAround(pieces, around)];
@@ -41,7 +44,7 @@ export function faceGaps(layout: FaceLayout, around: Um | null): FaceGap[] {
 const isRail = ({ role }: FacePiece) => role === "strip" || role === "fixed";
 
 function gapBetween(a: FacePiece, b: FacePiece, gap: Um, runs: FaceGap["runs"]): FaceGap[] {
-  if (a.role !== "front" && b.role !== "front") return [];
+  if (isRail(a) && isRail(b)) return [];
   const rail = [a, b].find(isRail)?.id ?? null;
   return [{ a: a.id, b: { piece: b.id }, runs, gap, reachA: reach(a, runs), reachB: reach(b, runs), rail }];
 }

@@ -4,6 +4,7 @@
  */
 import { changeFace } from "../pattern/change-face";
 import { hungChart } from "../pattern/charts";
+import type { Face } from "../pattern/face";
 import type { FaceLayout } from "../pattern/face-layout";
 import type { SizeStep } from "../pattern/graduate";
 import { rulesOf } from "../pattern/rules-of";
@@ -17,6 +18,9 @@ export type RecommendedGap =
   | { readonly ok: true; readonly layout: FaceLayout; readonly gap: Um; readonly mostGivenUp: Um }
   /** `no-gaps`: the pattern has none to change along this line. `not-known`: see the warnings. `no-room`: a front would come to nothing. */
   | { readonly ok: false; readonly reason: "no-gaps" | "not-known" | "no-room" };
+
+/** Whether the pattern of a face has gaps that can be made as recommended. */
+export const canEvenGaps = (face: Face): boolean => rulesOf(face).evenGaps !== undefined;
 
 /** The widest gap that is to be cut at fronts along this line, up to the next step of the rule; null where one is not known. */
 export function recommendedGap({ gaps }: FaceMovement, runs: FaceGap["runs"], step: SizeStep): Um | null {

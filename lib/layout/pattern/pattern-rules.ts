@@ -67,6 +67,8 @@ export interface PatternRules<F extends Face = Face> {
    * give up what the gaps take. Null when a front would come to nothing; absent where the pattern has no such gaps.
    */
   readonly evenGaps?: (face: F, axis: "columns" | "rows", gap: Um) => F | null;
+  /** By place in `seams`: whether what lies there is a gap that may open and close, and no joint. Absent: wherever there is a gap. */
+  readonly openSeams?: (face: F) => readonly boolean[];
   /** Everything that makes the face mean nothing; the others may only be asked when there is none. */
   readonly faults: (face: F) => readonly FaceFault[];
   /** Sets of pieces, by place in reading order, that are sawn as one blank and parted through its thickness. Absent: none. */

@@ -20,6 +20,8 @@ export const wrapRules: PatternRules<WrapFace> = {
     rectsOf(spacedRun(layout), layout.face.height).map((rect): ChartPlace => ({ rect, mirrored: "no", anchors: true })),
   cleanUps: (layout) => layout.face.sides.map((_, side) => cleanUpOf(layout, side)),
   seams: seamsOfWrap,
+  // At a butt the edge of the covering part is seen, as a gap of its thickness.
+  openSeams: ({ corners }) => corners.map(({ kind }) => kind === "gap"),
   faults: wrapFaults,
   stockThickness: ({ thickness }) => thickness,
 };
