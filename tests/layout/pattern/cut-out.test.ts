@@ -209,7 +209,7 @@ describe("the closed form", () => {
           expect([(shift?.along ?? 0) + (drift?.along ?? 0), (shift?.across ?? 0) + (drift?.across ?? 0)]).toEqual([0, 0]);
         }
       }),
-      { numRuns: 60 },
+      { numRuns: 30 },
     );
   });
 
@@ -240,7 +240,7 @@ describe("the closed form", () => {
           expect(onRail(layout, { along: jump.along.min, across: jump.across.min })).toEqual(expected.get(`${a} ${b}`));
         }
       }),
-      { numRuns: 60 },
+      { numRuns: 30 },
     );
   });
 });
@@ -271,7 +271,7 @@ describe("the glued-up face", () => {
           }
         }
       }),
-      { numRuns: 60 },
+      { numRuns: 30 },
     );
   });
 
@@ -352,7 +352,7 @@ describe("the glued-up face", () => {
           expect(astray).toBe(0);
         },
       ),
-      { numRuns: 12 },
+      { numRuns: 8 },
     );
   });
 
@@ -385,7 +385,7 @@ describe("in the wood", () => {
           }
         }
       }),
-      { numRuns: 60 },
+      { numRuns: 30 },
     );
   });
 

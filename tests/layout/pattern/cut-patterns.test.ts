@@ -44,6 +44,6 @@ test.each<[string, fc.Arbitrary<Face>]>([
       if (!outcome.ok) throw new Error(JSON.stringify(outcome));
       expect(verifyProgram(request, outcome.program)).toEqual({ ok: true });
     }),
-    { numRuns: 25 },
+    { numRuns: 15 },
   );
 });

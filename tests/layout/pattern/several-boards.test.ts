@@ -46,7 +46,7 @@ test("every piece laid on wood is asked of exactly one board, and takes exactly 
         expect(woodTaken(layout, id).map(({ piece, label, rect }) => ({ piece, label, rect }))).toEqual(blanks);
       }
     }),
-    { numRuns: 60 },
+    { numRuns: 30 },
   );
 });
 
@@ -65,7 +65,7 @@ test("a jump is told between pieces of one board only, drift of pieces of the se
         if (one.kind === "too-close") expect(stock.get(one.pieces[0])).toBe(stock.get(one.pieces[1]));
       }
     }),
-    { numRuns: 60 },
+    { numRuns: 30 },
   );
 });
 
@@ -97,7 +97,7 @@ test("with one piece on another board both boards can be sawn to exactly what li
       }
       expect(accepted(regroup(away, id))).toEqual(set);
     }),
-    { numRuns: 20 },
+    { numRuns: 12 },
   );
 });
 
