@@ -186,6 +186,7 @@ export {
   wholeBoardInHand,
 } from "./replan/part-in-hand";
 export { planRest, type RestPlan, type RestPlanOutcome } from "./replan/plan-rest";
+export { stepsThatHold } from "./replan/steps-that-hold";
 export {
   type PieceChange,
   type PieceName,

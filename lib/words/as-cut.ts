@@ -20,9 +20,11 @@ export function asCutWords(entry: AsCutEntry, snapshot: OrderSnapshot, style: Le
     }
     case "size": {
       const part = partNamed(snapshot, entry.boardId, entry.partId);
-      const name = part ? capital(partName(part)) : "A part";
-      const [by, word] = entry.by < 0 ? [um(-entry.by), "short"] : [entry.by, "over"];
-      return `${name} ${print(by)} ${word} at its ${edgeNames[entry.edge]}`;
+      if (!part) return `A part ${print(entry.by)} off at its ${edgeNames[entry.edge]}`;
+      const isEnd = entry.edge === "left" || entry.edge === "right";
+      const planned = isEnd ? part.rect.width : part.rect.height;
+      const size = `${print(um(planned + entry.by))} ${isEnd ? "long" : "wide"} instead of ${print(planned)}`;
+      return `${capital(partName(part))} ${size}, at its ${edgeNames[entry.edge]}`;
     }
     case "spoiled": {
       const label = labelOf(snapshot, entry.boardId, entry.pieceId);

@@ -81,7 +81,7 @@ export function rescueWords(rescue: Rescue, style: LengthStyle): string {
     case "smaller":
       return `leaving ${smallerWords(changes, print)} saves ${them}`;
     case "elsewhere":
-      return `${elsewhereWords(changes)}${slid.length > 0 ? `, with ${slideWords(slid, print)}` : ""}`;
+      return `${possibleWords(changes)}${slid.length > 0 ? `, with ${slideWords(slid, print)}` : ""}`;
     case "other-board":
       return `another board is needed for ${frontsOf(leftOut.map(({ label }) => label))}`;
   }
@@ -110,6 +110,9 @@ export function rescueTitle(rescue: Rescue, style: LengthStyle): string {
 function slideWords(slid: readonly Change[], print: Print): string {
   const [one, second] = slid;
   if (one && !second) return `front ${one.label} ${wayWords(one, print)}`;
+  if (one && slid.every(({ by }) => by.x === one.by.x && by.y === one.by.y)) {
+    return `${frontsOf(slid.map(({ label }) => label))} ${wayWords(one, print)}`;
+  }
   const most = um(Math.max(0, ...slid.map(({ by }) => Math.max(Math.abs(by.x), Math.abs(by.y)))));
   return `${frontsOf(slid.map(({ label }) => label))} by up to ${print(most)}`;
 }
@@ -140,11 +143,22 @@ function smallerWords(changes: readonly Change[], print: Print): string {
 }
 
 function elsewhereWords(changes: readonly Change[]): string {
-  const anew = changes.flatMap(({ label, from }) => (from ? [{ label, from: partName(from) }] : []));
-  const parts = [...new Set(anew.map(({ from }) => from))];
-  return parts
-    .map((part) => `cut ${frontsOf(anew.filter(({ from }) => from === part).map(({ label }) => label))} from ${part} instead`)
+  return fromParts(changes)
+    .map(({ labels, part }) => `cut ${frontsOf(labels)} from ${part} instead`)
     .join(", ");
+}
+
+function possibleWords(changes: readonly Change[]): string {
+  return fromParts(changes)
+    .map(({ labels, part }) => `${frontsOf(labels)} can be cut from ${part}`)
+    .join(", ");
+}
+
+/** Fronts that are cut from other wood than before, by the part they come from. */
+function fromParts(changes: readonly Change[]): { readonly labels: readonly string[]; readonly part: string }[] {
+  const anew = changes.flatMap(({ label, from }) => (from ? [{ label, part: partName(from) }] : []));
+  const parts = [...new Set(anew.map(({ part }) => part))];
+  return parts.map((part) => ({ part, labels: anew.filter((one) => one.part === part).map(({ label }) => label) }));
 }
 
 const namesOf = (changes: readonly Change[]): string => frontsOf(changes.map(({ label }) => label));
