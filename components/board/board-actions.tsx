@@ -20,7 +20,6 @@ export function BoardActions({ board, versions }: Props) {
   const close = (isOpen: boolean) => setOpen(isOpen ? open : null);
   const marked = board.straighteningId !== null;
   const free = board.inBlank === null && board.state === "rack";
-  const lastPhotoId = (side: BoardSide) => versions.find((version) => version.side === side)?.photoId ?? null;
   return (
     <>
       <Button kind={marked ? "plain" : "primary"} onClick={() => setOpen("face")}>
@@ -28,17 +27,10 @@ export function BoardActions({ board, versions }: Props) {
       </Button>
       {marked && (
         <>
-          <Button onClick={() => setOpen("back")}>
-            {board.backStraighteningId === null ? "Photograph the back" : "Mark the back again"}
-          </Button>
+          {board.backStraighteningId === null && <Button onClick={() => setOpen("back")}>Photograph the back</Button>}
           <Link href={zonesAddress(board.id, "face")} className={buttonClass()}>
             Outline and areas
           </Link>
-          {board.backStraighteningId !== null && (
-            <Link href={zonesAddress(board.id, "back")} className={buttonClass()}>
-              Outline and areas of the back
-            </Link>
-          )}
         </>
       )}
       {marked && free && (
@@ -58,7 +50,7 @@ export function BoardActions({ board, versions }: Props) {
           key={side}
           boardId={board.id}
           side={side}
-          lastPhotoId={lastPhotoId(side)}
+          lastPhotoId={lastPhotoOf(versions, side)}
           open={open === side}
           onOpenChange={close}
         />
@@ -67,3 +59,28 @@ export function BoardActions({ board, versions }: Props) {
     </>
   );
 }
+
+/** The same for its back, beside the picture of it. */
+export function BackActions({ board, versions }: Props) {
+  const [open, setOpen] = useState(false);
+  return (
+    <>
+      <Button size="small" onClick={() => setOpen(true)}>
+        Mark the back again
+      </Button>
+      <Link href={zonesAddress(board.id, "back")} className={buttonClass("plain", "small")}>
+        Outline and areas of the back
+      </Link>
+      <ChoosePhoto
+        boardId={board.id}
+        side="back"
+        lastPhotoId={lastPhotoOf(versions, "back")}
+        open={open}
+        onOpenChange={setOpen}
+      />
+    </>
+  );
+}
+
+const lastPhotoOf = (versions: Props["versions"], side: BoardSide): string | null =>
+  versions.find((version) => version.side === side)?.photoId ?? null;

@@ -1,5 +1,6 @@
 "use client";
 import Image from "next/image";
+import type { ReactNode } from "react";
 import { WoodStrip } from "@/components/picture/wood-strip";
 import { mmFromUm, um } from "@/lib/layout";
 import type { Board } from "@/lib/schemas/board";
@@ -11,13 +12,15 @@ interface Props {
   board: Board;
   face: Straightening;
   back: Straightening | null;
+  /** What can be done with the back. */
+  children?: ReactNode;
 }
 
 /**
  * The board as it lies in the rack under the tape, with what was drawn on it; below it its back, at the same scale, as it lies once the
  * board is turned over about its long edge.
  */
-export function BoardPicture({ board, face, back }: Props) {
+export function BoardPicture({ board, face, back, children }: Props) {
   const longest = um(Math.max(face.length, back?.length ?? 0));
   const widest = um(Math.max(face.width, back?.width ?? 0));
   return (
@@ -46,6 +49,7 @@ export function BoardPicture({ board, face, back }: Props) {
         )}
       </p>
       {back && <SidesNotice face={face} back={back} />}
+      {back && children && <div className="flex flex-wrap gap-2">{children}</div>}
     </div>
   );
 }

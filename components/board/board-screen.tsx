@@ -9,7 +9,7 @@ import type { Board } from "@/lib/schemas/board";
 import type { HistoryRow } from "@/lib/schemas/history";
 import type { Straightening } from "@/lib/schemas/straightening";
 import { BlankBoards } from "./blank-boards";
-import { BoardActions } from "./board-actions";
+import { BackActions, BoardActions } from "./board-actions";
 import { BoardBadges, hasBadges } from "./board-facts";
 import { BoardPicture } from "./board-picture";
 import { BoardStory } from "./board-story";
@@ -54,7 +54,13 @@ export function BoardScreen({ board, versions, story, species, mayEdit }: Props)
         )}
         {board.inBlank && <InBlank tag={board.tag} into={board.inBlank} />}
         {newest && newest.id !== face?.id && newest.id !== back?.id && <VersionProgress version={newest} mayEdit={mayEdit} />}
-        {face ? <BoardPicture board={board} face={face} back={back} /> : <NoPicture board={board} mayEdit={mayEdit} />}
+        {face ? (
+          <BoardPicture board={board} face={face} back={back}>
+            {mayEdit && <BackActions board={board} versions={versions} />}
+          </BoardPicture>
+        ) : (
+          <NoPicture board={board} mayEdit={mayEdit} />
+        )}
         <div className="grid gap-x-10 gap-y-8 lg:grid-cols-2">
           <Section
             title="Facts"

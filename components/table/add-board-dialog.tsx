@@ -22,7 +22,7 @@ export function AddBoardDialog({ open, onOpenChange }: { open: boolean; onOpenCh
       open={open}
       onOpenChange={onOpenChange}
       title="Add a board"
-      lead="Boards of the rack that have a straightened picture."
+      lead="Boards of the rack that have a straightened picture and are in no blank."
     >
       {open && <BoardSearch onDone={() => onOpenChange(false)} />}
     </Modal>
@@ -52,7 +52,8 @@ function BoardSearch({ onDone }: { onDone: () => void }) {
     },
   });
   const found = (page.data?.items ?? []).filter(
-    ({ id, straighteningId }) => straighteningId !== null && !here.some(({ face }) => face.id === id),
+    ({ id, straighteningId, inBlank }) =>
+      straighteningId !== null && inBlank === null && !here.some(({ face }) => face.id === id),
   );
   return (
     <div className="flex flex-col gap-3">

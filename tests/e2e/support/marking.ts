@@ -20,7 +20,7 @@ export const boardCorners: readonly [Spot, Spot, Spot, Spot] = [
 ];
 export const photoSize = { width: 1600, height: 1000 };
 
-function photograph(): Promise<Buffer> {
+export function photograph(): Promise<Buffer> {
   const [a, b, c, d] = boardCorners;
   const at = (from: Spot, to: Spot, share: number) => `${from.x + (to.x - from.x) * share},${from.y + (to.y - from.y) * share}`;
   const grain = [0.15, 0.3, 0.42, 0.6, 0.75, 0.9].map((share) => `<path d="M${at(a, d, share)}L${at(b, c, share)}"/>`).join("");
