@@ -1,17 +1,16 @@
 "use client";
 /** A face, or a window of it, painted from the photographs of its boards. */
 import { useEffect, useRef } from "react";
-import { paintFace } from "@/lib/editor/canvas/paint-face";
+import { type PaintedBoard, paintFace } from "@/lib/editor/canvas/paint-face";
 import { readPalette } from "@/lib/editor/canvas/palette";
 import { factsOf } from "@/lib/editor/selectors/facts";
-import type { TableBoard } from "@/lib/editor/table-board";
 import type { FaceLayout, FaceRect } from "@/lib/layout";
 import type { PicturesAtHand } from "./use-pictures";
 
 interface Props {
   label: string;
   layout: FaceLayout;
-  boards: readonly TableBoard[];
+  boards: readonly PaintedBoard[];
   view: FaceRect;
   pxPerMm: number;
   atHand: PicturesAtHand | null;

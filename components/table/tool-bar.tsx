@@ -1,10 +1,12 @@
 "use client";
 /** What can be done with the fronts in hand. */
 import { Maximize, Minus, Plus, Redo2, Undo2 } from "lucide-react";
-import type { ReactNode, RefObject } from "react";
+import { type ReactNode, type RefObject, useState } from "react";
 import type { TableView } from "@/lib/editor/canvas/table-view";
 import { ZOOM_STEP } from "@/lib/editor/view/zoom";
 import { groupOf, SET_ID } from "@/lib/layout";
+import { BetterPlacesDialog } from "./better-places-dialog";
+import { FindWoodDialog } from "./find-wood-dialog";
 import { useTableActions } from "./table-actions";
 import { useEditorState, useTableContext, useViewState } from "./table-context";
 
@@ -17,6 +19,7 @@ export function ToolBar({ viewRef, onHelp }: { viewRef: RefObject<TableView | nu
   const layout = useEditorState((state) => state.document.layout);
   const triangle = useViewState((state) => state.showTriangle);
   const grain = useViewState((state) => state.showGrain);
+  const [searching, setSearching] = useState<"board" | "rack" | null>(null);
   const someLoose = selection.some((id) => groupOf(layout, id)?.id !== SET_ID);
   return (
     <div
@@ -46,6 +49,9 @@ export function ToolBar({ viewRef, onHelp }: { viewRef: RefObject<TableView | nu
           <Tool onClick={actions.lift}>Take off the board</Tool>
           <Tool onClick={actions.turnGrain}>Turn the grain</Tool>
           <Rule />
+          <Tool onClick={() => setSearching("board")}>Better places…</Tool>
+          <Tool onClick={() => setSearching("rack")}>Find wood…</Tool>
+          <Rule />
         </>
       )}
       <Tool onClick={actions.toggleTriangle} pressed={triangle}>
@@ -68,6 +74,8 @@ export function ToolBar({ viewRef, onHelp }: { viewRef: RefObject<TableView | nu
           ?
         </Tool>
       </span>
+      <BetterPlacesDialog open={searching === "board"} onOpenChange={(open) => setSearching(open ? "board" : null)} />
+      <FindWoodDialog open={searching === "rack"} onOpenChange={(open) => setSearching(open ? "rack" : null)} />
     </div>
   );
 }

@@ -9,18 +9,20 @@ interface Props {
   title: string;
   /** A sentence on what this is for. */
   lead?: string;
+  /** For pictures and lists that need the room. */
+  wide?: boolean;
   children: ReactNode;
 }
 
 /** A dialog over the page: focus stays inside, Escape closes it, and the focus goes back to where it was. */
-export function Modal({ open, onOpenChange, title, lead, children }: Props) {
+export function Modal({ open, onOpenChange, title, lead, wide = false, children }: Props) {
   const opener = useRef<Element | null>(null);
   return (
     <Dialog.Root open={open} onOpenChange={onOpenChange}>
       <Dialog.Portal>
         <Dialog.Overlay className="fixed inset-0 z-40 bg-graphite/50" />
         <Dialog.Content
-          className="fixed top-1/2 left-1/2 z-50 max-h-[92dvh] w-[min(34rem,calc(100vw-1.5rem))] -translate-x-1/2 -translate-y-1/2 overflow-y-auto rounded-lg border border-line bg-sheet p-5 shadow-xl"
+          className={`fixed top-1/2 left-1/2 z-50 max-h-[92dvh] ${wide ? "w-[min(60rem,calc(100vw-1.5rem))]" : "w-[min(34rem,calc(100vw-1.5rem))]"} -translate-x-1/2 -translate-y-1/2 overflow-y-auto rounded-lg border border-line bg-sheet p-5 shadow-xl`}
           onOpenAutoFocus={() => {
             opener.current = document.activeElement;
           }}

@@ -8,10 +8,13 @@ import { paintPatch } from "./marks/wood";
 import type { Palette } from "./palette";
 import type { Pictures } from "./pictures";
 
+/** What of a board is needed to paint from it. */
+export type PaintedBoard = Pick<TableBoard, "face" | "levels">;
+
 export interface FaceWindow {
   readonly facePieces: readonly FacePiece[];
   readonly pieceById: ReadonlyMap<PieceId, Piece>;
-  readonly boards: readonly TableBoard[];
+  readonly boards: readonly PaintedBoard[];
   /** What of the face is shown, in the face's frame. */
   readonly view: FaceRect;
   readonly pxPerMm: number;

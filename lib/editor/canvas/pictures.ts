@@ -28,7 +28,7 @@ export class Pictures {
   }
 
   /** The sharpest picture there is at hand for this scale, in device pixels per mm; the right one is fetched if it is not here yet. */
-  at(board: TableBoard, screenPxPerMm: number): PictureAtHand {
+  at(board: Pick<TableBoard, "face" | "levels">, screenPxPerMm: number): PictureAtHand {
     const lengthMm = board.face.length / 1000;
     const wanted = levelFor(board.levels, lengthMm, screenPxPerMm);
     if (wanted === null) return { state: "missing" };

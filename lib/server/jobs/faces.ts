@@ -7,6 +7,7 @@ import { deleteFace, findFace, findJob, insertFace, renameFace, touchJob } from 
 import { deleteLayout, insertLayout, listNewestOrders, lockLayout } from "@/db/queries/layout";
 import { deleteFaceMovement } from "@/db/queries/movement";
 import { findSaw } from "@/db/queries/shop";
+import { deleteSearches, listSearchesOfFace } from "@/db/queries/wood-search";
 import { freshLayout } from "@/lib/layout";
 import type { createFaceSchema, FaceRow } from "@/lib/schemas/job";
 import { faceLayoutSchema } from "@/lib/schemas/layout";
@@ -65,6 +66,12 @@ export async function removeFace(access: ShopAccess, faceId: string): Promise<vo
     const order = (await listNewestOrders(tx, access.shopId, [faceId])).get(faceId);
     if (order) throw refused(`Cut order ${order.number} was issued for this face, so it stays with the job.`);
     if (layout) await deleteLayout(tx, access.shopId, layout.id);
+    const searches = await listSearchesOfFace(tx, access.shopId, faceId);
+    await deleteSearches(
+      tx,
+      access.shopId,
+      searches.map(({ id }) => id),
+    );
     await deleteFaceMovement(tx, access.shopId, faceId);
     await deleteFace(tx, access.shopId, faceId);
     const detail = { title: found.face.title, jobId: found.face.jobId };
