@@ -42,9 +42,20 @@ export interface BruteGround {
   readonly rest: RestGrid;
 }
 
+/** Null where it cannot be told; the step in µm. */
+interface BruteSeam {
+  readonly a: string;
+  readonly b: string;
+  readonly match: number | null;
+  readonly step: number | null;
+  readonly peak: number | null;
+}
+
 export interface BruteValue {
   readonly parts: Parts;
   readonly total: number;
+  /** Between the group's own pieces first, then those to others, each kind in the order of the face. */
+  readonly seams: readonly BruteSeam[];
   /** Of the corner and the seams between the group's own pieces, µm along the board, the seams' in order. */
   readonly marks: readonly number[];
 }
@@ -85,7 +96,7 @@ export function bruteAt(ground: BruteGround, x: number, y: number, turns: Quarte
 
 /** A group that lies on the board, wherever and however well. */
 export function bruteValue(ground: BruteGround, layout: FaceLayout, own: ReadonlySet<string>): BruteValue {
-  const { match, step, joints } = seamParts(ground, layout, own);
+  const { match, step, joints, seams } = seamParts(ground, layout, own);
   const parts: Parts = {
     match,
     step,
@@ -102,13 +113,14 @@ export function bruteValue(ground: BruteGround, layout: FaceLayout, own: Readonl
     weight += ground.weights[name];
   }
   const corner = groupBounds(layout, ground.groupId)?.x ?? 0;
-  return { parts, total: weight === 0 ? 0 : sum / weight, marks: [corner, ...joints] };
+  return { parts, total: weight === 0 ? 0 : sum / weight, seams, marks: [corner, ...joints] };
 }
 
 export function isOwnProblem(problem: Problem, own: ReadonlySet<string>): boolean {
-  if ("piece" in problem) return own.has(problem.piece);
-  if (problem.kind === "too-close") return own.has(problem.pieces[0]) !== own.has(problem.pieces[1]);
-  return problem.kind === "grain" && problem.pieces.some((id) => own.has(id));
+  const { kind } = problem;
+  if (kind === "outside" || kind === "keep-clear" || kind === "spoken-for") return own.has(problem.piece);
+  if (kind === "too-close") return own.has(problem.pieces[0]) !== own.has(problem.pieces[1]);
+  return kind === "grain" && problem.pieces.some((id) => own.has(id));
 }
 
 function clear({ board }: BruteGround, layout: FaceLayout, own: ReadonlySet<string>): number {
@@ -128,7 +140,7 @@ interface Window {
 
 function seamParts(ground: BruteGround, layout: FaceLayout, own: ReadonlySet<string>) {
   const pieces = new Map(layOut(layout).map((piece) => [piece.id, piece]));
-  const readings: { match: number; step: number; fixed: boolean }[] = [];
+  const readings: { seam: BruteSeam; fixed: boolean }[] = [];
   const joints: number[] = [];
   for (const seam of seams(layout)) {
     if (!own.has(seam.a) && !own.has(seam.b)) continue;
@@ -145,15 +157,18 @@ function seamParts(ground: BruteGround, layout: FaceLayout, own: ReadonlySet<str
       profile(ground, b, q, { count, from: own.has(a.id) ? p : q }),
     ];
     if (profileA === null || profileB === null) continue;
-    readings.push({ ...readSeam(profileA, profileB, p.depth, q.depth), fixed });
+    readings.push({ seam: { a: seam.a, b: seam.b, ...readSeam(profileA, profileB, p.depth, q.depth) }, fixed });
     if (!fixed) joints.push((p.x + q.x) * (CELL / 2));
   }
-  if (readings.length === 0) return { match: null, step: null, joints };
-  const inOrder = [...readings.filter(({ fixed }) => !fixed), ...readings.filter(({ fixed }) => fixed)];
-  let [match, step] = [0, 0];
-  for (const reading of inOrder) [match, step] = [match + reading.match, step + reading.step];
   joints.sort((one, other) => one - other);
-  return { match: match / readings.length, step: step / readings.length, joints };
+  const inOrder = [...readings.filter(({ fixed }) => !fixed), ...readings.filter(({ fixed }) => fixed)].map(({ seam }) => seam);
+  if (inOrder.length === 0) return { match: null, step: null, joints, seams: [] };
+  let [match, step] = [0, 0];
+  for (const seam of inOrder) {
+    match += Math.min(1, Math.max(0, seam.match ?? 0));
+    step += seam.step === null ? 0 : 1 - Math.abs(seam.step) / 8_000;
+  }
+  return { match: match / inOrder.length, step: step / inOrder.length, joints, seams: inOrder };
 }
 
 function mapped({ stockFromFace: m }: Piece, x: number, y: number): { x: number; y: number } {
@@ -210,20 +225,25 @@ function profile(
   return from.backwards ? sums.reverse() : sums;
 }
 
-function readSeam(a: readonly number[], b: readonly number[], depthA: number, depthB: number): { match: number; step: number } {
+function readSeam(
+  a: readonly number[],
+  b: readonly number[],
+  depthA: number,
+  depthB: number,
+): Pick<BruteSeam, "match" | "step" | "peak"> {
   const match = alike(a, b, depthA, depthB);
-  if (match === null) return { match: 0, step: 0 };
+  if (match === null) return { match: null, step: null, peak: null };
   const most = Math.min(16, Math.floor(a.length / 4));
   let best = { value: match, lag: 0 };
   for (let lag = 1; lag <= most; lag++) {
     const [tailA, headA] = [a.slice(lag), a.slice(0, a.length - lag)];
     const [tailB, headB] = [b.slice(lag), b.slice(0, b.length - lag)];
     const back = alike(tailA, headB, depthA, depthB);
-    if (back !== null && back > best.value) best = { value: back, lag };
+    if (back !== null && back > best.value) best = { value: back, lag: -lag };
     const on = alike(headA, tailB, depthA, depthB);
     if (on !== null && on > best.value) best = { value: on, lag };
   }
-  return { match: Math.min(1, Math.max(0, match)), step: best.value >= 0.5 ? 1 - best.lag / 16 : 0 };
+  return best.value >= 0.5 ? { match, step: best.lag * CELL, peak: best.value } : { match, step: null, peak: null };
 }
 
 /** Normalised cross-correlation; null where either varies by less than two levels of grey. */

@@ -48,11 +48,22 @@ const wrap = freshWrap({
   corner: { kind: "mitre", turnDeg: 90, parting: "squareThenBevels" },
 });
 
+const pair: Face = {
+  pattern: "resawn",
+  grain: "horizontal",
+  leaf: { width: um(40_000), height: um(25_000), thickness: um(6_000) },
+  opens: "side",
+  resaw: { kerf: um(1_500), planing: um(500) },
+  leanDeg: null,
+};
+
 /** Seams that a place can change: between the ends of fronts and what stands beside them, or round the corners. */
 const faces: readonly (readonly [string, Face, number])[] = [
   ["a cut-out", cutOut("horizontal"), 4],
   ["an upright cut-out", cutOut("vertical"), 4],
   ["a wrap", wrap, 2],
+  // One picture cannot tell two mirrored leaves from one place apart.
+  ["a resawn pair", pair, 0],
 ];
 
 function requestFor(face: Face): PlaceRequest {
@@ -105,7 +116,7 @@ describe.each(faces)("%s", (_, face, seams) => {
       const laid = accepted(placeGroup(request.layout, "set", "b1", place.corner, place.turns));
       expect(isAllowed(laid, "set", board)).toBe(true);
       expect(value.seams).toHaveLength(seams);
-      expect(lyingPieces(laid).length).toBeGreaterThan(2);
+      expect(lyingPieces(laid).length).toBeGreaterThan(1);
     }
   });
 });
