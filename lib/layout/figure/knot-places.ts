@@ -25,10 +25,15 @@ const SMOOTHED_REACH_MM = 2;
 export const LEAST_CONTRAST = Math.log(12);
 /** Squared slope below which there is only noise: a fifth of a grey value a pixel. Keeps even boards from showing stray pixels as knots. */
 const NOISE = 0.05;
+/** No more humps than this are looked at, the strongest: several times the knots of a bad board, and an end to the work on a burr. */
+const MOST_TOPS = 400;
 /** Nothing else may be higher within this distance of a hump's top. */
 const APART_MM = 3;
-/** Bells begin with this spread, about a knot of 10 mm radius, and are held between a pin knot's and a big one's. */
-const START_MM = 8;
+/**
+ * Bells begin with these spreads: a knot of 10 mm radius, and one so big that a bell of the first kind may sit down on one side of its
+ * rim. They are held between a pin knot's and a big one's.
+ */
+const STARTS_MM = [8, 16];
 const LEAST_SPREAD_MM = 2;
 const MOST_SPREAD_MM = 35;
 /** What is offered is the bell at half its height: 1.177 times its spread. */
@@ -41,7 +46,7 @@ export interface KnotPlaces {
   readonly gradients: Gradients;
 }
 
-/** Places from the strongest down; several may lie on one knot. */
+/** Places by the contrast they were found by, strongest first; several may lie on one knot. */
 export function knotPlaces(grey: GreyPicture): KnotPlaces {
   const { width, height, pxPerMm } = grey;
   const gradients = gradientsOf(grey);
@@ -51,10 +56,12 @@ export function knotPlaces(grey: GreyPicture): KnotPlaces {
   // The slope itself above what is usual; its square would see the darkest rim alone.
   const field = { values: rise(gradients.xx, width, height, Math.round(pxPerMm), own), width, height };
   const tops = topsOf(contrast, width, height, Math.round(APART_MM * pxPerMm));
-  const places = tops.map((top) => {
+  const places = tops.flatMap((top) => {
     const at = { x: (top % width) + 0.5, y: Math.floor(top / width) + 0.5 };
-    const bell = bellFit(field, at, START_MM * pxPerMm, LEAST_SPREAD_MM * pxPerMm, MOST_SPREAD_MM * pxPerMm);
-    return { ...ellipseOf(bell), contrast: contrast[top] as number };
+    return STARTS_MM.map((start) => {
+      const bell = bellFit(field, at, start * pxPerMm, LEAST_SPREAD_MM * pxPerMm, MOST_SPREAD_MM * pxPerMm);
+      return { ...ellipseOf(bell), contrast: contrast[top] as number };
+    });
   });
   return { places, gradients };
 }
@@ -73,7 +80,7 @@ function topsOf(contrast: Float32Array, width: number, height: number, apart: nu
       if ((contrast[at] as number) >= LEAST_CONTRAST && isTop(contrast, width, height, x, y, apart)) tops.push(at);
     }
   }
-  return tops.sort((a, b) => (contrast[b] as number) - (contrast[a] as number) || a - b);
+  return tops.sort((a, b) => (contrast[b] as number) - (contrast[a] as number) || a - b).slice(0, MOST_TOPS);
 }
 
 function isTop(contrast: Float32Array, width: number, height: number, x: number, y: number, apart: number): boolean {

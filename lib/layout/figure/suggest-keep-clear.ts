@@ -29,11 +29,13 @@ const KNOT_PX_PER_MM = 1;
 const SIGNS = {
   /** Logarithm of the ratio to the board's own contrast along the grain: 12 to 90 times. */
   contrast: [LEAST_CONTRAST, Math.log(90)],
-  /** 1: all lines run with the grain; 0: no direction; −1: all across it. Half is what a place of two minds has. */
-  withGrain: [0.5, 0],
+  /** 1: all lines run with the grain; 0: no direction; −1: all across it. Clear wood has 0.8 and more, arches' tips 0.7. */
+  withGrain: [0.65, 0],
   /** Logarithm of light before and after along the grain over light within: 3 % is about what the eye tells at all, 12 % catches it. */
   darkness: [0.03, 0.12],
 } as const;
+/** Least product of the three: two signs beyond doubt carry a third that has risen by a tenth, three middling ones carry each other. */
+const LEAST_TOGETHER = 0.1;
 /** Lines within 50° of the board's length go with the grain: it swerves that far beside a knot. */
 const SWERVE_RAD = (50 * Math.PI) / 180;
 /** Of two places one of which lies within twice the other's ellipse the weaker is a part of the stronger. */
@@ -45,18 +47,20 @@ export function suggestKeepClear(picture: StockPicture): KeepClearSuggestion[] {
   const { places, gradients } = knotPlaces(grey);
   const light = sumsOf(grey.light, grey.width, grey.height);
   const tensors = tensorSums(gradients, grey.width, grey.height);
-  const kept: KnotPlace[] = [];
-  const found: KeepClearSuggestion[] = [];
-  for (const place of places) {
+  const scored = places.flatMap((place) => {
     const score = scoreOf(place, light, tensors);
-    if (score === null || kept.some((other) => isWithin(place, other, ONE_KNOT) || isWithin(other, place, 1))) continue;
-    kept.push(place);
-    found.push({ kind: "knot", area: areaOf(place, grey), score });
+    return score === null ? [] : [{ place, score }];
+  });
+  // Sorting is stable, so of equals the one with more contrast stays first.
+  scored.sort((a, b) => b.score - a.score);
+  const kept: typeof scored = [];
+  for (const one of scored) {
+    if (!kept.some(({ place }) => isWithin(one.place, place, ONE_KNOT) || isWithin(place, one.place, 1))) kept.push(one);
   }
-  return found.sort((a, b) => b.score - a.score || a.area.centre.x - b.area.centre.x || a.area.centre.y - b.area.centre.y);
+  return kept.map(({ place, score }) => ({ kind: "knot", area: areaOf(place, grey), score }));
 }
 
-/** null where a sign is missing. */
+/** null where a sign is missing, or all are weak. */
 function scoreOf(place: KnotPlace, light: Sums, tensors: TensorSums): number | null {
   const darkness = darknessOf(place, light);
   if (darkness === null) return null;
@@ -66,7 +70,8 @@ function scoreOf(place: KnotPlace, light: Sums, tensors: TensorSums): number | n
     risen(darkness, SIGNS.darkness),
   ];
   if (signs.some((sign) => sign < 0)) return null;
-  return Math.cbrt(signs.reduce((product, sign) => product * Math.min(1, sign), 1));
+  const product = signs.reduce((all, sign) => all * Math.min(1, sign), 1);
+  return product < LEAST_TOGETHER ? null : Math.cbrt(product);
 }
 
 function risen(value: number, [enough, certain]: readonly [number, number]): number {
