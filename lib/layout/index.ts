@@ -63,6 +63,7 @@ export {
   type PartPlace,
   removePart,
 } from "./pattern/cut-out/change-cut-out";
+export { type CutOutPiece, piecesOfCutOut } from "./pattern/cut-out/cut-out-pieces";
 export {
   type CutOutCrosscut,
   type CutOutOpening,
@@ -71,7 +72,6 @@ export {
   type GluingShift,
   type TrimmedFront,
 } from "./pattern/cut-out/cut-out-plan";
-export { type CutOutPiece, piecesOfCutOut } from "./pattern/cut-out/cut-out-pieces";
 export { type CutOutWish, type FreshCutOut, freshCutOut } from "./pattern/cut-out/fresh-cut-out";
 export type {
   CutOutFace,
@@ -116,10 +116,10 @@ export type { HungPiece, Mirrored, SeamPlace } from "./pattern/pattern-rules";
 export { pieceCount, pieceIdsOf, readingIndexOf } from "./pattern/piece-ids";
 export { labelAt, pieceIdAt } from "./pattern/piece-names";
 export { groupBounds, liftGroup, moveGroup, placeGroup, turnGroup, turnsAlongGrain } from "./pattern/place-group";
-export { groupOf } from "./pattern/slots";
 export { acrossProfile } from "./pattern/resawn/across-profile";
 export { type AcrossProfile, type LeanReading, leanFromFaces } from "./pattern/resawn/lean-from-faces";
 export { type ResawnPlan, resawnPlan } from "./pattern/resawn/resawn-plan";
+export { groupOf } from "./pattern/slots";
 export { swapPieces } from "./pattern/swap-pieces";
 export { type WoodNeeded, woodNeeded } from "./pattern/wood-needed";
 export type { FoldedSide, PlanPoint } from "./pattern/wrap/fold";
