@@ -2,6 +2,7 @@
 import "server-only";
 import { and, asc, eq, inArray, lt, or, sql } from "drizzle-orm";
 import { v7 as newId } from "uuid";
+import { taskKinds } from "@/lib/schemas/task";
 import type { Connection, Database } from "../client";
 import { task } from "../schema";
 import type { ShopId } from "../shop-id";
@@ -26,23 +27,40 @@ export async function findTask(db: Connection, shopId: ShopId, taskId: string) {
   return row;
 }
 
-/** Claims the oldest waiting task, or one whose worker let its lease run out. Two workers never get the same. */
-export async function claimTask(db: Database, now: Date, leaseUntil: Date): Promise<TaskRow | undefined> {
+/** Others may be claiming at the same moment: so many of the oldest are looked at for one that nobody has. */
+const candidates = 16;
+
+/** Claims the oldest waiting task of these kinds, or one whose worker let its lease run out. Two workers never get the same. */
+export async function claimTask(
+  db: Database,
+  now: Date,
+  leaseUntil: Date,
+  kinds: readonly TaskRow["kind"][] = taskKinds,
+): Promise<TaskRow | undefined> {
+  const waits = or(eq(task.state, "queued"), and(eq(task.state, "running"), lt(task.leaseUntil, now)));
   return db.transaction(async (tx) => {
-    const [waiting] = await tx
+    const waiting = await tx
       .select({ id: task.id })
       .from(task)
-      .where(or(eq(task.state, "queued"), and(eq(task.state, "running"), lt(task.leaseUntil, now))))
+      .where(and(inArray(task.kind, [...kinds]), waits))
       .orderBy(asc(task.id))
-      .limit(1)
-      .for("update", { skipLocked: true });
-    if (!waiting) return undefined;
-    await tx
-      .update(task)
-      .set({ state: "running", leaseUntil, claimId: newId(), attempts: sql`${task.attempts} + 1`, progress: 0 })
-      .where(eq(task.id, waiting.id));
-    const [claimed] = await tx.select().from(task).where(eq(task.id, waiting.id));
-    return claimed;
+      .limit(candidates);
+    for (const { id } of waiting) {
+      // Locked one at a time and by its key: sorting under a lock would lock every waiting row, and other workers would find none.
+      const [free] = await tx
+        .select({ id: task.id })
+        .from(task)
+        .where(and(eq(task.id, id), waits))
+        .for("update", { skipLocked: true });
+      if (!free) continue;
+      await tx
+        .update(task)
+        .set({ state: "running", leaseUntil, claimId: newId(), attempts: sql`${task.attempts} + 1`, progress: 0 })
+        .where(eq(task.id, id));
+      const [claimed] = await tx.select().from(task).where(eq(task.id, id));
+      return claimed;
+    }
+    return undefined;
   });
 }
 

@@ -7,6 +7,7 @@ import { claimTask, findTask, finishTask, insertTask, requestCancel } from "@/db
 import { history, task } from "@/db/schema";
 import { database } from "@/lib/server/database";
 import { kinds } from "@/lib/server/tasks/kinds";
+import { inLane, lanes } from "@/lib/server/tasks/lanes";
 import { runTask } from "@/lib/server/tasks/run-task";
 import type { TaskKind } from "@/lib/server/tasks/task-kind";
 import { workLoop } from "@/lib/server/tasks/work-loop";
@@ -150,6 +151,38 @@ describe("working", () => {
     await workLoop(database(), { ...kinds, straighten: second }, done.signal);
     expect((await state(id))?.state).toBe("done");
     expect(await timesKept(id)).toBe(1);
+  });
+
+  it("goes on beside another of the same loop where there are two places, and not where there is one", async () => {
+    const most = async (places: number) => {
+      const ids = [await queue(), await queue(), await queue()];
+      const ending = new AbortController();
+      const seen = { under: 0, most: 0, begun: 0 };
+      const kind = kindThat(async () => {
+        seen.begun += 1;
+        seen.most = Math.max(seen.most, ++seen.under);
+        await sleep(120);
+        seen.under -= 1;
+        if (seen.begun === ids.length && seen.under === 0) ending.abort();
+        return async () => {};
+      });
+      await workLoop(database(), { straighten: kind }, ending.signal, places);
+      for (const id of ids) expect((await state(id))?.state).toBe("done");
+      return seen.most;
+    };
+    expect(await most(1)).toBe(1);
+    expect(await most(2)).toBe(2);
+  });
+
+  it("is left alone by a loop for other kinds: a search holds up no picture", async () => {
+    const id = await queue();
+    const ending = new AbortController();
+    setTimeout(() => ending.abort(), 150);
+    const { straighten: _, ...others } = kinds;
+    await workLoop(database(), others, ending.signal);
+    expect((await state(id))?.state).toBe("queued");
+    expect(Object.keys(inLane(kinds, "searches"))).not.toContain("straighten");
+    expect(lanes.flatMap((lane) => Object.keys(inLane(kinds, lane))).sort()).toEqual(Object.keys(kinds).sort());
   });
 
   it("is given up after four starts that never came to an end", async () => {
