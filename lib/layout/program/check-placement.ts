@@ -1,8 +1,8 @@
 /** What can be said against a placement before any cut is sought: outside the board, or closer than the loss between two. */
 import { um } from "../units/um";
-import type { KerfByAxis } from "./candidate-cuts";
 import type { CutProgramOutcome } from "./program";
 import type { Axis, Blank, Region } from "./region";
+import type { KerfByAxis } from "./workshop";
 
 type Refusal = Extract<CutProgramOutcome, { ok: false }>;
 

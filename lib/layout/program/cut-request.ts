@@ -43,12 +43,12 @@ export interface CutRequest {
   readonly flatten?: RoughAllowances | null;
   /** What a saw does not take surely is planed off; absent: `THINNEST_SAWN`. */
   readonly thinnestSawn?: Um;
-  /** Plans the search may weigh before it settles for the best it has. About 300 000 a second on a small machine. */
+  /** Plans the search may weigh before it settles for the best it has. Some 300 000 a second on a small machine. */
   readonly budget: number;
 }
 
 /** A budget for which a screen can wait. */
-export const defaultCutBudget = 400_000;
+export const defaultCutBudget = 600_000;
 
 /** Board edges from the two questions a shop answers: are the long edges true, are the ends? */
 export function boardEdges(longEdgesTrued: boolean, endsTrued: boolean): BoardEdges {

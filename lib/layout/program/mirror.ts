@@ -29,7 +29,7 @@ export function viewFromFirstPiece(request: CutRequest): View {
 function signature(request: CutRequest, axis: "x" | "y"): number[] {
   const pieces = [...request.pieces].sort(byId);
   const near = axis === "x" ? "left" : "top";
-  const edge = request.boardEdges[near] === "trued" ? 0 : 1;
+  const edge = ["trued", "marked", "rough"].indexOf(request.boardEdges[near]);
   return [...pieces.map((piece) => piece.rect[axis]), ...pieces.map((piece) => piece.cleanUp[near]), edge];
 }
 

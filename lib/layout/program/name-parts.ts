@@ -3,10 +3,11 @@
  * none. A strip keeps its letter while pieces are taken off it.
  */
 import type { PieceId } from "../piece";
-import { groupsAlong, type KerfByAxis } from "./candidate-cuts";
+import { groupsAlong } from "./candidate-cuts";
 import { isOffcut } from "./cut-plan";
 import type { Part, PartKind, ShopLimits } from "./program";
 import { everyEdge, type Region, sizeOf, stockRectOf } from "./region";
+import type { KerfByAxis } from "./workshop";
 
 interface Name {
   readonly kind: PartKind;
@@ -16,12 +17,17 @@ interface Name {
 
 export interface PartNamer {
   /** The parts a cut of `parent` leaves, in the order given; `step` is its number. */
-  readonly nameAll: (parent: Part, regions: readonly Region[], step: number) => readonly Part[];
+  readonly nameAll: NameAll;
+  /** The same of a rough cut, in whose regions every blank is a rough part. */
+  readonly nameRough: NameAll;
 }
+
+type NameAll = (parent: Part, regions: readonly Region[], step: number) => readonly Part[];
 
 export function partNamer(kerf: KerfByAxis, limits: ShopLimits): PartNamer {
   let strips = 0;
   let offcuts = 0;
+  let roughs = 0;
   const strip = (): Name => ({ kind: "strip", label: stripLabel(strips++), pieceId: null });
 
   function unsawn(parent: Part, region: Region, siblings: readonly Region[]): Name {
@@ -29,7 +35,7 @@ export function partNamer(kerf: KerfByAxis, limits: ShopLimits): PartNamer {
     const rows = (of: Region) => groupsAlong(of, "y", kerf.y).length;
     // A board stays the board until single rows come off it, a strip keeps its letter while pieces do.
     const keeps =
-      parent.kind === "board"
+      parent.kind === "board" || parent.kind === "rough"
         ? rows(region) > 1 && unsawnSiblings.every((other) => rows(other) === 1)
         : unsawnSiblings.length === 0;
     if (keeps) return { kind: parent.kind, label: parent.label, pieceId: parent.pieceId };
@@ -40,21 +46,36 @@ export function partNamer(kerf: KerfByAxis, limits: ShopLimits): PartNamer {
     return strip();
   }
 
-  function name(parent: Part, region: Region, siblings: readonly Region[]): Name {
+  function empty(region: Region): Name {
+    const kept = isOffcut(region, limits);
+    return kept ? { kind: "offcut", label: `C${++offcuts}`, pieceId: null } : { kind: "waste", label: null, pieceId: null };
+  }
+
+  function rough(parent: Part, region: Region, siblings: readonly Region[]): Name {
+    if (region.blanks.length === 0) return empty(region);
+    const alone = siblings.every((other) => other === region || other.blanks.length === 0);
+    // A board stays the board while only offcuts come off it; a rough part keeps its name.
+    if (parent.kind === "rough" || (alone && region.blanks.length > 1)) return { ...parent };
+    if (region.blanks.length === 1) return { kind: "rough", label: `R${++roughs}`, pieceId: null };
+    return strip();
+  }
+
+  function fine(parent: Part, region: Region, siblings: readonly Region[]): Name {
     const [blank] = region.blanks;
-    if (!blank) {
-      const kept = isOffcut(region, limits);
-      return kept ? { kind: "offcut", label: `C${++offcuts}`, pieceId: null } : { kind: "waste", label: null, pieceId: null };
-    }
+    if (!blank) return empty(region);
     if (!isOut(region)) return unsawn(parent, region, siblings);
     const asSawn = everyEdge.every((edge) => blank.piece.cleanUp[edge] === 0);
     return { kind: asSawn ? "piece" : "blank", label: blank.piece.label, pieceId: blank.piece.pieceId };
   }
 
-  return {
-    nameAll: (parent, regions, step) =>
-      regions.map((region, i) => ({ id: `${step}.${i + 1}`, ...name(parent, region, regions), rect: stockRectOf(region) })),
-  };
+  const allBy =
+    (name: typeof fine): NameAll =>
+    (parent, regions, step) =>
+      regions.map((region, i): Part => {
+        const { kind, label, pieceId } = name(parent, region, regions);
+        return { id: `${step}.${i + 1}`, kind, label, pieceId, rect: stockRectOf(region) };
+      });
+  return { nameAll: allBy(fine), nameRough: allBy(rough) };
 }
 
 /** Nothing in it is still to be sawn out: empty, or a blank at its size. */

@@ -20,12 +20,18 @@ export interface Blank {
   readonly piece: PlacedPiece;
   readonly x: Span;
   readonly y: Span;
+  /** Its clean-up, edge by edge, as one word. */
+  readonly allowed: string;
 }
 
 export interface Region {
   readonly x: Span;
   readonly y: Span;
   readonly edges: Readonly<Record<Edge, EdgeState>>;
+  /** µm that have to come off an edge after sawing because of the machine that made it; 0 where the layout reckoned with it. */
+  readonly owes: Readonly<Record<Edge, number>>;
+  /** A crosscut has made it shorter than the board, or than the rough part, it comes from. */
+  readonly shortened: boolean;
   readonly blanks: readonly Blank[];
 }
 
@@ -34,31 +40,46 @@ export const lowEdge: Readonly<Record<Axis, Edge>> = { x: "left", y: "top" };
 export const highEdge: Readonly<Record<Axis, Edge>> = { x: "right", y: "bottom" };
 export const axisOfEdge: Readonly<Record<Edge, Axis>> = { left: "x", right: "x", top: "y", bottom: "y" };
 export const everyEdge: readonly Edge[] = ["left", "right", "top", "bottom"];
+export const isLow = (edge: Edge): boolean => edge === "left" || edge === "top";
+export const owesNothing: Region["owes"] = { left: 0, right: 0, top: 0, bottom: 0 };
 
 export const sizeOf = (span: Span): number => span.to - span.from;
 export const areaOf = (rect: { readonly x: Span; readonly y: Span }): number => sizeOf(rect.x) * sizeOf(rect.y);
-export const isStraight = (region: Region, edge: Edge): boolean => region.edges[edge] !== "rough";
+
+/** Fit to lie against a fence or a stop, and to be an edge of a piece. */
+export function isStraight(region: Region, edge: Edge): boolean {
+  const state = region.edges[edge];
+  return state === "sawn" || state === "trued";
+}
 
 /** Tells the rectangles of one program apart: no two that are ever in hand have the same spans. */
-export function regionKey(region: Region): string {
+export function regionKey(region: Pick<Region, Axis>): string {
   return `${region.x.from} ${region.x.to} ${region.y.from} ${region.y.to}`;
 }
 
-/** Equal for rectangles that are cut alike: sizes, where the blanks lie in it, which edges are rough and of which blanks they may stay so. */
+/**
+ * Equal for rectangles that are cut alike: sizes, where the blanks lie in it and what is cleaned off them, which edges are not fit or
+ * owe something, and whether rips come late in it. Blanks that came in order of place keep it in every rectangle.
+ */
 export function shapeKey(region: Region): string {
-  const { x, y } = region;
-  const rough = everyEdge.filter((edge) => !isStraight(region, edge));
-  const blanks = region.blanks.map((blank) => {
-    const place = [blank.x.from - x.from, blank.x.to - x.from, blank.y.from - y.from, blank.y.to - y.from];
-    return [...place, ...rough.filter((edge) => blank.piece.cleanUp[edge] > 0)].join(" ");
-  });
-  return `${sizeOf(x)} ${sizeOf(y)} ${rough.join(" ")}:${blanks.sort().join(",")}`;
+  const { x, y, edges, owes, blanks } = region;
+  let key = `${sizeOf(x)} ${sizeOf(y)}${region.shortened ? " short" : ""}`;
+  for (const edge of everyEdge) if (!isStraight(region, edge) || owes[edge] > 0) key += ` ${edge} ${edges[edge]} ${owes[edge]}`;
+  for (const blank of blanks)
+    key += `,${blank.x.from - x.from} ${blank.x.to - x.from} ${blank.y.from - y.from} ${blank.y.to - y.from} ${blank.allowed}`;
+  return key;
 }
 
 /** The coordinate at which an edge lies. */
 export function edgeAt(rect: { readonly x: Span; readonly y: Span }, edge: Edge): number {
   const span = rect[axisOfEdge[edge]];
-  return edge === "left" || edge === "top" ? span.from : span.to;
+  return isLow(edge) ? span.from : span.to;
+}
+
+/** µm of wood between an edge and the nearest blank; infinite where there is none. */
+export function roomAt(region: Region, edge: Edge): number {
+  const distances = region.blanks.map((blank) => Math.abs(edgeAt(blank, edge) - edgeAt(region, edge)));
+  return Math.min(...distances);
 }
 
 export function stockRectOf({ x, y }: { readonly x: Span; readonly y: Span }): StockRect {
@@ -69,6 +90,7 @@ export function blankOf(piece: PlacedPiece): Blank {
   const { rect, cleanUp } = piece;
   return {
     piece,
+    allowed: `${cleanUp.left} ${cleanUp.right} ${cleanUp.top} ${cleanUp.bottom}`,
     x: { from: rect.x - cleanUp.left, to: rect.x + rect.width + cleanUp.right },
     y: { from: rect.y - cleanUp.top, to: rect.y + rect.height + cleanUp.bottom },
   };
@@ -80,11 +102,13 @@ export function wholeBoard(request: CutRequest): Region {
     x: { from: 0, to: request.board.length },
     y: { from: 0, to: request.board.width },
     edges: request.boardEdges,
+    owes: owesNothing,
+    shortened: false,
     blanks: request.pieces.map(blankOf),
   };
 }
 
-/** Nothing left to saw: no piece in it, or one that fills it with every edge fit to leave (straight, or cleaned up later). */
+/** Nothing left to saw or plane: no piece in it, or one that fills it with every edge fit to leave (straight, or cleaned up later). */
 export function isFinished(region: Region): boolean {
   const [blank, second] = region.blanks;
   if (!blank) return true;
@@ -92,32 +116,4 @@ export function isFinished(region: Region): boolean {
   return everyEdge.every(
     (edge) => edgeAt(region, edge) === edgeAt(blank, edge) && (isStraight(region, edge) || blank.piece.cleanUp[edge] > 0),
   );
-}
-
-export interface Halves {
-  /** The wood turned to dust: the blade's width as far as it runs in wood. */
-  readonly kerf: Span;
-  /** What lies on either side; null where the blade takes everything. */
-  readonly low: Region | null;
-  readonly high: Region | null;
-}
-
-/** Parts a region by a blade that covers `blade` on the axis. The caller knows that no blank lies under the blade. */
-export function part(region: Region, axis: Axis, blade: Span): Halves {
-  const whole = region[axis];
-  const kerf = { from: Math.max(blade.from, whole.from), to: Math.min(blade.to, whole.to) };
-  const side = (span: Span, sawn: Edge): Region | null =>
-    sizeOf(span) <= 0
-      ? null
-      : {
-          ...region,
-          [axis]: span,
-          edges: { ...region.edges, [sawn]: "sawn" },
-          blanks: region.blanks.filter((blank) => blank[axis].from >= span.from && blank[axis].to <= span.to),
-        };
-  return {
-    kerf,
-    low: side({ from: whole.from, to: kerf.from }, highEdge[axis]),
-    high: side({ from: kerf.to, to: whole.to }, lowEdge[axis]),
-  };
 }

@@ -1,62 +1,19 @@
 import fc from "fast-check";
 import { describe, expect, test } from "vitest";
-import { boardEdges, type CutRequest, type PlacedPiece } from "@/lib/layout/program/cut-request";
+import type { CutRequest } from "@/lib/layout/program/cut-request";
 import { planCuts } from "@/lib/layout/program/plan-cuts";
-import type { ShopLimits } from "@/lib/layout/program/program";
-import { um } from "@/lib/layout/units/um";
+import { verifyProgram } from "@/lib/layout/program/verify-program";
 import { costOfProgram } from "./cost-of-program";
-import { type BoardEdge, type Box, leastCost } from "./every-tree";
+import { leastCost } from "./every-tree";
 import { anyBoardEdges } from "./random-layouts";
+import { anywhere, crowded, tinyRequest, withMachines } from "./tiny-requests";
 
-/** Boards of a few micrometres, so that every position can be tried. */
-const limits: ShopLimits = {
-  shortestCrosscut: um(7),
-  narrowestRip: um(3),
-  shortestMachined: um(7),
-  offcutLength: um(5),
-  offcutWidth: um(3),
-};
-const none = { left: um(0), right: um(0), top: um(0), bottom: um(0) };
-
-const size = fc.integer({ min: 1, max: 6 });
-const spot = fc.record({ x: fc.nat(9), y: fc.nat(7), width: size, height: size });
-type Spot = { readonly x: number; readonly y: number; readonly width: number; readonly height: number };
-
-const anywhere = (most: number) => fc.array(spot, { minLength: 1, maxLength: most });
-
-/** Those of many that lie clear of the ones before, as tight as they come: among them are layouts that block. */
-const crowded = fc.array(spot, { minLength: 20, maxLength: 40 }).map((spots) => {
-  const kept: Spot[] = [];
-  for (const one of spots) if (kept.every((other) => isClear(one, other))) kept.push(one);
-  return kept;
-});
-
-function isClear(a: Spot, b: Spot): boolean {
-  return a.x + a.width <= b.x || b.x + b.width <= a.x || a.y + a.height <= b.y || b.y + b.height <= a.y;
+interface Box {
+  readonly x0: number;
+  readonly x1: number;
+  readonly y0: number;
+  readonly y1: number;
 }
-
-const tinyRequest = (spots: fc.Arbitrary<Spot[]>, budget: number): fc.Arbitrary<CutRequest> =>
-  fc
-    .record({ pieces: spots, kerf: fc.constantFrom(0, 0, 0, 1, 2), spare: fc.nat(3), deep: fc.nat(1) })
-    .map(({ pieces, kerf, spare, deep }) => ({
-      board: {
-        length: um(Math.max(...pieces.map((one) => one.x + one.width)) + spare),
-        width: um(Math.max(...pieces.map((one) => one.y + one.height)) + deep),
-      },
-      pieces: pieces.map(
-        (one, i): PlacedPiece => ({
-          pieceId: `p${i + 1}`,
-          label: String(i + 1),
-          cleanUp: none,
-          rect: { x: um(one.x), y: um(one.y), width: um(one.width), height: um(one.height) },
-        }),
-      ),
-      kerf: { rip: um(kerf), crosscut: um(kerf) },
-      boardEdges: boardEdges(true, true),
-      truingTakes: { longEdge: um(0), end: um(0) },
-      limits,
-      budget,
-    }));
 
 const boxesOf = (request: CutRequest): Box[] =>
   request.pieces.map(({ rect }) => ({ x0: rect.x, x1: rect.x + rect.width, y0: rect.y, y1: rect.y + rect.height }));
@@ -103,45 +60,44 @@ describe("against brute force on tiny boards", () => {
     expect(Math.min(...Object.values(seen))).toBeGreaterThan(10);
   });
 
-  const costs = (request: CutRequest) => {
-    const outcome = planCuts(request);
-    if (!outcome.ok || outcome.program.steps.some((step) => step.kind === "true")) return null;
-    const { length, width } = request.board;
-    const board = { x0: 0, x1: length, y0: 0, y1: width };
-    const { left, right, top, bottom } = request.boardEdges;
-    const states = { "x low": left, "x high": right, "y low": top, "y high": bottom };
-    const edges: BoardEdge[] = ["x low", "x high", "y low", "y high"];
-    const rough = new Set(edges.filter((edge) => states[edge] === "rough"));
-    const shop = { limits, kerf: { x: request.kerf.crosscut, y: request.kerf.rip }, board, rough, most: 300 };
-    return { found: outcome.program, least: leastCost(boxesOf(request), shop) };
-  };
+  /** How often a program was found and held against every tree of its request. */
+  function compareWithAll(requests: fc.Arbitrary<CutRequest>, numRuns: number): number {
+    let compared = 0;
+    fc.assert(
+      fc.property(requests, (request) => {
+        const outcome = planCuts(request);
+        if (!outcome.ok || outcome.program.steps.some((step) => step.kind === "true")) return;
+        expect(verifyProgram(request, outcome.program)).toEqual({ ok: true });
+        const least = leastCost(request, 300);
+        if (least === "too many") return;
+        compared++;
+        expect(outcome.program.search.proven).toBe(true);
+        expect(costOfProgram(outcome.program, request)).toEqual(least);
+      }),
+      { numRuns },
+    );
+    return compared;
+  }
 
   test("no tree is safer, and of the safest none has fewer settings, then turns, then cuts, or gives more wood back", () => {
-    let compared = 0;
-    fc.assert(
-      fc.property(tinyRequest(anywhere(3), 300_000), (request) => {
-        const both = costs(request);
-        if (!both || both.least === "too many") return;
-        compared++;
-        expect(both.found.search.proven).toBe(true);
-        expect(costOfProgram(both.found, request)).toEqual(both.least);
-      }),
-      { numRuns: 150 },
-    );
-    expect(compared).toBeGreaterThan(15);
+    expect(compareWithAll(tinyRequest(anywhere(3), 300_000), 150)).toBeGreaterThan(15);
   });
 
-  test("the same on boards with some edges rough", () => {
-    let compared = 0;
-    fc.assert(
-      fc.property(tinyRequest(anywhere(3), 300_000), anyBoardEdges, (request, boardEdges) => {
-        const both = costs({ ...request, boardEdges });
-        if (!both || both.least === "too many") return;
-        compared++;
-        expect(costOfProgram(both.found, request)).toEqual(both.least);
-      }),
-      { numRuns: 700 },
-    );
-    expect(compared).toBeGreaterThan(40);
+  test("the same where what is too thin for the saw goes to the plane", () => {
+    expect(compareWithAll(tinyRequest(anywhere(3), 300_000, 2), 200)).toBeGreaterThan(15);
+  });
+
+  test("the same on boards with some edges rough, and ends that a line can only be marked from", () => {
+    const requests = fc
+      .record({ request: tinyRequest(anywhere(3), 300_000), boardEdges: anyBoardEdges })
+      .map(({ request, boardEdges }) => ({ ...request, boardEdges }));
+    expect(compareWithAll(requests, 700)).toBeGreaterThan(40);
+  });
+
+  test("the same with machines of all kinds, each with its own kerf, clean-up and limits", () => {
+    const requests = fc
+      .record({ request: withMachines(tinyRequest(anywhere(3), 300_000, 2)), boardEdges: anyBoardEdges })
+      .map(({ request, boardEdges }) => ({ ...request, boardEdges }));
+    expect(compareWithAll(requests, 700)).toBeGreaterThan(40);
   });
 });

@@ -1,6 +1,7 @@
 import { describe, expect, test } from "vitest";
 import { boardEdges, type CutRequest } from "@/lib/layout/program/cut-request";
-import { isFinished, part, shapeKey, wholeBoard } from "@/lib/layout/program/region";
+import { part } from "@/lib/layout/program/part";
+import { isFinished, shapeKey, wholeBoard } from "@/lib/layout/program/region";
 import { umFromMm } from "@/lib/layout/units/um";
 import { front, request, row } from "./row-of-fronts";
 
