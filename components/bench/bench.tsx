@@ -8,14 +8,18 @@ import { revisionLetter } from "@/lib/words/revision-letter";
 import { StepTape } from "../order/step-tape";
 import { Notice } from "../ui/notice";
 import { BenchButtons } from "./bench-buttons";
+import { CutActions } from "./cut-actions";
+import { EnteredList } from "./entered-list";
 import { OrderDone } from "./order-done";
 import { StepCard } from "./step-card";
 import { StepList } from "./step-list";
 import { SupersededStop } from "./superseded-stop";
+import { useAsCut } from "./use-as-cut";
 import { useBench } from "./use-bench";
 
 export function Bench({ order }: { order: Order }) {
   const bench = useBench(order);
+  const asCut = useAsCut(order, bench);
   const [listOpen, setListOpen] = useState(false);
   const { steps, ticks, at, step } = bench;
   const done = steps.map(({ id }) => ticks.has(id));
@@ -43,6 +47,8 @@ export function Bench({ order }: { order: Order }) {
             )}
             {allDone && <OrderDone order={order} />}
             {step && <StepCard key={step.id} order={order} step={step} before={steps[at - 1]} tick={ticks.get(step.id)} />}
+            {step && <CutActions key={`as-cut ${step.id}`} order={order} step={step} ticked={ticks.has(step.id)} asCut={asCut} />}
+            <EnteredList order={order} asCut={asCut} />
           </main>
           <BenchButtons bench={bench} onList={() => setListOpen(true)} />
           <StepList bench={bench} order={order} open={listOpen} onOpenChange={setListOpen} />

@@ -31,6 +31,7 @@ export function useBench(order: Order) {
     ticks,
     at,
     step: steps[at],
+    asCut: progress.data.asCut,
     superseded: progress.data.superseded,
     newestRevision: progress.data.newestRevision,
     /** Set while what others do cannot be seen. */

@@ -6,7 +6,7 @@ import { useEffect } from "react";
 import { messageOf } from "@/lib/client/fault-from-server";
 import { orderPdfUrl, orderQuery, progressQuery } from "@/lib/client/order";
 import type { Order } from "@/lib/schemas/order";
-import { orderSteps } from "@/lib/schemas/order-steps";
+import { orderSteps, takesWood } from "@/lib/schemas/order-steps";
 import { revisionLetter } from "@/lib/words/revision-letter";
 import { supersededWhy } from "@/lib/words/superseded";
 import { buttonClass } from "../ui/button";
@@ -18,6 +18,8 @@ import { FaceView } from "./face-view";
 import { LabelForm } from "./label-form";
 import { OrderRevisions } from "./order-revisions";
 import { OrderStepsTable } from "./order-steps-table";
+import { RestPanel } from "./rest-panel";
+import { RestRecord } from "./rest-record";
 import { ShopDate } from "./shop-date";
 import { StepTape } from "./step-tape";
 
@@ -27,9 +29,11 @@ interface Props {
   revision: number | undefined;
   paper: "a4" | "letter";
   qr: BenchQr;
+  /** Whether who looks may issue. */
+  mayIssue: boolean;
 }
 
-export function OrderPage({ initial, revision, paper, qr }: Props) {
+export function OrderPage({ initial, revision, paper, qr, mayIssue }: Props) {
   const { data: order, error: orderError, refetch } = useQuery({ ...orderQuery(initial.id, revision), initialData: initial });
   const { data: progress, error: progressError } = useQuery({
     ...progressQuery(order.id, order.revisionId),
@@ -51,6 +55,9 @@ export function OrderPage({ initial, revision, paper, qr }: Props) {
   const done = steps.map(({ id }) => ticks.has(id));
   const next = done.indexOf(false);
   const letter = revisionLetter(order.revision);
+  const isNewest = order.revision === progress.newestRevision;
+  const isCutInto = order.snapshot.boards.some(({ tag }) => progress.ticks.some(({ stepId }) => takesWood(stepId, tag)));
+  const hasRest = isNewest && (progress.asCut.length > 0 || (progress.superseded && isCutInto));
   const connectionError = progressError ?? orderError;
   const pdf = (size: "a4" | "letter") => orderPdfUrl(order.id, { paper: size, revision: order.revision });
   return (
@@ -81,8 +88,10 @@ export function OrderPage({ initial, revision, paper, qr }: Props) {
               {messageOf(connectionError)} What you see may be old: what others do is not shown until then.
             </Notice>
           )}
-          {progress.superseded && <Superseded order={order} newest={progress.newestRevision} />}
+          {progress.superseded && <Superseded order={order} newest={progress.newestRevision} begun={isCutInto} />}
           {next < 0 && <Notice kind="sound">Every step is ticked.</Notice>}
+          {hasRest && <RestPanel order={order} progress={progress} mayIssue={mayIssue} />}
+          <RestRecord order={order} />
           <OrderStepsTable order={order} steps={steps} ticks={ticks} />
         </div>
         <aside className="flex flex-col gap-6">
@@ -109,7 +118,7 @@ export function OrderPage({ initial, revision, paper, qr }: Props) {
   );
 }
 
-function Superseded({ order, newest }: { order: Order; newest: number }) {
+function Superseded({ order, newest, begun }: { order: Order; newest: number; begun: boolean }) {
   return (
     <Notice kind="stop">
       Revision {revisionLetter(order.revision)} is superseded: {supersededWhy}.{" "}
@@ -118,7 +127,7 @@ function Superseded({ order, newest }: { order: Order; newest: number }) {
           Go to revision {revisionLetter(newest)}
         </Link>
       ) : (
-        "Issue the layout again before anything more is cut."
+        `Issue ${begun ? "the rest" : "the layout again"} before anything more is cut.`
       )}
     </Notice>
   );

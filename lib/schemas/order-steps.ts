@@ -81,13 +81,20 @@ export function orderSteps(snapshot: OrderSnapshot): readonly OrderStep[] {
   return steps.map((step, index) => ({ ...step, number: index + 1 }));
 }
 
-/** Ids of the cuts and clean-ups that were done before this revision was issued. */
-export function doneBefore({ boards }: OrderSnapshot): ReadonlySet<string> {
-  const ids = boards.flatMap(({ tag, asCut }) => [
-    ...(asCut?.done ?? []).map((number) => `${tag}:${number}`),
-    ...(asCut?.cleanedUp ?? []).map(({ number }) => `${tag}:clean-up-${number}`),
-  ]);
-  return new Set(ids);
+/** Ids of the steps that were done before this revision was issued: cuts, clean-ups, and what comes before any cut of a board. */
+export function doneBefore(snapshot: OrderSnapshot): ReadonlySet<string> {
+  const isDone = (step: OrderStep): boolean => {
+    const { asCut, tag } = step.board;
+    if (!asCut) return false;
+    if (step.kind === "cut") return asCut.done.includes(step.cut.number);
+    if (step.kind === "clean-up") return asCut.cleanedUp.some(({ number }) => step.id === `${tag}:clean-up-${number}`);
+    return step.kind !== "test-cut" && step.kind !== "rack" && asCut.done.length > 0;
+  };
+  return new Set(
+    orderSteps(snapshot)
+      .filter(isDone)
+      .map(({ id }) => id),
+  );
 }
 
 /** In the order of work: everything at hand first, outer edges before joints, so that a joint leaves a board as wide as it stays. */

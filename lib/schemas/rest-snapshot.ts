@@ -79,8 +79,8 @@ export const snapshotRestSchema = z.object({
   revision: z.int(),
   /** Everything the rest was planned from, as a hash: the same asked twice is answered once. */
   basis: z.string(),
-  /** Of every revision so far, oldest first. */
-  entries: z.array(asCutSchema),
+  /** Of every revision so far, oldest first; in words as they were true of the revision they were entered for. */
+  entries: z.array(asCutSchema.extend({ words: z.string() })),
   /** What did not fit, with the rescue taken. */
   troubles: z.array(z.object({ boardId: idSchema, trouble: troubleSchema })),
 });

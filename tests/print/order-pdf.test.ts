@@ -1,12 +1,14 @@
 /** The cut order on paper, read back from the file. */
 import sharp from "sharp";
 import { beforeAll, describe, expect, test } from "vitest";
+import { umFromMm } from "@/lib/layout";
 import type { Order } from "@/lib/schemas/order";
 import { orderSteps } from "@/lib/schemas/order-steps";
 import { orderPdf } from "@/lib/server/print/order-pdf";
 import type { Paper } from "@/lib/server/print/paper";
 import { firstOfAll } from "@/lib/words/caution";
 import { makeOrder } from "../support/make-order";
+import { makeRest } from "../support/make-rest";
 import { pdfFonts, pdfPages, pdfPictures, pdfText } from "../support/read-pdf";
 
 let jpeg: Uint8Array;
@@ -138,4 +140,34 @@ test("words without a space wrap, and stay on the page", async () => {
 test("the same order gives the same bytes", async () => {
   const order = await makeOrder();
   expect(Buffer.from(await print(order, "a4")).equals(Buffer.from(await print(order, "a4")))).toBe(true);
+});
+
+describe("the rest of an order that was begun", () => {
+  const found = (order: Order, stepId: string) => [
+    { kind: "kerf" as const, stepId, kerf: umFromMm(3.6), reach: "all" as const },
+    { kind: "spoiled" as const, boardId: order.snapshot.boards[0]?.boardId ?? "", pieceId: "p2", usable: null },
+  ];
+
+  test("says before the steps what is cut, what is in hand, what was found and what is done about it", async () => {
+    const order = await makeRest({ doneTo: "2", found }, { kerfMm: 3.2, cleanUpMm: 0 });
+    const text = plain(pdfText(await print(order, "a4")));
+    expect(text).toContain("Revision B");
+    expect(text).toContain("Already cut by revision A: do not cut it again");
+    expect(text).toMatch(/B-041, by revision A: front 1 cut\. In hand: Strip A, [\d.]+ × 184\.0/);
+    expect(text).toContain("Kerf 3.6 mm instead of 3.2 mm, at every cut (Asha Noor).");
+    expect(text).toContain("Front 2 is spoiled; front 2 can be cut from strip A.");
+    expect(text).toContain("Panel saw, thin blade, kerf 3.6; true kerf:");
+    expect(text.indexOf("Already cut")).toBeLessThan(text.indexOf("do this"));
+  });
+
+  test("its wood adds up as printed, what was spoiled with it", async () => {
+    const order = await makeRest({ doneTo: "2", found }, { kerfMm: 3.2, cleanUpMm: 0 });
+    const [, parts = "", whole] = /By area: (.*?) = board ([\d.]+) /.exec(plain(pdfText(await print(order, "letter")))) ?? [];
+    const sum = [...parts.matchAll(/[\d.]+/g)].reduce((total, [figure]) => total + Number(figure), 0);
+    expect(sum).toBeCloseTo(Number(whole), 6);
+  });
+
+  test("an order that nothing was cut of says nothing of the kind", async () => {
+    expect(plain(pdfText(await print(await makeOrder(), "a4")))).not.toContain("Already cut");
+  });
 });

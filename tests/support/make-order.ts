@@ -51,6 +51,11 @@ const usual: OrderWanted = {
 
 /** Rows of fronts, one row on each board. */
 export async function makeOrder(change: Partial<OrderWanted> = {}): Promise<Order> {
+  return (await makeGiven(change)).order;
+}
+
+/** The same with what it was frozen from. */
+export async function makeGiven(change: Partial<OrderWanted> = {}) {
   const wanted = { ...usual, ...change };
   const boards = Array.from({ length: wanted.boards }, (_, i) => boardOf(wanted, i));
   const saw = { name: wanted.sawName, kerf: umFromMm(wanted.kerfMm), cleanUp: umFromMm(wanted.cleanUpMm) };
@@ -65,7 +70,7 @@ export async function makeOrder(change: Partial<OrderWanted> = {}): Promise<Orde
   const snapshot = await freeze(given, async (request) => planAndVerify(request));
   const [issuedAt, revisionId] = ["2026-03-14T09:30:00.000Z", newId()];
   const supersededAt = wanted.superseded ? "2026-03-15T13:05:00.000Z" : null;
-  return {
+  const order: Order = {
     id: newId(),
     number: 18,
     revision: 1,
@@ -86,6 +91,7 @@ export async function makeOrder(change: Partial<OrderWanted> = {}): Promise<Orde
     asCut: [],
     revisions: [{ id: revisionId, revision: 1, issuedAt, issuedBy: "Mats Lind", supersededAt }],
   };
+  return { order, given };
 }
 
 const limits = {

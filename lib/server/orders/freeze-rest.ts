@@ -20,10 +20,12 @@ import { type RescueChoicesByBoard, type Rest, restSchema } from "@/lib/schemas/
 import { boardAsCutSchema, snapshotRestSchema } from "@/lib/schemas/rest-snapshot";
 import { standsInTheWay } from "@/lib/schemas/spoken-for";
 import { printTag } from "@/lib/schemas/tag";
+import { asCutWords } from "@/lib/words/as-cut";
 import { cutRefusalSentence, problemSentence } from "@/lib/words/layout-problem";
 import { styleOf } from "@/lib/words/order-step";
 import { refused } from "../faults";
 import { type BegunOrder, basisOf } from "./begun-order";
+import { faceWorkOf } from "./face-work";
 import { boardFaceOf, boardsUsed, cutRequestOf, refusedFor, snapshotBoard, unitsOf } from "./freeze";
 import type { Planner, RestPlanner } from "./plan-cuts";
 import { type BoardRest, planRestOfBoard } from "./rest-of-board";
@@ -46,7 +48,12 @@ export async function freezeRest(begun: BegunOrder, choices: RescueChoicesByBoar
   const rests = (await Promise.all(planned)).filter((rest) => rest !== null).filter(isStillWanted);
   const layout = follow(begun, rests);
   const layoutMoved = JSON.stringify(layout) !== JSON.stringify(given.face.layout);
-  const face = { ...given.face, layout, layoutRevision: given.face.layoutRevision + Number(layoutMoved) };
+  const face = {
+    ...given.face,
+    layout,
+    work: faceWorkOf(layout),
+    layoutRevision: given.face.layoutRevision + Number(layoutMoved),
+  };
   refuseProblems(begun, layout, rests);
   const saws = sawsNow(begun, rests);
   const fresh = await freshBoards(begun, rests, saws, planners.plan);
@@ -65,7 +72,10 @@ export async function freezeRest(begun: BegunOrder, choices: RescueChoicesByBoar
     rest: snapshotRestSchema.parse({
       revision: begun.revision.revision,
       basis,
-      entries: [...(before.rest?.entries ?? []), ...begun.asCut],
+      entries: [
+        ...(before.rest?.entries ?? []),
+        ...begun.asCut.map((one) => ({ ...one, words: asCutWords(one.entry, before, styleOf(before)) })),
+      ],
       troubles,
     }),
   };

@@ -12,7 +12,7 @@ import { insertTicks, listTickRows } from "@/db/queries/step-tick";
 import { lockZones } from "@/db/queries/straightening";
 import type { OrderRow } from "@/lib/schemas/order";
 import type { OrderSnapshot } from "@/lib/schemas/order-snapshot";
-import { type OrderStep, orderSteps } from "@/lib/schemas/order-steps";
+import { doneBefore, orderSteps } from "@/lib/schemas/order-steps";
 import type { RescueChoicesByBoard, Rest } from "@/lib/schemas/rest";
 import type { ShopAccess } from "../access";
 import { database } from "../database";
@@ -136,21 +136,15 @@ async function carryTicks(
   at: Date,
 ): Promise<number> {
   const before = new Map((await listTickRows(tx, shopId, begun.revision.id)).map((tick) => [tick.stepId, tick]));
-  const rows = orderSteps(snapshot).flatMap((step) => {
-    const tick = before.get(step.id);
-    if (!tick && !isImplied(step)) return [];
+  const done = doneBefore(snapshot);
+  const rows = orderSteps(snapshot).flatMap(({ id: stepId }) => {
+    const tick = before.get(stepId);
+    if (!tick && !done.has(stepId)) return [];
     const { tickedBy, tickedAt } = tick ?? { tickedBy: userId, tickedAt: at };
-    return [{ revisionId, stepId: step.id, shopId, tickedBy, tickedAt }];
+    return [{ revisionId, stepId, shopId, tickedBy, tickedAt }];
   });
   await insertTicks(tx, rows);
   return rows.length;
-}
-
-/** Done, or nothing that is cut could be. */
-function isImplied(step: OrderStep): boolean {
-  const done = step.board.asCut?.done ?? [];
-  if (step.kind === "cut") return done.includes(step.cut.number);
-  return step.kind !== "test-cut" && step.kind !== "clean-up" && step.kind !== "rack" && done.length > 0;
 }
 
 function changedMeanwhile({ revision }: BegunOrder) {

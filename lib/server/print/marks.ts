@@ -12,6 +12,18 @@ export function drawTickBox(doc: PDFKit.PDFDocument, x: number, y: number, side:
   doc.lineWidth(1.3).rect(x, y, side, side).stroke(black);
 }
 
+/** The same, ticked before it was printed. */
+export function drawTickedBox(doc: PDFKit.PDFDocument, x: number, y: number, side: number): void {
+  drawTickBox(doc, x, y, side);
+  doc
+    .lineWidth(1.8)
+    .lineJoin("round")
+    .moveTo(x + side * 0.2, y + side * 0.55)
+    .lineTo(x + side * 0.42, y + side * 0.78)
+    .lineTo(x + side * 0.82, y + side * 0.22)
+    .stroke(black);
+}
+
 /** A warning triangle, as wide as high. */
 export function drawWarning(doc: PDFKit.PDFDocument, x: number, y: number, side: number): void {
   doc

@@ -1,10 +1,11 @@
 /** The cut order on paper: what to fetch, each board with its drawing and steps, and the check of its wood. */
 import "server-only";
 import type { OrderSnapshot, SnapshotBoard } from "@/lib/schemas/order-snapshot";
-import { type OrderStep, orderSteps } from "@/lib/schemas/order-steps";
+import { doneBefore, type OrderStep, orderSteps } from "@/lib/schemas/order-steps";
 import { styleOf } from "@/lib/words/order-step";
 import { revisionLetter } from "@/lib/words/revision-letter";
 import { woodCheck } from "@/lib/words/wood-check";
+import { drawAlreadyCut } from "./already-cut";
 import { boardPictureHeight, drawBoardPicture } from "./board-picture";
 import { drawFetchBlock } from "./fetch-block";
 import { drawFrames, drawHeading, drawRunningHead } from "./page-frame";
@@ -28,6 +29,7 @@ export async function orderPdf(print: PrintOrder, paper: Paper): Promise<Uint8Ar
   sheet.headPage = () => drawRunningHead(sheet, print);
   drawHeading(sheet, print);
   drawFetchBlock(sheet, order.snapshot);
+  drawAlreadyCut(sheet, order.snapshot);
   await breathe();
   const steps = orderSteps(order.snapshot);
   for (const board of order.snapshot.boards) {
@@ -52,7 +54,7 @@ async function drawBoard(
   if (several) putText(sheet.doc, `Board ${board.tag}`, boardStyle, { x: sheet.left, y: sheet.y, width: sheet.width });
   sheet.y += title;
   drawBoardPicture(sheet, snapshot, board, steps, picture);
-  await drawStepTable(sheet, steps, style);
+  await drawStepTable(sheet, steps, style, doneBefore(snapshot));
   drawCheck(sheet, woodCheck(board, style));
 }
 

@@ -3,7 +3,7 @@ import "server-only";
 import { type LengthStyle, printedLength } from "@/lib/layout";
 import type { OrderStep } from "@/lib/schemas/order-steps";
 import { type Gives, type StepWords, stepWords } from "@/lib/words/order-step";
-import { drawTickBox, drawWarning } from "./marks";
+import { drawTickBox, drawTickedBox, drawWarning } from "./marks";
 import { breathe, makeRoom, type Sheet } from "./sheet";
 import { black, grey, hairline, heightOfText, putText, widthOfText } from "./typeface";
 
@@ -64,7 +64,13 @@ export function tableStartHeight(sheet: Sheet, steps: readonly OrderStep[], styl
   return headHeight + (first ? rowHeight(sheet, columnsOf(sheet), stepWords(first, style)) : 0);
 }
 
-export async function drawStepTable(sheet: Sheet, steps: readonly OrderStep[], style: LengthStyle): Promise<void> {
+/** `done`: ids of the steps that were done before the revision was issued; their boxes are ticked. */
+export async function drawStepTable(
+  sheet: Sheet,
+  steps: readonly OrderStep[],
+  style: LengthStyle,
+  done: ReadonlySet<string>,
+): Promise<void> {
   const columns = columnsOf(sheet);
   const headed = sheet.headPage;
   drawTableHead(sheet, columns, style);
@@ -77,7 +83,7 @@ export async function drawStepTable(sheet: Sheet, steps: readonly OrderStep[], s
     const words = stepWords(step, style, steps[i - 1]);
     const height = rowHeight(sheet, columns, words);
     makeRoom(sheet, height);
-    drawRow(sheet, columns, step.number, words, height, style);
+    drawRow(sheet, columns, { number: step.number, done: done.has(step.id) }, words, height, style);
     sheet.y += height;
     if (i % rowsAtATime === rowsAtATime - 1) await breathe();
   }
@@ -134,7 +140,14 @@ const cautionIndent = 12;
 const cautionHeight = (doc: PDFKit.PDFDocument, columns: Columns, caution: string) =>
   heightOfText(doc, caution, cautionStyle, { width: columns.whatWidth - cautionIndent }) + 2;
 
-function drawRow(sheet: Sheet, columns: Columns, number: number, words: StepWords, height: number, style: LengthStyle): void {
+function drawRow(
+  sheet: Sheet,
+  columns: Columns,
+  { number, done }: { readonly number: number; readonly done: boolean },
+  words: StepWords,
+  height: number,
+  style: LengthStyle,
+): void {
   const { doc, left, width, y } = sheet;
   const middle = y + height / 2;
   putText(doc, String(number), numberStyle, { x: columns.number, y: middle - 7, width: 22, align: "center" });
@@ -149,7 +162,7 @@ function drawRow(sheet: Sheet, columns: Columns, number: number, words: StepWord
   }
   const lines = givesLines(words);
   for (const [i, gives] of lines.entries()) drawGives(doc, columns, gives, middle + (i - lines.length / 2) * givesHeight);
-  drawTickBox(doc, columns.done, middle - tickSide / 2, tickSide);
+  (done ? drawTickedBox : drawTickBox)(doc, columns.done, middle - tickSide / 2, tickSide);
   doc
     .lineWidth(0.5)
     .moveTo(left, y + height)

@@ -16,8 +16,13 @@ export interface Laid {
 }
 
 /** Three fronts in a row, from 60 mm off the board's left end. */
-export async function layOnBoard(request: APIRequestContext, sawId: string, board: Board): Promise<Laid> {
-  const address = await makeFace(request, sawId, { columnsMm: [240, 240, 240], rowsMm: [150] });
+export async function layOnBoard(
+  request: APIRequestContext,
+  sawId: string,
+  board: Board,
+  loss: { readonly kerfMm?: number; readonly cleanUpMm?: number } = {},
+): Promise<Laid> {
+  const address = await makeFace(request, sawId, { columnsMm: [240, 240, 240], rowsMm: [150], ...loss });
   const faceId = address.split("/").at(-1) ?? "";
   const put = await request.post(`/api/faces/${faceId}/layout/boards`, { data: { boardId: board.id }, headers: { origin } });
   expect(put.ok()).toBe(true);

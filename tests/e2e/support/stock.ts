@@ -100,13 +100,20 @@ export async function markKnot(request: APIRequestContext, boardId: string, atMm
 interface Fronts {
   readonly columnsMm: readonly number[];
   readonly rowsMm: readonly number[];
+  readonly kerfMm?: number;
+  readonly cleanUpMm?: number;
 }
 
 /** A job with one face of fronts, gaps of 3 mm; the address of its layout table. */
-export async function makeFace(request: APIRequestContext, sawId: string, { columnsMm, rowsMm }: Fronts): Promise<string> {
+export async function makeFace(
+  request: APIRequestContext,
+  sawId: string,
+  { columnsMm, rowsMm, kerfMm = 2.4, cleanUpMm = 0.2 }: Fronts,
+): Promise<string> {
   const job = { title: "Map chest", client: "Harbour library", note: "", dueOn: null };
   const opened = jobSchema.parse(await (await request.post("/api/jobs", { data: job, headers: { origin } })).json());
-  const loss = { kerf: 2400, cleanUpBefore: 200, cleanUpAfter: 200 };
+  const cleanUp = Math.round(cleanUpMm * 1000);
+  const loss = { kerf: Math.round(kerfMm * 1000), cleanUpBefore: cleanUp, cleanUpAfter: cleanUp };
   const data = {
     title: "Top row",
     face: {

@@ -1,6 +1,7 @@
 import type { Metadata } from "next";
 import { cache } from "react";
 import { OrderPage } from "@/components/order/order-page";
+import { issueRest } from "@/lib/schemas/rest";
 import { pageAccess } from "@/lib/server/access";
 import { orNotFound } from "@/lib/server/http/or-not-found";
 import { benchUrl } from "@/lib/server/orders/print";
@@ -33,5 +34,15 @@ export default async function OneOrderPage({ params, searchParams }: Props) {
   const { access, order } = await orderFor(orderId, revision);
   const { paper } = await shopSettings(access.shopId);
   const url = benchUrl(orderId, order.revision);
-  return <OrderPage key={order.revisionId} initial={order} revision={revision} paper={paper} qr={{ url, ...qrCode(url) }} />;
+  const mayIssue = issueRest.access.some((role) => role === access.role);
+  return (
+    <OrderPage
+      key={order.revisionId}
+      initial={order}
+      revision={revision}
+      paper={paper}
+      qr={{ url, ...qrCode(url) }}
+      mayIssue={mayIssue}
+    />
+  );
 }
