@@ -41,3 +41,7 @@ function newest(folders: readonly string[]): number {
 
 /** For tests that issue cut orders. */
 export const bundlePlanWorker = () => bundleWorker("lib/server/orders/plan-worker.ts", ["lib/server/orders", "lib/layout"]);
+
+/** For tests that print. */
+export const bundlePrintWorker = () =>
+  bundleWorker("lib/server/print/print-worker.ts", ["lib/server/print", "lib/layout", "lib/words", "lib/schemas"]);

@@ -9,10 +9,9 @@ import { env } from "../env";
 import { refused } from "../faults";
 import { fileResponse } from "../http/binary";
 import { type LabelSheetName, labelSheets, labelsOnSheet } from "../print/label-sheet";
-import { labelsPdf } from "../print/labels-pdf";
-import { orderPdf } from "../print/order-pdf";
 import type { Paper } from "../print/paper";
 import type { BoardPicture } from "../print/print-order";
+import { printInThread } from "../print/print-pool";
 import { shopSettings } from "../shops";
 import { storage } from "../storage";
 import { readOrder } from "./read-orders";
@@ -34,7 +33,7 @@ export async function orderFile(
     benchUrl: benchUrl(orderId, order.revision),
     pictures: await picturesOf(shopId, order),
   };
-  const bytes = await orderPdf(print, wanted.paper ?? shop.paper);
+  const bytes = await printInThread("order", { print, paper: wanted.paper ?? shop.paper });
   return pdfResponse(bytes, `cut-order-${order.number}-${revisionLetter(order.revision)}.pdf`);
 }
 
@@ -49,7 +48,7 @@ export async function labelFile(
   if (wanted.start > most) {
     throw refused(`This sheet has ${most} labels: begin at one of them.`, { start: [`At most ${most}`] });
   }
-  const bytes = await labelsPdf(order, sheet, wanted.start);
+  const bytes = await printInThread("labels", { order, sheet, start: wanted.start });
   return pdfResponse(bytes, `labels-${order.number}-${revisionLetter(order.revision)}.pdf`);
 }
 
