@@ -66,6 +66,16 @@ function doneWord(step: OrderStep): string {
       return "Glued up";
     case "mark":
       return "Marked";
+    case "gauge-lines":
+      return "Drawn";
+    case "resaw":
+      return "Resawn";
+    case "bevel":
+      return "Bevelled";
+    case "set-back":
+      return "Glued";
+    case "fit":
+      return "Fitted";
     case "test-cut":
       return "Tested";
     case "cut":

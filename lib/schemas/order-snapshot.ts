@@ -5,6 +5,7 @@
 import { z } from "zod";
 import { cuts } from "./board";
 import { cutProgramSchema, edgeStateSchema } from "./cut-program";
+import { faceWorkSchema } from "./face-work";
 import { gluingSchema } from "./gluing";
 import { idSchema } from "./ids";
 import { faceLayoutSchema } from "./layout";
@@ -50,7 +51,17 @@ export const orderSnapshotSchema = z.object({
   units: z.enum(["mm", "inch"]),
   inchFraction: z.union([z.literal(32), z.literal(64)]),
   job: z.object({ id: idSchema, number: z.int(), title: z.string(), client: z.string() }),
-  faces: z.array(z.object({ faceId: idSchema, title: z.string(), layoutRevision: z.int(), layout: faceLayoutSchema })).min(1),
+  faces: z
+    .array(
+      z.object({
+        faceId: idSchema,
+        title: z.string(),
+        layoutRevision: z.int(),
+        layout: faceLayoutSchema,
+        work: faceWorkSchema.nullable().optional(),
+      }),
+    )
+    .min(1),
   crosscutSaw: snapshotSawSchema,
   ripSaw: snapshotSawSchema,
   boards: z.array(snapshotBoardSchema).min(1),

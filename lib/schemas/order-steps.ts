@@ -3,6 +3,7 @@
  * done and in which order; how it is said is in `lib/words`. Step ids are stable: the same snapshot gives the same ids for ever.
  */
 import { type CleanUp, type CutKind, type CutStep, type Edge, type Part, type Um, um } from "@/lib/layout";
+import { type FaceStep, type FaceStepBody, stepsAfterCutting, stepsBeforeCutting } from "./face-steps";
 import type { Gluing, GluingMember } from "./gluing";
 import type { OrderSnapshot, SnapshotBoard } from "./order-snapshot";
 
@@ -42,8 +43,16 @@ export interface CleanUpGroup {
   readonly takes: Readonly<Partial<Record<Edge, Um>>>;
 }
 
+/** Of the pattern of the face; `board`: where the step comes in the order of work. */
+export type PatternStep = FaceStepBody extends infer Body
+  ? Body extends FaceStepBody
+    ? StepOf<Body["kind"]> & Body
+    : never
+  : never;
+
 export type OrderStep =
   | GluingStep
+  | PatternStep
   /** Bring the board from the rack. */
   | StepOf<"fetch">
   /** Face up, triangle on, before anything is cut. */
@@ -60,9 +69,11 @@ type Unnumbered<S> = S extends OrderStep ? Omit<S, "number"> : never;
 /** Every step in the order of work, board by board. */
 export function orderSteps(snapshot: OrderSnapshot): readonly OrderStep[] {
   const tests = testCuts(snapshot);
+  const pattern = patternSteps(snapshot);
   const steps = snapshot.boards.flatMap((board, index): Unnumbered<OrderStep>[] => [
     ...(board.gluing ? gluingSteps(board, board.gluing) : [{ id: fetchId(board.tag), kind: "fetch" as const, board }]),
     { id: markId(board.tag), kind: "mark", board },
+    ...(index === 0 ? pattern.before.map((step) => ({ ...step, board })) : []),
     ...(index === 0 ? tests.map((test) => ({ ...test, kind: "test-cut" as const, board })) : []),
     ...board.program.steps.map((cut) => ({ id: `${board.tag}:${cut.number}`, kind: "cut" as const, board, cut })),
     ...cleanUps(board).map(({ number, group }) => ({
@@ -77,8 +88,15 @@ export function orderSteps(snapshot: OrderSnapshot): readonly OrderStep[] {
       board,
       offcut,
     })),
+    ...(index === snapshot.boards.length - 1 ? pattern.after.map((step) => ({ ...step, board })) : []),
   ]);
   return steps.map((step, index) => ({ ...step, number: index + 1 }));
+}
+
+/** What the patterns of the faces ask for before the first cut and after the last clean-up. */
+function patternSteps({ faces }: OrderSnapshot): { readonly before: readonly FaceStep[]; readonly after: readonly FaceStep[] } {
+  const steps = (of: typeof stepsBeforeCutting) => faces.flatMap(({ work }, index) => (work ? of(work, index + 1) : []));
+  return { before: steps(stepsBeforeCutting), after: steps(stepsAfterCutting) };
 }
 
 /** Ids of the steps that were done before this revision was issued: cuts, clean-ups, and what comes before any cut of a board. */
@@ -88,7 +106,7 @@ export function doneBefore(snapshot: OrderSnapshot): ReadonlySet<string> {
     if (!asCut) return false;
     if (step.kind === "cut") return asCut.done.includes(step.cut.number);
     if (step.kind === "clean-up") return asCut.cleanedUp.some(({ number }) => step.id === `${tag}:clean-up-${number}`);
-    return step.kind !== "test-cut" && step.kind !== "rack" && asCut.done.length > 0;
+    return !afterCutting.has(step.kind) && asCut.done.length > 0;
   };
   return new Set(
     orderSteps(snapshot)
@@ -96,6 +114,9 @@ export function doneBefore(snapshot: OrderSnapshot): ReadonlySet<string> {
       .map(({ id }) => id),
   );
 }
+
+/** What is done once a board is cut, and test cuts, which every revision asks for anew. */
+const afterCutting: ReadonlySet<OrderStep["kind"]> = new Set(["test-cut", "rack", "resaw", "bevel", "set-back", "fit"]);
 
 /** In the order of work: everything at hand first, outer edges before joints, so that a joint leaves a board as wide as it stays. */
 function gluingSteps(board: SnapshotBoard, { members, jointing }: Gluing): Unnumbered<OrderStep>[] {

@@ -5,6 +5,7 @@ import type { CleanUpGroup, OrderStep } from "@/lib/schemas/order-steps";
 import { cautionWords } from "./caution";
 import { cutTitle, isShaving, truingNote } from "./cut-title";
 import { edgeNames, measuredFrom } from "./edge-name";
+import { faceStepWords } from "./face-step";
 import { gluingWords } from "./gluing-step";
 import { labelRanges, partName, sizeFigures } from "./part-name";
 import type { Gives, StepWords } from "./step-words";
@@ -25,6 +26,12 @@ export function stepWords(step: OrderStep, style: LengthStyle, before?: OrderSte
     case "joint":
     case "glue-up":
       return gluingWords(step, style);
+    case "gauge-lines":
+    case "resaw":
+    case "bevel":
+    case "set-back":
+    case "fit":
+      return faceStepWords(step, style);
     case "fetch":
       return { ...bare, verb: "Fetch", rest: `board ${step.board.tag}${step.board.place && ` from ${step.board.place}`}` };
     case "mark":

@@ -33,6 +33,7 @@ import type { KeepClearArea } from "@/lib/schemas/zones";
 import { cutRefusalSentence, problemSentence } from "@/lib/words/layout-problem";
 import { styleOf } from "@/lib/words/order-step";
 import { refused } from "../faults";
+import { faceWorkOf } from "./face-work";
 import type { Planner } from "./plan-cuts";
 
 export interface ToFreeze {
@@ -59,7 +60,8 @@ export interface LayoutBoard {
 /** The snapshot, or a refusal that names everything in the way. */
 export async function freeze(given: ToFreeze, plan: Planner): Promise<OrderSnapshot> {
   refuseProblems(given);
-  const { shop, face } = given;
+  const { shop } = given;
+  const face = { ...given.face, work: faceWorkOf(given.face.layout) };
   const heading = {
     format: 1,
     shop: { name: shop.name },
