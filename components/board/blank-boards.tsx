@@ -29,7 +29,7 @@ export function BlankBoards({ board, blank, mayEdit }: { board: Board; blank: Bl
           <Member key={member.boardId} member={member} />
         ))}
       </ol>
-      {mayEdit && !blank.issued && <TakeApart board={board} />}
+      {mayEdit && !blank.issued && !blank.glued && <TakeApart board={board} />}
     </div>
   );
 }

@@ -1,6 +1,6 @@
 /** Blanks that are planned, and the boards they are glued up from. */
 import "server-only";
-import { and, asc, eq, inArray, isNull } from "drizzle-orm";
+import { and, asc, eq, inArray, isNotNull, isNull } from "drizzle-orm";
 import type { Connection } from "../client";
 import { blank, blankMember, board, orderRevisionBoard, stepTick, straightening } from "../schema";
 import type { ShopId } from "../shop-id";
@@ -64,15 +64,31 @@ export async function isIssued(db: Connection, shopId: ShopId, boardId: string):
   return row !== undefined;
 }
 
-/** Whether the step is ticked in any revision that cuts from the board. */
-export async function isTicked(db: Connection, shopId: ShopId, boardId: string, stepId: string): Promise<boolean> {
-  const [row] = await db
+/**
+ * Whether a planned blank is there in one piece: its gluing up is ticked in a revision that cuts from it, or it was photographed, which
+ * only glued boards can be together. `glueUpId`: of the step.
+ */
+export async function isGlued(db: Connection, shopId: ShopId, boardId: string, glueUpId: string): Promise<boolean> {
+  const [ticked] = await db
     .select({ stepId: stepTick.stepId })
     .from(orderRevisionBoard)
     .innerJoin(stepTick, eq(stepTick.revisionId, orderRevisionBoard.revisionId))
-    .where(and(eq(orderRevisionBoard.shopId, shopId), eq(orderRevisionBoard.boardId, boardId), eq(stepTick.stepId, stepId)))
+    .where(and(eq(orderRevisionBoard.shopId, shopId), eq(orderRevisionBoard.boardId, boardId), eq(stepTick.stepId, glueUpId)))
     .limit(1);
-  return row !== undefined;
+  if (ticked) return true;
+  const [photographed] = await db
+    .select({ id: straightening.id })
+    .from(straightening)
+    .where(
+      and(
+        eq(straightening.shopId, shopId),
+        eq(straightening.boardId, boardId),
+        eq(straightening.state, "done"),
+        isNotNull(straightening.photoId),
+      ),
+    )
+    .limit(1);
+  return photographed !== undefined;
 }
 
 /** Of these boards, those that were planned as blanks and taken apart: they have a composed picture, and there is no such wood. */

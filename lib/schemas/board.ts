@@ -84,7 +84,7 @@ export const boardSchema = boardRowSchema.extend({
   blank: z
     .object({
       jointing: umSchema,
-      /** The bench has ticked that it is glued up. */
+      /** The bench has ticked that it is glued up, or it was photographed in one piece. */
       glued: z.boolean(),
       /** A cut order was issued from it: it is not taken apart any more. */
       issued: z.boolean(),

@@ -7,7 +7,7 @@ import { afterAll, beforeAll, describe, expect, test, vi } from "vitest";
 import * as blankRoute from "@/app/api/blanks/[boardId]/route";
 import * as blanksRoute from "@/app/api/blanks/route";
 import { findTask } from "@/db/queries/task";
-import { blankMember, board as boardTable, layoutBoard, straightening, task } from "@/db/schema";
+import { blankMember, boardPicture, board as boardTable, layoutBoard, straightening, task } from "@/db/schema";
 import { um, umFromMm } from "@/lib/layout";
 import type { PlanBlank } from "@/lib/schemas/blank";
 import * as endpoint from "@/lib/schemas/blank";
@@ -29,6 +29,7 @@ import { type Planner, planAndVerify } from "@/lib/server/orders/plan-cuts";
 import { readOrder } from "@/lib/server/orders/read-orders";
 import { tickStep, untickStep } from "@/lib/server/orders/ticks";
 import { closePixelPool } from "@/lib/server/pictures/pixel-pool";
+import { saveShopSettings, shopSettings } from "@/lib/server/shops";
 import { storage } from "@/lib/server/storage";
 import { saveZones } from "@/lib/server/straightenings/save-zones";
 import { startStraightening } from "@/lib/server/straightenings/start-straightening";
@@ -367,12 +368,20 @@ describe("the picture", () => {
   });
 });
 
+/** The composed picture is done without any pixel having been moved. */
+async function composedAtOnce(boardId: string): Promise<string> {
+  await noPicture(boardId);
+  const { id: straighteningId } = await versionOf(maker, boardId);
+  await database().update(straightening).set({ state: "done", pxPerMm: 4 }).where(eq(straightening.id, straighteningId));
+  await database().insert(boardPicture).values({ boardId, straighteningId, shopId: maker.shopId });
+  return straighteningId;
+}
+
 /** A blank of two boards 2350 × 110 mm with a row of four fronts on it; its picture is not needed. */
 async function laidOut() {
   const { a, b, plan } = await twoBoards(maker, { length: umFromMm(2350), width: umFromMm(110), thickness: umFromMm(26) });
   const blank = await planBlank(maker, plan);
-  await noPicture(blank.id);
-  const straighteningId = await addPicture(maker, blank.id, { side: "face" });
+  const straighteningId = await composedAtOnce(blank.id);
   const layout = await makeLayout(maker, { stock: { boardId: blank.id, straighteningId } });
   return { a, b, blankId: blank.id, tag: blank.tag, ...layout };
 }
@@ -457,6 +466,15 @@ describe("an order from a planned blank", () => {
     await expect(issueOrder(maker, faceId, 2)).rejects.toMatchObject({ code: "conflict" });
     whilePlanning = async () => undefined;
     await expect(issueOrder(maker, faceId, 2)).resolves.toMatchObject({ revision: 2 });
+  });
+
+  test("from a blank that was glued without an order, and photographed since, begins with the blank", async () => {
+    const { faceId, blankId, tag } = await laidOut();
+    await addPicture(maker, blankId, { side: "face" });
+    expect((await readBoard(maker, blankId)).blank?.glued).toBe(true);
+    await expect(takeApart(maker, blankId)).rejects.toMatchObject(refusedWith(`${tag} was photographed in one piece`));
+    const { snapshot } = await readOrder(maker.shopId, (await issue(faceId)).id);
+    expect(orderSteps(snapshot)[0]?.kind).toBe("fetch");
   });
 
   test("from a blank that came glued already has its lines and no gluing", async () => {
@@ -571,4 +589,13 @@ describe("at the same time", () => {
       expect(outcomes.map(({ status }) => status).sort()).toEqual(["fulfilled", "rejected"]);
     }
   });
+});
+
+test("what jointing takes is the shop's own; settings saved without it leave it", async () => {
+  const { saws: _saws, id: _id, revision, ...settings } = await shopSettings(owner.shopId);
+  expect(settings.jointing).toBe(1500);
+  const saved = await saveShopSettings(owner, { ...settings, jointing: umFromMm(0.8), baseRevision: revision });
+  expect(saved.jointing).toBe(800);
+  const { jointing: _jointing, ...without } = settings;
+  expect((await saveShopSettings(owner, { ...without, baseRevision: saved.revision })).jointing).toBe(800);
 });

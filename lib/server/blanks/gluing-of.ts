@@ -1,7 +1,7 @@
 /** What is to be done before a planned blank can be cut. */
 import "server-only";
 import type { Connection } from "@/db/client";
-import { findBlank, isTicked, listMembers } from "@/db/queries/blank";
+import { findBlank, isGlued, listMembers } from "@/db/queries/blank";
 import type { ShopId } from "@/db/shop-id";
 import type { Gluing } from "@/lib/schemas/gluing";
 import { glueUpId } from "@/lib/schemas/order-steps";
@@ -15,7 +15,7 @@ export async function gluingOf(
   { id, tagNumber }: { readonly id: string; readonly tagNumber: number },
 ): Promise<Gluing | null> {
   const blank = await findBlank(db, shopId, id);
-  if (!blank || (await isTicked(db, shopId, id, glueUpId(printTag(tagNumber))))) return null;
+  if (!blank || (await isGlued(db, shopId, id, glueUpId(printTag(tagNumber))))) return null;
   const rows = await listMembers(db, shopId, id);
   const { strips } = stripsOf(rows, blank.jointing);
   const members = rows.flatMap(({ board, member, straightening }, index) => {

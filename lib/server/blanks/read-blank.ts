@@ -1,7 +1,7 @@
 /** A planned blank as the browser sees it. */
 import "server-only";
 import type { Connection } from "@/db/client";
-import { findBlank, isIssued, isTicked, listMembers } from "@/db/queries/blank";
+import { findBlank, isGlued, isIssued, listMembers } from "@/db/queries/blank";
 import type { ShopId } from "@/db/shop-id";
 import type { Board } from "@/lib/schemas/board";
 import { glueUpId } from "@/lib/schemas/order-steps";
@@ -32,7 +32,7 @@ export async function readBlank(db: Connection, shopId: ShopId, boardId: string,
   });
   return {
     jointing: found.jointing,
-    glued: await isTicked(db, shopId, boardId, glueUpId(tag)),
+    glued: await isGlued(db, shopId, boardId, glueUpId(tag)),
     issued: await isIssued(db, shopId, boardId),
     members,
   };

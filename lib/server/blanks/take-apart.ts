@@ -1,9 +1,10 @@
 /** Giving up a planned blank: its boards are free again, its tag is never given anew. Not once an order was issued from it. */
 import "server-only";
-import { deleteBlank, findBlank, isIssued, listMembers } from "@/db/queries/blank";
+import { deleteBlank, findBlank, isGlued, isIssued, listMembers } from "@/db/queries/blank";
 import { listBoardHolds, lockBoard, setBoardState } from "@/db/queries/board";
 import { recordHistory } from "@/db/queries/history";
 import { listStraightenings } from "@/db/queries/straightening";
+import { glueUpId } from "@/lib/schemas/order-steps";
 import { printTag } from "@/lib/schemas/tag";
 import type { ShopAccess } from "../access";
 import { database } from "../database";
@@ -22,6 +23,9 @@ export async function takeApart(access: ShopAccess, boardId: string): Promise<vo
     const tag = printTag(board.tagNumber);
     if (await isIssued(tx, shopId, boardId)) {
       throw refused(`A cut order was issued from ${tag}: it is not taken apart any more.`);
+    }
+    if (await isGlued(tx, shopId, boardId, glueUpId(tag))) {
+      throw refused(`${tag} was photographed in one piece: it is glued up, and not taken apart any more.`);
     }
     const [hold] = await listBoardHolds(tx, shopId, [boardId]);
     if (hold) throw refused(`${tag} is on the table of ${hold.faceTitle} (${hold.jobTitle}). Take it off that table first.`);
