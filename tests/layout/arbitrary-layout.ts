@@ -261,7 +261,8 @@ export function boardOf(id: string, length: number, width: number, more: Partial
     id,
     length: um(length),
     width: um(width),
-    thickness: um(27_000),
+    // Thick enough for any face of these.
+    thickness: um(60_000),
     outline: null,
     keepClear: [],
     spokenFor: [],
