@@ -70,6 +70,12 @@ export function ClimateFields({ climate, onChange, disabled = false }: Props) {
   );
 }
 
+/** Whether the driest is no damper than the dampest: nothing else is taken. */
+export function inOrder(climate: Climate): boolean {
+  const { driest, dampest } = yearlyMoisture(climate);
+  return driest <= dampest;
+}
+
 function AirFields({
   name,
   air,

@@ -11,7 +11,7 @@ import { movementSettingsQuery } from "@/lib/client/movement";
 import { type Climate, defaultClimate } from "@/lib/layout";
 import type { Job } from "@/lib/schemas/job";
 import { climateText } from "@/lib/words/movement";
-import { ClimateFields } from "./climate-fields";
+import { ClimateFields, inOrder } from "./climate-fields";
 
 /** Where the furniture of a job will live: as the shop's usually does, or told for itself. */
 export function JobPlace({ job, mayEdit }: { job: Job; mayEdit: boolean }) {
@@ -20,7 +20,7 @@ export function JobPlace({ job, mayEdit }: { job: Job; mayEdit: boolean }) {
   const [editing, setEditing] = useState(false);
   const climate = job.climate ?? settings?.climate;
   return (
-    <section id="place" aria-labelledby="place-title" className="mx-4 flex flex-wrap items-center gap-x-4 gap-y-2 md:mx-5">
+    <section id="place" aria-labelledby="place-title" className="mx-4 mb-5 flex flex-wrap items-center gap-x-4 gap-y-2 md:mx-5">
       <h2 id="place-title" className="text-lg">
         Where it will live
       </h2>
@@ -66,7 +66,7 @@ function PlaceForm({ job, start, onDone }: { job: Job; start: Climate; onDone: (
       <ClimateFields climate={climate} onChange={setClimate} />
       {save.isError && <Notice kind="stop">{messageOf(save.error)}</Notice>}
       <div className="flex flex-wrap gap-3">
-        <Button type="submit" kind="primary" disabled={save.isPending}>
+        <Button type="submit" kind="primary" disabled={save.isPending || !inOrder(climate)}>
           Use for this job
         </Button>
         {job.climate !== null && (

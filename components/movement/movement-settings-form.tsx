@@ -9,7 +9,7 @@ import { NumberField } from "@/components/ui/number-field";
 import { messageOf } from "@/lib/client/fault-from-server";
 import { movementKeys, updateMovementSettings } from "@/lib/client/movement";
 import type { MovementSettings } from "@/lib/schemas/movement";
-import { ClimateFields } from "./climate-fields";
+import { ClimateFields, inOrder } from "./climate-fields";
 
 /** Where the shop's furniture usually lives, and what its gaps may come down to. */
 export function MovementSettingsForm({ initial, mayEdit }: { initial: MovementSettings; mayEdit: boolean }) {
@@ -62,7 +62,7 @@ export function MovementSettingsForm({ initial, mayEdit }: { initial: MovementSe
       </div>
       {save.isError && <Notice kind="stop">{messageOf(save.error)}</Notice>}
       {mayEdit ? (
-        <Button type="submit" kind="primary" className="self-start" disabled={save.isPending}>
+        <Button type="submit" kind="primary" className="self-start" disabled={save.isPending || !inOrder(settings.climate)}>
           Save movement settings
         </Button>
       ) : (

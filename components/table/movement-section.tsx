@@ -1,7 +1,7 @@
 "use client";
 import { useUnits } from "@/components/shell/units";
 import { Notice } from "@/components/ui/notice";
-import type { MovementWarning } from "@/lib/layout";
+import { facePieces, type MovementWarning } from "@/lib/layout";
 import { movementWarningSentence } from "@/lib/words/movement";
 import { MovementGaps } from "./movement-gaps";
 import { MovementPlace } from "./movement-place";
@@ -22,6 +22,11 @@ export function MovementSection() {
 }
 
 function MovementParts({ movement }: { movement: Movement }) {
+  if (!mayOpenAndClose(movement)) {
+    return (
+      <p className="text-sm text-pencil">This face has no gaps that open and close: its pieces meet at joints and corners.</p>
+    );
+  }
   return (
     <>
       <Warnings movement={movement} />
@@ -35,6 +40,11 @@ function MovementParts({ movement }: { movement: Movement }) {
       </p>
     </>
   );
+}
+
+/** Fronts may have a gap round them that nobody has entered yet; a run or a pair has its joints and nothing else. */
+function mayOpenAndClose({ request, outcome }: Movement): boolean {
+  return outcome.gaps.length > 0 || facePieces(request.layout).some(({ role }) => role === "front");
 }
 
 /** What stops, before what is only to be minded. */
@@ -61,7 +71,9 @@ function Warnings({ movement: { request, outcome } }: { movement: Movement }) {
 }
 
 /** In a word, for the section folded away. */
-function summaryOf({ outcome: { gaps, warnings } }: Movement): string {
+function summaryOf(movement: Movement): string {
+  if (!mayOpenAndClose(movement)) return "no gaps";
+  const { gaps, warnings } = movement.outcome;
   const has = (...kinds: MovementWarning["kind"][]) => warnings.some(({ kind }) => kinds.includes(kind));
   if (has("closes")) return "a gap closes";
   if (has("too-narrow")) return "a gap too narrow";

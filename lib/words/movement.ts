@@ -10,6 +10,7 @@ import {
   type PieceId,
   printLength,
   type Surround,
+  type Um,
   um,
   yearlyMoisture,
 } from "@/lib/layout";
@@ -55,11 +56,18 @@ export function movementWarningSentence(
         warning.least < 0 ? `, ${printLength(um(-warning.least), style)} short` : ""
       }.`;
     case "too-narrow":
-      return `${gapsName(warning.gaps)} ${warning.gaps.length === 1 ? "comes" : "come"} down to ${printLength(
+      return `${gapsName(warning.gaps)} ${warning.gaps.length === 1 ? "comes" : "come"} down to ${leastText(
         warning.least,
+        ground.leastGap,
         style,
-      )} at the ${warning.season}; the shop's least is ${printLength(ground.leastGap, style)}.`;
+      )}, at the ${warning.season}.`;
   }
+}
+
+/** Two lengths that print alike are told apart in words. */
+function leastText(least: Um, shops: Um, style: LengthStyle): string {
+  const [printed, wanted] = [printLength(least, style), printLength(shops, style)];
+  return printed === wanted ? `just under ${wanted}, the shop's least` : `${printed}, below the shop's least of ${wanted}`;
 }
 
 /** "The gap between 1 and 2", "6 gaps, between 1 and 2 the first". */

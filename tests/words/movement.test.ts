@@ -31,7 +31,11 @@ describe("a warning says what is wrong, by how much, and what would mend it", ()
     ],
     [
       { kind: "too-narrow", season: "dampest", gaps: [{ ...gap, b: { side: "top" } }, gap], least: um(900) },
-      "2 gaps, the first above 1, come down to 0.9 mm at the dampest; the shop's least is 1.5 mm.",
+      "2 gaps, the first above 1, come down to 0.9 mm, below the shop's least of 1.5 mm, at the dampest.",
+    ],
+    [
+      { kind: "too-narrow", season: "driest", gaps: [gap], least: um(1_490) },
+      "The gap between 1 and 2 comes down to just under 1.5 mm, the shop's least, at the driest.",
     ],
     [{ kind: "no-reading", stockId: "b" }, "The moisture of board B-041 was never read. Read it before you cut."],
     [{ kind: "no-species", stockId: "b" }, "Say which species board B-041 is: its name is not in the table."],
