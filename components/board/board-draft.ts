@@ -1,6 +1,6 @@
 /** What is written in a form about a board, before it is known to be sound. */
 import type { Um } from "@/lib/layout";
-import type { Board, cuts } from "@/lib/schemas/board";
+import type { Board, cuts, trueEdges } from "@/lib/schemas/board";
 import { minorFromText, minorText } from "./money";
 
 export interface BoardDraft {
@@ -12,6 +12,8 @@ export interface BoardDraft {
   readonly source: string;
   readonly cost: string;
   readonly note: string;
+  readonly trueEdges: (typeof trueEdges)[number];
+  readonly toBeFlattened: boolean;
 }
 
 export type DraftErrors = { readonly [Name in keyof BoardDraft]?: string };
@@ -25,15 +27,17 @@ export const emptyDraft: BoardDraft = {
   source: "",
   cost: "",
   note: "",
+  trueEdges: "none",
+  toBeFlattened: false,
 };
 
 export function draftOf(board: Board, currency: string): BoardDraft {
-  const { species, cut, nominalQuarters, thickness, place, source, note } = board;
+  const { species, cut, nominalQuarters, thickness, place, source, note, trueEdges, toBeFlattened } = board;
   const cost = board.costMinor === null ? "" : minorText(board.costMinor, currency);
-  return { species, cut, nominalQuarters, thickness, place, source, cost, note };
+  return { species, cut, nominalQuarters, thickness, place, source, cost, note, trueEdges, toBeFlattened };
 }
 
-type BoardFields = Pick<Board, "species" | "cut" | "nominalQuarters" | "thickness" | "place" | "source" | "costMinor" | "note">;
+type BoardFields = Omit<BoardDraft, "cost" | "thickness"> & Pick<Board, "thickness" | "costMinor">;
 export type CheckedDraft =
   | { readonly ok: true; readonly fields: BoardFields }
   | { readonly ok: false; readonly errors: DraftErrors };

@@ -39,6 +39,8 @@ export function boardEventWords({ verb, detail }: Row): string {
 const fieldNames: Readonly<Record<string, string>> = {
   nominalQuarters: "nominal thickness",
   costMinor: "cost",
+  trueEdges: "true long edges",
+  toBeFlattened: "whether it is flat",
 };
 
 function changedNames(after: HistoryRow["detail"][string] | undefined): string {

@@ -5,9 +5,9 @@ import { useUnits } from "@/components/shell/units";
 import { SelectField, TextAreaField, TextField } from "@/components/ui/field";
 import { LengthField } from "@/components/ui/length-field";
 import { nominalThicknesses } from "@/lib/layout";
-import { boardSchema, cuts } from "@/lib/schemas/board";
+import { boardSchema, cuts, trueEdges } from "@/lib/schemas/board";
 import type { BoardDraft, DraftErrors } from "./board-draft";
-import { cutNames, quartersText } from "./board-words";
+import { cutNames, quartersText, trueEdgeNames } from "./board-words";
 
 interface Props {
   draft: BoardDraft;
@@ -67,6 +67,27 @@ export function BoardFields({ draft, errors, species, onChange }: Props) {
         error={errors.thickness}
         onChange={(thickness) => change({ thickness })}
       />
+      <SelectField
+        label="Long edges that are true"
+        hint="Straight and square to the face, as its picture lies. A cut is measured from one."
+        value={draft.trueEdges}
+        onChange={(event) => change({ trueEdges: boardSchema.shape.trueEdges.parse(event.target.value) })}
+      >
+        {trueEdges.map((edges) => (
+          <option key={edges} value={edges}>
+            {trueEdgeNames[edges]}
+          </option>
+        ))}
+      </SelectField>
+      <SelectField
+        label="Flat"
+        hint="A board that is not flat is cut into rough parts first."
+        value={draft.toBeFlattened ? "no" : "yes"}
+        onChange={(event) => change({ toBeFlattened: event.target.value === "no" })}
+      >
+        <option value="yes">flat as it is</option>
+        <option value="no">to be flattened</option>
+      </SelectField>
       <TextField
         label="Place"
         hint="Where it lies"

@@ -1,5 +1,5 @@
 /** How a board's facts are written on screens. */
-import type { boardSorts, boardStates, cuts } from "@/lib/schemas/board";
+import type { boardSorts, boardStates, cuts, trueEdges } from "@/lib/schemas/board";
 
 type Cut = (typeof cuts)[number];
 type BoardState = (typeof boardStates)[number];
@@ -7,6 +7,14 @@ type BoardState = (typeof boardStates)[number];
 export const cutNames: Readonly<Record<Cut, string>> = { flat: "flat", rift: "rift", quarter: "quarter" };
 
 export const stateNames: Readonly<Record<BoardState, string>> = { rack: "in the rack", cut: "cut up", gone: "gone" };
+
+/** Upper and lower as the picture of the face lies. */
+export const trueEdgeNames: Readonly<Record<(typeof trueEdges)[number], string>> = {
+  none: "none",
+  top: "the upper one",
+  bottom: "the lower one",
+  both: "both",
+};
 
 type Sort = (typeof boardSorts)[number];
 

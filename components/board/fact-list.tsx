@@ -2,7 +2,7 @@
 import type { ReactNode } from "react";
 import { useUnits } from "@/components/shell/units";
 import type { Board } from "@/lib/schemas/board";
-import { boardFeetText, cutNames, quartersText, stateNames, volumeText } from "./board-words";
+import { boardFeetText, cutNames, quartersText, stateNames, trueEdgeNames, volumeText } from "./board-words";
 import { moneyText } from "./money";
 
 /** Everything written about a board, to read. */
@@ -33,6 +33,8 @@ export function FactList({ board }: { board: Board }) {
           </Fact>
         </>
       )}
+      <Fact name="True long edges">{trueEdgeNames[board.trueEdges]}</Fact>
+      {board.toBeFlattened && <Fact name="Flat">to be flattened</Fact>}
       {board.place && <Fact name="Place">{board.place}</Fact>}
       {board.source && <Fact name="Source">{board.source}</Fact>}
       {board.costMinor !== null && (

@@ -32,6 +32,16 @@ const lengths = [
     label: "Jointing takes off each glued edge",
     hint: "When boards are edge-glued into a blank, unless said otherwise there.",
   },
+  {
+    name: "roughLength",
+    label: "Rough parts are longer by",
+    hint: "Both ends together, until the part is flat. 1/2 in (12.5 mm) in a furniture maker's text.",
+  },
+  {
+    name: "roughWidth",
+    label: "Rough parts are wider by",
+    hint: "Both long edges together. 3/16 in (5 mm) in the same text.",
+  },
   { name: "offcutLength", label: "Offcuts kept from this length", hint: "Smaller ones count as waste." },
   { name: "offcutWidth", label: "Offcuts kept from this width", hint: "Smaller ones count as waste." },
 ] as const;

@@ -2,6 +2,9 @@
 import "server-only";
 import { and, asc, eq } from "drizzle-orm";
 import { v7 as newId } from "uuid";
+import type { z } from "zod";
+import { usualLimits } from "@/lib/schemas/saw-limits";
+import type { Saw, saveSawSchema } from "@/lib/schemas/shop";
 import type { Connection } from "../client";
 import { saw, shop } from "../schema";
 import type { ShopId } from "../shop-id";
@@ -25,34 +28,39 @@ export async function updateShop(
   return result.affectedRows === 1;
 }
 
-export async function listSaws(db: Connection, shopId: ShopId) {
-  return db.select().from(saw).where(eq(saw.shopId, shopId)).orderBy(asc(saw.name), asc(saw.id));
+export async function listSaws(db: Connection, shopId: ShopId): Promise<Saw[]> {
+  const rows = await db.select().from(saw).where(eq(saw.shopId, shopId)).orderBy(asc(saw.name), asc(saw.id));
+  return rows.map(sawOf);
 }
 
-export async function findSaw(db: Connection, shopId: ShopId, sawId: string) {
+export async function findSaw(db: Connection, shopId: ShopId, sawId: string): Promise<Saw | undefined> {
   const [row] = await db
     .select()
     .from(saw)
     .where(and(eq(saw.shopId, shopId), eq(saw.id, sawId)));
-  return row;
+  return row && sawOf(row);
 }
 
-export async function insertSaw(db: Connection, shopId: ShopId, fields: Omit<typeof saw.$inferInsert, "id" | "shopId">) {
+export type SawFields = z.output<typeof saveSawSchema>;
+
+/** With the limits usual for its kind where none are given. */
+export async function insertSaw(db: Connection, shopId: ShopId, { limits, ...fields }: SawFields): Promise<string> {
   const id = newId();
-  await db.insert(saw).values({ ...fields, id, shopId });
+  await db.insert(saw).values({ ...fields, ...(limits ?? usualLimits[fields.kind]), id, shopId });
   return id;
 }
 
-export async function updateSaw(
-  db: Connection,
-  shopId: ShopId,
-  sawId: string,
-  fields: Omit<typeof saw.$inferInsert, "id" | "shopId">,
-) {
+/** Limits stay where none are given. */
+export async function updateSaw(db: Connection, shopId: ShopId, sawId: string, { limits, ...fields }: SawFields) {
   await db
     .update(saw)
-    .set(fields)
+    .set({ ...fields, ...limits })
     .where(and(eq(saw.shopId, shopId), eq(saw.id, sawId)));
+}
+
+function sawOf({ id, name, kind, kerf, cleanUp, ...row }: typeof saw.$inferSelect): Saw {
+  const { rips, crosscuts, widestRip, longestCrosscut, shortest, narrowest } = row;
+  return { id, name, kind, kerf, cleanUp, limits: { rips, crosscuts, widestRip, longestCrosscut, shortest, narrowest } };
 }
 
 type Counter = "nextBoardNumber" | "nextJobNumber" | "nextOrderNumber";

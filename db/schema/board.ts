@@ -1,5 +1,5 @@
-import { date, index, int, mysqlTable, smallint, text, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
-import { boardKinds, boardStates, cuts } from "@/lib/schemas/board";
+import { boolean, date, index, int, mysqlTable, smallint, text, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
+import { boardKinds, boardStates, cuts, trueEdges } from "@/lib/schemas/board";
 import { idColumn, minorUnitsColumn, umColumn, utcColumn } from "../columns";
 import { shopIdColumn } from "../shop-id-column";
 import { user } from "./user";
@@ -19,6 +19,8 @@ export const board = mysqlTable(
     /** 4 for 4/4; null when not sold by quarters. */
     nominalQuarters: smallint("nominal_quarters"),
     thickness: umColumn("thickness_um").notNull(),
+    trueEdges: varchar("true_edges", { length: 8, enum: trueEdges }).notNull().default("none"),
+    toBeFlattened: boolean("to_be_flattened").notNull().default(false),
     length: umColumn("length_um").notNull(),
     width: umColumn("width_um").notNull(),
     /** The latest reading, kept here so that the rack can sort by it; all readings are in `moisture_reading`. */

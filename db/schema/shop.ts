@@ -20,6 +20,10 @@ export const shop = mysqlTable("shop", {
   offcutWidth: umColumn("offcut_width_um").notNull(),
   /** What jointing takes off each edge that is glued. 1.5 mm: common practice, no source. */
   jointing: umColumn("jointing_um").notNull().default(um(1500)),
+  /** What a rough part keeps at both ends together, and at both long edges together: 1/2 in (12.5 mm) and 3/16 in (5 mm), the allowances
+   *  of cutting lists in a furniture maker's text. */
+  roughLength: umColumn("rough_length_um").notNull().default(um(12_500)),
+  roughWidth: umColumn("rough_width_um").notNull().default(um(5000)),
   nextBoardNumber: int("next_board_number").notNull(),
   nextJobNumber: int("next_job_number").notNull(),
   nextOrderNumber: int("next_order_number").notNull(),

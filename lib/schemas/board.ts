@@ -10,6 +10,8 @@ import { boardSides } from "./straightening";
 export const boardKinds = ["board", "blank"] as const;
 /** In the rack and free to use, used up by an order, or gone for another reason. Held is not a state: layouts say so. */
 export const boardStates = ["rack", "cut", "gone"] as const;
+/** Which long edges are straight and square to the face, as its picture lies: fit to measure from without jointing. */
+export const trueEdges = ["none", "top", "bottom", "both"] as const;
 /** How the board was sawn from the log; "angled" grain between flat and quarter is rift in the trade. */
 export const cuts = ["flat", "rift", "quarter"] as const;
 
@@ -25,6 +27,10 @@ const boardFields = {
   note: z.string().trim().max(2000),
 };
 
+const trueEdgesSchema = z.enum(trueEdges);
+/** It is cut into rough parts and flattened before its fine cuts. */
+const toBeFlattenedSchema = z.boolean();
+
 export const boardHoldSchema = z.object({ faceId: idSchema, faceTitle: z.string(), jobId: idSchema, jobTitle: z.string() });
 
 export const boardRowSchema = z.object({
@@ -33,6 +39,8 @@ export const boardRowSchema = z.object({
   kind: z.enum(boardKinds),
   state: z.enum(boardStates),
   ...boardFields,
+  trueEdges: trueEdgesSchema,
+  toBeFlattened: toBeFlattenedSchema,
   /** 0 while nobody has measured. */
   length: umSchema,
   width: umSchema,
@@ -137,6 +145,8 @@ export const listBoards = defineEndpoint({
 
 export const createBoardSchema = z.object({
   ...boardFields,
+  trueEdges: trueEdgesSchema.default("none"),
+  toBeFlattened: toBeFlattenedSchema.default(false),
   /** null: to be measured from its photograph; 0 until then. */
   length: sizeUmSchema.nullable(),
   width: sizeUmSchema.nullable(),
@@ -173,6 +183,8 @@ export const updateBoard = defineEndpoint({
   body: z.object({
     baseRevision: z.int(),
     ...z.object({ ...boardFields, state: z.enum(boardStates) }).partial().shape,
+    trueEdges: trueEdgesSchema.optional(),
+    toBeFlattened: toBeFlattenedSchema.optional(),
     /** By hand only while there is no straightened picture, which tells the size. */
     length: sizeUmSchema.optional(),
     width: sizeUmSchema.optional(),

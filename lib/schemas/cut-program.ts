@@ -1,25 +1,16 @@
 /** The core's cut program as JSON, as it is frozen in an order. */
 import { z } from "zod";
 import type { CutProgram } from "@/lib/layout";
-import { allowanceUmSchema, rectSchema, sizeUmSchema, umSchema } from "./length";
-
-/** What a saw of the shop may take in hand; a program freezes it with the saw. */
-export const machineLimitsSchema = z.object({
-  rips: z.boolean(),
-  crosscuts: z.boolean(),
-  widestRip: sizeUmSchema.nullable(),
-  longestCrosscut: sizeUmSchema.nullable(),
-  shortest: umSchema,
-  narrowest: umSchema,
-});
+import { allowanceUmSchema, rectSchema, umSchema } from "./length";
+import { sawKinds, sawLimitsSchema } from "./saw-limits";
 
 export const machineSchema = z.object({
   id: z.string(),
   name: z.string(),
-  kind: z.enum(["table", "track", "band", "hand"]),
+  kind: z.enum(sawKinds),
   kerf: allowanceUmSchema,
   cleanUp: allowanceUmSchema,
-  limits: machineLimitsSchema,
+  limits: sawLimitsSchema,
 });
 
 export const edgeSchema = z.enum(["left", "right", "top", "bottom"]);

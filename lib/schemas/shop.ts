@@ -3,16 +3,16 @@ import { z } from "zod";
 import { defineEndpoint, makers, roles } from "./endpoint";
 import { idSchema } from "./ids";
 import { allowanceUmSchema, sizeUmSchema } from "./length";
+import { sawKinds, sawLimitsSchema } from "./saw-limits";
 
-export const sawKinds = ["table", "track", "band", "hand"] as const;
-
-export const sawSchema = z.object({
-  id: idSchema,
+const sawFields = {
   name: z.string().trim().min(1, "Name the saw").max(80),
   kind: z.enum(sawKinds),
   kerf: allowanceUmSchema,
   cleanUp: allowanceUmSchema,
-});
+};
+
+export const sawSchema = z.object({ id: idSchema, ...sawFields, limits: sawLimitsSchema });
 export type Saw = z.output<typeof sawSchema>;
 
 const shopFields = {
@@ -34,6 +34,9 @@ export const shopSchema = z.object({
   ...shopFields,
   /** What jointing takes off each edge that is glued. */
   jointing: allowanceUmSchema,
+  /** What a part keeps of wood around its pieces until it is flat: at both ends together, and at both long edges together. */
+  roughLength: allowanceUmSchema,
+  roughWidth: allowanceUmSchema,
   revision: z.int(),
   saws: z.array(sawSchema),
 });
@@ -53,6 +56,8 @@ export const updateShopSchema = z.object({
   ...shopFields,
   /** Left as it is when not given. */
   jointing: allowanceUmSchema.optional(),
+  roughLength: allowanceUmSchema.optional(),
+  roughWidth: allowanceUmSchema.optional(),
 });
 export const updateShop = defineEndpoint({
   method: "PUT",
@@ -64,7 +69,11 @@ export const updateShop = defineEndpoint({
   response: shopSchema,
 });
 
-export const saveSawSchema = sawSchema.omit({ id: true });
+export const saveSawSchema = z.object({
+  ...sawFields,
+  /** Of a new saw those usual for its kind when not given; of one that is there they stay. */
+  limits: sawLimitsSchema.optional(),
+});
 export const createSaw = defineEndpoint({
   method: "POST",
   path: "/api/shop/saws",

@@ -16,7 +16,7 @@ export async function shopSettings(shopId: ShopId): Promise<Shop> {
   if (!row) throw notFound("shop");
   const { nextBoardNumber, nextJobNumber, nextOrderNumber, createdAt, ...settings } = row;
   const saws = await listSaws(database(), shopId);
-  return { ...settings, inchFraction: settings.inchFraction === 32 ? 32 : 64, saws: saws.map(sawOf) };
+  return { ...settings, inchFraction: settings.inchFraction === 32 ? 32 : 64, saws };
 }
 
 /** How the shop writes lengths, for sentences made on the server. */
@@ -25,8 +25,6 @@ export async function lengthStyleOf(shopId: ShopId): Promise<LengthStyle> {
   if (!row) throw notFound("shop");
   return row.units === "mm" ? { unit: "mm" } : { unit: "inch", denominator: row.inchFraction === 32 ? 32 : 64 };
 }
-
-const sawOf = ({ id, name, kind, kerf, cleanUp }: Saw): Saw => ({ id, name, kind, kerf, cleanUp });
 
 export async function saveShopSettings(access: ShopAccess, body: z.output<typeof updateShopSchema>): Promise<Shop> {
   const { baseRevision, ...fields } = body;
@@ -63,7 +61,7 @@ export async function addSaw(access: ShopAccess, fields: z.output<typeof saveSaw
       return sawId;
     }),
   );
-  return { id, ...fields };
+  return savedSaw(access.shopId, id);
 }
 
 export async function changeSaw(access: ShopAccess, sawId: string, fields: z.output<typeof saveSawSchema>): Promise<Saw> {
@@ -72,12 +70,19 @@ export async function changeSaw(access: ShopAccess, sawId: string, fields: z.out
       const before = await findSaw(tx, access.shopId, sawId);
       if (!before) throw notFound("saw");
       await updateSaw(tx, access.shopId, sawId, fields);
-      const detail = { before: { name: before.name, kerf: before.kerf, cleanUp: before.cleanUp }, after: fields };
+      const { id, ...was } = before;
+      const detail = { before: was, after: fields };
       const entry = { userId: access.userId, noun: "saw", nounId: sawId, verb: "changed", detail } as const;
       await recordHistory(tx, access.shopId, entry, new Date());
     }),
   );
-  return { id: sawId, ...fields };
+  return savedSaw(access.shopId, sawId);
+}
+
+async function savedSaw(shopId: ShopId, sawId: string): Promise<Saw> {
+  const saw = await findSaw(database(), shopId, sawId);
+  if (!saw) throw notFound("saw");
+  return saw;
 }
 
 /** The unique key decides, so that two people who choose the same name at once get one saw and one refusal. */

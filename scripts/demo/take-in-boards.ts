@@ -84,6 +84,8 @@ async function enter(access: ShopAccess, board: DemoBoard, now: Date): Promise<s
     source,
     costMinor: costEuro === null ? null : Math.round(costEuro * 100),
     note,
+    trueEdges: "none",
+    toBeFlattened: false,
     reading: first ?? null,
   });
   for (const reading of later) await addReading(access, id, reading);

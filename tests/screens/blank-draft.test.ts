@@ -31,6 +31,8 @@ const row = (tag: string, more: Partial<BoardRow> = {}): BoardRow => ({
   source: "",
   costMinor: null,
   note: "",
+  trueEdges: "none",
+  toBeFlattened: false,
   moisturePercent: null,
   boardFeet: 0,
   volumeBoardFeet: 0,

@@ -63,6 +63,8 @@ export const newBoard: NewBoard = {
   source: "Hollin Timber",
   costMinor: 8400,
   note: "",
+  trueEdges: "none",
+  toBeFlattened: false,
 };
 
 export async function enter(access: ShopAccess, fields: Partial<NewBoard> = {}): Promise<Board> {

@@ -18,7 +18,7 @@ export function changeLoss(document: TableDocument, direction: CutDirection, los
 }
 
 /** The loss of one kind of cut as the saw takes it: its kerf, and its clean-up on either side. */
-export function chooseSaw(document: TableDocument, direction: CutDirection, saw: Saw): CommandOutcome {
+export function chooseSaw(document: TableDocument, direction: CutDirection, saw: Omit<Saw, "limits">): CommandOutcome {
   const loss = { kerf: saw.kerf, cleanUpBefore: saw.cleanUp, cleanUpAfter: saw.cleanUp };
   return withLoss(document, direction, loss, saw.id);
 }

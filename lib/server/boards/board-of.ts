@@ -34,6 +34,8 @@ export function boardRowOf(
     source,
     costMinor,
     note,
+    trueEdges: board.trueEdges,
+    toBeFlattened: board.toBeFlattened,
     moisturePercent: board.moistureTenths === null ? null : board.moistureTenths / 10,
     boardFeet: boardFeetByRule(width, length, tradeThickness(nominalQuarters, thickness), halfGoesOf(board.tagNumber)),
     volumeBoardFeet: boardFeet(width, length, thickness),

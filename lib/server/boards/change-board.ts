@@ -27,6 +27,8 @@ const fieldNames = [
   "source",
   "costMinor",
   "note",
+  "trueEdges",
+  "toBeFlattened",
 ] as const satisfies readonly (keyof Given)[];
 type FieldName = (typeof fieldNames)[number];
 
@@ -61,7 +63,7 @@ export async function changeBoard(access: ShopAccess, boardId: string, body: Bod
   });
 }
 
-function valuesOf(fields: { readonly [Name in FieldName]?: string | number | null }, names: readonly FieldName[]) {
+function valuesOf(fields: { readonly [Name in FieldName]?: string | number | boolean | null }, names: readonly FieldName[]) {
   return Object.fromEntries(names.map((name) => [name, fields[name] ?? null]));
 }
 
