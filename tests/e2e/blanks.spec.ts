@@ -64,7 +64,7 @@ test("two boards are planned into a blank, a face is laid across their joint and
     `Mark board ${blankTag}`,
   ].map((words) => said.lastIndexOf(words));
   expect(steps.every((at, i) => at > 0 && (i === 0 || at > (steps[i - 1] ?? 0)))).toBe(true);
-  for (const words of [`${lower.tag} (turned end for end)`, "20.0 mm in", "bridge guard", "Glue by its maker"]) {
+  for (const words of [`${lower.tag} (turned`, "20.0 mm in", "bridge guard", "Glue by its maker"]) {
     expect(said).toContain(words);
   }
 
@@ -164,7 +164,7 @@ test("glue lines drawn on a board make it a blank", async ({ makerPage: page }) 
   const stage = page.getByLabel(/^Straightened picture of/);
   await stage.focus();
   await page.keyboard.press("Enter");
-  const field = page.getByLabel("From the upper edge");
+  const field = page.getByLabel("From the upper edge", { exact: true });
   await expect(field).toBeVisible();
   await field.fill("95");
   await field.press("Enter");
