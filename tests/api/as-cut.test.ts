@@ -66,9 +66,10 @@ describe("an entry", () => {
     await enterAsCut(assistant, { orderId, revisionId }, { entry: kerf(step, 2.8), seenVersion: null });
     const corrected = await enterAsCut(owner, { orderId, revisionId }, { entry: kerf(step, 2.6), seenVersion: 1 });
     expect(corrected.asCut).toMatchObject([{ entry: { kerf: 2600 }, version: 2, by: owner.userName }]);
+    const number = numberOf(await readOrder(maker.shopId, orderId), step);
     await expect(enterAsCut(assistant, { orderId, revisionId }, { entry: kerf(step, 3), seenVersion: 1 })).rejects.toMatchObject({
       code: "conflict",
-      message: `${owner.userName} entered meanwhile: Kerf 2.6 mm instead of 2.4 mm, from step ${numberOf(await readOrder(maker.shopId, orderId), step)} on. Look at it before you correct it.`,
+      message: `${owner.userName} entered meanwhile: Kerf 2.6 mm instead of 2.4 mm, from step ${number} on. Look at it before you correct it.`,
     });
     expect(await verbsOf(orderId)).toEqual([`as-cut corrected by ${owner.userName}`, `as-cut entered by ${assistant.userName}`]);
   });
