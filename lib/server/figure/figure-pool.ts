@@ -2,7 +2,6 @@
 import "server-only";
 import path from "node:path";
 import Piscina from "piscina";
-import { STAND_BACK } from "../threads";
 import type { FigureJobName, FigureJobs } from "./figure-job";
 
 /** Long enough that boards stay decoded while somebody works at a layout table; then the thread gives its memory back. */
@@ -37,7 +36,6 @@ function figurePool(): Piscina {
     // One: two would each decode the same boards.
     maxThreads: 1,
     idleTimeout: idleMs,
-    niceIncrement: STAND_BACK,
   });
   return globalThis.grainwrightFigurePool;
 }

@@ -3,7 +3,6 @@ import "server-only";
 import path from "node:path";
 import Piscina from "piscina";
 import type { CutProgramOutcome, RestPlanOutcome } from "@/lib/layout";
-import { STAND_BACK } from "../threads";
 import type { Planner, RestPlanner } from "./plan-cuts";
 
 /** Orders are issued now and then: after so long without one the thread ends and gives its memory back. */
@@ -39,7 +38,6 @@ function planPool(): Piscina {
     // The boards of one order side by side; the pixels' threads are a pool of their own.
     maxThreads: 2,
     idleTimeout: idleMs,
-    niceIncrement: STAND_BACK,
   });
   return globalThis.grainwrightPlanPool;
 }

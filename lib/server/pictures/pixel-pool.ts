@@ -4,7 +4,6 @@ import path from "node:path";
 import { MessageChannel } from "node:worker_threads";
 import Piscina from "piscina";
 import type { Marking } from "@/lib/layout";
-import { STAND_BACK } from "../threads";
 import { createCancelFlag, raiseCancelFlag } from "./cancel-flag";
 import type { ComposedPicture, ComposeRequest } from "./compose";
 import type { InspectOutcome } from "./inspect-upload";
@@ -104,7 +103,6 @@ function pixelPool(): Piscina {
     minThreads: 0,
     maxThreads: Number(process.env.PIXEL_THREADS) || defaultThreads,
     idleTimeout: idleMs,
-    niceIncrement: STAND_BACK,
   });
   return globalThis.grainwrightPixelPool;
 }

@@ -2,11 +2,12 @@
 import "server-only";
 import path from "node:path";
 import Piscina from "piscina";
-import { STAND_BACK } from "../threads";
 import type { PrintJobs } from "./print-job";
 
 /** Orders are printed now and then: after so long without one the thread ends and gives its memory back. */
 const idleMs = 60_000;
+/** Threads that draw stand back behind the one that answers (steps of nice(2)). */
+const standBack = 5;
 
 declare global {
   /** Next.js may load this module more than once in one process; the threads must not multiply with it. */
@@ -32,7 +33,7 @@ function printPool(): Piscina {
     minThreads: 0,
     maxThreads: 1,
     idleTimeout: idleMs,
-    niceIncrement: STAND_BACK,
+    niceIncrement: standBack,
   });
   return globalThis.grainwrightPrintPool;
 }

@@ -4,7 +4,6 @@ import path from "node:path";
 import { MessageChannel } from "node:worker_threads";
 import Piscina from "piscina";
 import { createCancelFlag, raiseCancelFlag } from "../pictures/cancel-flag";
-import { STAND_BACK } from "../threads";
 import type { SearchAnswer, SearchAsked, SearchTask } from "./search-job";
 
 /** Threads that have had nothing to do for so long end, and give their memory back. */
@@ -57,7 +56,6 @@ function searchPool(): Piscina {
     minThreads: 0,
     maxThreads: SEARCH_THREADS,
     idleTimeout: idleMs,
-    niceIncrement: STAND_BACK,
   });
   return globalThis.grainwrightSearchPool;
 }
