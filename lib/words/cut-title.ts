@@ -15,6 +15,7 @@ const THINNEST_SAWN_UM = 500;
 
 /** Whether a cut takes a sliver so thin that it is a matter for the plane. */
 export function isShaving(cut: CutStep, board: SnapshotBoard): boolean {
+  if (cut.kind === "plane") return true;
   if (cut.kind === "true" || !cut.trim || cut.bladeSide !== "far" || cut.setting > THINNEST_SAWN_UM) return false;
   return !isBoardsOwn(trimmedEdge(cut), cut, board);
 }
